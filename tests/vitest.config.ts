@@ -1,0 +1,29 @@
+import { fileURLToPath } from 'node:url';
+import { defineConfig } from 'vitest/config';
+
+const root = fileURLToPath(new URL('..', import.meta.url));
+
+/** An odd zone, so that a forgotten time zone shows. */
+process.env.TZ = 'Asia/Kathmandu';
+
+export default defineConfig({
+  root,
+  resolve: { tsconfigPaths: true },
+  test: {
+    setupFiles: ['tests/support/no-console-error.ts'],
+    projects: [
+      { extends: true, test: { name: 'unit', include: ['tests/unit/**/*.test.{ts,tsx}'] } },
+      { extends: true, test: { name: 'reference', include: ['tests/reference/**/*.test.ts'] } },
+      {
+        extends: true,
+        test: {
+          name: 'store',
+          include: ['tests/store/**/*.test.ts'],
+          globalSetup: ['tests/support/store-server.ts'],
+          testTimeout: 30_000,
+          hookTimeout: 60_000,
+        },
+      },
+    ],
+  },
+});
