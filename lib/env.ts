@@ -1,0 +1,77 @@
+import path from 'node:path';
+import { z } from 'zod';
+
+/** An empty variable is the same as an absent one: `PORT= npm start` means the default. */
+const blankIsAbsent = (value: unknown) => (value === '' ? undefined : value);
+
+const timeZone = z.string().refine(isTimeZone, 'is no IANA time zone such as Europe/Berlin or UTC');
+
+const variables = z.object({
+  DATABASE_URL: z.preprocess(
+    blankIsAbsent,
+    z
+      .string()
+      .regex(/^postgres(ql)?:\/\//, 'must begin with postgresql://')
+      .optional(),
+  ),
+  EVENOHM_DATA: z.preprocess(blankIsAbsent, z.string().default('.evenohm')),
+  PORT: z.preprocess(blankIsAbsent, z.coerce.number().int().min(0).max(65535).default(3000)),
+  EVENOHM_HOST: z.preprocess(blankIsAbsent, z.string().default('127.0.0.1')),
+  EVENOHM_URL: z.preprocess(blankIsAbsent, z.url({ protocol: /^https?$/ }).optional()),
+  EVENOHM_SECRET: z.preprocess(blankIsAbsent, z.string().min(32).optional()),
+  EVENOHM_TRUSTED_PROXY: z.preprocess(blankIsAbsent, z.string().optional()),
+  EVENOHM_SITE_TIME_ZONE: z.preprocess(blankIsAbsent, timeZone.default('UTC')),
+  EVENOHM_DEMO: z.preprocess(blankIsAbsent, z.enum(['on', 'off']).optional()),
+});
+
+/** What the program takes from its environment, named and checked. */
+export interface Environment {
+  /** Address of an existing PostgreSQL 15 or later; null means the embedded server. */
+  databaseUrl: string | null;
+  /** The embedded server's folder, absolute. */
+  dataFolder: string;
+  port: number;
+  host: string;
+  publicUrl: string | null;
+  secret: string | null;
+  trustedProxy: string | null;
+  siteTimeZone: string;
+  /** Whether an empty database is filled with the demonstration line: by default only an embedded one. */
+  demo: boolean;
+}
+
+/** An environment variable that cannot be used; the message names it. */
+export class EnvironmentError extends Error {}
+
+/**
+ * Reads the environment (variables of the README's table), fills in defaults and refuses what makes no sense.
+ * Throws `EnvironmentError` with one line that names every variable at fault.
+ */
+export function readEnvironment(source: Record<string, string | undefined> = process.env): Environment {
+  const parsed = variables.safeParse(source);
+  if (!parsed.success) {
+    const faults = parsed.error.issues.map((issue) => `${issue.path.join('.')}: ${issue.message}`);
+    throw new EnvironmentError(faults.join('; '));
+  }
+  const found = parsed.data;
+  return {
+    databaseUrl: found.DATABASE_URL ?? null,
+    dataFolder: path.resolve(found.EVENOHM_DATA),
+    port: found.PORT,
+    host: found.EVENOHM_HOST,
+    publicUrl: found.EVENOHM_URL ?? null,
+    secret: found.EVENOHM_SECRET ?? null,
+    trustedProxy: found.EVENOHM_TRUSTED_PROXY ?? null,
+    siteTimeZone: found.EVENOHM_SITE_TIME_ZONE,
+    demo: (found.EVENOHM_DEMO ?? (found.DATABASE_URL === undefined ? 'on' : 'off')) === 'on',
+  };
+}
+
+function isTimeZone(name: string): boolean {
+  try {
+    new Intl.DateTimeFormat('en', { timeZone: name });
+    return true;
+  } catch {
+    return false;
+  }
+}

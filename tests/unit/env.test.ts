@@ -1,0 +1,33 @@
+import path from 'node:path';
+import { describe, expect, it } from 'vitest';
+import { EnvironmentError, readEnvironment } from '@/lib/env';
+
+describe('readEnvironment', () => {
+  it('fills in what is absent or blank', () => {
+    const defaults = {
+      databaseUrl: null,
+      dataFolder: path.resolve('.evenohm'),
+      port: 3000,
+      host: '127.0.0.1',
+      publicUrl: null,
+      secret: null,
+      trustedProxy: null,
+      siteTimeZone: 'UTC',
+      demo: true,
+    };
+    expect(readEnvironment({})).toEqual(defaults);
+    expect(readEnvironment({ PORT: '', DATABASE_URL: '', EVENOHM_DEMO: '' })).toEqual(defaults);
+  });
+  it('turns the demonstration off beside a database of your own, unless it is asked for', () => {
+    const url = 'postgresql://someone@localhost/line';
+    expect(readEnvironment({ DATABASE_URL: url }).demo).toBe(false);
+    expect(readEnvironment({ DATABASE_URL: url, EVENOHM_DEMO: 'on' }).demo).toBe(true);
+    expect(readEnvironment({ EVENOHM_DEMO: 'off' }).demo).toBe(false);
+  });
+  it('names every variable at fault in one line', () => {
+    const read = () =>
+      readEnvironment({ PORT: 'x', DATABASE_URL: 'mysql://a', EVENOHM_SITE_TIME_ZONE: 'Mars/Base' });
+    expect(read).toThrow(EnvironmentError);
+    expect(read).toThrow(/DATABASE_URL: .*; PORT: .*; EVENOHM_SITE_TIME_ZONE: /);
+  });
+});
