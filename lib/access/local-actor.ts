@@ -1,0 +1,20 @@
+import { userInfo } from 'node:os';
+import { provenActor, type Actor } from './actor';
+
+/**
+ * The person at this machine. Until there are accounts the server listens on loopback only, so whoever reaches a page
+ * sits at the machine and has all rights.
+ */
+export function localActor(): Actor {
+  return provenActor('local person');
+}
+
+/** Whoever runs the command line on this machine: the operating system's user. */
+export function commandActor(): Actor {
+  return provenActor(`${userInfo().username} (command line)`);
+}
+
+/** The program itself, for what it does without being asked: a first baseline, the demonstration line. */
+export function programActor(): Actor {
+  return provenActor('Evenohm');
+}
