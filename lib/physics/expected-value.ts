@@ -1,0 +1,77 @@
+import { densitySensitivity } from './density-sensitivity';
+import { expectedNotes } from './expected-notes';
+import { expectedUncertaintyPercent } from './expected-uncertainty';
+import { modelDensityLimits } from './model-density-limits';
+import { modelValue } from './model-value';
+import { scheilDensity } from './scheil-density';
+import type { ExpectedWafer, Target } from './target';
+
+/** What physics expects a probe to read, and how well it knows. */
+export interface Expected {
+  /** In Ω·cm or Ω/□ at 23 °C; calibrated where the target has a factor. */
+  value: number;
+  /** The same without the factor. */
+  fromPhysics: number;
+  /** Standard uncertainty (k = 1) of `value`, in percent, common to all wafers of a stream. */
+  uncertaintyPercent: number;
+  /** The value at the density plus the tolerance; null without one, or where the conversion ends before it. */
+  toleranceLower: number | null;
+  /** The value at the density minus the tolerance. */
+  toleranceUpper: number | null;
+  /** d ln value / d ln density, negative. */
+  sensitivity: number;
+  model: string;
+  notes: string[];
+}
+
+/**
+ * The dopant density, per cm³, a target sets for one wafer: along a crystal by Scheil's law from the seed end.
+ *
+ * Throws RangeError when the wafer's place along the crystal is needed and missing (`missingForExpected`).
+ */
+export function targetDensity(target: Target, wafer: ExpectedWafer = {}): number {
+  if (!target.alongCrystal) return target.densityPerCm3;
+  const fraction = wafer.ingotFraction ?? null;
+  if (fraction === null) throw new RangeError('A wafer along a crystal needs its solidified fraction.');
+  return scheilDensity(target.dopant, target.densityPerCm3, fraction);
+}
+
+/**
+ * What a wafer should read by its target: the value, its standard uncertainty, and the band the target tolerates.
+ *
+ * The two are kept apart: the tolerance says what is accepted, the uncertainty how well the value is known, and
+ * neither is ever added to the other (JCGM 106:2012). The chart draws one as a band, the other as lines.
+ *
+ * Throws RangeError outside the standard conversion's densities, for a missing thickness or solidified fraction
+ * (`missingForExpected` tells beforehand), and for a tolerance or calibration factor that cannot be.
+ *
+ * @example expectedValue(boron 1e15, resistivity, uniform).value // 13.306
+ */
+export function expectedValue(target: Target, wafer: ExpectedWafer = {}): Expected {
+  const factor = target.calibrationFactor ?? 1;
+  if (!(factor > 0 && Number.isFinite(factor))) {
+    throw new RangeError(`A calibration factor is a positive number, not ${factor}.`);
+  }
+  const tolerance = target.tolerancePercent;
+  if (tolerance !== null && !(tolerance >= 0 && tolerance < 100)) {
+    throw new RangeError(`A tolerance lies from 0 to below 100 percent, not at ${tolerance}.`);
+  }
+  const density = targetDensity(target, wafer);
+  const fromPhysics = modelValue(target, density, wafer);
+  const limits = modelDensityLimits(target);
+  const at = (share: number): number | null => {
+    const shifted = density * share;
+    if (shifted < limits.lowerPerCm3 || shifted > limits.upperPerCm3) return null;
+    return factor * modelValue(target, shifted, wafer);
+  };
+  return {
+    value: factor * fromPhysics,
+    fromPhysics,
+    uncertaintyPercent: expectedUncertaintyPercent(target),
+    toleranceLower: tolerance === null ? null : at(1 + tolerance / 100),
+    toleranceUpper: tolerance === null ? null : at(1 - tolerance / 100),
+    sensitivity: densitySensitivity(target, density, wafer),
+    model: 'standard',
+    notes: expectedNotes(target, density),
+  };
+}
