@@ -1,0 +1,18 @@
+import type { StripPoint } from './strip-marks';
+
+const signed = (z: number) => `${Math.abs(z).toFixed(1)} σ ${z < 0 ? 'below' : 'above'} the centre line`;
+
+/**
+ * A strip in words, for those who hear it: how many levels, where the newest stands, how many are signals.
+ *
+ * @example stripWords([{ z: 3.24, signal: true }]) // "1 level; the newest 3.2 σ above the centre line; 1 signal"
+ */
+export function stripWords(points: readonly StripPoint[]): string {
+  const levels = points.filter((point) => point.z !== null && !point.excluded);
+  const newest = levels.at(-1)?.z;
+  if (newest === undefined || newest === null) return 'No levels yet';
+  const signals = levels.filter((point) => point.signal).length;
+  const count = levels.length === 1 ? '1 level' : `${levels.length} levels`;
+  const called = signals === 0 ? 'no signals' : signals === 1 ? '1 signal' : `${signals} signals`;
+  return `${count}; the newest ${signed(newest)}; ${called}`;
+}

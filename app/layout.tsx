@@ -1,0 +1,68 @@
+import type { Metadata, Viewport } from 'next';
+import type { ReactNode } from 'react';
+import '@fontsource-variable/atkinson-hyperlegible-next/wght.css';
+import './globals.css';
+import { Hatches } from './_charts/hatches';
+import { Finder } from './_ui/finder';
+import { Keys } from './_ui/keys';
+import { SiteFooter } from './_ui/site-footer';
+import { SiteHeader } from './_ui/site-header';
+
+/** Every page is made for its request: it shows what is recorded now, and each script carries a fresh nonce. */
+export const dynamic = 'force-dynamic';
+
+export const metadata: Metadata = {
+  title: { default: 'Evenohm', template: '%s · Evenohm' },
+  description:
+    'Resistivity maps of monitor wafers, judged: control, evenness, and the value physics expects.',
+};
+
+export const viewport: Viewport = {
+  width: 'device-width',
+  initialScale: 1,
+  themeColor: [
+    { media: '(prefers-color-scheme: light)', color: '#fbfaf6' },
+    { media: '(prefers-color-scheme: dark)', color: '#15181b' },
+  ],
+};
+
+const places = [
+  { href: '/', label: 'Board', covers: ['/streams', '/wafers'] },
+  { href: '/excursions', label: 'Excursions' },
+  { href: '/intake', label: 'Intake' },
+  { href: '/setup', label: 'Setup' },
+];
+
+const keys = [
+  { key: '← →', does: 'move along wafers, or along the points of a chart' },
+  { key: 'Home End', does: 'first and last point of a chart' },
+  { key: '+ −', does: 'look closer or wider on a chart' },
+  { key: 'Enter', does: 'open what is under the cursor' },
+  { key: 'Escape', does: 'go back to the page above' },
+  { key: '/', does: 'find a stream' },
+  { key: '?', does: 'show these keys' },
+];
+
+export default function RootLayout({ children }: { children: ReactNode }) {
+  return (
+    <html lang="en">
+      <body>
+        <a className="unseen" href="#content">
+          Skip to the content
+        </a>
+        <Hatches />
+        <SiteHeader name="evenohm" home="/" places={places}>
+          <Finder action="/" name="find" label="Find a stream" />
+        </SiteHeader>
+        <main id="content" tabIndex={-1}>
+          {children}
+        </main>
+        <SiteFooter>
+          Figures are at 23 °C unless a page says otherwise. Before acting on equipment, follow site
+          procedures and change control, with qualified staff.
+        </SiteFooter>
+        <Keys keys={keys} />
+      </body>
+    </html>
+  );
+}
