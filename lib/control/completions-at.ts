@@ -1,4 +1,5 @@
-import { betweenUpper, type LimitSet, type SubgroupPoint } from './limit-set';
+import { betweenUpper } from './between-limits';
+import type { LimitSet, SubgroupPoint } from './limit-set';
 import { isBeyond } from './is-beyond';
 import { patternAt, type Pattern } from './pattern-at';
 import { LOOK_BACK, parseRule, WESTERN_ELECTRIC, type RuleName } from './rule';
