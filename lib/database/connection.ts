@@ -1,0 +1,110 @@
+import { setTimeout as sleep } from 'node:timers/promises';
+import { readEnvironment } from '@/lib/env';
+import { AppError } from '@/lib/errors';
+import { closeClients, openClients } from './client';
+import { startEmbeddedServer, stopEmbeddedServer } from './embedded-server';
+import { applyMigrations } from './migration-runner';
+import { type Presence, enterDatabase } from './presence';
+
+/** A database at the newest migration, with `getPool` and `getPrisma` pointed at it. */
+export interface OpenDatabase {
+  url: string;
+  embedded: boolean;
+  /** Claims to be the one web server; false where another process serves this database already. */
+  claimServing(): Promise<boolean>;
+  /** Leaves; the last process to leave an embedded server stops it. */
+  close(): Promise<void>;
+}
+
+interface Entered {
+  url: string;
+  pid: number | null;
+  presence: Presence;
+}
+
+interface OpeningOptions {
+  say(text: string): void;
+  /** Absent: from the environment. */
+  databaseUrl?: string | null;
+  dataFolder?: string;
+}
+
+/**
+ * Opens the database: that of `DATABASE_URL`, else the embedded server, which is started where it does not run.
+ * If an embedded server dies under us it is started again on the same port, and pools reconnect by themselves.
+ */
+export async function openDatabase(options: OpeningOptions): Promise<OpenDatabase> {
+  const environment = readEnvironment();
+  const databaseUrl = options.databaseUrl === undefined ? environment.databaseUrl : options.databaseUrl;
+  const dataFolder = options.dataFolder ?? environment.dataFolder;
+  const enter = () =>
+    databaseUrl === null ? enterEmbedded(dataFolder, options.say) : enterGiven(databaseUrl);
+
+  let entered = await enter();
+  let closing = false;
+  let serving = false;
+  const watch = ({ presence }: Entered) => {
+    presence.client.once('end', () => {
+      if (closing) return;
+      options.say('The connection to the database was lost; opening it again.');
+      void reenter();
+    });
+  };
+  const reenter = async () => {
+    while (!closing) {
+      try {
+        entered = await enter();
+        if (serving) await entered.presence.serve();
+        options.say('The database is back.');
+        watch(entered);
+        return;
+      } catch (error) {
+        options.say(`The database does not come back: ${error instanceof Error ? error.message : error}`);
+        await sleep(2000);
+      }
+    }
+  };
+  const leave = async () => {
+    closing = true;
+    await closeClients();
+    const last = await entered.presence.leaveAsLast().catch(() => false);
+    if (last && entered.pid !== null) await stopEmbeddedServer(entered.pid);
+    await entered.presence.client.end().catch(() => undefined);
+  };
+
+  try {
+    const applied = await applyMigrations(entered.url);
+    if (applied.length > 0) options.say(`Database brought to ${applied.at(-1)}.`);
+  } catch (error) {
+    await leave();
+    throw error;
+  }
+  watch(entered);
+  openClients(entered.url);
+  return {
+    url: entered.url,
+    embedded: databaseUrl === null,
+    claimServing: async () => (serving = await entered.presence.serve()),
+    close: leave,
+  };
+}
+
+async function enterEmbedded(dataFolder: string, say: (text: string) => void): Promise<Entered> {
+  for (;;) {
+    const server = await startEmbeddedServer(dataFolder, say);
+    const presence = await enterDatabase(server.url);
+    if (presence !== null) return { url: server.url, pid: server.pid, presence };
+    await sleep(100);
+  }
+}
+
+async function enterGiven(url: string): Promise<Entered> {
+  const presence = await enterDatabase(url).catch((error: unknown) => {
+    const reason = error instanceof Error ? error.message : String(error);
+    throw new AppError('unavailable', `The database of DATABASE_URL cannot be opened: ${reason}`, {
+      cause: error,
+    });
+  });
+  if (presence === null) throw new AppError('unavailable', 'The database of DATABASE_URL does not answer.');
+  return { url, pid: null, presence };
+}
