@@ -1,0 +1,34 @@
+import { ruleSentence } from '@/lib/control/rule';
+import type { StudyChart } from '@/lib/control/study-chart';
+
+/** A study as a table for people: the figures of each chart, and under it each signal in words. */
+export function studyTable(charts: readonly StudyChart[]): string {
+  const rows = charts.map(({ name, lower, centre, upper, sigma }) => [
+    name,
+    ...[lower, centre, upper, sigma].map(figure),
+  ]);
+  const table = [['chart', 'lower', 'centre', 'upper', 'sigma'], ...rows];
+  const widths = [0, 1, 2, 3, 4].map((i) => Math.max(...table.map((row) => row[i]?.length ?? 0)));
+  const lines = table.map((row) =>
+    row.map((cell, i) => (i === 0 ? cell.padEnd(widths[i] ?? 0) : cell.padStart(widths[i] ?? 0))).join('  '),
+  );
+  const signals = charts.flatMap((chart) =>
+    chart.signals.map(({ point, rule, side, participants }) => {
+      const words = ruleSentence(
+        rule,
+        side,
+        participants.length,
+        chart.name === 'within' ? 'within' : undefined,
+      );
+      return `point ${point}, ${chart.name}: ${words} (${rule})`;
+    }),
+  );
+  return [...lines, '', ...(signals.length > 0 ? signals : ['no signal'])].join('\n');
+}
+
+function figure(value: number | readonly (number | null)[]): string {
+  if (typeof value === 'number') return Number(value.toPrecision(6)).toString();
+  const known = value.filter((entry) => entry !== null);
+  if (known.length === 0) return '—';
+  return `${figure(Math.min(...known))} … ${figure(Math.max(...known))}`;
+}
