@@ -10,8 +10,6 @@ import { type Presence, enterDatabase } from './presence';
 export interface OpenDatabase {
   url: string;
   embedded: boolean;
-  /** Claims to be the one web server; false where another process serves this database already. */
-  claimServing(): Promise<boolean>;
   /** Leaves; the last process to leave an embedded server stops it. */
   close(): Promise<void>;
 }
@@ -22,8 +20,17 @@ interface Entered {
   presence: Presence;
 }
 
+/** Another process is the web server of this embedded database already. */
+export class AlreadyServing extends AppError {
+  constructor() {
+    super('conflict', 'Another process serves this folder already.');
+  }
+}
+
 interface OpeningOptions {
   say(text: string): void;
+  /** Claim to be the one web server of an embedded database; throws `AlreadyServing` where there is one. */
+  serving?: boolean;
   /** Absent: from the environment. */
   databaseUrl?: string | null;
   dataFolder?: string;
@@ -42,7 +49,6 @@ export async function openDatabase(options: OpeningOptions): Promise<OpenDatabas
 
   let entered = await enter();
   let closing = false;
-  let serving = false;
   const watch = ({ presence }: Entered) => {
     presence.client.once('end', () => {
       if (closing) return;
@@ -54,7 +60,7 @@ export async function openDatabase(options: OpeningOptions): Promise<OpenDatabas
     while (!closing) {
       try {
         entered = await enter();
-        if (serving) await entered.presence.serve();
+        if (options.serving === true) await entered.presence.serve();
         options.say('The database is back.');
         watch(entered);
         return;
@@ -73,6 +79,8 @@ export async function openDatabase(options: OpeningOptions): Promise<OpenDatabas
   };
 
   try {
+    const alone = options.serving !== true || entered.pid === null || (await entered.presence.serve());
+    if (!alone) throw new AlreadyServing();
     const applied = await applyMigrations(entered.url);
     if (applied.length > 0) options.say(`Database brought to ${applied.at(-1)}.`);
   } catch (error) {
@@ -84,7 +92,6 @@ export async function openDatabase(options: OpeningOptions): Promise<OpenDatabas
   return {
     url: entered.url,
     embedded: databaseUrl === null,
-    claimServing: async () => (serving = await entered.presence.serve()),
     close: leave,
   };
 }

@@ -1,0 +1,11 @@
+#!/usr/bin/env node
+import { fileURLToPath } from 'node:url';
+import { register } from 'tsx/esm/api';
+
+register({ tsconfig: fileURLToPath(new URL('../../tsconfig.json', import.meta.url)) });
+
+const { runCommand } = await import('./main.ts');
+process.exitCode = await runCommand(process.argv.slice(2), {
+  out: (text) => void process.stdout.write(`${text}\n`),
+  say: (text) => void process.stderr.write(`${text}\n`),
+});

@@ -1,0 +1,48 @@
+import { isIP } from 'node:net';
+
+/** What the gate looks at. */
+export interface GateRequest {
+  method: string;
+  host: string | undefined;
+  origin: string | undefined;
+}
+
+/** Why a request stays outside, with its status (RFC 9110 §15.5). */
+export interface GateRefusal {
+  status: 403 | 421;
+  reason: string;
+}
+
+/**
+ * Whether a request may come in at all, before any page sees it. A server on loopback is reachable by every page in
+ * the same browser: a foreign name that resolves to this machine (DNS rebinding) is refused by its Host, and a
+ * foreign page that posts here (cross-site request forgery) by its Origin. Returns null where all is well.
+ */
+export function requestGate(request: GateRequest, publicUrl: string | null): GateRefusal | null {
+  const host = request.host?.toLowerCase() ?? '';
+  const publicHost = publicUrl === null ? null : new URL(publicUrl).host;
+  if (host !== publicHost && !isLoopbackName(nameOf(host))) {
+    return {
+      status: 421,
+      reason: 'This server does not answer to that name; EVENOHM_URL sets its public one.',
+    };
+  }
+  const changes = request.method !== 'GET' && request.method !== 'HEAD';
+  if (changes && request.origin !== undefined && hostOf(request.origin) !== host) {
+    return { status: 403, reason: 'Changes are taken from pages of this server only.' };
+  }
+  return null;
+}
+
+/** Whether a name or address is this machine alone: localhost, 127.0.0.0/8 (RFC 1122 §3.2.1.3), ::1 (RFC 4291 §2.5.3). */
+export function isLoopbackName(name: string): boolean {
+  return name === 'localhost' || name === '::1' || (isIP(name) === 4 && name.startsWith('127.'));
+}
+
+function nameOf(host: string): string {
+  return host.replace(/:\d+$/, '').replace(/^\[(.*)\]$/, '$1');
+}
+
+function hostOf(origin: string): string | null {
+  return URL.canParse(origin) ? new URL(origin).host : null;
+}

@@ -1,0 +1,8 @@
+import type { Verb } from './verb';
+
+/** Every verb, loaded when asked for: `map` needs neither database nor Next. */
+export const verbLoaders: ReadonlyMap<string, () => Promise<Verb>> = new Map([
+  ['serve', async () => (await import('./verbs/serve')).serve],
+  ['build', async () => (await import('./verbs/build')).build],
+  ['study', async () => (await import('./verbs/study')).study],
+]);

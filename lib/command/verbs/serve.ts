@@ -1,0 +1,86 @@
+import { type Environment, readEnvironment } from '@/lib/env';
+import { AppError } from '@/lib/errors';
+import { buildApp, isBuilt } from '../build-app';
+import { withProgress } from '../progress';
+import { isLoopbackName } from '../request-gate';
+import { alreadyRunning, removeServingNote, writeServingNote } from '../serving-note';
+import { stopSignal } from '../stop-signal';
+import { type ExitStatus, UsageError, type Verb, type VerbOutput } from '../verb';
+import { startWebServer } from '../web-server';
+
+export const serve: Verb = {
+  name: 'serve',
+  summary: 'Starts the database and the web app, and prints the address.',
+  usage: [
+    'evenohm serve [--dev]',
+    '',
+    '  --dev   development: no build, pages follow the sources',
+    '',
+    'Ctrl-C or SIGTERM stops both. Settings come from the environment: DATABASE_URL, EVENOHM_DATA, PORT,',
+    'EVENOHM_HOST, EVENOHM_URL, EVENOHM_TRUSTED_PROXY, EVENOHM_SITE_TIME_ZONE, EVENOHM_DEMO.',
+  ].join('\n'),
+  async run(args, output) {
+    const strange = args.find((word) => word !== '--dev');
+    if (strange !== undefined) throw new UsageError(`“${strange}” is not understood.`);
+    return serveUntilStopped(args.includes('--dev'), readEnvironment(), output);
+  },
+};
+
+async function serveUntilStopped(
+  dev: boolean,
+  environment: Environment,
+  output: VerbOutput,
+): Promise<ExitStatus> {
+  refuseOpenDoor(environment.host);
+  Object.assign(process.env, {
+    NODE_ENV: dev ? 'development' : 'production',
+    NEXT_TELEMETRY_DISABLED: '1',
+  });
+  const { say } = output;
+  const stop = stopSignal();
+  const closers: (() => Promise<void> | void)[] = [];
+  try {
+    const { generatePrismaClient } = await import('@/lib/database/generate.js');
+    generatePrismaClient();
+    const { AlreadyServing, openDatabase } = await import('@/lib/database/connection');
+    const opening = await withProgress(say, 'Opening the database', () =>
+      openDatabase({ say, serving: true }).catch((error: unknown) => {
+        if (error instanceof AlreadyServing) return null;
+        throw error;
+      }),
+    );
+    if (opening === null) {
+      say(alreadyRunning(environment.dataFolder));
+      return 1;
+    }
+    closers.push(() => opening.close());
+    stop.throwIfAborted();
+    const web = await startWebServer({ ...environment, dev });
+    closers.push(() => web.close());
+    if (opening.embedded) {
+      writeServingNote(environment.dataFolder, { pid: process.pid, address: web.address });
+      closers.push(() => removeServingNote(environment.dataFolder));
+    }
+    if (!dev && !isBuilt()) await withProgress(say, 'Building the app', () => buildApp(stop));
+    stop.throwIfAborted();
+    await web.open();
+    output.out(`Evenohm is at ${web.address}`);
+    await new Promise((resolve) => stop.addEventListener('abort', resolve, { once: true }));
+  } catch (error) {
+    if (!stop.aborted) throw error;
+  } finally {
+    if (stop.aborted) say('Stopping…');
+    for (const close of closers.reverse()) await close();
+  }
+  say('Stopped.');
+  return 0;
+}
+
+/** Until there are accounts, whoever reaches the server may do everything: so nobody else may reach it. */
+function refuseOpenDoor(host: string): void {
+  if (isLoopbackName(host)) return;
+  throw new AppError(
+    'forbidden',
+    `EVENOHM_HOST is ${host}, but without accounts the server listens on this machine only (127.0.0.1).`,
+  );
+}
