@@ -27,11 +27,10 @@ export function monotoneRoot(
     const c = step % 3 === 2 ? (a + b) / 2 : (a * fb - b * fa) / (fb - fa);
     const fc = f(c);
     if (fc === 0) return c;
-    const moved = Math.abs(c - b);
     if (fc > 0 === fb > 0) fa /= 2;
     else [a, fa] = [b, fb];
     [b, fb] = [c, fc];
-    if (Math.abs(a - b) <= tolerance || moved <= tolerance / 16) return b;
+    if (Math.abs(a - b) <= tolerance) return b;
   }
   return b;
 }
