@@ -29,16 +29,22 @@ export interface Episode {
  */
 export function signalEpisodes(completions: readonly Completion[], open: readonly Episode[] = []): Episode[] {
   const episodes = open.map((episode) => ({ ...episode }));
-  const latest = new Map<string, Episode>();
+  const openByKey = new Map<string, Episode[]>();
   for (const episode of episodes) {
-    const known = latest.get(key(episode));
-    if (!known || known.last < episode.last) latest.set(key(episode), episode);
+    openByKey.set(key(episode), [...(openByKey.get(key(episode)) ?? []), episode]);
   }
+  const latest = new Map<string, Episode>();
+  for (const [name, list] of openByKey)
+    latest.set(
+      name,
+      list.reduce((a, b) => (b.last > a.last ? b : a)),
+    );
   const inOrder = [...completions].sort((a, b) => a.index - b.index);
   for (const completion of inOrder) {
     const { chart, rule, side, index, participants } = completion;
     const episode = latest.get(key(completion));
-    if (episode && index >= episode.first && index <= episode.last) continue;
+    const counts = ({ first, last }: Episode) => first <= index && index <= last;
+    if ((episode && counts(episode)) || openByKey.get(key(completion))?.some(counts)) continue;
     if (episode && goesOn(episode, completion)) {
       episode.last = index;
       episode.count++;
