@@ -251,6 +251,7 @@ CREATE TABLE limit_revision (
   within_upper double precision,
   between_centre double precision,
   between_upper double precision,
+  between_wafers integer,
   author text NOT NULL,
   reason text NOT NULL CHECK (reason <> ''),
   drafted_at timestamptz NOT NULL DEFAULT now(),

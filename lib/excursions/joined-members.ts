@@ -1,0 +1,100 @@
+import { linePosition, type Line, type LinePoint } from './line';
+
+/** One measured wafer on its way into a line. */
+export interface LineAddition {
+  waferId: string;
+  key: string;
+  at: number;
+  history: boolean;
+  level: number | null;
+  within: number | null;
+  /** `rule:side` for each way in which the wafer is out of specification. */
+  specification: string[];
+}
+
+/**
+ * Puts measured wafers into a line: into their subgroup, or as a new subgroup at its place in the order of processing.
+ * A subgroup stands where its earliest wafer was processed. Returns the points it touched and, for each wafer, the
+ * point it belongs to.
+ */
+export function joinedMembers(
+  line: Line,
+  additions: readonly LineAddition[],
+  newId: () => string,
+): { touched: Set<LinePoint>; pointOf: LinePoint[]; from: number } {
+  const byKey = new Map(line.points.map((point) => [point.key, point]));
+  const touched = new Set<LinePoint>();
+  const pointOf: LinePoint[] = [];
+  const wasFirst = { at: Infinity, key: '' };
+  let sorted = true;
+  for (const addition of additions) {
+    let point = byKey.get(addition.key);
+    if (point) {
+      keepEarlier(wasFirst, point);
+      if (addition.at < point.at) {
+        point.at = addition.at;
+        sorted = false;
+      }
+      point.history &&= addition.history;
+    } else {
+      point = emptyPoint(newId(), addition);
+      byKey.set(addition.key, point);
+      const last = line.points.at(-1);
+      if (last && linePosition(last, point) > 0) sorted = false;
+      line.points.push(point);
+    }
+    keepEarlier(wasFirst, point);
+    point.members.push({ waferId: addition.waferId, level: addition.level, within: addition.within });
+    for (const reason of addition.specification) point.specification.push(`${addition.waferId}:${reason}`);
+    touched.add(point);
+    pointOf.push(point);
+  }
+  if (!sorted) line.points.sort(linePosition);
+  for (const point of touched) summarise(point);
+  let from = line.points.length;
+  while (from > 0 && linePosition(line.points[from - 1] as LinePoint, wasFirst) >= 0) from -= 1;
+  return { touched, pointOf, from };
+}
+
+/** A subgroup's charted figures from its wafers, whatever the order in which these arrived. */
+export function summarise(point: LinePoint): void {
+  const levels = sortedNumbers(point.members.map((member) => member.level));
+  const withins = sortedNumbers(point.members.map((member) => member.within));
+  const mean = levels.length === 0 ? null : sum(levels) / levels.length;
+  point.level = mean;
+  point.within = withins.length === 0 ? null : Math.sqrt(sum(withins.map((s) => s * s)) / withins.length);
+  point.between =
+    mean === null || levels.length < 2
+      ? null
+      : Math.sqrt(sum(levels.map((level) => (level - mean) ** 2)) / (levels.length - 1));
+}
+
+function keepEarlier(first: { at: number; key: string }, other: { at: number; key: string }): void {
+  if (linePosition(other, first) < 0) Object.assign(first, { at: other.at, key: other.key });
+}
+
+function emptyPoint(id: string, addition: LineAddition): LinePoint {
+  return {
+    id,
+    key: addition.key,
+    at: addition.at,
+    history: addition.history,
+    members: [],
+    state: 'open',
+    level: null,
+    within: null,
+    between: null,
+    movingRange: null,
+    limits: null,
+    completions: [],
+    specification: [],
+  };
+}
+
+function sortedNumbers(values: readonly (number | null)[]): number[] {
+  return values.filter((value) => value !== null).sort((a, b) => a - b);
+}
+
+function sum(values: readonly number[]): number {
+  return values.reduce((total, value) => total + value, 0);
+}

@@ -1,0 +1,33 @@
+import type { ChartName } from '@/lib/control/completions-at';
+import { ruleSentence } from '@/lib/control/rule';
+
+const SPECIFICATION_WORDS: Record<string, string> = {
+  'wafer-mean:above': 'wafer mean above its specification',
+  'wafer-mean:below': 'wafer mean below its specification',
+  'site:above': 'a site above its specification',
+  'site:below': 'a site below its specification',
+  'nonuniformity:above': 'less even than specified',
+};
+
+const CHART_WORDS: Record<string, string> = {
+  'moving-range': 'change from one subgroup to the next',
+  within: 'spread within the wafer',
+  between: 'spread between the wafers of a subgroup',
+};
+
+/** What happened, in words, such as "8 in a row below the centre line" or "wafer mean above its specification". */
+export function signalSentence(signal: {
+  chart: string;
+  rule: string;
+  side: 'above' | 'below';
+  participantIds: readonly string[];
+  completions: number;
+}): string {
+  if (signal.chart === 'specification') {
+    return SPECIFICATION_WORDS[`${signal.rule}:${signal.side}`] ?? 'out of specification';
+  }
+  const inARow = signal.participantIds.length + signal.completions - 1;
+  const words = ruleSentence(signal.rule, signal.side, inARow, signal.chart as ChartName);
+  const chart = CHART_WORDS[signal.chart];
+  return chart === undefined ? words : `${chart} ${words}`;
+}

@@ -1,0 +1,114 @@
+import type { ClientBase, Pool } from 'pg';
+import { columnNames, rowsAsQuery } from '@/lib/database/columnar';
+import { takeIds } from '@/lib/database/take-ids';
+import type { Line, LineChange, LineExcursion, LinePoint, LineSignal } from './line';
+import { POINT_COLUMNS } from './line-rows';
+import { ENTRY_COLUMNS, EXCURSION_COLUMNS, LIMIT_COLUMNS, SIGNAL_COLUMNS } from './judgement-rows';
+
+/** A judged line and what judging changed in it. */
+export interface JudgedLine {
+  line: Line;
+  change: LineChange;
+}
+
+/** Whether a judgement is plain: nothing but its own points to write. */
+export function isPlain({ change }: JudgedLine): boolean {
+  return change.limits === null && change.signals.length === 0 && change.excursions.length === 0;
+}
+
+/** Gives every new limit revision, case and signal its id, so that all rows can name each other before any is written. */
+export async function withIds(pool: Pool, judged: readonly JudgedLine[]): Promise<void> {
+  const excursions = judged.flatMap(({ change }) =>
+    change.excursions.filter((excursion) => excursion.id === null),
+  );
+  const signals = judged.flatMap(({ change }) => change.signals.filter((signal) => signal.id === null));
+  const limits = judged.flatMap(({ change }) => change.limits ?? []);
+  await assign(pool, 'excursion', excursions);
+  await assign(pool, 'signal', signals);
+  await assign(pool, 'limit_revision', limits);
+}
+
+/** Text of a statement that writes points, new or changed; `guard` may join it to a condition on the stream. */
+export function pointsStatement(judged: readonly JudgedLine[], parameters: unknown[], guard = ''): string {
+  const rows = judged.flatMap(({ line, change }) =>
+    change.points.map((point) => ({ streamId: line.streamId, point })),
+  );
+  return `INSERT INTO subgroup (${columnNames(POINT_COLUMNS)})
+    SELECT given.* FROM ${rowsAsQuery<{ streamId: string; point: LinePoint }>(POINT_COLUMNS, rows, parameters)} given ${guard}
+    ON CONFLICT (stream_id, id) DO UPDATE SET ${POINT_COLUMNS.slice(3)
+      .map(({ name }) => `${name} = excluded.${name}`)
+      .join(', ')}`;
+}
+
+/** Writes what judging found beyond its points: first limits, cases and their log, signals. Within a transaction. */
+export async function writeFindings(
+  client: ClientBase,
+  judged: readonly JudgedLine[],
+  author: string,
+): Promise<void> {
+  const limits = judged.flatMap(({ line, change }) =>
+    change.limits === null ? [] : [{ streamId: line.streamId, limits: change.limits, author }],
+  );
+  const excursions = judged.flatMap(({ line, change }) =>
+    change.excursions.map((excursion) => ({ streamId: line.streamId, excursion })),
+  );
+  const entries = excursions.flatMap(({ streamId, excursion }) =>
+    excursion.entries.map((entry) => ({ streamId, excursion, entry, author })),
+  );
+  const signals = judged.flatMap(({ line, change }) =>
+    change.signals.map((signal) => ({ streamId: line.streamId, signal })),
+  );
+  await insert(client, 'limit_revision', LIMIT_COLUMNS, limits, '');
+  await insert(
+    client,
+    'excursion',
+    EXCURSION_COLUMNS,
+    excursions,
+    'ON CONFLICT (stream_id, id) DO UPDATE SET last_subgroup_id = excluded.last_subgroup_id',
+  );
+  await insert(client, 'excursion_entry', ENTRY_COLUMNS, entries, '');
+  await insert(
+    client,
+    'signal',
+    SIGNAL_COLUMNS,
+    signals,
+    `ON CONFLICT (stream_id, id) DO UPDATE SET ${[
+      'participant_ids',
+      'last_subgroup_id',
+      'completions',
+      'excursion_id',
+      'withdrawn_reason',
+    ]
+      .map((name) => `${name} = excluded.${name}`)
+      .join(
+        ', ',
+      )}, withdrawn_at = CASE WHEN excluded.withdrawn_reason IS NULL THEN NULL ELSE coalesce(signal.withdrawn_at, now()) END`,
+  );
+  for (const { excursion } of excursions) excursion.entries = [];
+}
+
+async function insert<Row>(
+  client: ClientBase,
+  table: string,
+  columns: Parameters<typeof rowsAsQuery<Row>>[0],
+  rows: readonly Row[],
+  conflict: string,
+): Promise<void> {
+  if (rows.length === 0) return;
+  const parameters: unknown[] = [];
+  const given = rowsAsQuery(columns, rows, parameters);
+  await client.query(
+    `INSERT INTO ${table} (${columnNames(columns)}) SELECT given.* FROM ${given} given ${conflict}`,
+    parameters,
+  );
+}
+
+async function assign(
+  pool: Pool,
+  table: 'excursion' | 'signal' | 'limit_revision',
+  rows: readonly (LineExcursion | LineSignal | { id: string | null })[],
+): Promise<void> {
+  if (rows.length === 0) return;
+  const ids = await takeIds(pool, table, rows.length);
+  rows.forEach((row, i) => (row.id = ids[i] ?? null));
+}

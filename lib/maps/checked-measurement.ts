@@ -1,0 +1,91 @@
+import type { StreamSettings } from '@/lib/streams/types';
+import { VALUE_COLUMNS, type ValueColumn } from './map-columns';
+import type { RawMap } from './raw-maps';
+import { readFacts } from './read-facts';
+import { inSiteOrder } from './site-order';
+import { measurementName, type MapProblem, type Measurement } from './types';
+
+/** What a file's own words leave to the caller: flags of the command, fields of the page. */
+export interface CheckContext {
+  file: string;
+  valueColumn: ValueColumn;
+  defaults: RawMap['words'];
+  /** The stream by the name in the file; undefined for one that does not exist. */
+  settingsOf: (slug: string) => StreamSettings | undefined;
+  now: Date;
+}
+
+/** Clocks of gauges and of this machine may differ by so much. */
+const CLOCKS_DIFFER_MS = 10 * 60_000;
+
+/** A measurement checked against its stream, or every fault found in it. */
+export function checkedMeasurement(
+  map: RawMap,
+  context: CheckContext,
+): { measurement: Measurement; name: string } | { problems: MapProblem[]; name: string } {
+  const { facts, diameterMm, faults: words } = readFacts(map.words, context.defaults);
+  const name = measurementName(facts);
+  const problems: MapProblem[] = [];
+  const problem = (line: number, column: string | null, reason: string) =>
+    problems.push({ file: context.file, line, column, measurement: name === '' ? null : name, reason });
+  for (const fault of map.faults) problem(fault.line, fault.column, fault.reason);
+  for (const fault of words) problem(map.firstLine, fault.column, fault.reason);
+  if (facts.measuredAt.getTime() > context.now.getTime() + CLOCKS_DIFFER_MS) {
+    problem(map.firstLine, 'measured_at', 'this time lies in the future');
+  }
+  const slug = map.words.stream || context.defaults.stream || '';
+  const settings = context.settingsOf(slug);
+  if (!settings) {
+    const reason = slug === '' ? 'no stream is named' : `there is no stream "${slug.slice(0, 60)}"`;
+    problem(map.firstLine, 'stream', reason);
+    return { problems, name };
+  }
+  const { stream } = settings;
+  const quantity = VALUE_COLUMNS[context.valueColumn];
+  if (quantity !== stream.quantity) {
+    const wanted = stream.quantity === 'resistivity' ? 'resistivity_ohm_cm' : 'sheet_resistance_ohm_sq';
+    problem(map.firstLine, context.valueColumn, `the stream ${stream.slug} is measured as ${wanted}`);
+  }
+  if (diameterMm !== null && diameterMm !== stream.plan.diameterMm) {
+    problem(
+      map.firstLine,
+      'diameter_mm',
+      `${diameterMm} mm, but the stream's plan is for ${stream.plan.diameterMm} mm`,
+    );
+  }
+  if (stream.subgroup === 'run' && facts.run === null)
+    problem(map.firstLine, 'run', 'this stream counts runs: name the run');
+  if ((stream.subgroup === 'lot' || stream.subgroup === 'ingot') && facts.lot === null) {
+    problem(map.firstLine, 'lot', `this stream counts ${stream.subgroup}s: name the lot`);
+  }
+  const missing = ['thickness', 'geometry', 'spacing'].filter(
+    (word) => !facts.correctionsApplied.includes(word),
+  );
+  if (missing.length > 0) {
+    const reason = `not corrected for ${missing.join(' and ')}: that needs the raw voltages, only temperature can be corrected here`;
+    problem(map.firstLine, 'corrections_applied', reason);
+  } else if (!facts.correctionsApplied.includes('temperature')) {
+    if (facts.temperatureC === null)
+      problem(map.firstLine, 'temperature_c', 'not corrected for temperature, and none is given');
+    else if (facts.temperatureC < 18 || facts.temperatureC > 28) {
+      problem(
+        map.firstLine,
+        'temperature_c',
+        `the correction holds from 18 to 28 °C, not at ${facts.temperatureC} °C`,
+      );
+    } else if (stream.quantity !== 'resistivity') {
+      problem(
+        map.firstLine,
+        'corrections_applied',
+        'a layer has no general temperature coefficient: correct it at the gauge',
+      );
+    }
+  }
+  const { readings, faults } = inSiteOrder(stream.plan, map);
+  if (map.faults.length === 0) {
+    for (const fault of faults.slice(0, 20))
+      problem(map.lines[fault.row] as number, fault.column, fault.reason);
+  }
+  if (problems.length > 0) return { problems, name };
+  return { measurement: { streamId: stream.id, facts, readings }, name };
+}
