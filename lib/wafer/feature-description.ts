@@ -8,7 +8,7 @@ const EDGE_SPACINGS = 4;
 export function placeInWords(sites: readonly number[], geometry: PlanGeometry): string {
   const xMm = sites.reduce((sum, i) => sum + geometry.sites[i]!.xMm, 0) / sites.length;
   const yMm = sites.reduce((sum, i) => sum + geometry.sites[i]!.yMm, 0) / sites.length;
-  if (Math.hypot(xMm, yMm) < 0.2 * geometry.unitRadiusMm) {
+  if (Math.hypot(xMm, yMm) < 0.25 * geometry.unitRadiusMm) {
     const wide = sites.some(
       (i) => Math.hypot(geometry.sites[i]!.xMm, geometry.sites[i]!.yMm) > 0.5 * geometry.unitRadiusMm,
     );
@@ -19,6 +19,10 @@ export function placeInWords(sites: readonly number[], geometry: PlanGeometry): 
   if (Math.abs(xMm) > steep) parts.push(xMm > 0 ? '+x' : '-x');
   if (Math.abs(yMm) > steep) parts.push(yMm > 0 ? '+y' : '-y');
   return `at ${parts.join(', ')}`;
+}
+
+function inWords(percent: number): string {
+  return percent < 1000 ? `${percent.toFixed(1)} %` : 'over 1000 %';
 }
 
 /**
@@ -33,11 +37,11 @@ export function featureDescription(
   geometry: PlanGeometry,
 ): string {
   const sizes = deviationPercent.map(Math.abs);
-  const least = Math.min(...sizes).toFixed(1);
-  const most = Math.max(...sizes).toFixed(1);
-  const span = least === most ? most : `${least} to ${most}`;
+  const least = inWords(Math.min(...sizes));
+  const most = inWords(Math.max(...sizes));
+  const span = least === most ? most : `${least.replace(' %', '')} to ${most}`;
   const side = (deviationPercent[0] ?? 0) < 0 ? 'below' : 'above';
-  const words = `${sites.length} neighbouring sites ${placeInWords(sites, geometry)} read ${span} % ${side} the surface of the rest`;
+  const words = `${sites.length} neighbouring sites ${placeInWords(sites, geometry)} read ${span} ${side} the surface of the rest`;
   const isNearEdge = sites.some((i) => {
     const site = geometry.sites[i]!;
     const edgeMm = edgeDistanceMm(site, geometry.diameterMm);

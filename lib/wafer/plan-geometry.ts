@@ -39,6 +39,11 @@ export interface PlanGeometry {
 
 /** 0.0625 inch, the usual spacing of the pins (common practice, no source). */
 const USUAL_PROBE_SPACING_MM = 1.588;
+/**
+ * The surface for screening is stiffer than the one for shape: with a term for every third site it
+ * bends through three neighbours at the rim that deviate together, and blames the ones beside them.
+ */
+const SITES_PER_SCREEN_TERM = 6;
 const MOST_PARTS = 512;
 const SLACK = 1 + 1e-6;
 
@@ -57,11 +62,7 @@ function planPart(
   const counted = Array.from(indices, (i) => sites[i]!);
   const weights = once(() => (qualityRadiusMm === null ? null : areaWeights(counted, qualityRadiusMm)));
   const shapeFit = once(() => surfaceFit(counted, unitRadiusMm, SHAPE_TERMS));
-  const screenFit = once(() =>
-    shapeFit().terms.length + 6 > Math.floor(counted.length / 3)
-      ? shapeFit()
-      : surfaceFit(counted, unitRadiusMm, SCREEN_TERMS),
-  );
+  const screenFit = once(() => surfaceFit(counted, unitRadiusMm, SCREEN_TERMS, SITES_PER_SCREEN_TERM));
   return {
     indices,
     get weights() {

@@ -43,18 +43,19 @@ function conditionNumber(columns: readonly Float64Array[]): number {
 
 /**
  * Prepares the fit of the disc shapes to these sites. Shapes are taken up in the given order as far
- * as the sites can tell them apart: at most a third as many terms as sites, and a condition number
- * under 30. The two orientations of a shape come together, so that turning the wafer changes
+ * as the sites can tell them apart: at most one term for every `sitesPerTerm` sites (a third as many
+ * terms as sites unless said otherwise), and a condition number under 30. The two orientations of a shape come together, so that turning the wafer changes
  * nothing; one alone only where the other is zero on every site (a scan or a cross on the axes).
- * Fewer than three sites give no terms. Throws a RangeError when the radius is not positive.
+ * Fewer sites than that give no terms. Throws a RangeError when the radius is not positive.
  */
 export function surfaceFit(
   sites: readonly Site[],
   unitRadiusMm: number,
   groups: readonly DiscTermGroup[],
+  sitesPerTerm = 3,
 ): SurfaceFit {
   if (!(unitRadiusMm > 0)) throw new RangeError(`unitRadiusMm must be positive: ${unitRadiusMm}`);
-  const most = Math.floor(sites.length / 3);
+  const most = Math.floor(sites.length / sitesPerTerm);
   const terms: DiscTerm[] = [];
   const columns: Float64Array[] = [];
   for (const group of groups) {
@@ -66,7 +67,8 @@ export function surfaceFit(
         ),
       }))
       .filter(({ column }) => column.some((value) => Math.abs(value) > 1e-9));
-    if (tried.length === 0 || terms.length + tried.length > most) continue;
+    if (tried.length === 0) continue;
+    if (terms.length + tried.length > most) break;
     const next = [...columns, ...tried.map(({ column }) => column)];
     if (conditionNumber(next) >= MOST_CONDITION_NUMBER) continue;
     terms.push(...tried.map(({ term }) => term));
