@@ -11,7 +11,7 @@ export interface BoardStripProps {
   limits: 'provisional' | 'approved' | null;
 }
 
-const box = { width: 340, height: 38, slots: 30, inset: 6 };
+const box = { width: 340, height: 42, slots: 30, inset: 6 };
 
 /** The last levels of a stream between their limits, drawn by the server: every row shares one vertical scale. */
 export function BoardStrip({ points, band, limits }: BoardStripProps) {

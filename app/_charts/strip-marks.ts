@@ -26,10 +26,13 @@ export interface Strip {
 /** The levels a strip shows, in units where the limits are ±3; farther ones are drawn at its edge. */
 export const STRIP_REACH = 4.6;
 
+/** Room above and below for a mark that stands at the edge. */
+const EDGE = 5;
+
 /** Height of a level of `z` in a drawing `height` high, kept inside it. */
 export function stripY(z: number, height: number): number {
   const kept = Math.max(-STRIP_REACH, Math.min(STRIP_REACH, z));
-  return (height / 2) * (1 - kept / STRIP_REACH);
+  return height / 2 - (kept / STRIP_REACH) * (height / 2 - EDGE);
 }
 
 const shapeOf = (point: StripPoint): StripMark['shape'] => {

@@ -66,7 +66,7 @@ describe('stripMarks', () => {
 
 describe('stripY', () => {
   it('draws higher levels higher', () => {
-    expect(stripY(3, 46)).toBeCloseTo(8);
-    expect(stripY(-3, 46)).toBeCloseTo(38);
+    expect(stripY(3, 56)).toBeCloseTo(13);
+    expect(stripY(-3, 56)).toBeCloseTo(43);
   });
 });

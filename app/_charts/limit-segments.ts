@@ -1,0 +1,63 @@
+import type { ChartName } from '@/lib/control/completions-at';
+import type { LimitSpan } from './stream-chart-point';
+
+/** A level stretch of a centre line or limit, in the units of the axes. */
+export interface LimitSegment {
+  fromX: number;
+  toX: number;
+  y: number;
+  part: 'centre' | 'limit';
+  /** The limits are provisional. */
+  dashed: boolean;
+  /** The limit's own 90 % interval, while the limits are young; else null. */
+  interval: readonly [number, number] | null;
+}
+
+/**
+ * The limits of one chart as the stepped lines to draw over the indices `from` to `to`, each revision over the
+ * points it judged and half a step to either side. Revisions outside the span give nothing.
+ *
+ * @example limitSegments([span], 'moving-range', { from: 0, to: 24 }) // centre and upper limit, two segments
+ */
+export function limitSegments(
+  spans: readonly LimitSpan[],
+  chart: ChartName,
+  view: { from: number; to: number },
+): LimitSegment[] {
+  return spans.flatMap((span) => {
+    const fromX = Math.max(span.fromIndex, view.from) - 0.5;
+    const toX = Math.min(span.toIndex, view.to) + 0.5;
+    if (toX <= fromX) return [];
+    const dashed = span.state === 'provisional';
+    return parts(span, chart).map((piece) => ({ fromX, toX, dashed, ...piece }));
+  });
+}
+
+type Piece = Pick<LimitSegment, 'y' | 'part' | 'interval'>;
+
+function parts(span: LimitSpan, chart: ChartName): Piece[] {
+  const piece = (part: Piece['part'], y: number, interval?: readonly [number, number]): Piece => ({
+    part,
+    y,
+    interval: span.state === 'young' ? (interval ?? null) : null,
+  });
+  if (chart === 'level') {
+    const { centre, lower, upper, lowerInterval, upperInterval } = span.level;
+    return [
+      piece('centre', centre),
+      piece('limit', lower, lowerInterval),
+      piece('limit', upper, upperInterval),
+    ];
+  }
+  if (chart === 'moving-range') {
+    return [piece('centre', span.movingRange.centre), piece('limit', span.movingRange.upper)];
+  }
+  if (chart === 'within') {
+    const within = span.within;
+    return within === null
+      ? []
+      : [piece('centre', within.centre), piece('limit', within.lower), piece('limit', within.upper)];
+  }
+  const between = span.between;
+  return between === null ? [] : [piece('centre', between.centre), piece('limit', between.upper)];
+}

@@ -1,0 +1,81 @@
+/** One subgroup as the stream's charts show it. `texts` are made by the server, with unit and fitting digits. */
+export interface StreamChartPoint {
+  id: string;
+  /** Its place in the stream's order: the shared horizontal axis. */
+  index: number;
+  /** Its name, such as "run 1184". */
+  label: string;
+  /** When it was processed, ISO 8601. */
+  at: string;
+  /** The day in the site's time zone, such as "29 Nov": the axis is labelled where it changes. */
+  day: string;
+  /** Null where there is no level: the line has a gap. */
+  level: number | null;
+  movingRange: number | null;
+  within: number | null;
+  between: number | null;
+  /** Patterns this point completes, as `chart:rule:side`. */
+  completions: readonly string[];
+  outOfSpecification: boolean;
+  /** The subgroup is not complete: hollow, and not judged yet. */
+  open: boolean;
+  /** False: left out of the judging, and crossed. */
+  judged: boolean;
+  /** Late or re-measured. */
+  hollow: boolean;
+  /** Where Enter leads. */
+  href: string;
+  texts: StreamPointTexts;
+}
+
+/** What "At the cursor" says of a point; null where a figure is undefined. */
+export interface StreamPointTexts {
+  /** With unit, such as "5.514 Ω·cm". */
+  level: string;
+  at: string;
+  expected: string | null;
+  difference: string | null;
+  dopant: string | null;
+  movingRange: string | null;
+  within: string | null;
+  between: string | null;
+  /** Gauge, bad sites, why it is not judged: one line each. */
+  notes: readonly string[];
+}
+
+/** Limits as they were in force from one index to another, both included. */
+export interface LimitSpan {
+  fromIndex: number;
+  toIndex: number;
+  revision: number;
+  state: 'provisional' | 'young' | 'established';
+  level: {
+    centre: number;
+    lower: number;
+    upper: number;
+    /** 90 % interval of the limit itself, drawn while the limits are young. */
+    lowerInterval?: readonly [number, number];
+    upperInterval?: readonly [number, number];
+  };
+  movingRange: { centre: number; upper: number };
+  within: { lower: number; centre: number; upper: number } | null;
+  between: { centre: number; upper: number } | null;
+}
+
+/** What physics expects from one index to another: value, its uncertainty, and the target's tolerance apart. */
+export interface ExpectedSpan {
+  fromIndex: number;
+  toIndex: number;
+  value: number;
+  lower: number;
+  upper: number;
+  toleranceLower: number;
+  toleranceUpper: number;
+}
+
+/** Something that happened at a point: an adjustment, a maintenance, or the estimated onset of a change. */
+export interface StreamEvent {
+  index: number;
+  text: string;
+  kind: 'adjustment' | 'maintenance' | 'onset' | 'limits' | 'note';
+}
