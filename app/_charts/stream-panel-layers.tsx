@@ -1,11 +1,13 @@
 'use client';
 
-import { usePlotArea, useXAxisScale, useYAxisScale, ZIndexLayer } from 'recharts';
+import { ZIndexLayer } from 'recharts';
 import type { ChartName } from '@/lib/control/completions-at';
 import { chartMarkShape } from './chart-mark-shape';
 import { chartValue } from './chart-value';
+import type { LimitSegment } from './limit-segments';
 import { Mark } from './mark';
-import type { ExpectedSpan, StreamChartPoint } from './stream-chart-point';
+import { type PanelPlace, usePanelPlace } from './panel-place';
+import type { ExpectedSpan, StreamChartPoint, StreamEvent } from './stream-chart-point';
 
 export interface DopingTick {
   /** The charted value that this doping gives. */
@@ -14,81 +16,128 @@ export interface DopingTick {
   label: string;
 }
 
-/** The second scale of a level chart: where each doping would stand, in the ink of physics. */
-export function DopingScale({
-  ticks,
-  domain,
-}: {
-  ticks: readonly DopingTick[];
+/**
+ * What lies behind the points of one chart, from back to front: expected band and tolerance, limits with their
+ * intervals, events, and the doping scale. One layer that stays mounted while its contents change.
+ */
+export function PanelGround(props: {
+  ends: readonly [number, number];
   domain: readonly [number, number];
+  expected: readonly ExpectedSpan[];
+  segments: readonly LimitSegment[];
+  events: readonly StreamEvent[];
+  dopingTicks: readonly DopingTick[];
 }) {
-  const plot = usePlotArea();
-  const scale = useYAxisScale();
-  if (plot === undefined || scale === undefined) return null;
-  const x = plot.x + plot.width;
+  const place = usePanelPlace(props.domain);
+  if (place === null) return null;
   return (
     <g>
-      {ticks.map(({ value, label }) => {
-        const y = scale(value);
-        if (y === undefined || value < domain[0] || value > domain[1]) return null;
-        return (
-          <g key={label}>
-            <line x1={x} x2={x + 5} y1={y} y2={y} style={{ stroke: 'var(--phys)' }} />
-            <text x={x + 8} y={y} dy="0.35em" style={{ fill: 'var(--phys)' }}>
+      {props.expected.map((span) => (
+        <Expected key={span.fromIndex} span={span} ends={props.ends} place={place} />
+      ))}
+      {props.segments.map((piece) => (
+        <Limit key={`${piece.fromX} ${piece.y}`} piece={piece} place={place} />
+      ))}
+      {props.events.map((event) => (
+        <line
+          key={`${event.index} ${event.text}`}
+          x1={place.x(event.index)}
+          x2={place.x(event.index)}
+          y1={place.top}
+          y2={place.bottom}
+          style={{ stroke: event.kind === 'onset' ? 'var(--call)' : 'var(--quiet)' }}
+          strokeDasharray="1.5 3"
+        />
+      ))}
+      {props.dopingTicks
+        .filter((tick) => place.holds(tick.value))
+        .map(({ value, label }) => (
+          <g key={label} style={{ fill: 'var(--phys)', stroke: 'none' }}>
+            <path d={`M${place.right} ${place.y(value)}h5`} style={{ stroke: 'var(--phys)' }} />
+            <text x={place.right + 8} y={place.y(value)} dy="0.35em" style={{ fill: 'var(--phys)' }}>
               {label}
             </text>
           </g>
+        ))}
+    </g>
+  );
+}
+
+/** The hatched band of uncertainty about the expected value, and round it the tolerance, apart, as brackets. */
+function Expected(props: { span: ExpectedSpan; ends: readonly [number, number]; place: PanelPlace }) {
+  const { span, ends, place } = props;
+  const left = place.x(Math.max(ends[0], span.fromIndex - 0.5));
+  const right = place.x(Math.min(ends[1], span.toIndex + 0.5));
+  if (right <= left) return null;
+  const top = place.y(span.upper);
+  const serif = Math.min(14, (right - left) / 2);
+  return (
+    <g fill="none" style={{ stroke: 'var(--phys)' }}>
+      <rect
+        x={left}
+        y={top}
+        width={right - left}
+        height={place.y(span.lower) - top}
+        fill="url(#hatch-expected)"
+        stroke="none"
+      />
+      {place.holds(span.value) && <path d={`M${left} ${place.y(span.value)}H${right}`} />}
+      {[span.toleranceLower, span.toleranceUpper].map((edge, at) => {
+        if (!place.holds(edge)) return null;
+        const y = place.y(edge);
+        const back = y + (at === 0 ? -7 : 7);
+        return (
+          <path
+            key={at}
+            d={`M${left} ${back}V${y}h${serif}M${right - serif} ${y}H${right}V${back}`}
+            strokeWidth={1.2}
+          />
         );
       })}
     </g>
   );
 }
 
-/** The target's tolerance as a pair of brackets round each expected span, apart from the band of uncertainty. */
-export function ToleranceBrackets(props: {
-  spans: readonly ExpectedSpan[];
-  ends: readonly [number, number];
-  domain: readonly [number, number];
-}) {
-  const xScale = useXAxisScale();
-  const yScale = useYAxisScale();
-  if (xScale === undefined || yScale === undefined) return null;
-  const inside = (value: number) => value >= props.domain[0] && value <= props.domain[1];
+function Limit({ piece, place }: { piece: LimitSegment; place: PanelPlace }) {
+  const left = place.x(piece.fromX);
+  const right = place.x(piece.toX);
+  const top = piece.interval === null ? 0 : place.y(piece.interval[1]);
   return (
-    <g fill="none" style={{ stroke: 'var(--phys)' }} strokeWidth={1.2}>
-      {props.spans.map((span) => {
-        const left = xScale(Math.max(props.ends[0], span.fromIndex - 0.5));
-        const right = xScale(Math.min(props.ends[1], span.toIndex + 0.5));
-        if (left === undefined || right === undefined || right <= left) return null;
-        return [span.toleranceLower, span.toleranceUpper].map((edge, at) => {
-          const y = yScale(edge);
-          if (y === undefined || !inside(edge)) return null;
-          const back = at === 0 ? -7 : 7;
-          return (
-            <path
-              key={`${span.fromIndex} ${at}`}
-              d={`M${left} ${y + back}V${y}H${left + 14}M${right - 14} ${y}H${right}V${y + back}`}
-            />
-          );
-        });
-      })}
+    <g>
+      {piece.interval !== null && (
+        <rect
+          x={left}
+          y={top}
+          width={right - left}
+          height={place.y(piece.interval[0]) - top}
+          style={{ fill: 'var(--stat)', fillOpacity: 0.16 }}
+        />
+      )}
+      <path
+        d={`M${left} ${place.y(piece.y)}H${right}`}
+        style={{ stroke: 'var(--stat)' }}
+        strokeWidth={piece.part === 'limit' ? 1.3 : 0.8}
+        strokeDasharray={piece.dashed ? '5 4' : undefined}
+      />
     </g>
   );
 }
 
 /** The points of one chart, above its lines and never cut at the edge of the plot; signals lie on top. */
-export function Marks({ points, chart }: { points: readonly StreamChartPoint[]; chart: ChartName }) {
-  const xScale = useXAxisScale();
-  const yScale = useYAxisScale();
-  if (xScale === undefined || yScale === undefined) return null;
-  const marks = points.flatMap((point) => {
-    const value = chartValue(point, chart);
-    const x = xScale(point.index);
-    const y = value === null ? undefined : yScale(value);
-    const shape = chartMarkShape(point, chart);
-    return x === undefined || y === undefined
-      ? []
-      : [{ id: point.id, x, y, shape, call: shape.endsWith('diamond') }];
+export function PanelMarks(props: {
+  points: readonly StreamChartPoint[];
+  chart: ChartName;
+  domain: readonly [number, number];
+}) {
+  const place = usePanelPlace(props.domain);
+  if (place === null) return null;
+  const marks = props.points.flatMap((point) => {
+    const value = chartValue(point, props.chart);
+    if (value === null) return [];
+    const shape = chartMarkShape(point, props.chart);
+    return [
+      { id: point.id, x: place.x(point.index), y: place.y(value), shape, call: shape.endsWith('diamond') },
+    ];
   });
   return (
     <ZIndexLayer zIndex={700}>

@@ -1,7 +1,7 @@
 'use client';
 
 import { memo } from 'react';
-import { ComposedChart, Line, ReferenceArea, ReferenceLine, XAxis, YAxis } from 'recharts';
+import { ComposedChart, Line, XAxis, YAxis } from 'recharts';
 import type { ChartName } from '@/lib/control/completions-at';
 import { axisTicks } from './axis-ticks';
 import { chartMarkShape } from './chart-mark-shape';
@@ -9,7 +9,7 @@ import { chartValue } from './chart-value';
 import type { LimitSegment } from './limit-segments';
 import type { PlotFrame } from './plot-frame';
 import type { ExpectedSpan, StreamChartPoint, StreamEvent } from './stream-chart-point';
-import { DopingScale, type DopingTick, Marks, ToleranceBrackets } from './stream-panel-layers';
+import { type DopingTick, PanelGround, PanelMarks } from './stream-panel-layers';
 
 export interface StreamPanelProps {
   chart: ChartName;
@@ -32,10 +32,10 @@ export const DAYS_HEIGHT = 26;
 
 /**
  * One chart of a stream, drawn once for its data: the cursor lives above it and never draws it again.
- * Points left out of the judging are crossed and carry no line.
+ * Points left out of the judging are crossed and the line passes them by.
  */
 export const StreamPanel = memo(function StreamPanel(props: StreamPanelProps) {
-  const { chart, frame, domain, points, expected } = props;
+  const { chart, frame, domain, points } = props;
   const lined = points
     .filter((point) => chartMarkShape(point, chart) !== 'cross')
     .map((point) => ({ x: point.index, y: chartValue(point, chart) }));
@@ -79,57 +79,14 @@ export const StreamPanel = memo(function StreamPanel(props: StreamPanelProps) {
         tick={tickInk}
         axisLine={false}
       />
-      {expected.map((span) => (
-        <ReferenceArea
-          key={`band ${span.fromIndex}`}
-          x1={Math.max(ends[0], span.fromIndex - 0.5)}
-          x2={Math.min(ends[1], span.toIndex + 0.5)}
-          y1={Math.max(domain[0], span.lower)}
-          y2={Math.min(domain[1], span.upper)}
-          ifOverflow="hidden"
-          fill="url(#hatch-expected)"
-          fillOpacity={1}
-        />
-      ))}
-      {expected.map((span) => (
-        <ReferenceLine
-          key={`expected ${span.fromIndex}`}
-          segment={[
-            { x: Math.max(ends[0], span.fromIndex - 0.5), y: span.value },
-            { x: Math.min(ends[1], span.toIndex + 0.5), y: span.value },
-          ]}
-          ifOverflow="hidden"
-          stroke="var(--phys)"
-          zIndex={200}
-        />
-      ))}
-      {props.segments.map((piece) => (
-        <LimitPiece key={`${piece.fromX} ${piece.part} ${piece.y}`} piece={piece} />
-      ))}
-      {props.segments.map((piece) =>
-        piece.interval === null ? null : (
-          <ReferenceArea
-            key={`interval ${piece.fromX} ${piece.y}`}
-            x1={piece.fromX}
-            x2={piece.toX}
-            y1={Math.max(domain[0], piece.interval[0])}
-            y2={Math.min(domain[1], piece.interval[1])}
-            ifOverflow="hidden"
-            fill="var(--stat)"
-            fillOpacity={0.16}
-          />
-        ),
-      )}
-      {props.events.map((event) => (
-        <ReferenceLine
-          key={`${event.index} ${event.text}`}
-          x={event.index}
-          ifOverflow="hidden"
-          stroke={event.kind === 'onset' ? 'var(--call)' : 'var(--quiet)'}
-          strokeDasharray="1.5 3"
-          zIndex={250}
-        />
-      ))}
+      <PanelGround
+        ends={ends}
+        domain={domain}
+        expected={props.expected}
+        segments={props.segments}
+        events={props.events}
+        dopingTicks={props.dopingTicks}
+      />
       <Line
         dataKey="y"
         type="linear"
@@ -140,25 +97,7 @@ export const StreamPanel = memo(function StreamPanel(props: StreamPanelProps) {
         activeDot={false}
         dot={false}
       />
-      <Marks points={points} chart={chart} />
-      {expected.length > 0 && <ToleranceBrackets spans={expected} ends={ends} domain={domain} />}
-      {props.dopingTicks.length > 0 && <DopingScale ticks={props.dopingTicks} domain={domain} />}
+      <PanelMarks points={points} chart={chart} domain={domain} />
     </ComposedChart>
   );
 });
-
-function LimitPiece({ piece }: { piece: LimitSegment }) {
-  return (
-    <ReferenceLine
-      segment={[
-        { x: piece.fromX, y: piece.y },
-        { x: piece.toX, y: piece.y },
-      ]}
-      ifOverflow="hidden"
-      stroke="var(--stat)"
-      strokeWidth={piece.part === 'limit' ? 1.3 : 0.8}
-      {...(piece.dashed && { strokeDasharray: '5 4' })}
-      zIndex={220}
-    />
-  );
-}
