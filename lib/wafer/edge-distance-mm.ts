@@ -1,11 +1,5 @@
+import { flatOffsetMm } from './flat-offset-mm';
 import type { Site } from './site';
-
-/** Lengths of the primary flat by wafer diameter, mm (SEMI M1, from memory). Larger wafers carry a notch. */
-const FLAT_LENGTH_MM: ReadonlyMap<number, number> = new Map([
-  [100, 32.5],
-  [125, 42.5],
-  [150, 57.5],
-]);
 
 /**
  * How far a site is from the nearest edge of its wafer, in mm: the rim, or the primary flat at -y on
@@ -18,8 +12,7 @@ export function edgeDistanceMm(site: Site, diameterMm: number | null): number | 
   if (!(diameterMm > 0)) throw new RangeError(`diameterMm must be positive: ${diameterMm}`);
   const radiusMm = diameterMm / 2;
   const rimMm = radiusMm - Math.hypot(site.xMm, site.yMm);
-  const flatLengthMm = FLAT_LENGTH_MM.get(diameterMm);
-  if (flatLengthMm === undefined) return rimMm;
-  const flatAtMm = Math.sqrt(radiusMm * radiusMm - (flatLengthMm / 2) ** 2);
+  const flatAtMm = flatOffsetMm(diameterMm);
+  if (flatAtMm === null) return rimMm;
   return Math.min(rimMm, site.yMm + flatAtMm);
 }
