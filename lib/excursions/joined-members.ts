@@ -57,7 +57,7 @@ export function joinedMembers(
 }
 
 /** A subgroup's charted figures from its wafers, whatever the order in which these arrived. */
-export function summarise(point: LinePoint): void {
+export function summarise(point: Pick<LinePoint, 'members' | 'level' | 'within' | 'between'>): void {
   const levels = sortedNumbers(point.members.map((member) => member.level));
   const withins = sortedNumbers(point.members.map((member) => member.within));
   const mean = levels.length === 0 ? null : sum(levels) / levels.length;

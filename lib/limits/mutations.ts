@@ -1,0 +1,171 @@
+import type { ClientBase } from 'pg';
+import type { Actor } from '@/lib/access/actor';
+import { limitSet, type LimitSet } from '@/lib/control/limit-set';
+import { columnNames, rowsAsQuery } from '@/lib/database/columnar';
+import { inTransaction } from '@/lib/database/transaction';
+import { LIMIT_COLUMNS } from '@/lib/excursions/judgement-rows';
+import { holdStream, judgeAgain } from '@/lib/excursions/mutations';
+import type { Screen } from '@/lib/wafer/measure-wafer';
+import { listBaselinePoints } from './data';
+import { remeasuredBaseline } from './remeasured-baseline';
+import type { LimitOrigin, LimitState } from './types';
+
+export type Result = { ok: true } | { ok: false; reason: string };
+
+/** Draws up limits from the judged subgroups of a span; they judge nothing until approved. */
+export async function draftLimits(
+  actor: Actor,
+  streamId: string,
+  span: { from: Date; to: Date },
+  reason: string,
+): Promise<Result> {
+  const points = await listBaselinePoints(actor, streamId, span);
+  if (points.length < 2)
+    return { ok: false, reason: `That span holds ${points.length} judged subgroups; limits need two.` };
+  const limits = limitSet(points);
+  if (limits.level.sigma === 0)
+    return { ok: false, reason: 'All levels of that span are equal: no limits come of it.' };
+  const baselineIds = points.map((point) => point.id);
+  await inTransaction((client) =>
+    insertLimits(actor, client, streamId, limits, {
+      state: 'draft',
+      origin: 'chosen-span',
+      baselineIds,
+      at: new Date(),
+      reason,
+    }),
+  );
+  return { ok: true };
+}
+
+/** Enters limits that were in use elsewhere before. They are in force from the instant given once approved. */
+export async function enterInheritedLimits(
+  actor: Actor,
+  streamId: string,
+  limits: LimitSet,
+  effectiveFrom: Date,
+  reason: string,
+): Promise<Result> {
+  await inTransaction((client) =>
+    insertLimits(actor, client, streamId, limits, {
+      state: 'draft',
+      origin: 'inherited',
+      baselineIds: [],
+      at: effectiveFrom,
+      reason,
+    }),
+  );
+  return { ok: true };
+}
+
+/**
+ * Approves a draft or the provisional first limits. A draft takes force at `effectiveFrom` and what lies later is
+ * judged again; the provisional ones go on as they were. Approved limits are never edited.
+ */
+export async function approveLimits(
+  actor: Actor,
+  revisionId: string,
+  approval: { reason: string; effectiveFrom: Date },
+): Promise<Result> {
+  return inTransaction(async (client) => {
+    const { rows } = await client.query<{ stream_id: string; state: LimitState; revision: number }>(
+      'SELECT stream_id, state, revision FROM limit_revision WHERE id = $1 FOR UPDATE',
+      [revisionId],
+    );
+    const found = rows[0];
+    if (found === undefined) return { ok: false, reason: 'There is no such revision.' };
+    if (found.state !== 'draft' && found.state !== 'provisional') {
+      return { ok: false, reason: `Revision ${found.revision} is ${found.state} already.` };
+    }
+    await holdStream(client, found.stream_id);
+    await client.query(
+      `UPDATE limit_revision SET state = 'approved', approved_by = $2, approved_at = now(), approval_reason = $3,
+         effective_from = CASE WHEN state = 'draft' THEN $4 ELSE effective_from END WHERE id = $1`,
+      [revisionId, actor.name, approval.reason, approval.effectiveFrom],
+    );
+    if (found.state === 'draft') {
+      const why = `limit revision ${found.revision} took force`;
+      await judgeAgain(actor, client, found.stream_id, approval.effectiveFrom.getTime(), why);
+    }
+    return { ok: true };
+  });
+}
+
+/** Sets a draft aside. It stays on record. */
+export async function discardLimits(_actor: Actor, revisionId: string): Promise<Result> {
+  return inTransaction(async (client) => {
+    const { rowCount } = await client.query(
+      "UPDATE limit_revision SET state = 'discarded' WHERE id = $1 AND state = 'draft'",
+      [revisionId],
+    );
+    return rowCount === 1 ? { ok: true } : { ok: false, reason: 'Only a draft can be set aside.' };
+  });
+}
+
+/**
+ * Changes how a stream's readings are screened, from now on. Limits drawn from readings screened otherwise no longer
+ * fit, so the baseline of those in force is measured again and a new provisional revision begins.
+ */
+export async function changeScreening(
+  actor: Actor,
+  streamId: string,
+  screening: Screen,
+  reason: string,
+): Promise<Result> {
+  return inTransaction(async (client) => {
+    await holdStream(client, streamId);
+    const { rows } = await client.query<{ screening: Screen }>('SELECT screening FROM stream WHERE id = $1', [
+      streamId,
+    ]);
+    const before = rows[0]?.screening;
+    if (before === undefined) return { ok: false, reason: 'There is no such stream.' };
+    if (before === screening) return { ok: false, reason: 'Readings are screened so already.' };
+    const points = await remeasuredBaseline(actor, client, streamId, screening);
+    await client.query('UPDATE stream SET screening = $2 WHERE id = $1', [streamId, screening]);
+    if (points === null) return { ok: true };
+    if (points.length < 2)
+      return { ok: false, reason: 'The baseline in force leaves too few wafers under that screening.' };
+    const limits = limitSet(points);
+    if (limits.level.sigma === 0)
+      return { ok: false, reason: 'Under that screening all levels of the baseline are equal.' };
+    await insertLimits(actor, client, streamId, limits, {
+      state: 'provisional',
+      origin: 'screening',
+      baselineIds: points.map((point) => point.id),
+      at: new Date(),
+      reason: `screening changed from ${before} to ${screening}: ${reason}`,
+    });
+    return { ok: true };
+  });
+}
+
+async function insertLimits(
+  actor: Actor,
+  client: ClientBase,
+  streamId: string,
+  limits: LimitSet,
+  meta: { state: LimitState; origin: LimitOrigin; baselineIds: string[]; at: Date; reason: string },
+): Promise<void> {
+  await holdStream(client, streamId);
+  const { rows } = await client.query<{ next: number }>(
+    'SELECT coalesce(max(revision), 0) + 1 AS next FROM limit_revision WHERE stream_id = $1',
+    [streamId],
+  );
+  const line = {
+    id: null,
+    revision: rows[0]?.next ?? 1,
+    effectiveFrom: meta.at.getTime(),
+    baselineIds: meta.baselineIds,
+    limits,
+  };
+  const own = { id: true, state: meta.state, origin: meta.origin, reason: meta.reason };
+  const columns = LIMIT_COLUMNS.filter((column) => column.name !== 'id').map((column) =>
+    column.name in own ? { ...column, value: () => own[column.name as keyof typeof own] } : column,
+  );
+  const parameters: unknown[] = [];
+  const given = rowsAsQuery(columns, [{ streamId, limits: line, author: actor.name }], parameters);
+  await client.query(
+    `INSERT INTO limit_revision (${columnNames(columns)}) SELECT given.* FROM ${given} given`,
+    parameters,
+  );
+}

@@ -1,0 +1,192 @@
+import type { Actor } from '@/lib/access/actor';
+import { getPool } from '@/lib/database/client';
+import { listStreams, listStreamSettings } from '@/lib/streams/data';
+import type { StreamSettings } from '@/lib/streams/types';
+import { checkedMeasurement } from './checked-measurement';
+import { csvRows, UnreadableFile } from './csv-rows';
+import { earlierOutcomes } from './earlier-outcomes';
+import { mapPreview, type MapPreview } from './map-preview';
+import { rawMaps, type RawMap } from './raw-maps';
+import type { MapHeader } from './map-columns';
+import type { MapProblem, Measurement } from './types';
+import { contentHash, runOrLot } from './wafer-rows';
+
+/** A file that can be read more than once, from its beginning. */
+export interface FileSource {
+  name: string;
+  open: () => AsyncIterable<Uint8Array>;
+}
+
+/** What reading a whole file found, before anything is recorded. At most so many problems and previews are kept. */
+export interface FileCheck {
+  measurements: number;
+  /** Places in the file, from 0, of the measurements that cannot be recorded. */
+  faulty: Set<number>;
+  /** Sound measurements that are on record already, with the same content. */
+  repeated: number;
+  problems: MapProblem[];
+  problemCount: number;
+  previews: MapPreview[];
+  notices: string[];
+}
+
+export const MOST_PROBLEMS = 1000;
+export const MOST_PREVIEWS = 50;
+
+/** A measurement as a file holds it: its place among the others, the line it begins on, and what checking made of it. */
+export interface FileMeasurement {
+  place: number;
+  line: number;
+  name: string;
+  found: Measurement | MapProblem[];
+}
+
+/** A fault that spoils the whole file: it cannot be read, or its header cannot serve. */
+export class SpoiltFile extends Error {
+  readonly problems: MapProblem[];
+
+  constructor(problems: MapProblem[]) {
+    super(problems.map((problem) => problem.reason).join('; '));
+    this.problems = problems;
+  }
+}
+
+/** The settings of every stream in use, by the name that stands in files. */
+export async function settingsBySlug(actor: Actor): Promise<Map<string, StreamSettings>> {
+  const streams = await listStreams(actor);
+  const settings = await listStreamSettings(
+    actor,
+    streams.map((stream) => stream.id),
+  );
+  return new Map(settings.map((one) => [one.stream.slug, one]));
+}
+
+/**
+ * The measurements of a file one after another, each checked against its stream; some at a time. Throws `SpoiltFile`
+ * where the file as a whole cannot be read.
+ */
+export async function* fileMeasurements(
+  file: FileSource,
+  settings: ReadonlyMap<string, StreamSettings>,
+  defaults: RawMap['words'],
+  onHeader: (header: MapHeader) => void = () => undefined,
+): AsyncGenerator<FileMeasurement[]> {
+  let header: MapHeader | null = null;
+  let place = 0;
+  const now = new Date();
+  const spoilt = (line: number | null, column: string | null, reason: string): MapProblem => ({
+    file: file.name,
+    line,
+    column,
+    measurement: null,
+    reason,
+  });
+  try {
+    for await (const parts of rawMaps(csvRows(file.open()))) {
+      const some: FileMeasurement[] = [];
+      for (const part of parts) {
+        if (part.kind === 'faults') {
+          throw new SpoiltFile(part.faults.map(({ line, column, reason }) => spoilt(line, column, reason)));
+        }
+        if (part.kind === 'header') {
+          header = part.header;
+          onHeader(header);
+          continue;
+        }
+        const checked = checkedMeasurement(part.map, {
+          file: file.name,
+          valueColumn: (header as MapHeader).valueColumn,
+          defaults,
+          settingsOf: (slug) => settings.get(slug),
+          now,
+        });
+        some.push({
+          place: place++,
+          line: part.map.firstLine,
+          name: checked.name,
+          found: 'measurement' in checked ? checked.measurement : checked.problems,
+        });
+      }
+      yield some;
+    }
+    if (place === 0) throw new SpoiltFile([spoilt(null, null, 'there are no readings below the header')]);
+  } catch (error) {
+    if (error instanceof UnreadableFile) throw new SpoiltFile([spoilt(error.line, null, error.message)]);
+    throw error;
+  }
+}
+
+/**
+ * Reads a file from beginning to end and records nothing: what it holds, every problem with its line and column, and
+ * pictures of the first maps. Memory does not grow with the file, but for a few bytes a measurement.
+ */
+export async function checkFile(
+  actor: Actor,
+  file: FileSource,
+  defaults: RawMap['words'],
+): Promise<FileCheck> {
+  const settings = await settingsBySlug(actor);
+  const check: FileCheck = {
+    measurements: 0,
+    faulty: new Set(),
+    repeated: 0,
+    problems: [],
+    problemCount: 0,
+    previews: [],
+    notices: [],
+  };
+  const seen = new Map<string, { place: number; line: number; hash: string }>();
+  const refuse = (place: number, problems: readonly MapProblem[]) => {
+    check.faulty.add(place);
+    check.problemCount += problems.length;
+    check.problems.push(...problems.slice(0, Math.max(0, MOST_PROBLEMS - check.problems.length)));
+  };
+  const byId = new Map([...settings.values()].map((one) => [one.stream.id, one]));
+  const onHeader = (header: MapHeader) => {
+    if (header.unread.length > 0)
+      check.notices.push(`columns that are not read: ${header.unread.join(', ')}`);
+  };
+  for await (const some of fileMeasurements(file, settings, defaults, onHeader)) {
+    check.measurements += some.length;
+    const sound: { place: number; line: number; name: string; measurement: Measurement; hash: string }[] = [];
+    for (const { place, line, name, found } of some) {
+      if (Array.isArray(found)) {
+        refuse(place, found);
+        continue;
+      }
+      const hash = contentHash(found);
+      const identity = JSON.stringify([
+        found.streamId,
+        runOrLot(found.facts),
+        found.facts.wafer,
+        +found.facts.measuredAt,
+      ]);
+      const earlier = seen.get(identity);
+      if (earlier !== undefined && earlier.hash !== hash) {
+        const reason = `the same measurement begins on line ${earlier.line} already: its rows stand apart, or contradict each other`;
+        refuse(place, [{ file: file.name, line, column: null, measurement: name, reason }]);
+        check.faulty.add(earlier.place);
+        continue;
+      }
+      if (earlier === undefined) seen.set(identity, { place, line, hash });
+      sound.push({ place, line, name, measurement: found, hash });
+    }
+    const earlier = await earlierOutcomes(
+      actor,
+      getPool(),
+      sound.map((one) => one.measurement),
+      sound.map((one) => one.hash),
+    );
+    sound.forEach(({ place, line, name, measurement }, i) => {
+      const outcome = earlier[i];
+      if (outcome?.kind === 'repeated') check.repeated += 1;
+      if (outcome?.kind === 'refused') {
+        refuse(place, [{ file: file.name, line, column: null, measurement: name, reason: outcome.reason }]);
+      }
+      const own = byId.get(measurement.streamId);
+      if (own && check.previews.length < MOST_PREVIEWS)
+        check.previews.push(mapPreview(own, measurement, name));
+    });
+  }
+  return check;
+}

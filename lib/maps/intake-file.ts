@@ -1,0 +1,159 @@
+import type { Actor } from '@/lib/access/actor';
+import { getPool, getPrisma } from '@/lib/database/client';
+import { takeIds } from '@/lib/database/take-ids';
+import {
+  checkFile,
+  fileMeasurements,
+  MOST_PROBLEMS,
+  settingsBySlug,
+  SpoiltFile,
+  type FileSource,
+} from './file-check';
+import type { RawMap } from './raw-maps';
+import { recordMeasurements } from './record-measurements';
+import type { Batch } from './record-statement';
+import type { IntakeResult, MapProblem, Measurement, Origin } from './types';
+
+export interface IntakeOptions {
+  origin: Origin;
+  /** Old wafers: recorded, shown and studied, but they open no cases. */
+  history: boolean;
+  /** Record the sound measurements of a file that has faults as well. */
+  sound: boolean;
+  /** Read and check, record nothing. */
+  checkOnly?: boolean;
+  /** What stands in where the file's columns say nothing. */
+  defaults: RawMap['words'];
+  onProgress?: (recorded: number) => void;
+}
+
+/** A transaction takes as many measurements as hold about so many readings. */
+const READINGS_AT_ONCE = 100_000;
+
+/**
+ * Takes a wafer-map file: checks it from beginning to end, then, if it is sound or the sound part is wanted, reads it
+ * again and records it batch by batch. Every measurement is recorded whole or not at all, and a file that is taken
+ * twice records nothing twice.
+ */
+export async function intakeFile(
+  actor: Actor,
+  file: FileSource,
+  options: IntakeOptions,
+): Promise<IntakeResult> {
+  const [id = ''] = options.checkOnly ? ['0'] : await takeIds(getPool(), 'intake_batch', 1);
+  const batch: Batch = {
+    id,
+    source: file.name,
+    origin: options.origin,
+    history: options.history,
+    actor: actor.name,
+  };
+  const result: IntakeResult = {
+    batchId: null,
+    recorded: 0,
+    repeated: 0,
+    refused: 0,
+    refusals: [],
+    notices: [],
+  };
+  try {
+    const check = await checkFile(actor, file, options.defaults);
+    result.notices.push(...check.notices);
+    result.refusals.push(...check.problems);
+    result.refused = check.faulty.size;
+    if (check.problemCount > check.problems.length) {
+      result.notices.push(`${check.problemCount} problems in all; the first ${MOST_PROBLEMS} are listed`);
+    }
+    if (options.checkOnly) return { ...result, repeated: check.repeated };
+    if (check.faulty.size === 0 || options.sound)
+      await recordSound(actor, file, batch, check.faulty, options, result);
+    else if (check.measurements > check.faulty.size) {
+      const left = check.measurements - check.faulty.size;
+      result.notices.push(
+        `${left} sound measurements were not recorded: the file has faults and only the whole was asked for`,
+      );
+    }
+  } catch (error) {
+    if (!(error instanceof SpoiltFile)) throw error;
+    result.refusals.push(...error.problems);
+    result.refused = Math.max(1, result.refused);
+    if (options.checkOnly) return result;
+  }
+  await fileBatch(actor, batch, result);
+  return { ...result, batchId: batch.id };
+}
+
+async function recordSound(
+  actor: Actor,
+  file: FileSource,
+  batch: Batch,
+  faulty: ReadonlySet<number>,
+  options: IntakeOptions,
+  result: IntakeResult,
+): Promise<void> {
+  const settings = await settingsBySlug(actor);
+  let waiting: { measurement: Measurement; line: number; name: string }[] = [];
+  let readings = 0;
+  const record = async () => {
+    const outcomes = await recordMeasurements(
+      actor,
+      batch,
+      waiting.map((one) => one.measurement),
+    );
+    outcomes.forEach((outcome, i) => {
+      const { line = null, name = null } = waiting[i] ?? {};
+      result[outcome.kind] += 1;
+      if (outcome.kind !== 'refused') return;
+      result.refusals.push({
+        file: file.name,
+        line,
+        column: null,
+        measurement: name,
+        reason: outcome.reason,
+      });
+    });
+    waiting = [];
+    readings = 0;
+    options.onProgress?.(result.recorded + result.repeated);
+  };
+  for await (const some of fileMeasurements(file, settings, options.defaults)) {
+    for (const { place, line, name, found } of some) {
+      if (faulty.has(place)) continue;
+      if (Array.isArray(found)) {
+        result.refused += 1;
+        result.refusals.push(...found);
+        continue;
+      }
+      waiting.push({ measurement: found, line, name });
+      readings += found.readings.length;
+      if (readings >= READINGS_AT_ONCE) await record();
+    }
+  }
+  await record();
+}
+
+/** Writes down what became of the file, its refusals with it. */
+async function fileBatch(actor: Actor, batch: Batch, result: IntakeResult): Promise<void> {
+  const { repeated, refused } = result;
+  const prisma = getPrisma();
+  const id = BigInt(batch.id);
+  const { source, origin, history } = batch;
+  const listed: MapProblem[] = result.refusals.slice(0, MOST_PROBLEMS);
+  await prisma.$transaction([
+    prisma.intakeBatch.upsert({
+      where: { id },
+      create: { id, source, origin, history, actor: actor.name, repeated, refused, finishedAt: new Date() },
+      update: { repeated, refused, finishedAt: new Date() },
+    }),
+    prisma.intakeRefusal.createMany({
+      data: listed.map(({ file, line, column, measurement, reason }) => ({
+        batchId: id,
+        file,
+        line,
+        columnName: column,
+        measurement,
+        reason,
+      })),
+    }),
+  ]);
+}

@@ -1,0 +1,69 @@
+import type { Actor } from '@/lib/access/actor';
+import { columnNames, rowsAsQuery } from '@/lib/database/columnar';
+import { inTransaction } from '@/lib/database/transaction';
+import { summarise } from '@/lib/excursions/joined-members';
+import { holdStream, judgeAgain } from '@/lib/excursions/mutations';
+import { listStreamSettings } from '@/lib/streams/data';
+import { measuredWafer, measuringStream } from './measured-wafer';
+import { loadStoredWafers } from './stored-wafers';
+import { MEASURED_COLUMNS } from './wafer-rows';
+
+export { intakeFile } from './intake-file';
+export { recordMeasurements } from './record-measurements';
+
+/**
+ * Takes a reading out of a wafer's figures or puts it back, with who and why. The reading itself stays as it was; the
+ * wafer is measured again and its stream judged again from there.
+ */
+export async function decideReading(
+  actor: Actor,
+  streamId: string,
+  waferId: string,
+  decision: { siteIndex: number; action: 'out' | 'in'; reason: string },
+): Promise<{ ok: true } | { ok: false; reason: string }> {
+  const [settings] = await listStreamSettings(actor, [streamId]);
+  if (settings === undefined) return { ok: false, reason: 'There is no such stream.' };
+  const { siteIndex, action, reason } = decision;
+  return inTransaction(async (client) => {
+    await holdStream(client, streamId);
+    const before = (await loadStoredWafers(actor, client, streamId, [waferId])).get(waferId);
+    if (before === undefined) return { ok: false, reason: 'There is no such wafer.' };
+    const value = before.readings[siteIndex];
+    if (value === undefined) return { ok: false, reason: 'The wafer has no such site.' };
+    if (action === 'in' && !(value !== null && value > 0 && Number.isFinite(value))) {
+      return { ok: false, reason: 'This reading is impossible: it stays out.' };
+    }
+    await client.query(
+      'INSERT INTO reading_exclusion (stream_id, wafer_id, site_index, action, actor, reason) VALUES ($1, $2, $3, $4, $5, $6)',
+      [streamId, waferId, siteIndex, action, actor.name, reason],
+    );
+    before.overrides.set(siteIndex, action);
+    const measured = measuredWafer(measuringStream(settings), before.facts, before.readings, {
+      screen: before.screening,
+      overrides: before.overrides,
+    });
+    const parameters: unknown[] = [streamId, waferId];
+    const given = rowsAsQuery(MEASURED_COLUMNS, [{ screening: before.screening, measured }], parameters);
+    await client.query(
+      `UPDATE wafer_measurement SET (${columnNames(MEASURED_COLUMNS)}) = (SELECT given.* FROM ${given} given)
+       WHERE stream_id = $1 AND id = $2`,
+      parameters,
+    );
+    const words = action === 'out' ? 'taken out' : 'put back';
+    const why = `a reading of one of its wafers was ${words}: ${reason}`;
+    await judgeAgain(actor, client, streamId, Infinity, why, (line) => {
+      const point = line.points.find((one) => one.id === before.subgroupId);
+      const member = point?.members.find((one) => one.waferId === waferId);
+      if (point === undefined || member === undefined) return [];
+      member.level = measured.level;
+      member.within = measured.within;
+      point.specification = [
+        ...point.specification.filter((entry) => !entry.startsWith(`${waferId}:`)),
+        ...measured.specification.map((fault) => `${waferId}:${fault}`),
+      ];
+      summarise(point);
+      return [point];
+    });
+    return { ok: true };
+  });
+}

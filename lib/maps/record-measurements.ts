@@ -1,0 +1,232 @@
+import type { Pool, PoolClient } from 'pg';
+import type { Actor } from '@/lib/access/actor';
+import { getPool } from '@/lib/database/client';
+import { takeIds } from '@/lib/database/take-ids';
+import { judgedLine, LineTooShort } from '@/lib/excursions/judged-line';
+import { joinedMembers } from '@/lib/excursions/joined-members';
+import { isPlain, withIds, writeFindings, type JudgedLine } from '@/lib/excursions/write-judgement';
+import { loadDesks, putDeskBack, reachesBackTo, takeDesk, type Desk } from './desk';
+import { earlierOutcomes } from './earlier-outcomes';
+import { measuredWafer } from './measured-wafer';
+import { recordStatement, type Batch } from './record-statement';
+import type { Measurement, Outcome } from './types';
+import { contentHash, subgroupKey, type WaferRow } from './wafer-rows';
+
+/** Why a signal that no longer holds was withdrawn, when wafers were recorded. */
+const LATE = 'a wafer recorded later changed the order or the values of its points';
+
+/**
+ * Records measurements: measured, judged and written in one transaction, in the order given. Each comes out as
+ * recorded, repeated (the same was there already) or refused (another content was there already).
+ *
+ * One wafer in order goes by a single statement that carries the version of the stream it was judged by; whatever is
+ * out of the ordinary goes by a transaction that holds its streams.
+ */
+export async function recordMeasurements(
+  actor: Actor,
+  batch: Batch,
+  measurements: readonly Measurement[],
+): Promise<Outcome[]> {
+  const pool = getPool();
+  const only = measurements.length === 1 ? measurements[0] : undefined;
+  if (only !== undefined) {
+    const outcome = await recordedAlone(pool, actor, batch, only);
+    if (outcome !== null) return [outcome];
+  }
+  return measurements.length === 0 ? [] : recordedTogether(pool, actor, batch, measurements);
+}
+
+/** The short way; null where it cannot be gone and nothing was written. */
+async function recordedAlone(
+  pool: Pool,
+  actor: Actor,
+  batch: Batch,
+  measurement: Measurement,
+): Promise<Outcome | null> {
+  const { streamId } = measurement;
+  const at = measurement.facts.processedAt.getTime();
+  const desk = takeDesk(pool, streamId) ?? (await loadDesks(actor, pool, [{ streamId, from: at }]))[0];
+  if (desk === undefined || !reachesBackTo(desk.line, at)) return null;
+  const { stream } = desk.by.settings;
+  if (stream.subgroup !== 'wafer' && !desk.line.whole) {
+    const key = subgroupKey(stream.subgroup, measurement.facts);
+    if (!desk.line.points.some((point) => point.key === key) && (await isKnown(pool, streamId, [key])))
+      return null;
+  }
+  const [id = ''] = await takeIds(pool, 'wafer_measurement', 1);
+  const [subgroupId = ''] = await takeIds(pool, 'subgroup', 1);
+  const work = worked(
+    desk,
+    actor,
+    batch,
+    [{ measurement, id, hash: contentHash(measurement) }],
+    () => subgroupId,
+  );
+  if (work === null || !isPlain(work.judged)) return null;
+  try {
+    const { text, values } = recordStatement([work.judged], work.rows, batch);
+    const { rows } = await pool.query<{ streams: number }>({ name: 'record', text, values });
+    if (rows[0]?.streams !== 1) return null;
+  } catch (error) {
+    if (isUniqueViolation(error)) return null;
+    throw error;
+  }
+  putDeskBack(pool, desk);
+  return { kind: 'recorded', waferId: id };
+}
+
+/** The long way: holds the streams, looks what is there already, writes the rest. */
+async function recordedTogether(
+  pool: Pool,
+  actor: Actor,
+  batch: Batch,
+  measurements: readonly Measurement[],
+  wholeLines = false,
+): Promise<Outcome[]> {
+  const client = await pool.connect();
+  const taken: Desk[] = [];
+  try {
+    await client.query('BEGIN');
+    const streamIds = [...new Set(measurements.map((measurement) => measurement.streamId))];
+    const { rows: held } = await client.query<{ id: string; version: string }>(
+      'SELECT id, version FROM stream WHERE id = ANY($1::bigint[]) ORDER BY id FOR UPDATE',
+      [streamIds],
+    );
+    const hashes = measurements.map(contentHash);
+    const outcomes = await earlierOutcomes(actor, client, measurements, hashes);
+    const fresh = measurements.flatMap((measurement, index) =>
+      outcomes[index] ? [] : [{ measurement, index }],
+    );
+    const ids = await takeIds(pool, 'wafer_measurement', fresh.length);
+    const deskOf = await desksFor(pool, client, actor, held, fresh, wholeLines);
+    taken.push(...deskOf.values());
+    const subgroupIds = await takeIds(pool, 'subgroup', fresh.length);
+    const judged: JudgedLine[] = [];
+    const rows: WaferRow[] = [];
+    for (const [streamId, desk] of deskOf) {
+      const own = fresh.flatMap(({ measurement, index }, place) => {
+        if (measurement.streamId !== streamId) return [];
+        const id = ids[place] as string;
+        outcomes[index] = { kind: 'recorded', waferId: id };
+        return [{ measurement, id, hash: hashes[index] as string }];
+      });
+      const work = worked(desk, actor, batch, own, () => subgroupIds.pop() as string);
+      if (work === null) throw new LineTooShort();
+      judged.push(work.judged);
+      rows.push(...work.rows);
+    }
+    if (rows.length > 0) {
+      await withIds(pool, judged);
+      const { text, values } = recordStatement(judged, rows, batch);
+      const { rows: answer } = await client.query<{ streams: number }>({ name: 'record', text, values });
+      if (answer[0]?.streams !== judged.length)
+        throw new Error('A stream that was held moved on all the same.');
+      await writeFindings(client, judged, actor.name);
+    }
+    await client.query('COMMIT');
+    for (const desk of taken) putDeskBack(pool, desk);
+    return outcomes as Outcome[];
+  } catch (error) {
+    await client.query('ROLLBACK');
+    if (!(error instanceof LineTooShort) || wholeLines) throw error;
+  } finally {
+    client.release();
+  }
+  return recordedTogether(pool, actor, batch, measurements, true);
+}
+
+/** Measures and judges the new wafers of one stream; null where its line does not reach back far enough. */
+function worked(
+  desk: Desk,
+  actor: Actor,
+  batch: Batch,
+  fresh: readonly { measurement: Measurement; id: string; hash: string }[],
+  newId: () => string,
+): { judged: JudgedLine; rows: WaferRow[] } | null {
+  const { stream } = desk.by.settings;
+  const measured = fresh.map(({ measurement }) =>
+    measuredWafer(desk.by, measurement.facts, measurement.readings),
+  );
+  const additions = fresh.map(({ measurement, id }, i) => {
+    const { level = null, within = null, specification = [] } = measured[i] ?? {};
+    const at = measurement.facts.processedAt.getTime();
+    const key = subgroupKey(stream.subgroup, measurement.facts);
+    return { waferId: id, key, at, history: batch.history, level, within, specification };
+  });
+  try {
+    const { touched, pointOf, from } = joinedMembers(desk.line, additions, newId);
+    const change = judgedLine(desk.line, touched, from, LATE);
+    const rows = fresh.map(({ measurement, id, hash }, i) => ({
+      id,
+      subgroupId: pointOf[i]?.id ?? '',
+      batchId: batch.id,
+      measurement,
+      hash,
+      history: batch.history,
+      recordedBy: actor.name,
+      screening: stream.screening,
+      measured: measured[i] as WaferRow['measured'],
+    }));
+    return { judged: { line: desk.line, change }, rows };
+  } catch (error) {
+    if (error instanceof LineTooShort) return null;
+    throw error;
+  }
+}
+
+async function desksFor(
+  pool: Pool,
+  client: PoolClient,
+  actor: Actor,
+  held: readonly { id: string; version: string }[],
+  fresh: readonly { measurement: Measurement }[],
+  wholeLines: boolean,
+): Promise<Map<string, Desk>> {
+  const found = new Map<string, Desk>();
+  const wishes: { streamId: string; from: number }[] = [];
+  for (const { id, version } of held) {
+    const own = fresh.flatMap(({ measurement }) => (measurement.streamId === id ? measurement.facts : []));
+    if (own.length === 0) continue;
+    const earliest = own.reduce((least, facts) => Math.min(least, facts.processedAt.getTime()), Infinity);
+    const desk = takeDesk(pool, id);
+    const kind = desk?.by.settings.stream.subgroup ?? null;
+    const isReady =
+      desk !== null && desk.line.version === version && reachesBackTo(desk.line, earliest) && !wholeLines;
+    if (isReady && (kind === 'wafer' || desk.line.whole)) found.set(id, desk);
+    else
+      wishes.push({
+        streamId: id,
+        from: wholeLines ? -Infinity : await earliestOf(client, id, own, earliest),
+      });
+  }
+  for (const desk of await loadDesks(actor, client, wishes)) found.set(desk.line.streamId, desk);
+  return found;
+}
+
+/** The earliest position that the wafers touch: their own, or that of a subgroup they join. */
+async function earliestOf(
+  client: PoolClient,
+  streamId: string,
+  facts: readonly Measurement['facts'][],
+  earliest: number,
+): Promise<number> {
+  const keys = [...new Set(facts.flatMap(({ run, lot }) => [run, lot].filter((key) => key !== null)))];
+  if (keys.length === 0) return earliest;
+  const { rows } = await client.query<{ at: Date | null }>(
+    'SELECT min(position_at) AS at FROM subgroup WHERE stream_id = $1 AND key = ANY($2::text[])',
+    [streamId, keys],
+  );
+  return Math.min(earliest, rows[0]?.at?.getTime() ?? Infinity);
+}
+
+async function isKnown(pool: Pool, streamId: string, keys: readonly string[]): Promise<boolean> {
+  const { rowCount } = await pool.query(
+    'SELECT FROM subgroup WHERE stream_id = $1 AND key = ANY($2::text[])',
+    [streamId, keys],
+  );
+  return (rowCount ?? 0) > 0;
+}
+
+function isUniqueViolation(error: unknown): boolean {
+  return error instanceof Error && 'code' in error && error.code === '23505';
+}

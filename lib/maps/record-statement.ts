@@ -1,0 +1,53 @@
+import { columnNames, rowsAsQuery } from '@/lib/database/columnar';
+import { pointsStatement, type JudgedLine } from '@/lib/excursions/write-judgement';
+import type { Origin } from './types';
+import { READING_COLUMNS, WAFER_COLUMNS, type WaferRow } from './wafer-rows';
+
+/** The batch that measurements are recorded under: who sent them, from where. */
+export interface Batch {
+  id: string;
+  source: string;
+  origin: Origin;
+  history: boolean;
+  actor: string;
+}
+
+/**
+ * One statement that writes measurements, their readings, their subgroups and their batch, if every stream still has
+ * the version that was judged; where one has moved on nothing of that stream is written. Answers with the number of
+ * streams written.
+ */
+export function recordStatement(
+  judged: readonly JudgedLine[],
+  rows: readonly WaferRow[],
+  batch: Batch,
+): { text: string; values: unknown[] } {
+  const values: unknown[] = [
+    judged.map(({ line }) => line.streamId),
+    judged.map(({ line }) => line.version),
+    batch.id,
+    batch.source,
+    batch.origin,
+    batch.history,
+    batch.actor,
+    rows.length,
+  ];
+  const guard = 'JOIN moved ON moved.id = given.stream_id';
+  const points = pointsStatement(judged, values, guard);
+  const text = `WITH moved AS (
+      UPDATE stream SET version = stream.version + 1
+      FROM unnest($1::bigint[], $2::bigint[]) AS judged (id, version)
+      WHERE stream.id = judged.id AND stream.version = judged.version RETURNING stream.id
+    ), filed AS (
+      INSERT INTO intake_batch (id, source, origin, history, actor, recorded, finished_at)
+      SELECT $3::bigint, $4::text, $5::text, $6::boolean, $7::text, $8::integer, now() WHERE EXISTS (SELECT FROM moved)
+      ON CONFLICT (id) DO UPDATE SET recorded = intake_batch.recorded + excluded.recorded
+    ), placed AS (${points}), measured AS (
+      INSERT INTO wafer_measurement (${columnNames(WAFER_COLUMNS)})
+      SELECT given.* FROM ${rowsAsQuery(WAFER_COLUMNS, rows, values)} given ${guard}
+    ), kept AS (
+      INSERT INTO wafer_reading (${columnNames(READING_COLUMNS)})
+      SELECT given.* FROM ${rowsAsQuery(READING_COLUMNS, rows, values)} given ${guard}
+    ) SELECT count(*)::integer AS streams FROM moved`;
+  return { text, values };
+}
