@@ -5,7 +5,9 @@ import { register } from 'tsx/esm/api';
 register({ tsconfig: fileURLToPath(new URL('../../tsconfig.json', import.meta.url)) });
 
 const { runCommand } = await import('./main.ts');
-process.exitCode = await runCommand(process.argv.slice(2), {
+const status = await runCommand(process.argv.slice(2), {
   out: (text) => void process.stdout.write(`${text}\n`),
   say: (text) => void process.stderr.write(`${text}\n`),
 });
+/** Next's watchers in development would keep a finished process alive; writes to standard output are done by now. */
+process.exit(status);
