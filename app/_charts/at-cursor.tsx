@@ -21,7 +21,10 @@ export function AtCursor(props: {
       <p className="quiet small">At the cursor</p>
       <p className={styles.figure}>{texts.level}</p>
       <p className="small">
-        <Link href={point.href}>{point.label}</Link> · {texts.at}
+        <Link href={point.href} prefetch={false}>
+          {point.label}
+        </Link>{' '}
+        · {texts.at}
         {point.open && ' · not complete'}
         {point.hollow && !point.open && ' · late or measured again'}
         {!point.judged && !point.open && ' · not judged'}

@@ -41,7 +41,9 @@ export function BoardRow(props: BoardRowProps) {
   return (
     <li className={styles.row}>
       <div className={styles.name}>
-        <Link href={props.href}>{props.name}</Link>
+        <Link href={props.href} prefetch={false}>
+          {props.name}
+        </Link>
         <span className="quiet small">{props.place}</span>
       </div>
       <div className={styles.strip}>
@@ -68,7 +70,9 @@ export function BoardRow(props: BoardRowProps) {
           <span className="quiet">no wafer yet</span>
         ) : (
           <>
-            <Link href={newest.href}>{newest.name}</Link>
+            <Link href={newest.href} prefetch={false}>
+              {newest.name}
+            </Link>
             <span className="quiet"> · {newest.age}</span>
           </>
         )}

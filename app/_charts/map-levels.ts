@@ -9,9 +9,9 @@ export interface MapLevels {
 const STEPS = [1, 2, 2.5, 5, 10];
 
 /**
- * An even scale in round steps over the given values, six to twelve of them; maps shown side by side share
- * one made from all their values. A scale of differences has the same reach on both sides and zero among
- * its edges. Values that are all equal get a scale around them.
+ * An even scale in round steps over the given values, up to twelve of them; maps shown side by side share one
+ * made from all their values. A scale of differences has zero among its edges and reaches no farther on either
+ * side than the values do. Values that are all equal get a scale around them.
  *
  * @throws RangeError when a value is not finite or there is none.
  * @example mapLevels([9.83, 10.21], 'value').edges // 9.8, 9.85 … 10.25
@@ -19,11 +19,11 @@ const STEPS = [1, 2, 2.5, 5, 10];
 export function mapLevels(values: readonly number[], mode: 'value' | 'difference'): MapLevels {
   if (values.length === 0 || !values.every(Number.isFinite))
     throw new RangeError('A scale needs finite values');
-  const reach = Math.max(...values.map(Math.abs));
-  let least = mode === 'difference' ? -reach : Math.min(...values);
-  let most = mode === 'difference' ? reach : Math.max(...values);
-  if (most - least <= 1e-9 * reach || most === least) {
-    const around = reach > 0 ? 0.001 * reach : 1;
+  let least = Math.min(...values, ...(mode === 'difference' ? [0] : []));
+  let most = Math.max(...values, ...(mode === 'difference' ? [0] : []));
+  const size = Math.max(Math.abs(least), Math.abs(most));
+  if (most - least <= Math.max(1e-9 * size, 1e-12)) {
+    const around = size > 1e-9 ? 0.001 * size : 1;
     least -= around;
     most += around;
   }
@@ -37,6 +37,19 @@ export function mapLevels(values: readonly number[], mode: 'value' | 'difference
     Number(((first + i) * step).toFixed(decimals)),
   );
   return { edges, step, decimals };
+}
+
+/**
+ * Where one step of a scale lies on the path of colours, 0…1: values run along it evenly; differences keep their
+ * zero in the middle and equal sizes of either sign equally far from it.
+ */
+export function stepShare(levels: MapLevels, index: number, mode: 'value' | 'difference'): number {
+  const steps = levels.edges.length - 1;
+  const edge = levels.edges[index];
+  if (edge === undefined || index >= steps) throw new RangeError(`There is no step ${index} of ${steps}`);
+  if (mode === 'value') return steps === 1 ? 0.5 : index / (steps - 1);
+  const reach = Math.max(...levels.edges.map(Math.abs)) - levels.step / 2;
+  return Math.max(0, Math.min(1, 0.5 + (0.5 * (edge + levels.step / 2)) / reach));
 }
 
 function decimalsOf(step: number): number {

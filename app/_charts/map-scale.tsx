@@ -1,5 +1,5 @@
 import { mapColour } from './map-colour';
-import type { MapLevels } from './map-levels';
+import { stepShare, type MapLevels } from './map-levels';
 import styles from './wafer-map.module.css';
 
 export interface MapScaleProps {
@@ -21,7 +21,7 @@ export function MapScale({ levels, mode, unit, label, text }: MapScaleProps) {
       {label}, {unit}
       <div className={styles['swatches']}>
         {levels.edges.slice(0, -1).map((edge, i) => (
-          <span key={edge} style={{ background: mapColour(steps === 1 ? 0.5 : i / (steps - 1), mode) }} />
+          <span key={edge} style={{ background: mapColour(stepShare(levels, i, mode), mode) }} />
         ))}
       </div>
       <div className={styles['edges']}>

@@ -25,7 +25,15 @@ export function PointTable(props: {
           rowKey={(point) => point.id}
           {...(props.download && { download: props.download })}
           columns={[
-            { key: 'point', head: 'Point', cell: (point) => <Link href={point.href}>{point.label}</Link> },
+            {
+              key: 'point',
+              head: 'Point',
+              cell: (point) => (
+                <Link href={point.href} prefetch={false}>
+                  {point.label}
+                </Link>
+              ),
+            },
             { key: 'at', head: 'Processed', cell: (point) => point.texts.at },
             { key: 'level', head: 'Level', align: 'right', cell: (point) => point.texts.level },
             {

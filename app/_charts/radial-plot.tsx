@@ -102,12 +102,7 @@ export function RadialPlot(props: RadialPlotProps) {
             y2={y(expected.value)}
             style={{ stroke: 'var(--phys)' }}
           />
-          <text
-            className={styles['expected']}
-            x={W - box.right - 4}
-            y={y(expected.value) - 4}
-            textAnchor="end"
-          >
+          <text className={styles['expected']} x={box.left + 66} y={y(expected.value) - 4}>
             expected
           </text>
         </g>
@@ -127,7 +122,7 @@ export function RadialPlot(props: RadialPlotProps) {
         </g>
       )}
       {x.ticks(5).map((tick) => (
-        <text key={tick} x={x(tick)} y={H - 6} textAnchor="middle">
+        <text key={tick} x={x(tick)} y={H - 6} textAnchor={x(tick) > W - 24 ? 'end' : 'middle'}>
           {tick === 0 ? '0 mm' : tick}
         </text>
       ))}

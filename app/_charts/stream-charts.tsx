@@ -4,15 +4,14 @@ import { useRouter } from 'next/navigation';
 import { type ReactNode, useCallback, useMemo } from 'react';
 import { AtCursor } from './at-cursor';
 import { ChartKey } from './chart-key';
-import { chartMarkShape, completionsOf } from './chart-mark-shape';
+import { chartMarkShape } from './chart-mark-shape';
+import { ChartStack } from './chart-stack';
 import { dayTicks } from './day-ticks';
-import { EventLabels } from './event-labels';
-import { frameX, plotFrame } from './plot-frame';
+import { plotFrame } from './plot-frame';
 import { PointTable } from './point-table';
 import { SpanButtons } from './span-buttons';
 import type { ExpectedSpan, LimitSpan, StreamChartPoint, StreamEvent } from './stream-chart-point';
 import styles from './stream-charts.module.css';
-import { DAYS_HEIGHT, StreamPanel } from './stream-panel';
 import type { DopingTick } from './stream-panel-layers';
 import { streamPanels } from './stream-panels';
 import { useCursor } from './use-cursor';
@@ -52,7 +51,6 @@ const time = (span: { from: string; to: string }) => ({
   from: Date.parse(span.from),
   to: Date.parse(span.to),
 });
-const noTicks: readonly DopingTick[] = [];
 
 /** The charts of a stream on one axis with one cursor, and beside them what stands at the cursor. */
 export function StreamCharts(props: StreamChartsProps) {
@@ -80,6 +78,7 @@ export function StreamCharts(props: StreamChartsProps) {
     () => events.filter(({ index }) => index >= from && index <= to),
     [events, from, to],
   );
+  const seenLimits = limits.filter(({ fromIndex, toIndex }) => toIndex >= from && fromIndex <= to);
   const wordsOf = useCallback(
     (point: StreamChartPoint) => [
       ...(point.outOfSpecification ? ['out of specification'] : []),
@@ -104,7 +103,6 @@ export function StreamCharts(props: StreamChartsProps) {
   });
   const point = cursor.pointAt === null ? undefined : points[cursor.pointAt];
   if (point === undefined) return <p className="quiet">No points in this stretch of time.</p>;
-  const x = frame === null ? null : frameX(frame, point.index);
   const about = Date.parse(point.at);
 
   return (
@@ -122,75 +120,27 @@ export function StreamCharts(props: StreamChartsProps) {
           <b>{point.texts.level}</b> <span className="quiet">{point.label}</span>{' '}
           <span className="call">{wordsOf(point).map((words) => `◆ ${words} `)}</span>
         </p>
-        <div ref={stack} className={styles.stack} aria-busy={span.waiting}>
-          {frame !== null && <EventLabels events={seenEvents} frame={frame} />}
-          {panels.map((panel, at) => {
-            const isLowest = at === panels.length - 1;
-            const latest = points.findLast((one) => completionsOf(one, panel.chart).length > 0);
-            const words =
-              latest && completionsOf(latest, panel.chart).map((one) => completionWords[one] ?? one);
-            return (
-              <figure
-                key={panel.chart}
-                className={styles.panel}
-                aria-label={`${panel.title}, ${panel.unit}: ${props.name}`}
-              >
-                <figcaption>
-                  <b>{panel.title}</b> <span className="unit">{panel.unit}</span>
-                  {latest && (
-                    <span className="call">
-                      ◆ {latest.label}: {words?.join(', ')}
-                    </span>
-                  )}
-                  {at === 0 && hasDoping && <span className={styles.dopingUnit}>{props.dopingUnit}</span>}
-                </figcaption>
-                <div className={styles.plot} style={{ height: panel.height + (isLowest ? DAYS_HEIGHT : 0) }}>
-                  {frame !== null && (
-                    <StreamPanel
-                      chart={panel.chart}
-                      frame={frame}
-                      height={panel.height}
-                      points={points}
-                      domain={panel.domain}
-                      segments={panel.segments}
-                      events={seenEvents}
-                      expected={panel.expected}
-                      dopingTicks={at === 0 ? props.dopingTicks : noTicks}
-                      days={isLowest ? days : null}
-                    />
-                  )}
-                  {x !== null && <div className={styles.cursor} style={{ left: x, height: panel.height }} />}
-                </div>
-              </figure>
-            );
-          })}
-          {cursor.drag !== null && (
-            <div
-              className={styles.drag}
-              style={{
-                left: Math.min(cursor.drag.from, cursor.drag.to),
-                width: Math.abs(cursor.drag.to - cursor.drag.from),
-              }}
-            />
-          )}
-          <div
-            ref={cursor.grip}
-            className={styles.grip}
-            role="slider"
-            tabIndex={0}
-            aria-label={`Cursor along the points of ${props.name}`}
-            aria-valuemin={1}
-            aria-valuemax={points.length}
-            aria-valuenow={(cursor.pointAt ?? 0) + 1}
-            aria-valuetext={[point.label, point.texts.at, point.texts.level, ...wordsOf(point)].join(', ')}
-            {...cursor.handlers}
-          />
-        </div>
+        <ChartStack
+          name={props.name}
+          stack={stack}
+          frame={frame}
+          panels={panels}
+          points={points}
+          point={point}
+          pointWords={wordsOf(point)}
+          events={seenEvents}
+          days={days}
+          dopingTicks={props.dopingTicks}
+          dopingUnit={props.dopingUnit}
+          completionWords={completionWords}
+          cursor={cursor}
+          busy={span.waiting}
+        />
         <ChartKey
           shown={new Set(points.flatMap((one) => panels.map(({ chart }) => chartMarkShape(one, chart))))}
           expected={expected.length > 0}
-          provisional={limits.some(({ state }) => state === 'provisional')}
-          young={limits.some(({ state }) => state === 'young')}
+          provisional={seenLimits.some(({ state }) => state === 'provisional')}
+          young={seenLimits.some(({ state }) => state === 'young')}
         />
         {props.pointsInSpan > points.length && (
           <p className="quiet small">

@@ -4,7 +4,7 @@ import type { SiteStatus } from '@/lib/wafer/measure-wafer';
 import type { Site } from '@/lib/wafer/site';
 import { isolineLabels } from './isoline-labels';
 import { mapColour } from './map-colour';
-import { mapLevels, type MapLevels } from './map-levels';
+import { mapLevels, type MapLevels, stepShare } from './map-levels';
 import { MapScale } from './map-scale';
 import { mapWords } from './map-words';
 import { waferOutline } from './wafer-outline';
@@ -64,7 +64,6 @@ export function WaferMap(props: WaferMapProps) {
   const readingText = (value: number) =>
     (mode === 'difference' && value > 0 ? '+' : '') +
     value.toFixed((levels?.decimals ?? 2) + 1).replace('-', '−');
-  const steps = (levels?.edges.length ?? 2) - 1;
   const inner = levels === null ? [] : levels.edges.slice(1, -1);
   const surface =
     levels === null
@@ -84,7 +83,8 @@ export function WaferMap(props: WaferMapProps) {
           sites.map((s): Place => [s.xMm, s.yMm]),
           radiusMm,
         );
-  const colour = (step: number) => mapColour(steps === 1 ? 0.5 : step / (steps - 1), mode);
+  const colour = (step: number) =>
+    levels === null ? 'none' : mapColour(stepShare(levels, step, mode), mode);
   const taken = {
     bad: status.filter((s) => s !== 'good' && s !== 'excluded').length,
     excluded: status.filter((s) => s === 'excluded').length,

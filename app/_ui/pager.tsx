@@ -4,9 +4,17 @@ import Link from 'next/link';
 export function Pager(props: { label: string; where: string; newer: string | null; older: string | null }) {
   return (
     <nav aria-label={props.label} style={{ display: 'flex', gap: 16, margin: '12px 0', minHeight: 36 }}>
-      {props.newer !== null && <Link href={props.newer}>← newer</Link>}
+      {props.newer !== null && (
+        <Link href={props.newer} prefetch={false}>
+          ← newer
+        </Link>
+      )}
       <span className="quiet">{props.where}</span>
-      {props.older !== null && <Link href={props.older}>older →</Link>}
+      {props.older !== null && (
+        <Link href={props.older} prefetch={false}>
+          older →
+        </Link>
+      )}
     </nav>
   );
 }

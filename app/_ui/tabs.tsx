@@ -10,7 +10,13 @@ export function Tabs(props: {
   return (
     <nav aria-label={props.label} className={styles.tabs}>
       {props.tabs.map((tab) => (
-        <Link key={tab.href} href={tab.href} aria-current={tab.current ? 'page' : undefined} scroll={false}>
+        <Link
+          key={tab.href}
+          href={tab.href}
+          aria-current={tab.current ? 'page' : undefined}
+          scroll={false}
+          prefetch={false}
+        >
           {tab.name}
         </Link>
       ))}
