@@ -23,6 +23,7 @@ export function complementaryErrorFunction(x: number): number {
     return 1 - SERIES_FACTOR * Math.exp(-x * x) * sum;
   }
   let tail = x;
-  for (let k = 120; k >= 1; k--) tail = x + k / 2 / tail;
+  // From 2 upwards 16 + 220/x² terms reach 1e-13; fewer are needed the further out.
+  for (let k = Math.ceil(16 + 220 / (x * x)); k >= 1; k--) tail = x + k / 2 / tail;
   return (SERIES_FACTOR / 2) * (Math.exp(-x * x) / tail);
 }

@@ -1,4 +1,4 @@
-import { isGraded } from './is-graded';
+import { isImplantedOrDiffused } from './is-implanted-or-diffused';
 import { standardUncertaintyPercent } from './standard-uncertainty';
 import type { Target } from './target';
 
@@ -18,6 +18,6 @@ export function expectedUncertaintyPercent(target: Target): number {
   if (target.calibrationFactor !== null && target.calibrationPercent !== null)
     return target.calibrationPercent;
   const standard = standardUncertaintyPercent(target.dopant);
-  if (target.calibrationFactor !== null || !isGraded(target)) return standard;
+  if (target.calibrationFactor !== null || !isImplantedOrDiffused(target)) return standard;
   return Math.hypot(standard, LAYER_BOUND_PERCENT / Math.sqrt(3));
 }

@@ -1,4 +1,5 @@
-import { checkedBackground, type Layer } from './layer';
+import { checkedBackground } from './checked-background';
+import type { Layer } from './layer';
 import { complementaryErrorFunction } from './complementary-error-function';
 import { monotoneRoot } from './monotone-root';
 

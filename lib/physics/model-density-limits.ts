@@ -1,4 +1,4 @@
-import { standardDensityLimits } from './standard-range';
+import { standardDensityLimits } from './standard-density-limits';
 import type { Target } from './target';
 
 /**

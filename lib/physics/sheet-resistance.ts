@@ -1,6 +1,7 @@
 import { adaptiveIntegral } from './adaptive-integral';
 import { junctionDepth } from './junction-depth';
-import { checkedBackground, type Layer } from './layer';
+import { checkedBackground } from './checked-background';
+import type { Layer } from './layer';
 import { layerDensity } from './layer-density';
 import { layerDose } from './layer-dose';
 import { standardResistivity } from './standard-resistivity';
@@ -36,6 +37,6 @@ export function sheetResistance(layer: Layer): LayerFigures {
   const sheetConductance =
     layer.profile === 'box'
       ? conductivity(0) * junctionDepthUm * 1e-4
-      : adaptiveIntegral(conductivity, 0, junctionDepthUm, 1e-9) * 1e-4;
+      : adaptiveIntegral(conductivity, 0, junctionDepthUm, 1e-7) * 1e-4;
   return { sheetResistanceOhmSq: 1 / sheetConductance, junctionDepthUm, dosePerCm2: layerDose(layer) };
 }

@@ -1,6 +1,7 @@
 import type { Dopant } from './dopant';
 import { polynomial } from './polynomial';
-import { standardDensityLimits, standardRange } from './standard-range';
+import { standardDensityLimits } from './standard-density-limits';
+import { standardRange } from './standard-range';
 
 /** 1/q in 1/C as the published fit of phosphorus writes it. */
 const RECIPROCAL_CHARGE = 6.242e18;

@@ -1,4 +1,5 @@
 import { describe, expect, it } from 'vitest';
+import { depletionWidth } from '@/lib/physics/depletion-width';
 import type { Dopant } from '@/lib/physics/dopant';
 import { scheilDensity } from '@/lib/physics/scheil-density';
 import { sheetResistance } from '@/lib/physics/sheet-resistance';
@@ -47,5 +48,16 @@ describe('resistivity along a crystal of 1e15 at its seed', () => {
   ])('falls for %s at g = %s to %s of the seed end', (dopant, fraction, ratio) => {
     const here = standardResistivity(dopant, scheilDensity(dopant, 1e15, fraction));
     expect(here / standardResistivity(dopant, 1e15)).toBeCloseTo(ratio, 4);
+  });
+});
+
+describe('the depletion edge of a junction without bias', () => {
+  it('takes 1.04 µm of a layer of 1e15 on 1e19, a tenth of 10 µm [calc]', () => {
+    expect(depletionWidth(1e15, 1e19)).toBeCloseTo(1.04, 2);
+    expect(() => depletionWidth(1e15, 0)).toThrow(RangeError);
+  });
+
+  it('reaches the same charge on both sides', () => {
+    expect((1e15 * depletionWidth(1e15, 3e16)) / (3e16 * depletionWidth(3e16, 1e15))).toBeCloseTo(1, 12);
   });
 });

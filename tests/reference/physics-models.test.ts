@@ -2,6 +2,7 @@ import { describe, expect, it } from 'vitest';
 import { aroraMobility } from '@/lib/physics/arora-mobility';
 import { conductionResistivity, type MobilityModel } from '@/lib/physics/conduction-resistivity';
 import { intrinsicDensity } from '@/lib/physics/intrinsic-density';
+import { ionizedFraction } from '@/lib/physics/ionized-fraction';
 import { klaassenMobility } from '@/lib/physics/klaassen-mobility';
 import { masettiMobility } from '@/lib/physics/masetti-mobility';
 import { modelUncertaintyPercent } from '@/lib/physics/model-uncertainty';
@@ -81,5 +82,28 @@ describe('the mobility models against the 300 K fits of SP 400-64', () => {
     // Arora, Hauser, Roulston: 88 + 7.40e8·300^−2.33 and 54.3 + 1.36e8·300^−2.23 [calc].
     expect(aroraMobility('electron', 0, 300)).toBeCloseTo(88 + 7.4e8 * 300 ** -2.33, 6);
     expect(aroraMobility('hole', 0, 300)).toBeCloseTo(54.3 + 1.36e8 * 300 ** -2.23, 6);
+  });
+});
+
+describe('the share of ionized dopants at 300 K', () => {
+  // Altermatt, Schenk, Geelhaar, Heiser (2006) [1], values [calc].
+  it.each<['boron' | 'phosphorus', number, number]>([
+    ['boron', 1e16, 0.993],
+    ['boron', 1e17, 0.939],
+    ['boron', 1e18, 0.764],
+    ['boron', 1e19, 0.872],
+    ['phosphorus', 1e16, 0.996],
+    ['phosphorus', 1e17, 0.962],
+    ['phosphorus', 1e18, 0.791],
+    ['phosphorus', 1e19, 0.901],
+  ])('is for %s at %s per cm³ %s', (dopant, density, share) => {
+    // One unit of the last digit: boron at 1e18 comes to 0.7635.
+    expect(Math.abs((ionizedFraction(dopant, density, 300) ?? 0) - share)).toBeLessThan(1e-3);
+  });
+
+  it('is one in lightly doped silicon, and unknown for antimony', () => {
+    expect(ionizedFraction('phosphorus', 1e13, 300)).toBeCloseTo(1, 4);
+    expect(ionizedFraction('antimony', 1e18, 300)).toBeNull();
+    expect(() => ionizedFraction('boron', 0, 300)).toThrow(RangeError);
   });
 });

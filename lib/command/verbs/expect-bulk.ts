@@ -1,6 +1,7 @@
 import { carriers, type Carriers } from '@/lib/physics/carriers';
 import { conductionResistivity, type Doping, type MobilityModel } from '@/lib/physics/conduction-resistivity';
 import { conductionType } from '@/lib/physics/dopant';
+import { ionizedFraction } from '@/lib/physics/ionized-fraction';
 import { modelUncertaintyPercent } from '@/lib/physics/model-uncertainty';
 import { monotoneRoot } from '@/lib/physics/monotone-root';
 import { resistivityAtTemperature } from '@/lib/physics/resistivity-at-temperature';
@@ -92,6 +93,12 @@ function bulkNotes(question: BulkQuestion, densityPerCm3: number, uncertaintyPer
   if (model === 'standard' && (temperatureC < 18 || temperatureC > 28)) {
     notes.push(
       'Outside 18 to 28 °C the value at 23 °C is moved by the temperature ratio of the Arora model.',
+    );
+  }
+  const ionized = question.counter === null ? ionizedFraction(dopant, densityPerCm3, 300) : null;
+  if (model === 'standard' && ionized !== null && ionized < 0.99) {
+    notes.push(
+      `Carriers count every dopant as ionized; at 300 K about ${(100 * ionized).toFixed(0)} % are (Altermatt and others, 2006). The conversion holds that already.`,
     );
   }
   if (question.fraction !== null) {

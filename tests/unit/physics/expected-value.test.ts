@@ -1,12 +1,14 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { densityFromMeasured } from '@/lib/physics/density-from-measured';
-import { expectedValue, targetDensity } from '@/lib/physics/expected-value';
+import { expectedValue } from '@/lib/physics/expected-value';
 import { missingForExpected } from '@/lib/physics/missing-for-expected';
 import { sheetResistance } from '@/lib/physics/sheet-resistance';
 import { standardDensity } from '@/lib/physics/standard-density';
 import { standardResistivity } from '@/lib/physics/standard-resistivity';
 import type { Target } from '@/lib/physics/target';
+import { targetDensity } from '@/lib/physics/target-density';
+import { variesByWafer } from '@/lib/physics/varies-by-wafer';
 
 const boron: Target = {
   quantity: 'resistivity',
@@ -82,6 +84,20 @@ describe('the expected value', () => {
     expect(plain.notes.join(' ')).toMatch(/5 to 20 %/);
   });
 
+  it('says what the junction under an epitaxial layer takes, and where there is none', () => {
+    const epi: Target = {
+      ...boron,
+      quantity: 'sheet_resistance',
+      lengthUm: 10,
+      backgroundDensityPerCm3: 1e19,
+    };
+    // 1e15 on 1e19: 1.04 µm, recomputed from the depletion approximation.
+    expect(expectedValue({ ...epi, backgroundDopant: 'phosphorus' }).notes.join(' ')).toMatch(/1\.04 µm/);
+    expect(expectedValue({ ...epi, backgroundDopant: 'boron' }).notes.join(' ')).toMatch(
+      /measures the background/,
+    );
+  });
+
   it('says where phosphorus stands in for arsenic', () => {
     const notes = expectedValue({ ...boron, dopant: 'arsenic', densityPerCm3: 1e18 }).notes;
     expect(notes.join(' ')).toMatch(/not established/);
@@ -105,6 +121,15 @@ describe('the expected value', () => {
     expect(() =>
       expectedValue({ ...diffused, backgroundDopant: null, backgroundDensityPerCm3: null }),
     ).toThrow(/background/);
+  });
+});
+
+describe('whether wafers of one target differ in what is expected of them', () => {
+  it('is so along a crystal and for layers that bring their thickness, and not else', () => {
+    expect(variesByWafer(boron)).toBe(false);
+    expect(variesByWafer(diffused)).toBe(false);
+    expect(variesByWafer({ ...boron, alongCrystal: true })).toBe(true);
+    expect(variesByWafer({ ...boron, quantity: 'sheet_resistance' })).toBe(true);
   });
 });
 

@@ -2,6 +2,7 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { discFactor, INFINITE_SHEET_FACTOR } from '@/lib/probe/disc-factor';
 import { discPositionFactor } from '@/lib/probe/disc-position-factor';
+import { discTransferResistance } from '@/lib/probe/disc-transfer-resistance';
 import { dualConfiguration } from '@/lib/probe/dual-configuration';
 import { fourPinResistance } from '@/lib/probe/four-pin-resistance';
 import { readingAt23C } from '@/lib/probe/reading-at-23c';
@@ -23,17 +24,22 @@ describe('the geometry of a probe', () => {
     );
   });
 
+  it('gives the same reading with current and voltage pins exchanged (reciprocity)', () => {
+    const [a, b, c, d] = [
+      { xMm: 3, yMm: 1 },
+      { xMm: -20, yMm: 5 },
+      { xMm: 40, yMm: -12 },
+      { xMm: 0, yMm: 33 },
+    ];
+    const one = discTransferResistance({ currentIn: a, currentOut: b, voltagePlus: c, voltageMinus: d }, 50);
+    const two = discTransferResistance({ currentIn: c, currentOut: d, voltagePlus: a, voltageMinus: b }, 50);
+    expect(two).toBeCloseTo(one, 12);
+  });
+
   it('turns with the wafer: site and direction together change nothing', () => {
     const here = discPositionFactor({ xMm: 40, yMm: 0 }, 0.4, 1.588, 50);
     const turned = discPositionFactor({ xMm: 0, yMm: 40 }, 0.4 + Math.PI / 2, 1.588, 50);
     expect(turned).toBeCloseTo(here, 10);
-  });
-
-  it('agrees between single and dual configuration on a disc along a diameter', () => {
-    // Resistances of a 1 Ω/□ disc by the same images, pins along x.
-    const ra = 1 / discPositionFactor({ xMm: 0, yMm: 0 }, 0, 1, 5);
-    const rb = Math.log((Math.exp(2 * Math.PI * ra) - 1) ** 1) / (2 * Math.PI);
-    expect(dualConfiguration(ra * 25, rb * 25)).toBeCloseTo(25, 8);
   });
 
   it('thins to a factor of one and falls as 2·ln 2 over the ratio on a thick block', () => {
@@ -50,6 +56,17 @@ describe('the geometry of a probe', () => {
   it('refuses geometry that cannot be', () => {
     expect(() => discFactor(2.9, 1)).toThrow(RangeError);
     expect(() => discPositionFactor({ xMm: 49, yMm: 0 }, 0, 1, 50)).toThrow(/off the disc/);
+    const [here, there] = [
+      { xMm: 0, yMm: 0 },
+      { xMm: 1, yMm: 0 },
+    ];
+    const shorted = {
+      currentIn: here,
+      currentOut: there,
+      voltagePlus: here,
+      voltageMinus: { xMm: 2, yMm: 0 },
+    };
+    expect(() => discTransferResistance(shorted, 50)).toThrow(/one place/);
     expect(() => thicknessFactor(0)).toThrow(RangeError);
     expect(() => spacingFactor(1, 2)).toThrow(RangeError);
     expect(() => dualConfiguration(1, 1)).toThrow(RangeError);
