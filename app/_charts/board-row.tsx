@@ -63,7 +63,9 @@ export function BoardRow(props: BoardRowProps) {
       </div>
       <div className={styles.gauge}>
         <EvennessGauge {...evenness} />
-        <span className={evenness.call ? 'call' : undefined}>{evenness.text}</span>
+        <span className={evenness.call ? 'call' : undefined}>
+          {evenness.text} <span className={`${styles.cellName} unit small`}>evenness</span>
+        </span>
       </div>
       <div className={`${styles.newest} small`}>
         {newest === null ? (
