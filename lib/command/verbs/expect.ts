@@ -28,7 +28,11 @@ What physics expects a probe to read.
   --background-*   what lies under the layer; it must be of the other type
   --json           one JSON object on standard output`;
 
-const figure = (value: number): string => Number(value.toPrecision(5)).toString();
+/** Five digits; large figures as 1.34e15, which can be typed back. */
+function figure(value: number): string {
+  const rounded = Number(value.toPrecision(5));
+  return Math.abs(rounded) >= 1e6 ? rounded.toExponential().replace('e+', 'e') : rounded.toString();
+}
 
 function lines(answer: ExpectAnswer | LayerAnswer): string[] {
   const layer =

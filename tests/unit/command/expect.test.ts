@@ -94,7 +94,7 @@ describe('expect', () => {
     const { status, out } = await run('--dopant arsenic --density 1e20');
     expect(status).toBe(0);
     expect(out).toContain('0.00096353 Ω·cm at 23 °C');
-    expect(out).toContain('n-type');
+    expect(out).toContain('1e20 per cm³, n-type');
   });
 
   it.each([
