@@ -1,8 +1,10 @@
 #!/usr/bin/env node
 import { fileURLToPath } from 'node:url';
 import { register } from 'tsx/esm/api';
+import { generatePrismaClient } from '../database/generate.js';
 
 register({ tsconfig: fileURLToPath(new URL('../../tsconfig.json', import.meta.url)) });
+generatePrismaClient();
 
 const { runCommand } = await import('./main.ts');
 const status = await runCommand(process.argv.slice(2), {

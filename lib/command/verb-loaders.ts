@@ -4,5 +4,8 @@ import type { Verb } from './verb';
 export const verbLoaders: ReadonlyMap<string, () => Promise<Verb>> = new Map([
   ['serve', async () => (await import('./verbs/serve')).serve],
   ['build', async () => (await import('./verbs/build')).build],
+  ['intake', async () => (await import('./verbs/intake')).intake],
+  ['map', async () => (await import('./verbs/map')).map],
+  ['expect', async () => (await import('./verbs/expect')).expect],
   ['study', async () => (await import('./verbs/study')).study],
 ]);

@@ -9,8 +9,6 @@ export const build: Verb = {
   usage: 'evenohm build',
   async run(args, output) {
     if (args.length > 0) throw new UsageError(`“${args[0]}” is not understood.`);
-    const { generatePrismaClient } = await import('@/lib/database/generate.js');
-    await generatePrismaClient();
     if (isBuilt()) output.say('The build is up to date.');
     else await withProgress(output.say, 'Building the app', () => buildApp(stopSignal()));
     return 0;

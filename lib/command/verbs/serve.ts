@@ -40,8 +40,6 @@ async function serveUntilStopped(
   const stop = stopSignal();
   const closers: (() => Promise<void> | void)[] = [];
   try {
-    const { generatePrismaClient } = await import('@/lib/database/generate.js');
-    generatePrismaClient();
     const { AlreadyServing, openDatabase } = await import('@/lib/database/connection');
     const opening = await withProgress(say, 'Opening the database', () =>
       openDatabase({ say, serving: true }).catch((error: unknown) => {
@@ -61,6 +59,8 @@ async function serveUntilStopped(
       writeServingNote(environment.dataFolder, { pid: process.pid, address: web.address });
       closers.push(() => removeServingNote(environment.dataFolder));
     }
+    if (environment.demo) await seedFirstStart(say);
+    stop.throwIfAborted();
     if (!dev && !isBuilt()) await withProgress(say, 'Building the app', () => buildApp(stop));
     stop.throwIfAborted();
     await web.open();
@@ -74,6 +74,14 @@ async function serveUntilStopped(
   }
   say('Stopped.');
   return 0;
+}
+
+/** Puts the demonstration line into a database that holds no stream yet. */
+async function seedFirstStart(say: (text: string) => void): Promise<void> {
+  const { isEmptyLine, seedDemo } = await import('@/seed/seed-demo');
+  if (await isEmptyLine()) {
+    await withProgress(say, 'Filling in the demonstration line', () => seedDemo(say));
+  }
 }
 
 /** Until there are accounts, whoever reaches the server may do everything: so nobody else may reach it. */
