@@ -1,6 +1,5 @@
 import type { DemoStream } from './demo-stream';
 import type { DemoWafer } from './demo-wafer';
-import { IMPLANT_STREAMS } from './implant-streams';
 import { makeWafer } from './make-wafer';
 import { mishapOnWafer } from './mishap-on-wafer';
 import { seededRandom } from './seeded-random';
@@ -8,16 +7,6 @@ import { valueAt } from './value-at';
 import { waferNames } from './wafer-names';
 
 const HOUR_MS = 3_600_000;
-
-/** `count` streams of 49 sites for measuring speed, alike but for their names. */
-export function benchStreams(count: number): DemoStream[] {
-  const [pattern] = IMPLANT_STREAMS;
-  if (pattern === undefined) throw new RangeError('There is no implant stream to measure with.');
-  return Array.from({ length: count }, (_, i) => {
-    const number = String(i + 1).padStart(3, '0');
-    return { ...pattern, slug: `bench-${number}`, name: `Bench ${number}`, quiet: true };
-  });
-}
 
 /**
  * `wafers` wafers spread evenly over `streams`, each stream one an hour up to `endAt`, in order of time. Every stream

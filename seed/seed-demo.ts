@@ -8,6 +8,7 @@ import { createSitePlan, createStream, recordStreamEvent } from '@/lib/streams/m
 import type { DemoStream } from './demo-stream';
 import type { DemoWafer } from './demo-wafer';
 import { lineEvents } from './events';
+import { lineDay } from './line-people';
 import { PLANT } from './plant';
 import { simulateStream } from './simulate';
 
@@ -23,37 +24,42 @@ export async function isEmptyLine(): Promise<boolean> {
  */
 export async function seedDemo(say: (text: string) => void, endAt = new Date()): Promise<number> {
   const actor = programActor();
-  const pool = getPool();
   const idOf = await createDemoStreams(actor, PLANT.streams);
   for (const event of lineEvents(PLANT.days, endAt)) {
     await recordStreamEvent(actor, idOf.get(event.streamSlug) ?? '', event);
   }
-  const [batchId = ''] = await takeIds(pool, 'intake_batch', 1);
-  const batch = {
-    id: batchId,
-    source: PLANT.name,
-    origin: 'demonstration' as const,
-    history: false,
-    actor: actor.name,
-  };
   const measurements: Measurement[] = [];
   for (const stream of PLANT.streams) {
-    const options = { days: PLANT.days, endAt, seed: PLANT.seed };
-    for (const wafer of simulateStream(stream, options)) {
+    for (const wafer of simulateStream(stream, { days: PLANT.days, endAt, seed: PLANT.seed })) {
       measurements.push(demoMeasurement(idOf.get(stream.slug) ?? '', stream, wafer));
     }
   }
   measurements.sort((a, b) => a.facts.measuredAt.getTime() - b.facts.measuredAt.getTime());
-  for (let start = 0; start < measurements.length; start += WAFERS_AT_ONCE) {
-    await recordMeasurements(actor, batch, measurements.slice(start, start + WAFERS_AT_ONCE));
-    say(
-      `Demonstration line: ${Math.min(start + WAFERS_AT_ONCE, measurements.length)} of ${measurements.length} wafers.`,
-    );
+  const startMs = endAt.getTime() - PLANT.days * DAY_MS;
+  const onsets = new Map(
+    PLANT.mishaps.map((mishap) => [
+      mishap.streamSlug,
+      { mishap, onset: new Date(startMs + mishap.onsetDay * DAY_MS) },
+    ]),
+  );
+  const batches = await takeIds(getPool(), 'intake_batch', PLANT.days);
+  let done = 0;
+  for (let day = 0; day < PLANT.days; day += 1) {
+    const evening = new Date(startMs + (day + 1) * DAY_MS);
+    const rest = measurements.slice(done);
+    const next = rest.findIndex(({ facts }) => facts.measuredAt > evening);
+    const ofDay = next === -1 ? rest : rest.slice(0, next);
+    const batch = { id: batches[day] ?? '', source: `${PLANT.name}, day ${day + 1}`, at: evening, ...SENT };
+    await recordMeasurements(actor, batch, ofDay);
+    await lineDay(actor, evening, onsets);
+    done += ofDay.length;
+    if (day % 10 === 9) say(`Demonstration line: day ${day + 1} of ${PLANT.days}, ${done} wafers.`);
   }
-  return measurements.length;
+  return done;
 }
 
-const WAFERS_AT_ONCE = 500;
+const DAY_MS = 86_400_000;
+const SENT = { origin: 'demonstration', history: false, actor: 'Evenohm' } as const;
 
 /** Creates streams with their site plans; streams that share a plan's name share the plan. Returns ids by name. */
 export async function createDemoStreams(

@@ -11,7 +11,7 @@ import { standardNotes } from '@/lib/physics/standard-notes';
 import { standardResistivity } from '@/lib/physics/standard-resistivity';
 import { standardUncertaintyPercent } from '@/lib/physics/standard-uncertainty';
 import { resistivityAt23C } from '@/lib/physics/temperature-coefficient';
-import type { BulkQuestion } from './expect-flags';
+import type { BulkQuestion } from './expect-question';
 
 /** The answer of `expect`, as `--json` prints it. */
 export interface ExpectAnswer {

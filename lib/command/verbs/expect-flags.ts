@@ -1,24 +1,7 @@
 import { parseArgs } from 'node:util';
 import { decimalNumber } from '@/lib/command/decimal-number';
 import { UsageError } from '@/lib/command/verb';
-import type { MobilityModel } from '@/lib/physics/conduction-resistivity';
-import { conductionType, DOPANTS, type Dopant } from '@/lib/physics/dopant';
-import type { Layer } from '@/lib/physics/layer';
-
-/** A question about silicon of one doping, as the flags ask it. */
-export interface BulkQuestion {
-  dopant: Dopant;
-  densityPerCm3: number | null;
-  resistivityOhmCm: number | null;
-  inverse: 'numeric' | 'direct';
-  temperatureC: number;
-  model: 'standard' | MobilityModel;
-  counter: { dopant: Dopant; densityPerCm3: number } | null;
-  fraction: number | null;
-}
-
-/** What the flags of `expect` ask. */
-export type ExpectQuestion = { json: boolean } & ({ bulk: BulkQuestion } | { layer: Layer });
+import { DOPANTS, type Dopant } from '@/lib/physics/dopant';
 
 const options = {
   dopant: { type: 'string' },
@@ -38,11 +21,13 @@ const options = {
   json: { type: 'boolean' },
 } as const;
 
-type Flags = { [name in Exclude<keyof typeof options, 'json'>]?: string | undefined } & {
+/** The flags of `expect` as typed. */
+export type Flags = { [name in Exclude<keyof typeof options, 'json'>]?: string | undefined } & {
   json?: boolean | undefined;
 };
 
-function parsed(args: string[]): Flags {
+/** Reads the flags; throws `UsageError` for one that does not exist. */
+export function expectFlags(args: string[]): Flags {
   try {
     return parseArgs({ args, options, allowPositionals: false }).values;
   } catch (error) {
@@ -50,7 +35,8 @@ function parsed(args: string[]): Flags {
   }
 }
 
-function word<W extends string>(flags: Flags, name: keyof Flags, words: readonly W[]): W | null {
+/** One word of a list, or null when the flag is absent. */
+export function word<W extends string>(flags: Flags, name: keyof Flags, words: readonly W[]): W | null {
   const given = flags[name];
   if (given === undefined) return null;
   const found = words.find((w) => w === given);
@@ -58,7 +44,8 @@ function word<W extends string>(flags: Flags, name: keyof Flags, words: readonly
   return found;
 }
 
-function number(flags: Flags, name: Exclude<keyof Flags, 'json'>): number | null {
+/** A number, or null when the flag is absent. */
+export function number(flags: Flags, name: Exclude<keyof Flags, 'json'>): number | null {
   const given = flags[name];
   if (given === undefined) return null;
   const value = decimalNumber(given);
@@ -66,7 +53,8 @@ function number(flags: Flags, name: Exclude<keyof Flags, 'json'>): number | null
   return value;
 }
 
-function pair(
+/** A dopant and its density, which go together, or null when both flags are absent. */
+export function pair(
   flags: Flags,
   name: 'counter' | 'background',
 ): { dopant: Dopant; densityPerCm3: number } | null {
@@ -79,88 +67,8 @@ function pair(
   return { dopant, densityPerCm3 };
 }
 
-function refuse(flags: Flags, names: readonly (keyof Flags)[], why: string): void {
+/** Throws `UsageError` for the first of these flags that is there. */
+export function refuse(flags: Flags, names: readonly (keyof Flags)[], why: string): void {
   const given = names.find((name) => flags[name] !== undefined);
   if (given !== undefined) throw new UsageError(`--${given} ${why}`);
-}
-
-function layerQuestion(flags: Flags, dopant: Dopant, profile: Layer['profile']): Layer {
-  refuse(
-    flags,
-    ['density', 'resistivity', 'inverse', 'temperature-c', 'counter-dopant', 'counter-density', 'fraction'],
-    'does not go with --profile: a layer is given by --peak-density and --length-um, at 23 °C',
-  );
-  if ((word(flags, 'model', ['standard', 'masetti', 'arora', 'klaassen']) ?? 'standard') !== 'standard') {
-    throw new UsageError('a layer is computed with --model standard only');
-  }
-  const peakDensityPerCm3 = number(flags, 'peak-density');
-  const lengthUm = number(flags, 'length-um');
-  if (peakDensityPerCm3 === null || lengthUm === null) {
-    throw new UsageError('a layer needs --peak-density and --length-um');
-  }
-  const background = pair(flags, 'background');
-  if (background === null && profile !== 'box') {
-    throw new UsageError(`a ${profile} layer needs --background-dopant and --background-density`);
-  }
-  return {
-    profile,
-    dopant,
-    peakDensityPerCm3,
-    lengthUm,
-    backgroundDopant: background?.dopant ?? null,
-    backgroundDensityPerCm3: background?.densityPerCm3 ?? null,
-  };
-}
-
-function bulkQuestion(flags: Flags, dopant: Dopant): BulkQuestion {
-  refuse(
-    flags,
-    ['peak-density', 'length-um', 'background-dopant', 'background-density'],
-    'goes with --profile box, gaussian or erfc',
-  );
-  const densityPerCm3 = number(flags, 'density');
-  const resistivityOhmCm = number(flags, 'resistivity');
-  if ((densityPerCm3 === null) === (resistivityOhmCm === null)) {
-    throw new UsageError('give --density or --resistivity, one of the two');
-  }
-  const counter = pair(flags, 'counter');
-  if (counter !== null && conductionType(counter.dopant) === conductionType(dopant)) {
-    throw new UsageError(
-      `--counter-dopant ${counter.dopant} does not counter ${dopant}: both give the same type`,
-    );
-  }
-  const asked = word(flags, 'model', ['standard', 'masetti', 'arora', 'klaassen']);
-  if (asked === 'standard' && counter !== null) {
-    throw new UsageError(
-      '--model standard knows one dopant; with a counter dopant choose masetti, arora or klaassen',
-    );
-  }
-  const model = asked ?? (counter === null ? 'standard' : 'masetti');
-  const inverse = word(flags, 'inverse', ['numeric', 'direct']);
-  if (inverse !== null && resistivityOhmCm === null)
-    throw new UsageError('--inverse goes with --resistivity');
-  if (inverse === 'direct' && model !== 'standard')
-    throw new UsageError('--inverse direct is a fit of the standard');
-  return {
-    dopant,
-    densityPerCm3,
-    resistivityOhmCm,
-    inverse: inverse ?? 'numeric',
-    temperatureC: number(flags, 'temperature-c') ?? 23,
-    model,
-    counter,
-    fraction: number(flags, 'fraction'),
-  };
-}
-
-/** Reads the flags of `expect`; throws `UsageError` for what does not go together. */
-export function expectQuestion(args: string[]): ExpectQuestion {
-  const flags = parsed(args);
-  const dopant = word(flags, 'dopant', DOPANTS);
-  if (dopant === null) throw new UsageError(`--dopant is needed: ${DOPANTS.join(', ')}`);
-  const profile = word(flags, 'profile', ['box', 'gaussian', 'erfc']);
-  const json = flags.json === true;
-  return profile === null
-    ? { json, bulk: bulkQuestion(flags, dopant) }
-    : { json, layer: layerQuestion(flags, dopant, profile) };
 }

@@ -1,6 +1,6 @@
 import type { Verb } from '@/lib/command/verb';
 import { expectBulk, type ExpectAnswer } from './expect-bulk';
-import { expectQuestion } from './expect-flags';
+import { expectQuestion } from './expect-question';
 import { expectLayer, type LayerAnswer } from './expect-layer';
 
 const USAGE = `evenohm expect --dopant boron|phosphorus|arsenic|antimony

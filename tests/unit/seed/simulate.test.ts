@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { expectedValue } from '@/lib/physics/expected-value';
-import { benchStreams, benchWafers } from '@/seed/bench-wafers';
+import { benchStreams } from '@/seed/bench-streams';
+import { benchWafers } from '@/seed/bench-wafers';
 import type { DemoStream } from '@/seed/demo-stream';
 import type { DemoWafer } from '@/seed/demo-wafer';
 import { diffusionLengthPercentPerC } from '@/seed/diffusion-length-percent-per-c';
