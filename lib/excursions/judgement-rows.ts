@@ -2,7 +2,12 @@ import { arrayLiteral, type Column } from '@/lib/database/columnar';
 import type { LineExcursion, LineLimits, LineSignal } from './line';
 
 /** How the first limits of a stream, proposed by its first baseline, are written. */
-export const LIMIT_COLUMNS: readonly Column<{ streamId: string; limits: LineLimits; author: string }>[] = [
+export const LIMIT_COLUMNS: readonly Column<{
+  streamId: string;
+  limits: LineLimits;
+  author: string;
+  at: Date;
+}>[] = [
   { name: 'stream_id', type: 'bigint', value: (row) => row.streamId },
   { name: 'id', type: 'bigint', value: (row) => row.limits.id },
   { name: 'revision', type: 'integer', value: (row) => row.limits.revision },
@@ -30,6 +35,7 @@ export const LIMIT_COLUMNS: readonly Column<{ streamId: string; limits: LineLimi
   { name: 'between_upper', type: 'float8', value: (row) => row.limits.limits.between?.upper ?? null },
   { name: 'between_wafers', type: 'integer', value: (row) => row.limits.limits.between?.wafers ?? null },
   { name: 'author', type: 'text', value: (row) => row.author },
+  { name: 'drafted_at', type: 'timestamptz', value: (row) => row.at.toISOString() },
   {
     name: 'reason',
     type: 'text',
@@ -38,32 +44,36 @@ export const LIMIT_COLUMNS: readonly Column<{ streamId: string; limits: LineLimi
 ];
 
 /** How a case that a signal opened or joined is written. */
-export const EXCURSION_COLUMNS: readonly Column<{ streamId: string; excursion: LineExcursion }>[] = [
-  { name: 'stream_id', type: 'bigint', value: (row) => row.streamId },
-  { name: 'id', type: 'bigint', value: (row) => row.excursion.id },
-  { name: 'chart', type: 'text', value: (row) => row.excursion.chart },
-  { name: 'side', type: 'text', value: (row) => row.excursion.side },
-  { name: 'family', type: 'text', value: (row) => row.excursion.family },
-  { name: 'first_subgroup_id', type: 'bigint', value: (row) => row.excursion.firstId },
-  { name: 'last_subgroup_id', type: 'bigint', value: (row) => row.excursion.lastId },
-];
+export const EXCURSION_COLUMNS: readonly Column<{ streamId: string; excursion: LineExcursion; at: Date }>[] =
+  [
+    { name: 'stream_id', type: 'bigint', value: (row) => row.streamId },
+    { name: 'id', type: 'bigint', value: (row) => row.excursion.id },
+    { name: 'chart', type: 'text', value: (row) => row.excursion.chart },
+    { name: 'side', type: 'text', value: (row) => row.excursion.side },
+    { name: 'family', type: 'text', value: (row) => row.excursion.family },
+    { name: 'first_subgroup_id', type: 'bigint', value: (row) => row.excursion.firstId },
+    { name: 'last_subgroup_id', type: 'bigint', value: (row) => row.excursion.lastId },
+    { name: 'opened_at', type: 'timestamptz', value: (row) => row.at.toISOString() },
+  ];
 
 type EntryRow = {
   streamId: string;
   excursion: LineExcursion;
   entry: LineExcursion['entries'][number];
   author: string;
+  at: Date;
 };
 
 export const ENTRY_COLUMNS: readonly Column<EntryRow>[] = [
   { name: 'stream_id', type: 'bigint', value: (row) => row.streamId },
   { name: 'excursion_id', type: 'bigint', value: (row) => row.excursion.id },
+  { name: 'at', type: 'timestamptz', value: (row) => row.at.toISOString() },
   { name: 'actor', type: 'text', value: (row) => row.author },
   { name: 'action', type: 'text', value: (row) => row.entry.action },
   { name: 'note', type: 'text', value: (row) => row.entry.note },
 ];
 
-export const SIGNAL_COLUMNS: readonly Column<{ streamId: string; signal: LineSignal }>[] = [
+export const SIGNAL_COLUMNS: readonly Column<{ streamId: string; signal: LineSignal; at: Date }>[] = [
   { name: 'stream_id', type: 'bigint', value: (row) => row.streamId },
   { name: 'id', type: 'bigint', value: (row) => row.signal.id },
   { name: 'chart', type: 'text', value: (row) => row.signal.chart },
@@ -75,10 +85,11 @@ export const SIGNAL_COLUMNS: readonly Column<{ streamId: string; signal: LineSig
   { name: 'completions', type: 'integer', value: (row) => row.signal.completions },
   { name: 'limit_revision_id', type: 'bigint', value: (row) => row.signal.limits?.id ?? null },
   { name: 'excursion_id', type: 'bigint', value: (row) => row.signal.excursion?.id ?? null },
+  { name: 'raised_at', type: 'timestamptz', value: (row) => row.at.toISOString() },
   {
     name: 'withdrawn_at',
     type: 'timestamptz',
-    value: (row) => (row.signal.withdrawn === null ? null : new Date().toISOString()),
+    value: (row) => (row.signal.withdrawn === null ? null : row.at.toISOString()),
   },
   { name: 'withdrawn_reason', type: 'text', value: (row) => row.signal.withdrawn },
 ];

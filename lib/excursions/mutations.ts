@@ -37,7 +37,7 @@ export async function judgeAgain(
   await withIds(getPool(), judged);
   const parameters: unknown[] = [];
   if (change.points.length > 0) await client.query(pointsStatement(judged, parameters), parameters);
-  await writeFindings(client, judged, actor.name);
+  await writeFindings(client, judged, actor.name, new Date());
 }
 
 export type ExcursionStep =

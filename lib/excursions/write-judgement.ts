@@ -40,23 +40,27 @@ export function pointsStatement(judged: readonly JudgedLine[], parameters: unkno
       .join(', ')}`;
 }
 
-/** Writes what judging found beyond its points: first limits, cases and their log, signals. Within a transaction. */
+/**
+ * Writes what judging found beyond its points: first limits, cases and their log, signals. Within a transaction; `at`
+ * is when it was found.
+ */
 export async function writeFindings(
   client: ClientBase,
   judged: readonly JudgedLine[],
   author: string,
+  at: Date,
 ): Promise<void> {
   const limits = judged.flatMap(({ line, change }) =>
-    change.limits === null ? [] : [{ streamId: line.streamId, limits: change.limits, author }],
+    change.limits === null ? [] : [{ streamId: line.streamId, limits: change.limits, author, at }],
   );
   const excursions = judged.flatMap(({ line, change }) =>
-    change.excursions.map((excursion) => ({ streamId: line.streamId, excursion })),
+    change.excursions.map((excursion) => ({ streamId: line.streamId, excursion, at })),
   );
   const entries = excursions.flatMap(({ streamId, excursion }) =>
-    excursion.entries.map((entry) => ({ streamId, excursion, entry, author })),
+    excursion.entries.map((entry) => ({ streamId, excursion, entry, author, at })),
   );
   const signals = judged.flatMap(({ line, change }) =>
-    change.signals.map((signal) => ({ streamId: line.streamId, signal })),
+    change.signals.map((signal) => ({ streamId: line.streamId, signal, at })),
   );
   await insert(client, 'limit_revision', LIMIT_COLUMNS, limits, '');
   await insert(
@@ -82,7 +86,7 @@ export async function writeFindings(
       .map((name) => `${name} = excluded.${name}`)
       .join(
         ', ',
-      )}, withdrawn_at = CASE WHEN excluded.withdrawn_reason IS NULL THEN NULL ELSE coalesce(signal.withdrawn_at, now()) END`,
+      )}, withdrawn_at = CASE WHEN excluded.withdrawn_reason IS NULL THEN NULL ELSE coalesce(signal.withdrawn_at, excluded.withdrawn_at) END`,
   );
   for (const { excursion } of excursions) excursion.entries = [];
 }

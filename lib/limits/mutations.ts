@@ -163,7 +163,7 @@ async function insertLimits(
     column.name in own ? { ...column, value: () => own[column.name as keyof typeof own] } : column,
   );
   const parameters: unknown[] = [];
-  const given = rowsAsQuery(columns, [{ streamId, limits: line, author: actor.name }], parameters);
+  const given = rowsAsQuery(columns, [{ streamId, limits: line, author: actor.name, at: new Date() }], parameters);
   await client.query(
     `INSERT INTO limit_revision (${columnNames(columns)}) SELECT given.* FROM ${given} given`,
     parameters,

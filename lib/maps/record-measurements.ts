@@ -121,7 +121,7 @@ async function recordedTogether(
       const { rows: answer } = await client.query<{ streams: number }>({ name: 'record', text, values });
       if (answer[0]?.streams !== judged.length)
         throw new Error('A stream that was held moved on all the same.');
-      await writeFindings(client, judged, actor.name);
+      await writeFindings(client, judged, actor.name, batch.at ?? new Date());
     }
     await client.query('COMMIT');
     for (const desk of taken) putDeskBack(pool, desk);
@@ -163,6 +163,7 @@ function worked(
       measurement,
       hash,
       history: batch.history,
+      recordedAt: batch.at ?? new Date(),
       recordedBy: actor.name,
       screening: stream.screening,
       measured: measured[i] as WaferRow['measured'],

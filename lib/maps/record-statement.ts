@@ -10,6 +10,8 @@ export interface Batch {
   origin: Origin;
   history: boolean;
   actor: string;
+  /** When it was recorded, where that is not now: the demonstration line has a past. */
+  at?: Date;
 }
 
 /**

@@ -12,6 +12,7 @@ export interface WaferRow {
   measurement: Measurement;
   hash: string;
   history: boolean;
+  recordedAt: Date;
   recordedBy: string;
   screening: string;
   measured: MeasuredWafer;
@@ -162,6 +163,7 @@ export const WAFER_COLUMNS: readonly Column<WaferRow>[] = [
   fact('note', 'note', 'text'),
   { name: 'content_hash', type: 'text', value: (row) => row.hash },
   { name: 'history', type: 'boolean', value: (row) => row.history },
+  { name: 'recorded_at', type: 'timestamptz', value: (row) => row.recordedAt.toISOString() },
   { name: 'recorded_by', type: 'text', value: (row) => row.recordedBy },
   { name: 'sites', type: 'integer', value: (row) => row.measured.measure.sites },
   ...MEASURED_COLUMNS,

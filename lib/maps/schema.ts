@@ -1,0 +1,48 @@
+import { z } from 'zod';
+import { siteInstant } from '@/lib/site-time';
+import { WAFER_COLUMNS, type WaferColumn } from './map-columns';
+import type { RawMap } from './raw-maps';
+import { readFacts } from './read-facts';
+
+/** What a person says of a file's wafers where its columns say nothing: as typed, as read, and what is wrong with it. */
+export interface GivenWords {
+  typed: Partial<Record<WaferColumn, string>>;
+  words: RawMap['words'];
+  errors: Partial<Record<WaferColumn, string>>;
+}
+
+const typedWord = z.preprocess(
+  (value) => (Array.isArray(value) ? value[0] : value),
+  z
+    .string()
+    .transform((text) => text.trim().slice(0, 300))
+    .optional(),
+);
+const typedWords = z.object(Object.fromEntries(WAFER_COLUMNS.map((column) => [column, typedWord])));
+
+/**
+ * Reads what a form or an address says of the wafers. Times are the site's wall clock, as a time field sends them, or
+ * carry an offset of their own.
+ */
+export function givenWords(source: Record<string, unknown>, timeZone: string): GivenWords {
+  const parsed = typedWords.parse(source) as Partial<Record<WaferColumn, string | undefined>>;
+  const typed: GivenWords['typed'] = {};
+  const words: RawMap['words'] = {};
+  for (const column of WAFER_COLUMNS) {
+    const text = parsed[column];
+    if (text === undefined || text === '') continue;
+    typed[column] = text;
+    const isTime = column === 'measured_at' || column === 'processed_at';
+    words[column] = (isTime ? siteInstant(text, timeZone)?.toISOString() : undefined) ?? text;
+  }
+  const errors: GivenWords['errors'] = {};
+  for (const { column, reason } of readFacts({}, words).faults) {
+    if (typed[column] !== undefined) errors[column] = reason;
+  }
+  return { typed, words, errors };
+}
+
+/** The same words as an address carries them. */
+export function wordsQuery(typed: GivenWords['typed']): string {
+  return new URLSearchParams(typed as Record<string, string>).toString();
+}
