@@ -1,0 +1,36 @@
+import { expect, test } from '@playwright/test';
+
+test.describe('the frame around every page', () => {
+  for (const address of ['/', '/no-such-page']) {
+    test(`runs on ${address} only scripts that carry the nonce of the response`, async ({ page }) => {
+      const refused: string[] = [];
+      page.on('console', (message) => {
+        if (message.text().includes('Content Security Policy')) refused.push(message.text());
+      });
+      const response = await page.goto(address);
+      const policy = response?.headers()['content-security-policy'] ?? '';
+      const nonce = /'nonce-([^']+)'/.exec(policy)?.[1] ?? '';
+      expect(nonce.length).toBeGreaterThan(20);
+      const nonces = await page
+        .locator('script')
+        .evaluateAll((scripts) => scripts.map((script) => script.nonce));
+      expect(nonces.length).toBeGreaterThan(0);
+      expect(new Set(nonces)).toEqual(new Set([nonce]));
+      expect(refused).toEqual([]);
+    });
+  }
+
+  test('takes a fresh nonce for every response', async ({ request }) => {
+    const policies = await Promise.all(
+      [1, 2].map(async () => (await request.get('/')).headers()['content-security-policy']),
+    );
+    expect(policies[0]).not.toBe(policies[1]);
+  });
+
+  test('refuses a foreign name and a foreign page that posts', async ({ request }) => {
+    const rebound = await request.get('/', { headers: { host: 'rebound.example' } });
+    expect(rebound.status()).toBe(421);
+    const forged = await request.post('/', { headers: { origin: 'http://elsewhere.example' } });
+    expect(forged.status()).toBe(403);
+  });
+});
