@@ -1,7 +1,7 @@
 import { featureDescription } from './feature-description';
 import { partOfPlan, type PlanGeometry } from './plan-geometry';
 import { robustDeviations } from './robust-deviations';
-import { screenOutliers } from './screen-outliers';
+import { farFromAnySurface, screenOutliers } from './screen-outliers';
 import { waferFigures, type WaferFigures } from './wafer-figures';
 import { NO_SHAPE, waferShape, type WaferShape } from './wafer-shape';
 
@@ -91,7 +91,12 @@ export function measureWafer(
     const deviations = robustDeviations(readings, part.screenFit);
     if (deviations !== null) {
       const { lone, together } = screenOutliers(deviations, part.indices, geometry);
-      const out = lone.filter((i) => options.overrides?.get(i) !== 'in');
+      const flexible = lone.length === 0 ? null : robustDeviations(readings, part.flexibleFit);
+      const sure =
+        lone.length === 0
+          ? lone
+          : farFromAnySurface(lone, deviations, flexible, part.flexibleFit, part.indices);
+      const out = sure.filter((i) => options.overrides?.get(i) !== 'in');
       const most = Math.floor(MOST_OUTLIER_SHARE * counted);
       if (out.length > most) tooMany = out.length;
       for (const i of out.slice(0, most)) {

@@ -11,7 +11,9 @@ export interface PlanPart {
   /** Share of the quality area per counted site; null without a diameter. */
   weights: Float64Array | null;
   shapeFit: SurfaceFit;
+  /** The surface that readings are screened against, and the most flexible one the sites allow. */
   screenFit: SurfaceFit;
+  flexibleFit: SurfaceFit;
 }
 
 /** A site plan, prepared once for the many wafers measured on it. */
@@ -63,6 +65,7 @@ function planPart(
   const weights = once(() => (qualityRadiusMm === null ? null : areaWeights(counted, qualityRadiusMm)));
   const shapeFit = once(() => surfaceFit(counted, unitRadiusMm, SHAPE_TERMS));
   const screenFit = once(() => surfaceFit(counted, unitRadiusMm, SCREEN_TERMS, SITES_PER_SCREEN_TERM));
+  const flexibleFit = once(() => surfaceFit(counted, unitRadiusMm, SCREEN_TERMS));
   return {
     indices,
     get weights() {
@@ -73,6 +76,9 @@ function planPart(
     },
     get screenFit() {
       return screenFit();
+    },
+    get flexibleFit() {
+      return flexibleFit();
     },
   };
 }

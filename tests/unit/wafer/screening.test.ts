@@ -60,6 +60,21 @@ describe('screening', () => {
     expect(feature!.description).not.toMatch(/edge/);
   });
 
+  it('keeps the centre of a ring pattern, which no other site sees, but not a gross centre', () => {
+    for (const geometry of [plan(2), fortyNine]) {
+      const rings = geometry.sites.map(
+        ({ xMm, yMm }, i) =>
+          10 *
+          (1 +
+            0.03 * Math.cos((2 * Math.PI * (xMm * xMm + yMm * yMm)) / 97 ** 2) +
+            0.002 * Math.sin(9 * i * i)),
+      );
+      expect(measureWafer(rings, geometry, { screen: 'outliers' }).badSites).toBe(0);
+      const gross = withValue(soundWafer(geometry.sites), { 0: 13 });
+      expect(measureWafer(gross, geometry, { screen: 'outliers' }).status[0]).toBe('outlier');
+    }
+  });
+
   it('leaves a plan of fewer than 25 sites to the eye', () => {
     const values = withValue(soundWafer(nine.sites), { 4: 30 });
     expect(measureWafer(values, nine, { screen: 'outliers' }).badSites).toBe(0);
