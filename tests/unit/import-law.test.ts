@@ -13,7 +13,10 @@ async function complaints(filePath: string, snippet: string): Promise<string[]> 
 
 const use = (from: string) => `import { x } from '${from}';\nexport const y = x;\n`;
 
-describe('the import law refuses', () => {
+/** The first file waits for the linter to load. */
+const patience = { timeout: 60_000 };
+
+describe('the import law refuses', patience, () => {
   it.each([
     ['lib/physics/a.ts', use('simple-statistics'), 'Only lib/stats'],
     ['app/(line)/a/page.tsx', use('simple-statistics'), 'Only lib/stats'],
@@ -51,7 +54,7 @@ describe('the import law refuses', () => {
   });
 });
 
-describe('the import law allows', () => {
+describe('the import law allows', patience, () => {
   it.each([
     ['lib/stats/a.ts', use('simple-statistics')],
     ['lib/wafer/a.ts', use('@/lib/stats/mean')],

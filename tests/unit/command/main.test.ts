@@ -12,7 +12,8 @@ async function run(...words: string[]) {
   return { status: await runCommand(words, output), printed: printed.join('\n'), said: said.join('\n') };
 }
 
-describe('runCommand', () => {
+/** The first line of help loads every verb. */
+describe('runCommand', { timeout: 60_000 }, () => {
   it('prints the help that was asked for, with every verb', async () => {
     const { status, printed, said } = await run('--help');
     expect(status).toBe(0);
