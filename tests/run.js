@@ -11,6 +11,14 @@ import { ensureChromium } from './support/chromium.js';
 const root = path.resolve(import.meta.dirname, '..');
 const results = path.join(root, '.results');
 const total = { passed: 0, failed: 0, skipped: 0 };
+const running = new Set();
+
+for (const name of ['SIGINT', 'SIGTERM']) {
+  process.once(name, () => {
+    for (const child of running) child.kill(name);
+    process.exit(130);
+  });
+}
 
 process.chdir(root);
 rmSync(results, { recursive: true, force: true });
@@ -84,9 +92,11 @@ async function step(name, program, words) {
     stdio: ['ignore', 'pipe', 'pipe'],
     env: { ...process.env, FORCE_COLOR: '0' },
   });
+  running.add(child);
   let said = '';
   for (const stream of [child.stdout, child.stderr]) stream.on('data', (part) => (said += part));
   const status = await new Promise((resolve) => child.once('close', resolve));
+  running.delete(child);
   const seconds = ((Date.now() - began) / 1000).toFixed(1);
   console.log(`${status === 0 ? 'ok    ' : 'FAILED'}  ${name}  ${seconds} s`);
   if (status !== 0) console.log(said.trim());

@@ -11,6 +11,8 @@ export default defineConfig({
   resolve: { tsconfigPaths: true },
   test: {
     setupFiles: ['tests/support/no-console-error.ts'],
+    /** Room for a machine that does much else: a hung test still ends. */
+    testTimeout: 30_000,
     projects: [
       { extends: true, test: { name: 'unit', include: ['tests/unit/**/*.test.{ts,tsx}'] } },
       { extends: true, test: { name: 'reference', include: ['tests/reference/**/*.test.ts'] } },
@@ -20,7 +22,6 @@ export default defineConfig({
           name: 'store',
           include: ['tests/store/**/*.test.ts'],
           globalSetup: ['tests/support/store-server.ts'],
-          testTimeout: 30_000,
           hookTimeout: 60_000,
         },
       },
