@@ -1,6 +1,5 @@
 import { spawn } from 'node:child_process';
-import { closeSync, openSync, readFileSync, writeFileSync } from 'node:fs';
-import { createServer } from 'node:net';
+import { closeSync, openSync, readFileSync } from 'node:fs';
 import path from 'node:path';
 import { setTimeout as sleep } from 'node:timers/promises';
 import pg from 'pg';
@@ -8,6 +7,7 @@ import { AppError } from '@/lib/errors';
 import { type ClusterFolder, openClusterFolder } from './cluster-folder';
 import { type EmbeddedBinaries, embeddedBinaries } from './embedded-binaries';
 import { findPostmaster, isAlive, removeStalePidFile } from './postmaster';
+import { settledPort } from './settled-port';
 
 /** A PostgreSQL of our own that answers. */
 export interface EmbeddedServer {
@@ -117,34 +117,6 @@ async function answers(url: string): Promise<boolean> {
   } finally {
     await client.end().catch(() => undefined);
   }
-}
-
-/** The port of last time where it is free, else a random free one: an address noted elsewhere stays good. */
-async function settledPort(file: string): Promise<number> {
-  const port = (await freePort(lastPort(file))) ?? (await freePort(0));
-  if (port === null) throw new AppError('unavailable', 'No free port for the database.');
-  writeFileSync(file, String(port), { mode: 0o600 });
-  return port;
-}
-
-function lastPort(file: string): number {
-  try {
-    return Number(readFileSync(file, 'utf8')) || 0;
-  } catch {
-    return 0;
-  }
-}
-
-function freePort(wanted: number): Promise<number | null> {
-  return new Promise((resolve) => {
-    const probe = createServer();
-    probe.once('error', () => resolve(null));
-    probe.listen(wanted, '127.0.0.1', () => {
-      const address = probe.address();
-      const port = address !== null && typeof address === 'object' ? address.port : null;
-      probe.close(() => resolve(port));
-    });
-  });
 }
 
 function urlOf(folder: ClusterFolder, port: number): string {
