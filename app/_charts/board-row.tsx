@@ -12,8 +12,11 @@ export interface BoardRowProps {
   /** Tool, chamber and diameter, quietly under the name. */
   place: string;
   strip: BoardStripProps;
-  /** Null where physics expects nothing of this stream. `text` is the figure beside, such as "+1.8 %". */
-  expected: (ExpectedGaugeProps & { text: string; unit: string }) | null;
+  /**
+   * Null where physics expects nothing of this stream. `text` is the figure beside, such as "+1.8 %", `under` the same
+   * difference otherwise said, such as "−1.6 % of the value".
+   */
+  expected: (ExpectedGaugeProps & { text: string; unit: string; under?: string }) | null;
   evenness: EvennessGaugeProps & { text: string };
   newest: { href: string; name: string; age: string } | null;
   state: { needsPerson: boolean; words: string };
@@ -57,6 +60,7 @@ export function BoardRow(props: BoardRowProps) {
             <ExpectedGauge {...expected} />
             <span className={expected.call ? 'call' : undefined}>
               {expected.text} <span className="unit small">{expected.unit}</span>
+              {expected.under !== undefined && <span className={styles.under}>{expected.under}</span>}
             </span>
           </>
         )}

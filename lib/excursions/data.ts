@@ -1,5 +1,7 @@
 import type { ClientBase, Pool } from 'pg';
 import type { Actor } from '@/lib/access/actor';
+import { getPool } from '@/lib/database/client';
+import { boardStreams } from './board-streams';
 import { LINE_DEPTH, type Line, type LineExcursion, type LineLimits, type LineSignal } from './line';
 import {
   lineLimits,
@@ -10,6 +12,10 @@ import {
   type PointRow,
   type SignalRow,
 } from './line-rows';
+import { type SpanWish, spanPoints, type StreamSpan } from './span-points';
+import { type SpanWafer, spanWafers, wafersToMeasure } from './span-wafers';
+import { streamStanding, type StreamStanding } from './stream-standing';
+import type { BoardStream, WaferToMeasure } from './types';
 
 /** Where to begin: the line holds every point from this instant on (milliseconds), and enough before it to judge. */
 export interface LineWish {
@@ -95,6 +101,39 @@ export async function loadLines(
       excursions: open,
     };
   });
+}
+
+/** Every stream in use as the board shows it: its last subgroups, its limits, its cases not closed. */
+export async function listBoardStreams(_actor: Actor): Promise<BoardStream[]> {
+  return boardStreams(getPool());
+}
+
+/** A stretch of a stream as its charts are drawn from it. */
+export async function findStreamSpan(_actor: Actor, streamId: string, wish: SpanWish): Promise<StreamSpan> {
+  return spanPoints(getPool(), streamId, wish);
+}
+
+/** The wafers of some subgroups of a stream, in the order of processing. */
+export async function listSpanWafers(
+  _actor: Actor,
+  streamId: string,
+  subgroupIds: readonly string[],
+): Promise<SpanWafer[]> {
+  return spanWafers(getPool(), streamId, subgroupIds);
+}
+
+/** Wafers of a stretch that were recorded, not judged, and not measured again since; the newest first. */
+export async function listWafersToMeasure(
+  _actor: Actor,
+  streamId: string,
+  span: { from: Date; to: Date; most: number },
+): Promise<WaferToMeasure[]> {
+  return wafersToMeasure(getPool(), streamId, span);
+}
+
+/** How a stream stands now: its limits, its cases not closed. */
+export async function findStreamStanding(_actor: Actor, streamId: string, now: Date): Promise<StreamStanding> {
+  return streamStanding(getPool(), streamId, now);
 }
 
 function openExcursion(row: LineExcursion): LineExcursion {

@@ -1,0 +1,114 @@
+import type { Pool } from 'pg';
+import { type BoardStreamRow, boardStreamOf } from './board-stream-rows';
+import type { BoardStream } from './types';
+
+/** How many levels a row of the board shows. */
+export const BOARD_POINTS = 30;
+
+/** How many of a stream's cases are read whole; the others are counted. */
+const CASES_READ = 4;
+
+/**
+ * One statement, so that the board is one snapshot, and every part of it once a stream, whatever the planner guesses.
+ * What grows with a stream's history is reached by index and cut off: its last subgroups by `subgroup_position`, cases
+ * not closed by `excursion_open`. Readings are not touched. Rows are packed as JSON, which the driver reads several
+ * times faster than as many columns.
+ */
+const STATEMENT = `
+SELECT s.id, s.slug, s.name, s.step, s.tool, s.chamber, s.recipe, s.quantity, s.charted_value, plan.diameter_mm,
+  strip.points, newest.wafer AS newest, charted.facts AS charted, again.wafers AS again, target.target, limits.limits,
+  counted.*, cases.cases
+FROM stream s
+JOIN site_plan plan ON plan.id = s.site_plan_id
+CROSS JOIN LATERAL (
+  SELECT array_agg(DISTINCT limit_revision_id) AS limit_ids,
+    json_agg(json_build_array(state, level, moving_range, within, between, limit_revision_id::text,
+      CASE WHEN completions <> '{}' THEN completions END, CASE WHEN specification <> '{}' THEN specification END)
+      ORDER BY position_at, key) AS points,
+    (array_agg(id ORDER BY position_at DESC, key DESC))[1] AS newest_id,
+    (array_agg(id ORDER BY position_at DESC, key DESC) FILTER (WHERE level IS NOT NULL))[1] AS charted_id,
+    array_agg(id) FILTER (WHERE NOT history AND array_position(wafer_levels, NULL) IS NOT NULL) AS gap_ids
+  FROM (SELECT * FROM subgroup WHERE stream_id = s.id
+    ORDER BY position_at DESC, key DESC LIMIT ${BOARD_POINTS}) recent) strip
+LEFT JOIN LATERAL (
+  SELECT json_build_array(w.id::text, w.wafer, w.run_or_lot, w.measured_at) AS wafer FROM wafer_measurement w
+  WHERE w.stream_id = s.id AND w.subgroup_id = strip.newest_id
+  ORDER BY w.processed_at DESC, w.id DESC LIMIT 1) newest ON true
+CROSS JOIN LATERAL (
+  SELECT json_build_array(avg(w.expected), max(w.target_revision_id)::text, avg(w.ingot_fraction)) AS facts
+  FROM wafer_measurement w
+  WHERE w.stream_id = s.id AND w.subgroup_id = strip.charted_id AND w.level IS NOT NULL) charted
+CROSS JOIN LATERAL (
+  SELECT json_agg(json_build_array(w.id::text, w.wafer, w.run_or_lot, w.measured_at, w.not_judged_reason)
+    ORDER BY w.measured_at DESC) AS wafers
+  FROM wafer_measurement w
+  WHERE w.stream_id = s.id AND w.subgroup_id = ANY(strip.gap_ids) AND w.not_judged_reason IS NOT NULL
+    AND NOT EXISTS (SELECT FROM wafer_measurement later
+      WHERE later.stream_id = w.stream_id AND later.run_or_lot = w.run_or_lot AND later.wafer = w.wafer
+        AND later.measured_at > w.measured_at AND later.not_judged_reason IS NULL)) again
+LEFT JOIN LATERAL (
+  SELECT json_build_object('id', t.id::text, 'dopant', dopant, 'densityPerCm3', density_per_cm3,
+    'tolerancePercent', tolerance_percent, 'alongCrystal', along_crystal, 'profile', profile, 'lengthUm', length_um,
+    'backgroundDopant', background_dopant, 'backgroundDensityPerCm3', background_density_per_cm3,
+    'calibrationFactor', calibration_factor, 'calibrationPercent', calibration_percent) AS target
+  FROM target_revision t WHERE t.stream_id = s.id
+  ORDER BY effective_from > now(), CASE WHEN effective_from <= now() THEN effective_from END DESC,
+    CASE WHEN effective_from <= now() THEN -revision ELSE revision END LIMIT 1) target ON true
+CROSS JOIN LATERAL (
+  SELECT json_agg(${limitsAsJson('l')} ORDER BY l.effective_from, l.revision) AS limits
+  FROM (SELECT *, row_number() OVER (ORDER BY effective_from, revision) AS from_first,
+      row_number() OVER (ORDER BY effective_from DESC, revision DESC) AS from_last
+    FROM limit_revision
+    WHERE stream_id = s.id AND state IN ('provisional', 'approved') AND effective_from <= now()) l
+  WHERE from_first = 1 OR from_last = 1 OR l.id = ANY(strip.limit_ids)) limits
+CROSS JOIN LATERAL (
+  SELECT count(*)::integer AS open_cases, (count(*) FILTER (WHERE state = 'open'))::integer AS unanswered_cases,
+    min(opened_at) FILTER (WHERE state = 'open') AS oldest_unanswered_at
+  FROM excursion e WHERE e.stream_id = s.id AND state <> 'closed') counted
+CROSS JOIN LATERAL (
+  SELECT json_agg(json_build_object('id', e.id::text, 'chart', e.chart, 'family', e.family, 'state', e.state,
+      'openedAt', e.opened_at, 'acknowledgedBy', e.acknowledged_by, 'at', CASE WHEN p.id IS NOT NULL THEN
+        json_build_object('level', p.level, 'movingRange', p.moving_range, 'within', p.within, 'between', p.between,
+          'limits', CASE WHEN l.id IS NOT NULL THEN ${limitsAsJson('l')} END) END,
+      'signal', CASE WHEN g.id IS NOT NULL THEN json_build_object('chart', g.chart, 'rule', g.rule, 'side', g.side,
+        'completions', g.completions, 'participantIds', g.participant_ids::text[]) END)
+    ORDER BY e.family = 'specification' DESC, e.state = 'open' DESC, e.id DESC) AS cases
+  FROM (SELECT * FROM excursion x WHERE x.stream_id = s.id AND x.state <> 'closed'
+    ORDER BY x.family = 'specification' DESC, x.state = 'open' DESC, x.id DESC LIMIT ${CASES_READ}) e
+  LEFT JOIN LATERAL (SELECT * FROM signal
+    WHERE stream_id = e.stream_id AND excursion_id = e.id AND withdrawn_at IS NULL ORDER BY id DESC LIMIT 1) g ON true
+  LEFT JOIN subgroup p ON p.stream_id = g.stream_id AND p.id = g.last_subgroup_id
+  LEFT JOIN limit_revision l ON l.stream_id = p.stream_id AND l.id = p.limit_revision_id) cases
+WHERE s.retired_at IS NULL ORDER BY s.name, s.id`;
+
+/** Every stream in use, by name, as the board shows it. */
+export async function boardStreams(pool: Pool): Promise<BoardStream[]> {
+  const { rows } = await pool.query<BoardStreamRow>({ name: 'board-streams', text: STATEMENT });
+  return rows.map(boardStreamOf);
+}
+
+/** A limit revision as the JSON that `boardLimitsOf` reads. */
+function limitsAsJson(table: string): string {
+  const columns = {
+    id: 'id::text',
+    state: 'state',
+    origin: 'origin',
+    subgroups: 'subgroups',
+    centre: 'centre',
+    sigma: 'sigma',
+    lower: 'lower',
+    upper: 'upper',
+    movingRangeCentre: 'moving_range_centre',
+    movingRangeUpper: 'moving_range_upper',
+    withinLogMean: 'within_log_mean',
+    withinLogSigma: 'within_log_sigma',
+    withinLower: 'within_lower',
+    withinCentre: 'within_centre',
+    withinUpper: 'within_upper',
+    betweenCentre: 'between_centre',
+    betweenUpper: 'between_upper',
+    betweenWafers: 'between_wafers',
+  };
+  const pairs = Object.entries(columns).map(([name, column]) => `'${name}', ${table}.${column}`);
+  return `json_build_object(${pairs.join(', ')})`;
+}
