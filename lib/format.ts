@@ -61,6 +61,23 @@ export function formatSheetResistance(ohmSq: number | null, significantDigits = 
   return inEngineeringUnits(ohmSq, significantDigits, 'Ω/□');
 }
 
+/** A reading in the unit of its quantity: "10.04 Ω·cm", "45.30 Ω/□". */
+export function formatReading(
+  quantity: 'resistivity' | 'sheet_resistance',
+  value: number | null,
+  significantDigits = 4,
+): string {
+  return quantity === 'resistivity'
+    ? formatResistivity(value, significantDigits)
+    : formatSheetResistance(value, significantDigits);
+}
+
+/** A whole number, thousands set apart by a narrow space from ten thousand on: "9500", "12 345". */
+export function formatCount(count: number): string {
+  const digits = String(Math.trunc(count));
+  return digits.length < 5 ? digits : digits.replace(/\B(?=(\d{3})+$)/g, '\u202f');
+}
+
 /** A share in percent, given in percent: `formatPercent(0.8634)` is "0.86 %". */
 export function formatPercent(percent: number | null, decimals = 2): string {
   if (percent === null || !Number.isFinite(percent)) return undefinedMark;

@@ -29,6 +29,8 @@ export interface WaferMapProps {
   levels?: MapLevels;
   /** The largest diameter shown beside it, so that wafers keep their sizes. */
   toScaleOfMm?: number;
+  /** Drawn small, as one of many: its isolines bear no labels, which could not be read. */
+  small?: boolean;
 }
 
 const R = 100;
@@ -45,6 +47,9 @@ export function WaferMap(props: WaferMapProps) {
   });
   const outermostMm = Math.max(...sites.map((s) => Math.hypot(s.xMm, s.yMm)), 0);
   const radiusMm = diameterMm === null ? outermostMm * 1.04 || 1 : diameterMm / 2;
+  const share = props.toScaleOfMm === undefined ? 1 : (2 * radiusMm) / props.toScaleOfMm;
+  /** A small wafer's words and marks are drawn as large as a big one's. */
+  const magnify = props.small === true ? 1 : 1 / share;
   const place = ([x, y]: Place) => `${((R * x) / radiusMm).toFixed(1)} ${((-R * y) / radiusMm).toFixed(1)}`;
   const path = (ring: readonly Place[]) => `M${ring.map(place).join('L')}Z`;
   const levels =
@@ -75,13 +80,13 @@ export function WaferMap(props: WaferMapProps) {
         );
   const isolines = levels === null ? [] : inner.filter((edge) => Math.round(edge / levels.step) % 2 === 0);
   const labels =
-    surface === null
+    surface === null || props.small === true
       ? []
       : isolineLabels(
           surface,
           isolines,
           sites.map((s): Place => [s.xMm, s.yMm]),
-          radiusMm,
+          radiusMm * magnify,
         );
   const colour = (step: number) =>
     levels === null ? 'none' : mapColour(stepShare(levels, step, mode), mode);
@@ -90,8 +95,7 @@ export function WaferMap(props: WaferMapProps) {
     excluded: status.filter((s) => s === 'excluded').length,
   };
   const words = mapWords(props.title, good, taken, radiusMm, (value) => `${readingText(value)} ${unit}`);
-  const dot = sites.length > 150 ? 0.8 : 1.3;
-  const width = `${((100 * radiusMm * 2) / (props.toScaleOfMm ?? radiusMm * 2)).toFixed(2)}%`;
+  const dot = (sites.length > 150 ? 0.8 : 1.3) * magnify;
 
   return (
     <figure className={styles['map']}>
@@ -101,7 +105,7 @@ export function WaferMap(props: WaferMapProps) {
           role="img"
           aria-label={words}
           viewBox={`${-R - 2} ${-R - 2} ${2 * R + 4} ${2 * R + 4}`}
-          style={{ width }}
+          style={{ width: `${(100 * share).toFixed(2)}%` }}
         >
           <defs>
             <pattern
@@ -161,7 +165,8 @@ export function WaferMap(props: WaferMapProps) {
               key={`${level},${x},${y}`}
               className={styles['label']}
               x={(R * x) / radiusMm}
-              y={(-R * y) / radiusMm + 2.2}
+              y={(-R * y) / radiusMm + 2.2 * magnify}
+              style={{ fontSize: 6.4 * magnify, strokeWidth: 2 * magnify }}
             >
               {text(level)}
             </text>

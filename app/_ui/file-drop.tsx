@@ -4,7 +4,11 @@ import { useRef, useState } from 'react';
 import styles from './file-drop.module.css';
 
 const sizeText = (bytes: number) =>
-  bytes < 1e6 ? `${Math.max(1, Math.round(bytes / 1e3))} kB` : `${(bytes / 1e6).toFixed(1)} MB`;
+  bytes === 0
+    ? 'empty'
+    : bytes < 1e6
+      ? `${Math.max(1, Math.round(bytes / 1e3))} kB`
+      : `${(bytes / 1e6).toFixed(1)} MB`;
 
 /**
  * A place to drop or choose files. It is an ordinary file field underneath, so it works by key and inside a plain

@@ -1,17 +1,17 @@
 import type { Actor } from '@/lib/access/actor';
-import { csvRows, UnreadableFile } from './csv-rows';
+import { csvPieces, UnreadableFile } from './csv-rows';
 import type { FileSource } from './file-check';
-import { mapHeader, type MapHeader } from './map-columns';
+import type { MapHeader } from './map-columns';
+import { rawMaps, SpoiltHeader } from './raw-maps';
 
 /** The header of a wafer-map file, read without the rest of it; null where it cannot serve, which checking explains. */
 export async function findFileHeader(_actor: Actor, file: FileSource): Promise<MapHeader | null> {
   try {
-    for await (const { rows } of csvRows(file.open())) {
-      const header = mapHeader(rows[0] ?? []);
-      return 'faults' in header ? null : header;
+    for await (const parts of rawMaps(csvPieces(file.open()))) {
+      for (const part of parts) if (part.kind === 'header') return part.header;
     }
   } catch (error) {
-    if (!(error instanceof UnreadableFile)) throw error;
+    if (!(error instanceof UnreadableFile || error instanceof SpoiltHeader)) throw error;
   }
   return null;
 }

@@ -46,3 +46,19 @@ export function givenWords(source: Record<string, unknown>, timeZone: string): G
 export function wordsQuery(typed: GivenWords['typed']): string {
   return new URLSearchParams(typed as Record<string, string>).toString();
 }
+
+/** A person's word on one reading: `out-12` takes the reading of site index 12 out, `in-12` puts it back; and why. */
+export const readingDecision = z.object({
+  site: z
+    .string({ error: 'Choose a reading.' })
+    .regex(/^(in|out)-\d{1,5}$/, 'Choose a reading.')
+    .transform((word) => ({
+      action: word.startsWith('in') ? ('in' as const) : ('out' as const),
+      siteIndex: Number(word.slice(word.indexOf('-') + 1)),
+    })),
+  reason: z
+    .string({ error: 'Say why.' })
+    .trim()
+    .min(3, 'Say why, in a few words: it stays with the wafer.')
+    .max(500, 'Say it in 500 characters or fewer.'),
+});

@@ -4,7 +4,7 @@ import { mkdir, readdir, readFile, rename, rm, stat, writeFile } from 'node:fs/p
 import path from 'node:path';
 import { Readable, Transform } from 'node:stream';
 import { pipeline } from 'node:stream/promises';
-import type { ReadableStream } from 'node:stream/web';
+import type { ReadableStream as NodeStream } from 'node:stream/web';
 import type { Actor } from '@/lib/access/actor';
 import { readEnvironment } from '@/lib/env';
 import type { FileSource } from './file-check';
@@ -48,7 +48,7 @@ export async function keepWaitingFile(
   });
   try {
     await pipeline(
-      Readable.fromWeb(body),
+      Readable.fromWeb(body as NodeStream<Uint8Array>),
       counted,
       createWriteStream(pathOf(token, 'csv'), { mode: 0o600, flags: 'wx' }),
     );
@@ -121,7 +121,11 @@ async function dropStaleFiles(): Promise<void> {
 /** The last part of whatever name was sent, without control characters. */
 export function plainName(name: string): string {
   const last = name.split(/[\\/]/).at(-1) ?? '';
-  const plain = [...last].filter((c) => c >= ' ' && c !== '\u007f').join('').trim().slice(0, 200);
+  const plain = [...last]
+    .filter((c) => c >= ' ' && c !== '\u007f')
+    .join('')
+    .trim()
+    .slice(0, 200);
   return plain === '' || plain === '.' || plain === '..' ? 'unnamed file' : plain;
 }
 

@@ -2,6 +2,7 @@ import type { Actor } from '@/lib/access/actor';
 import { getPool, getPrisma } from '@/lib/database/client';
 import type { Prisma } from '@/lib/database/generated/client';
 import type { Origin } from './types';
+import { waferOnRecord, type WaferOnRecord } from './wafer-on-record';
 
 /** One taking of a file: who, when, from where, and what became of its measurements. */
 export interface IntakeBatch {
@@ -84,6 +85,11 @@ export async function listBatchStreams(_actor: Actor, batchId: string): Promise<
     [batchId],
   );
   return rows;
+}
+
+/** One measured wafer with its surroundings: its page. Null where there is none by this id, or it is no id. */
+export async function findWafer(actor: Actor, id: string): Promise<WaferOnRecord | null> {
+  return /^\d{1,18}$/.test(id) ? waferOnRecord(actor, getPool(), id) : null;
 }
 
 function batchOf(row: Prisma.IntakeBatchGetPayload<object>): IntakeBatch {

@@ -1,0 +1,33 @@
+import { localActor } from '@/lib/access/local-actor';
+import { isSameOrigin } from '@/lib/access/same-origin';
+import { AppError, problemResponse } from '@/lib/errors';
+import { keepWaitingFile, MOST_FILE_BYTES, tooLargeWords } from '@/lib/maps/waiting-file';
+
+/** Takes the file that the intake page sends, as the body, and answers with the address of its check. */
+export async function POST(request: Request): Promise<Response> {
+  try {
+    if (!isSameOrigin(request.headers)) {
+      throw new AppError('forbidden', 'Files are taken from pages of this server only.');
+    }
+    const actor = localActor();
+    if (Number(request.headers.get('content-length') ?? 0) > MOST_FILE_BYTES) {
+      throw new AppError('invalid', tooLargeWords());
+    }
+    if (request.body === null) throw new AppError('invalid', 'No file came: the body is empty.');
+    const kept = await keepWaitingFile(actor, sentName(request.headers), request.body);
+    if (!kept.ok) throw new AppError('invalid', kept.reason);
+    return Response.json({ href: `/intake/${kept.token}` }, { status: 201 });
+  } catch (error) {
+    return problemResponse(error);
+  }
+}
+
+/** The file's own name, percent-encoded in a header. */
+function sentName(headers: Headers): string {
+  const sent = headers.get('x-file-name') ?? '';
+  try {
+    return decodeURIComponent(sent);
+  } catch {
+    return sent;
+  }
+}

@@ -1,0 +1,36 @@
+import type { Actor } from '@/lib/access/actor';
+import { checkFile, SpoiltFile, type FileCheck, type FileSource } from './file-check';
+import type { RawMap } from './raw-maps';
+
+export interface CheckedFile extends FileCheck {
+  /** The file as a whole cannot be taken; `problems` say why. */
+  spoilt: boolean;
+  /** Measurements that are new and can be recorded. */
+  fresh: number;
+}
+
+/** What checking a file found, a file that cannot be read among it: for a person to look at before recording. */
+export async function checkedFile(
+  actor: Actor,
+  file: FileSource,
+  words: RawMap['words'],
+): Promise<CheckedFile> {
+  try {
+    const check = await checkFile(actor, file, words);
+    const fresh = Math.max(0, check.measurements - check.faulty.size - check.repeated);
+    return { ...check, spoilt: false, fresh };
+  } catch (error) {
+    if (!(error instanceof SpoiltFile)) throw error;
+    return {
+      measurements: 0,
+      faulty: new Set(),
+      repeated: 0,
+      problems: error.problems,
+      problemCount: error.problems.length,
+      previews: [],
+      notices: [],
+      spoilt: true,
+      fresh: 0,
+    };
+  }
+}
