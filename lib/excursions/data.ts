@@ -2,6 +2,8 @@ import type { ClientBase, Pool } from 'pg';
 import type { Actor } from '@/lib/access/actor';
 import { getPool } from '@/lib/database/client';
 import { boardStreams } from './board-streams';
+import { excursionCase } from './case-record';
+import { excursionList, type ExcursionWish } from './excursion-list';
 import { LINE_DEPTH, type Line, type LineExcursion, type LineLimits, type LineSignal } from './line';
 import {
   lineLimits,
@@ -15,7 +17,7 @@ import {
 import { type SpanWish, spanPoints, type StreamSpan } from './span-points';
 import { type SpanWafer, spanWafers, wafersToMeasure } from './span-wafers';
 import { streamStanding, type StreamStanding } from './stream-standing';
-import type { BoardStream, WaferToMeasure } from './types';
+import type { BoardStream, ExcursionCase, ExcursionList, WaferToMeasure } from './types';
 
 /** Where to begin: the line holds every point from this instant on (milliseconds), and enough before it to judge. */
 export interface LineWish {
@@ -132,8 +134,22 @@ export async function listWafersToMeasure(
 }
 
 /** How a stream stands now: its limits, its cases not closed. */
-export async function findStreamStanding(_actor: Actor, streamId: string, now: Date): Promise<StreamStanding> {
+export async function findStreamStanding(
+  _actor: Actor,
+  streamId: string,
+  now: Date,
+): Promise<StreamStanding> {
   return streamStanding(getPool(), streamId, now);
+}
+
+/** Excursions by what is asked for: those nobody has answered first, the newest first. */
+export async function listExcursions(_actor: Actor, wish: ExcursionWish): Promise<ExcursionList> {
+  return excursionList(getPool(), wish);
+}
+
+/** One excursion with its signals, its log and the subgroups about it; null when there is none of that id. */
+export async function findExcursion(_actor: Actor, id: string): Promise<ExcursionCase | null> {
+  return /^\d{1,18}$/.test(id) ? excursionCase(getPool(), id) : null;
 }
 
 function openExcursion(row: LineExcursion): LineExcursion {

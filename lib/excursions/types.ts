@@ -1,6 +1,7 @@
 import type { LimitSet } from '@/lib/control/limit-set';
 import type { Target } from '@/lib/physics/target';
 import type { ExcursionFamily, LinePoint } from './line';
+import type { SubgroupWord } from './subgroup-label';
 
 export type ExcursionState = 'open' | 'acknowledged' | 'under-investigation' | 'closed';
 export type Side = 'above' | 'below';
@@ -87,4 +88,109 @@ export interface BoardStream {
   unansweredCases: number;
   oldestUnansweredAt: Date | null;
   toMeasureAgain: WaferToMeasure[];
+}
+
+/** The stream of a case, as far as its page speaks of it. */
+export interface CaseStream {
+  id: string;
+  slug: string;
+  name: string;
+  subgroup: SubgroupWord;
+  quantity: Target['quantity'];
+  chartedValue: 'statistic' | 'relative';
+}
+
+/** An excursion as a list shows it. */
+export interface ListedExcursion {
+  id: string;
+  stream: Pick<CaseStream, 'slug' | 'name' | 'subgroup'>;
+  chart: string;
+  family: ExcursionFamily;
+  side: Side;
+  state: ExcursionState;
+  openedAt: Date;
+  acknowledgedBy: string | null;
+  closedAt: Date | null;
+  closedBy: string | null;
+  cause: string | null;
+  first: { key: string; at: Date };
+  last: { key: string; at: Date };
+  /** The newest that holds; null when all were withdrawn. */
+  signal: SignalWords | null;
+  signals: number;
+}
+
+/** What a list of excursions is asked for. `unclosed` are all that are not closed. */
+export type ExcursionFilter = ExcursionState | 'unclosed' | 'all';
+
+export interface ExcursionList {
+  excursions: ListedExcursion[];
+  /** Of the asked stream, or of all. */
+  counts: Record<ExcursionState, number>;
+  /** The streams that have excursions. */
+  streams: { slug: string; name: string }[];
+}
+
+/** A subgroup that a signal names, with its wafers. */
+export interface NamedSubgroup {
+  id: string;
+  key: string;
+  at: Date;
+  wafers: { id: string; wafer: string; runOrLot: string }[];
+}
+
+export interface CaseSignal extends SignalWords {
+  id: string;
+  /** The subgroup that completed the pattern first, those that took part then, the last that went on with it. */
+  first: NamedSubgroup;
+  participants: NamedSubgroup[];
+  last: NamedSubgroup;
+  limitsRevision: number | null;
+  raisedAt: Date;
+  withdrawnAt: Date | null;
+  withdrawnReason: string | null;
+}
+
+export interface CaseEntry {
+  id: string;
+  at: Date;
+  actor: string;
+  action: 'opened' | 'joined' | 'acknowledged' | 'investigating' | 'noted' | 'closed';
+  note: string;
+}
+
+/** A subgroup about a case. */
+export interface CasePoint extends ChartedFigures {
+  id: string;
+  key: string;
+  at: Date;
+  state: LinePoint['state'];
+  limitsId: string | null;
+  completions: string[];
+  outOfSpecification: boolean;
+  firstWaferId: string | null;
+}
+
+export interface CaseLimits {
+  id: string;
+  revision: number;
+  state: 'provisional' | 'approved';
+  limits: LimitSet;
+}
+
+/** One excursion with all that its page tells. */
+export interface ExcursionCase extends Omit<ListedExcursion, 'stream' | 'signals' | 'signal'> {
+  stream: CaseStream;
+  acknowledgedAt: Date | null;
+  /** Newest first; withdrawn ones are among them. */
+  signals: CaseSignal[];
+  /** In the order they were written. */
+  entries: CaseEntry[];
+  /** From some subgroups before the first that took part to some after the last, in order. */
+  points: CasePoint[];
+  /** Those that judged the points. */
+  limits: CaseLimits[];
+  events: { at: Date; kind: string; text: string }[];
+  /** Of the wafer mean, in force when the case began; null where it is not charted. */
+  specification: { lower: number | null; upper: number | null } | null;
 }

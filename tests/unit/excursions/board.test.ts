@@ -177,7 +177,7 @@ describe('level against expected', () => {
     const stream = boardStream({ target, points: [boardPoint(expected.value * 1.02)] });
     const found = boardExpected(stream);
     expect(found?.differencePercent).toBeCloseTo(2, 10);
-    expect(found?.dopantPercent).toBeCloseTo(2 / expected.sensitivity, 10);
+    expect(found?.dopantPercent).toBeCloseTo(100 * (1.02 ** (1 / expected.sensitivity) - 1), 10);
     expect(found?.dopantPercent).toBeLessThan(0);
     expect(found?.tolerancePercent).toBe(5);
     expect(found?.charted.value).toBeCloseTo(expected.value, 10);
