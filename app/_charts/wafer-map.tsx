@@ -29,7 +29,7 @@ export interface WaferMapProps {
   levels?: MapLevels;
   /** The largest diameter shown beside it, so that wafers keep their sizes. */
   toScaleOfMm?: number;
-  /** Drawn small, as one of many: its isolines bear no labels, which could not be read. */
+  /** Drawn small, as one of many: coarser, and its isolines bear no labels, which could not be read. */
   small?: boolean;
 }
 
@@ -76,7 +76,7 @@ export function WaferMap(props: WaferMapProps) {
       : drawnSurface(
           good.map((g) => g.site),
           good.map((g) => g.value),
-          { repeatability: props.repeatability, levels: inner },
+          { repeatability: props.repeatability, levels: inner, ...(props.small ? { cells: 32 } : {}) },
         );
   const isolines = levels === null ? [] : inner.filter((edge) => Math.round(edge / levels.step) % 2 === 0);
   const labels =
@@ -150,16 +150,19 @@ export function WaferMap(props: WaferMapProps) {
               ))}
             </g>
           )}
-          {sites.map((site, i) => (
-            <SiteMark
-              key={`${site.xMm},${site.yMm}`}
-              x={(R * site.xMm) / radiusMm}
-              y={(-R * site.yMm) / radiusMm}
-              size={dot}
-              status={status[i] ?? 'good'}
-              words={siteWords(site, values[i] ?? null, status[i] ?? 'good', readingText, unit)}
-            />
-          ))}
+          {props.small && <SmallDots places={good.map((g) => place([g.site.xMm, g.site.yMm]))} size={dot} />}
+          {sites.map((site, i) =>
+            props.small && status[i] === 'good' ? null : (
+              <SiteMark
+                key={`${site.xMm},${site.yMm}`}
+                x={(R * site.xMm) / radiusMm}
+                y={(-R * site.yMm) / radiusMm}
+                size={dot}
+                status={status[i] ?? 'good'}
+                words={siteWords(site, values[i] ?? null, status[i] ?? 'good', readingText, unit)}
+              />
+            ),
+          )}
           {labels.map(({ level, place: [x, y] }) => (
             <text
               key={`${level},${x},${y}`}
@@ -196,6 +199,12 @@ function siteWords(
   const why =
     status === 'good' ? '' : status === 'excluded' ? ', in the edge exclusion' : `, taken out: ${status}`;
   return `${reading} at x ${site.xMm.toFixed(1)}, y ${site.yMm.toFixed(1)} mm${why}`;
+}
+
+/** All good sites of a small map in one stroke: of fifty maps each site must not be an element of its own. */
+function SmallDots({ places, size }: { places: readonly string[]; size: number }) {
+  const style = { stroke: 'var(--map-ink)', strokeWidth: 2 * size, strokeLinecap: 'round' } as const;
+  return <path d={places.map((at) => `M${at}h0`).join('')} style={style} />;
 }
 
 function SiteMark(props: { x: number; y: number; size: number; status: SiteStatus; words: string }) {

@@ -38,14 +38,15 @@ export function isInside(hull: readonly Place[], x: number, y: number): boolean 
  * The surface of one wafer's good readings for a map: a thin-plate spline smoothed no more than the
  * gauge's repeatability asks (`smoothSurface`), with the regions at or above each of `levels` by
  * marching squares. Values between sites are drawn, none beyond them: the surface ends at the
- * sites' hull. `repeatability` is one standard deviation, in the unit of the readings.
+ * sites' hull. `repeatability` is one standard deviation, in the unit of the readings; `cells` is the number of grid
+ * cells across the hull, for drawings so small that fewer will do.
  *
  * Null where the sites span no area. Throws a RangeError as `smoothSurface` does.
  */
 export function drawnSurface(
   sites: readonly Site[],
   readings: readonly number[],
-  options: { repeatability: number; levels: readonly number[] },
+  options: { repeatability: number; levels: readonly number[]; cells?: number },
 ): DrawnSurface | null {
   const surface = smoothSurface(sites, readings, options.repeatability);
   if (surface === null) return null;
@@ -57,16 +58,21 @@ export function drawnSurface(
   const hull = Array.from(corners, (i): Place => [sites[i]!.xMm, sites[i]!.yMm]);
   return {
     hull,
-    regions: regionsAbove(surface, hull, options.levels),
+    regions: regionsAbove(surface, hull, options.levels, options.cells ?? CELLS),
     valueAt: (xMm, yMm) => (isInside(hull, xMm, yMm) ? surface(xMm, yMm) : null),
   };
 }
 
-function regionsAbove(surface: SmoothSurface, hull: readonly Place[], levels: readonly number[]) {
+function regionsAbove(
+  surface: SmoothSurface,
+  hull: readonly Place[],
+  levels: readonly number[],
+  cells: number,
+) {
   const xs = hull.map(([x]) => x);
   const ys = hull.map(([, y]) => y);
   const [left, bottom] = [Math.min(...xs), Math.min(...ys)];
-  const step = Math.max(Math.max(...xs) - left, Math.max(...ys) - bottom) / CELLS;
+  const step = Math.max(Math.max(...xs) - left, Math.max(...ys) - bottom) / cells;
   const columns = Math.ceil((Math.max(...xs) - left) / step) + 2 * MARGIN + 1;
   const rows = Math.ceil((Math.max(...ys) - bottom) / step) + 2 * MARGIN + 1;
   const place = (column: number, row: number): Place => [
