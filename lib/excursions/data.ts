@@ -15,9 +15,9 @@ import {
   type SignalRow,
 } from './line-rows';
 import { type SpanWish, spanPoints, type StreamSpan } from './span-points';
-import { type SpanWafer, spanWafers, wafersToMeasure } from './span-wafers';
+import { type SpanWafer, type SpanWaferToMeasure, spanWafers, wafersToMeasure } from './span-wafers';
 import { streamStanding, type StreamStanding } from './stream-standing';
-import type { BoardStream, ExcursionCase, ExcursionList, WaferToMeasure } from './types';
+import type { BoardStream, ExcursionCase, ExcursionList } from './types';
 
 /** Where to begin: the line holds every point from this instant on (milliseconds), and enough before it to judge. */
 export interface LineWish {
@@ -129,7 +129,7 @@ export async function listWafersToMeasure(
   _actor: Actor,
   streamId: string,
   span: { from: Date; to: Date; most: number },
-): Promise<WaferToMeasure[]> {
+): Promise<SpanWaferToMeasure[]> {
   return wafersToMeasure(getPool(), streamId, span);
 }
 

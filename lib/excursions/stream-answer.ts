@@ -1,0 +1,84 @@
+import { limitAge } from '@/lib/control/limit-age';
+import { FIRST_BASELINE } from './line';
+import { signalSentence } from './signal-sentence';
+import type { StandingCase, StandingLimits } from './stream-standing';
+import { type SubgroupWord, subgroupLabel } from './subgroup-label';
+
+/** What the answer of a stream's page is made of. */
+export interface StreamFigures {
+  name: string;
+  subgroup: SubgroupWord;
+  cases: readonly StandingCase[];
+  openCases: number;
+  /** The revision in force now. */
+  limits: StandingLimits | null;
+  /** Subgroups judged since these took effect; without limits, ever. */
+  judged: number;
+  /** Among the newest subgroups. */
+  toMeasureAgain: number;
+  /** Of the stretch shown. */
+  shown: { subgroups: number; outOfSpecification: number };
+  hasSpecification: boolean;
+}
+
+/**
+ * The first sentence of a stream's page: its worst case not closed, from the first subgroup that took part to the last
+ * that went on with it ("since" while that is the newest), else how steady it is and by what it can be told.
+ *
+ * @example streamAnswer(figures) // 'N-epi, Reactor 2: 8 in a row below the centre line, since run R1177'
+ */
+export function streamAnswer(figures: StreamFigures): string {
+  return `${figures.name}: ${state(figures)}`;
+}
+
+function state({ cases, judged, limits, subgroup, toMeasureAgain }: StreamFigures): string {
+  const [worst] = cases;
+  if (worst !== undefined) {
+    if (worst.signal === null) return 'its signals no longer hold, the case is not closed';
+    return `${signalSentence(worst.signal)}, ${when(worst.signal, subgroup)}`;
+  }
+  if (toMeasureAgain > 0) {
+    return toMeasureAgain === 1 ? 'one wafer to measure again' : `${toMeasureAgain} wafers to measure again`;
+  }
+  if (limits !== null) return judged === 0 ? 'nothing judged yet by the limits in force' : 'steady';
+  if (judged === 0) return 'no wafer judged yet';
+  const progress = judged < FIRST_BASELINE ? `: ${judged} of ${FIRST_BASELINE} subgroups` : '';
+  return `no limits yet${progress}`;
+}
+
+/** "at run R0042", "from run R0035 to run R0042", or "since run R0035" while it goes on. */
+export function when(signal: NonNullable<StandingCase['signal']>, subgroup: SubgroupWord): string {
+  const first = subgroupLabel(subgroup, signal.first.key);
+  const last = subgroupLabel(subgroup, signal.last.key);
+  if (signal.first.id === signal.last.id) return `at ${last}`;
+  return signal.last.isNewest ? `since ${first}` : `from ${first} to ${last}`;
+}
+
+/** What stands under the answer: further cases, specification, and how far the limits can be trusted. */
+export function streamRemarks(figures: StreamFigures): string[] {
+  const { cases, openCases, limits, shown, hasSpecification } = figures;
+  const remarks: string[] = [];
+  const further = openCases - (cases.length > 0 ? 1 : 0);
+  if (further > 0)
+    remarks.push(further === 1 ? 'One more case is not closed.' : `${further} more cases are not closed.`);
+  if (shown.outOfSpecification > 0) {
+    remarks.push(
+      `${shown.outOfSpecification} of ${shown.subgroups} subgroups shown are out of specification.`,
+    );
+  } else if (hasSpecification && shown.subgroups > 0) {
+    remarks.push(`Specification is not touched in the ${shown.subgroups} subgroups shown.`);
+  }
+  if (limits !== null) remarks.push(`Limits are ${limitsWords(limits)}.`);
+  return remarks;
+}
+
+/** "provisional (25 subgroups)", "young (61 subgroups)", "inherited", "established (214 subgroups)". */
+export function limitsWords(limits: StandingLimits): string {
+  if (limits.origin === 'inherited') return 'inherited';
+  return `${limitsState(limits)} (${limits.limits.n} subgroups)`;
+}
+
+/** How far a revision can be trusted: provisional until someone approves it, then by the size of its baseline. */
+export function limitsState({ state: approval, limits }: Pick<StandingLimits, 'state' | 'limits'>) {
+  return approval === 'provisional' ? 'provisional' : limitAge(limits.n);
+}
