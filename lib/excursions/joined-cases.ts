@@ -9,51 +9,53 @@ import {
 import { signalSentence } from './signal-sentence';
 
 /**
- * Gives each raised or extended signal its case: the open case of the same chart, side and family whose last point is
- * at most 25 subgroups away, else a new one. Signals that end on wafers of history open nothing. A case whose signal
- * is withdrawn stays: what someone may have acted on is never undone. Returns the cases that changed.
+ * Gives each signal that was raised, reinstated or went on its case: its own while that is not closed, else the open
+ * one of the same chart, side and family at most 25 subgroups away, else a new one. Signals that end on wafers of
+ * history open nothing. A case whose signal is withdrawn stays: what someone may have acted on is never undone.
+ * Returns the cases that changed.
  */
 export function joinedCases(line: Line, signals: readonly LineSignal[]): LineExcursion[] {
   if (signals.length === 0) return [];
   const places = new Map(line.points.map((point, index) => [point.id, index]));
   const changed = new Set<LineExcursion>();
   for (const signal of signals) {
-    const lastPlace = places.get(signal.lastId) ?? -1;
-    if (signal.withdrawn !== null || line.points[lastPlace]?.history !== false) continue;
+    const last = places.get(signal.lastId) ?? -1;
+    if (line.points[last]?.history !== false) continue;
     const current =
       signal.excursion !== null && line.excursions.includes(signal.excursion) ? signal.excursion : null;
-    const excursion = current ?? joinable(line, signal, places) ?? opened(line, signal);
+    const excursion = current ?? joined(line, signal, places) ?? opened(line, signal);
     if (excursion !== current) {
-      const isNew = excursion.id === null && excursion.entries.length === 0;
-      excursion.entries.push({ action: isNew ? 'opened' : 'joined', note: signalSentence(signal) });
       signal.excursion = excursion;
+      changed.add(excursion);
     }
-    if (lastPlace >= (places.get(excursion.lastId) ?? -1)) excursion.lastId = signal.lastId;
-    changed.add(excursion);
+    if (last > (places.get(excursion.lastId) ?? -1)) {
+      excursion.lastId = signal.lastId;
+      changed.add(excursion);
+    }
   }
   return [...changed];
 }
 
-function familyOf(signal: LineSignal): ExcursionFamily {
-  return signal.chart === 'specification' ? 'specification' : ruleFamily(signal.rule);
-}
-
-function joinable(
+/** The nearest open case that the signal may join, with the log line that says so. */
+function joined(
   line: Line,
   signal: LineSignal,
   places: ReadonlyMap<string, number>,
 ): LineExcursion | undefined {
-  const place = places.get(signal.firstId) ?? places.size;
-  return line.excursions.find((excursion) => {
-    const last = places.get(excursion.lastId);
-    return (
-      excursion.chart === signal.chart &&
-      excursion.side === signal.side &&
-      excursion.family === familyOf(signal) &&
-      last !== undefined &&
-      Math.abs(place - last) <= JOIN_WITHIN_SUBGROUPS
-    );
-  });
+  // A beginning that is not loaded lies before everything that is.
+  const [first, last] = [places.get(signal.firstId) ?? 0, places.get(signal.lastId) ?? 0];
+  let nearest: { excursion: LineExcursion; gap: number } | null = null;
+  for (const excursion of line.excursions) {
+    const end = places.get(excursion.lastId);
+    if (end === undefined || excursion.chart !== signal.chart || excursion.side !== signal.side) continue;
+    if (excursion.family !== familyOf(signal)) continue;
+    const beginning = Math.min(end, places.get(excursion.firstId) ?? 0);
+    const gap = Math.max(0, first - end, beginning - last);
+    if (gap <= JOIN_WITHIN_SUBGROUPS && (nearest === null || gap <= nearest.gap))
+      nearest = { excursion, gap };
+  }
+  nearest?.excursion.entries.push({ action: 'joined', note: signalSentence(signal) });
+  return nearest?.excursion;
 }
 
 function opened(line: Line, signal: LineSignal): LineExcursion {
@@ -64,8 +66,12 @@ function opened(line: Line, signal: LineSignal): LineExcursion {
     family: familyOf(signal),
     firstId: signal.participantIds[0] ?? signal.firstId,
     lastId: signal.lastId,
-    entries: [],
+    entries: [{ action: 'opened', note: signalSentence(signal) }],
   };
   line.excursions.push(excursion);
   return excursion;
+}
+
+function familyOf(signal: LineSignal): ExcursionFamily {
+  return signal.chart === 'specification' ? 'specification' : ruleFamily(signal.rule);
 }

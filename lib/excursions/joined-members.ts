@@ -22,6 +22,7 @@ export function joinedMembers(
   additions: readonly LineAddition[],
   newId: () => string,
 ): { touched: Set<LinePoint>; pointOf: LinePoint[]; from: number } {
+  line.judgedOrder ??= [...line.points];
   const byKey = new Map(line.points.map((point) => [point.key, point]));
   const touched = new Set<LinePoint>();
   const pointOf: LinePoint[] = [];
@@ -30,7 +31,6 @@ export function joinedMembers(
   for (const addition of additions) {
     let point = byKey.get(addition.key);
     if (point) {
-      keepEarlier(wasFirst, point);
       if (addition.at < point.at) {
         point.at = addition.at;
         sorted = false;

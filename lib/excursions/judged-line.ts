@@ -1,10 +1,15 @@
-import { limitSet } from '@/lib/control/limit-set';
-import { signalEpisodes, type Episode } from '@/lib/control/signal-episodes';
-import { chartedPoints, isOpen, judgedPoints } from './judged-points';
-import { FIRST_BASELINE, type Line, type LineChange, type LineLimits, type LinePoint } from './line';
+import { LOOK_BACK } from '@/lib/control/completions-at';
+import { signalEpisodes } from '@/lib/control/signal-episodes';
+import { firstLimits } from './first-limits';
 import { joinedCases } from './joined-cases';
-import { reconciledSignals, type FoundSignal } from './reconciled-signals';
+import { chartedPoints, isOpen, judgedPoints } from './judged-points';
+import { JOIN_WITHIN_SUBGROUPS, type Line, type LineChange, type LinePoint } from './line';
+import { reconciledSignals } from './reconciled-signals';
+import { signalsOnRecord } from './signals-on-record';
 import { specificationEpisodes } from './specification-episodes';
+
+/** The line does not hold what judging looks back on: it must be loaded whole and judged again. */
+export class LineTooShort extends Error {}
 
 /**
  * Judges the end of a line again, from point `from` on, and returns what must be written. Nothing but the points,
@@ -12,6 +17,8 @@ import { specificationEpisodes } from './specification-episodes';
  * as if it had come in order.
  *
  * `touched` are points that changed themselves; `why` is the reason written on a signal that no longer holds.
+ *
+ * Throws `LineTooShort`, and leaves the line unfit for use.
  */
 export function judgedLine(
   line: Line,
@@ -19,115 +26,53 @@ export function judgedLine(
   from: number,
   why: string,
 ): LineChange {
-  const start = startOf(line, from);
-  const before = new Map(line.points.slice(start).map((point) => [point, fingerprint(point)]));
-  line.points.slice(start).forEach((point, offset) => {
+  let start = from;
+  // The newest subgroup may have waited for wafers; once followed it waits no longer.
+  while (start > 0 && line.points[start - 1]?.state === 'open') start -= 1;
+  let chartStart = 0;
+  for (let i = 0; i < start; i += 1) if (line.points[i]?.level !== null) chartStart += 1;
+  if (!line.whole && (chartStart < LOOK_BACK || start < JOIN_WITHIN_SUBGROUPS)) throw new LineTooShort();
+
+  const charted = chartedPoints(line);
+  const onRecord = signalsOnRecord(line, charted, chartStart, start);
+  const judged = line.points.slice(start);
+  const before = judged.map(fingerprint);
+  judged.forEach((point, offset) => {
     point.state = point.level === null ? 'not-judged' : isOpen(line, start + offset) ? 'open' : 'judged';
     if (point.state === 'judged') return;
     point.movingRange = null;
     point.limits = null;
     point.completions = [];
   });
-  const charted = chartedPoints(line);
-  const newLimits = firstLimits(line, charted);
-  if (newLimits) line.limits.push(newLimits);
-  const chartStart = line.points.slice(0, start).filter((point) => point.level !== null).length;
-  const completions = judgedPoints(line, charted, chartStart);
+  const limits = firstLimits(line, charted);
+  if (limits) line.limits.push(limits);
 
-  const openCharts = openEpisodes(line, charted, chartStart, (chart) => chart !== 'specification');
-  const chartEpisodes = signalEpisodes(completions, openCharts);
-  const openSpecification = openEpisodes(line, line.points, start, (chart) => chart === 'specification');
-  const found: FoundSignal[] = [
-    ...chartEpisodes.map((episode) => ({ episode, points: charted, start: chartStart })),
-    ...specificationEpisodes(line.points, start, openSpecification).map((episode) => ({
+  const completions = judgedPoints(line, charted, chartStart);
+  const episodes = signalEpisodes(
+    completions,
+    onRecord.charts.map(({ episode }) => episode),
+  );
+  const specification = specificationEpisodes(
+    line.points,
+    start,
+    onRecord.specification.map(({ episode }) => episode),
+  );
+  const found = [
+    ...episodes.map((episode, i) => ({ episode, points: charted, begun: onRecord.charts[i] })),
+    ...specification.map((episode, i) => ({
       episode,
       points: line.points,
-      start,
+      begun: onRecord.specification[i],
     })),
   ];
-  const changedFrom = line.points[start];
-  const signals = reconciledSignals(line, found, changedFrom, why);
-  const excursions = joinedCases(line, signals);
-  const points = [...before].filter(([point, print]) => touched.has(point) || fingerprint(point) !== print);
-  return { points: points.map(([point]) => point), signals, excursions, limits: newLimits };
+  const { changed, calling } = reconciledSignals(line, found, onRecord.again, why);
+  const excursions = joinedCases(line, calling);
+  const points = judged.filter((point, i) => touched.has(point) || fingerprint(point) !== before[i]);
+  line.judgedOrder = null;
+  return { points, signals: changed, excursions, limits };
 }
 
-/** A signal reaches back beyond the loaded points: the line must be loaded whole and judged again. */
-export class LineTooShort extends Error {}
-
-/** Goes back to the newest point that still waited for wafers, and to the beginning of every signal that spans `from`. */
-function startOf(line: Line, from: number): number {
-  let start = from;
-  while (start > 0 && line.points[start - 1]?.state === 'open') start -= 1;
-  const places = new Map(line.points.map((point, index) => [point.id, index]));
-  for (let again = true; again;) {
-    again = false;
-    for (const signal of line.signals) {
-      if (signal.withdrawn !== null || (places.get(signal.lastId) ?? -1) < start) continue;
-      const first = Math.min(...signal.participantIds.map((id) => places.get(id) ?? -1));
-      if (first === -1 && !line.whole) throw new LineTooShort();
-      if (first < start) {
-        start = first;
-        again = true;
-      }
-    }
-  }
-  return start;
-}
-
-/** The signals before `start` that later points may go on with, as episodes by index. */
-function openEpisodes(
-  line: Line,
-  points: readonly LinePoint[],
-  start: number,
-  ofChart: (chart: string) => boolean,
-): Episode[] {
-  const places = new Map(points.slice(0, start).map((point, index) => [point.id, index]));
-  const open: Episode[] = [];
-  for (const signal of line.signals) {
-    const last = places.get(signal.lastId);
-    if (signal.withdrawn !== null || last === undefined || !ofChart(signal.chart)) continue;
-    open.push({
-      chart: signal.chart as Episode['chart'],
-      rule: signal.rule,
-      side: signal.side,
-      first: places.get(signal.firstId) ?? -1,
-      participants: signal.participantIds.map((id) => places.get(id) ?? -1),
-      last,
-      count: signal.completions,
-    });
-  }
-  return open;
-}
-
-/** The first 25 charted subgroups propose limits by themselves, as long as the stream has none. */
-function firstLimits(line: Line, charted: readonly LinePoint[]): LineLimits | null {
-  if (line.limits.length > 0 || !line.whole || charted.length < FIRST_BASELINE) return null;
-  const baseline = charted.slice(0, FIRST_BASELINE);
-  const limits = limitSet(
-    baseline.map(({ level, within, between, members }) => ({
-      level: level as number,
-      within,
-      between,
-      wafers: members.length,
-    })),
-  );
-  if (limits.level.sigma === 0) return null;
-  return {
-    id: null,
-    revision: 1,
-    effectiveFrom: (baseline.at(-1) as LinePoint).at,
-    baselineIds: baseline.map((point) => point.id),
-    limits,
-  };
-}
-
+/** All that judging writes into a point. */
 function fingerprint(point: LinePoint): string {
-  return [
-    point.state,
-    point.movingRange,
-    point.limits?.revision,
-    point.completions.join(),
-    point.specification.join(),
-  ].join('|');
+  return `${point.state}|${point.movingRange}|${point.limits?.revision}|${point.completions.join()}`;
 }

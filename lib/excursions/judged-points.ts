@@ -26,36 +26,39 @@ export function limitsInForce(limits: readonly LineLimits[], at: number): LineLi
   return found;
 }
 
+/** The wafers of a subgroup that its figures rest on: a wafer that is not judged is there, but does not count. */
+export function judgedWafers(point: Pick<LinePoint, 'members'>): number {
+  let wafers = 0;
+  for (const { level } of point.members) if (level !== null) wafers += 1;
+  return wafers;
+}
+
 /**
  * Judges the charted points from index `from` on, and writes what it finds into them: the moving range (never across
  * a restart), the limits in force, and the rules each completes. Returns the completions, by index among `charted`.
  */
 export function judgedPoints(line: Line, charted: readonly LinePoint[], from: number): Completion[] {
-  const segment = (at: number) => line.restarts.filter((restart) => restart <= at).length;
-  const start = Math.max(0, from - LOOK_BACK - 1);
+  const start = Math.max(0, from - LOOK_BACK);
   const window: ChartPoint[] = [];
   const completions: Completion[] = [];
-  let segmentBefore = -1;
+  let before: { level: number; segment: number } | null = null;
   for (let index = start; index < charted.length; index += 1) {
     const point = charted[index] as LinePoint;
     const level = point.level as number;
-    const here = segment(point.at);
+    const segment = segmentAt(line.restarts, point.at);
     if (index >= from) {
-      const before = charted[index - 1];
-      const across =
-        before === undefined || (segmentBefore === -1 ? segment(before.at) : segmentBefore) !== here;
-      point.movingRange = across ? null : Math.abs(level - (before.level as number));
+      point.movingRange = before?.segment === segment ? Math.abs(level - before.level) : null;
       point.limits = limitsInForce(line.limits, point.at);
     }
-    segmentBefore = here;
+    before = { level, segment };
     window.push({
       level,
       within: point.within,
       between: point.between,
-      wafers: point.members.length,
+      wafers: judgedWafers(point),
       movingRange: point.movingRange,
       limits: point.limits?.limits ?? null,
-      regime: `${point.limits?.revision ?? 0}/${here}`,
+      regime: `${point.limits?.revision ?? 0}/${segment}`,
     });
     if (index < from) continue;
     const found = completionsAt(window, index - start).map((completion) => ({
@@ -67,4 +70,11 @@ export function judgedPoints(line: Line, charted: readonly LinePoint[], from: nu
     completions.push(...found);
   }
   return completions;
+}
+
+/** How many restarts came before a position: points of different segments are never held against each other. */
+function segmentAt(restarts: readonly number[], at: number): number {
+  let segment = 0;
+  for (const restart of restarts) if (restart <= at) segment += 1;
+  return segment;
 }

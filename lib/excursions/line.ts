@@ -69,6 +69,9 @@ export interface LineSignal {
 /**
  * The end of a stream, as much of it as judging needs: the last points in order (`whole` when that is all of them),
  * every limit revision that judges, the restarts, the signals that reach into these points and the cases not closed.
+ *
+ * `judgedOrder` keeps the points as they stood when they were last judged, while additions wait for their judgement:
+ * what signals on record say about "first" and "last" is said in that order.
  */
 export interface Line {
   streamId: string;
@@ -80,6 +83,7 @@ export interface Line {
   restarts: number[];
   signals: LineSignal[];
   excursions: LineExcursion[];
+  judgedOrder?: readonly LinePoint[] | null;
 }
 
 /** What a judgement changed in a line and what must therefore be written. */

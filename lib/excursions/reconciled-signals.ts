@@ -1,103 +1,96 @@
 import type { Episode } from '@/lib/control/signal-episodes';
 import { linePosition, type Line, type LinePoint, type LineSignal } from './line';
+import type { RecordedSignal } from './signals-on-record';
 
-/** An episode found by judging, with the points that its indices count, and the index from which they were judged. */
+/** An episode found by judging, with the points that its indices count, and the signal it goes on with, if any. */
 export interface FoundSignal {
   episode: Episode;
   points: readonly LinePoint[];
-  start: number;
+  begun: RecordedSignal | undefined;
+}
+
+/** The signals that changed, and those among them that say something new: raised, reinstated or gone on. */
+export interface ReconciledSignals {
+  changed: LineSignal[];
+  calling: LineSignal[];
 }
 
 /**
- * Holds the signals on record against those that judging found from point `from` on: a new one is raised, one that
- * went on is extended, one that no longer holds is withdrawn (never deleted), a withdrawn one that holds again is
- * reinstated. Returns the signals that changed.
+ * Holds the signals on record against those that judging found: a new one is raised, one that went on is extended,
+ * one of `again` that was not found no longer holds and is withdrawn (never deleted), a withdrawn one that holds
+ * again is reinstated.
  */
 export function reconciledSignals(
   line: Line,
   found: readonly FoundSignal[],
-  from: LinePoint | undefined,
+  again: readonly RecordedSignal[],
   why: string,
-): LineSignal[] {
-  const known = new Map(line.signals.map((signal) => [identity(signal), signal]));
-  const places = new Map(line.points.map((point) => [point.id, point]));
-  const holds = new Set<LineSignal>();
-  const changed = new Set<LineSignal>();
-  for (const { episode, points, start } of found) {
-    const last = points[episode.last] as LinePoint;
-    if (episode.last < start) {
-      const untouched = line.signals.find(
-        (s) => s.lastId === last.id && sameKind(s, episode) && s.withdrawn === null,
-      );
-      if (untouched) holds.add(untouched);
+): ReconciledSignals {
+  const changed: LineSignal[] = [];
+  const calling: LineSignal[] = [];
+  const judgedAgain = new Map(again.map((record) => [record.signal, record]));
+  const known = found.some(({ begun }) => begun === undefined)
+    ? new Map(line.signals.map((signal) => [identity(signal, signal.firstId), signal]))
+    : null;
+  for (const { episode, points, begun } of found) {
+    const now = asSignal(episode, points);
+    const signal = begun?.signal ?? known?.get(identity(now, now.firstId));
+    if (signal === undefined) {
+      line.signals.push(now);
+      changed.push(now);
+      calling.push(now);
       continue;
     }
-    const signal =
-      episode.first < start
-        ? extendable(line, episode, points)
-        : known.get(`${kind(episode)} ${points[episode.first]?.id}`);
-    if (signal) {
-      const goesOn =
-        signal.lastId !== last.id || signal.completions !== episode.count || signal.withdrawn !== null;
-      if (goesOn) changed.add(signal);
-      Object.assign(signal, { lastId: last.id, completions: episode.count, withdrawn: null });
-      if (episode.first >= start) {
-        signal.participantIds = episode.participants.map((index) => (points[index] as LinePoint).id);
-      }
-      holds.add(signal);
-    } else {
-      const raised = raisedSignal(episode, points);
-      line.signals.push(raised);
-      holds.add(raised);
-      changed.add(raised);
+    const record = begun ?? judgedAgain.get(signal);
+    judgedAgain.delete(signal);
+    const last = points[episode.last] as LinePoint;
+    const wentOn = record === undefined || linePosition(record.wasLast, last) < 0;
+    if (wentOn) calling.push(signal);
+    if (wentOn || differs(signal, now, begun === undefined)) changed.push(signal);
+    signal.withdrawn = null;
+    signal.lastId = now.lastId;
+    signal.completions = now.completions;
+    if (begun === undefined) {
+      signal.participantIds = now.participantIds;
+      signal.limits = now.limits;
     }
   }
-  for (const signal of line.signals) {
-    if (holds.has(signal) || signal.withdrawn !== null || from === undefined) continue;
-    const last = places.get(signal.lastId);
-    if (last === undefined || linePosition(last, from) < 0) continue;
+  for (const signal of judgedAgain.keys()) {
     signal.withdrawn = why;
-    changed.add(signal);
+    changed.push(signal);
   }
-  return [...changed];
+  return { changed, calling };
 }
 
-function raisedSignal(episode: Episode, points: readonly LinePoint[]): LineSignal {
-  const first = points[episode.first] as LinePoint;
+/** Whether a signal on record reads otherwise now; its beginning is looked at only where it was judged again. */
+function differs(signal: LineSignal, now: LineSignal, withBeginning: boolean): boolean {
+  if (signal.withdrawn !== null) return true;
+  if (signal.lastId !== now.lastId || signal.completions !== now.completions) return true;
+  return (
+    withBeginning &&
+    (signal.limits !== now.limits || signal.participantIds.join() !== now.participantIds.join())
+  );
+}
+
+function asSignal(episode: Episode, points: readonly LinePoint[]): LineSignal {
+  const first = points[episode.first];
+  const isSpecification = (episode.chart as string) === 'specification';
   return {
     id: null,
     chart: episode.chart,
     rule: episode.rule,
     side: episode.side,
-    firstId: first.id,
+    firstId: first?.id ?? '',
     participantIds: episode.participants.map((index) => (points[index] as LinePoint).id),
     lastId: (points[episode.last] as LinePoint).id,
     completions: episode.count,
-    limits: first.limits,
+    // Being out of specification has nothing to do with the limits in force.
+    limits: isSpecification ? null : (first?.limits ?? null),
     excursion: null,
     withdrawn: null,
   };
 }
 
-/** The signal on record that an episode from before the judged points goes on with: the latest of its kind. */
-function extendable(line: Line, episode: Episode, points: readonly LinePoint[]): LineSignal | undefined {
-  const firstId = points[episode.first]?.id;
-  const alike = line.signals.filter((signal) => signal.withdrawn === null && sameKind(signal, episode));
-  if (firstId !== undefined) return alike.find((signal) => signal.firstId === firstId);
-  const places = new Map(points.map((point, index) => [point.id, index]));
-  return alike
-    .filter((signal) => !places.has(signal.firstId))
-    .sort((a, b) => (places.get(b.lastId) ?? -1) - (places.get(a.lastId) ?? -1))[0];
-}
-
-function kind({ chart, rule, side }: { chart: string; rule: string; side: string }): string {
-  return `${chart} ${rule} ${side}`;
-}
-
-function sameKind(signal: LineSignal, episode: Episode): boolean {
-  return kind(signal) === kind(episode);
-}
-
-function identity(signal: LineSignal): string {
-  return `${kind(signal)} ${signal.firstId}`;
+function identity({ chart, rule, side }: LineSignal, firstId: string): string {
+  return `${chart} ${rule} ${side} ${firstId}`;
 }

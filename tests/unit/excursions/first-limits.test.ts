@@ -1,0 +1,30 @@
+import { describe, expect, it } from 'vitest';
+import { add, emptyLine } from './line-store';
+import { quiet, revision, wafers } from './streams';
+
+const setting = { subgroupSize: 1, limits: [revision(1, 0)], restarts: [] };
+
+describe('the first limits', () => {
+  it('are proposed by the first 25 subgroups and judge what comes after them', () => {
+    const line = emptyLine({ ...setting, limits: [] });
+    expect(add(line, wafers(quiet(24))).limits).toBeNull();
+    const { limits } = add(line, wafers([0.5], 24));
+    // Mean of 13 × 0.5 and 12 × −0.5; σ = mean moving range / d2(2), 1/1.128 (ASTM MNL7).
+    expect(limits).toMatchObject({ revision: 1, effectiveFrom: 250, limits: { n: 25 } });
+    expect(limits?.limits.level.centre).toBeCloseTo(0.02, 12);
+    expect(limits?.limits.level.sigma).toBeCloseTo(1 / 1.128, 3);
+    expect(line.points.every((point) => point.limits === null)).toBe(true);
+    add(line, wafers([9], 25));
+    expect(line.points[25]).toMatchObject({
+      limits,
+      completions: ['level:beyond-3-sigma:above'],
+    });
+    expect(add(line, wafers(quiet(30), 26)).limits).toBeNull();
+  });
+
+  it('are not proposed by subgroups that do not vary, nor beside others', () => {
+    const line = emptyLine({ ...setting, limits: [] });
+    expect(add(line, wafers(Array.from({ length: 30 }, () => 1))).limits).toBeNull();
+    expect(add(emptyLine(setting), wafers(quiet(30))).limits).toBeNull();
+  });
+});
