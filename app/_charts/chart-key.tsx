@@ -48,7 +48,7 @@ export function ChartKey(props: {
         <>
           <li>
             <Swatch fill="url(#hatch-expected)" opacity={1} />
-            expected, with its uncertainty
+            expected ± its standard uncertainty (k = 1)
           </li>
           <li>
             <svg width="24" height="16" aria-hidden="true">

@@ -107,9 +107,11 @@ function LatestSignal(props: {
   const latest = props.points.findLast((point) => completionsOf(point, props.panel.chart).length > 0);
   if (latest === undefined) return null;
   const words = completionsOf(latest, props.panel.chart).map((one) => props.words[one] ?? one);
+  const further = words.length > 1 ? `, and ${words.length - 1} more` : '';
   return (
     <span className="call">
-      ◆ {latest.label}: {words.join(', ')}
+      ◆ {latest.label}: {words[0]}
+      {further}
     </span>
   );
 }

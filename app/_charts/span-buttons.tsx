@@ -4,11 +4,13 @@ import styles from './stream-charts.module.css';
 /** The zoom of the charts as buttons: what a drag does with a mouse, for keys and fingers. */
 export function SpanButtons(props: {
   isWhole: boolean;
+  isLatest: boolean;
   waiting: boolean;
   onCloser: () => void;
   onWider: () => void;
   onShift: (share: number) => void;
   onAll: () => void;
+  onLatest: () => void;
 }) {
   return (
     <div className={styles.buttons} role="group" aria-label="Stretch of time shown">
@@ -26,6 +28,9 @@ export function SpanButtons(props: {
       </Button>
       <Button onClick={props.onAll} disabled={props.isWhole}>
         All
+      </Button>
+      <Button onClick={props.onLatest} disabled={props.isLatest}>
+        Latest
       </Button>
       <span role="status" className="quiet small">
         {props.waiting ? 'Reading…' : ''}

@@ -69,12 +69,14 @@ export interface ExpectedSpan {
   value: number;
   lower: number;
   upper: number;
-  toleranceLower: number;
-  toleranceUpper: number;
+  /** Null where no tolerance is agreed. */
+  toleranceLower: number | null;
+  toleranceUpper: number | null;
 }
 
-/** Something that happened at a point: an adjustment, a maintenance, or the estimated onset of a change. */
+/** Something that happened: an adjustment, a maintenance, new limits, or the estimated onset of a change. */
 export interface StreamEvent {
+  /** At a point, or half a step before the first point that came after it. */
   index: number;
   text: string;
   kind: 'adjustment' | 'maintenance' | 'onset' | 'limits' | 'note';

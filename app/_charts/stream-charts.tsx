@@ -75,7 +75,7 @@ export function StreamCharts(props: StreamChartsProps) {
     [points, width],
   );
   const seenEvents = useMemo(
-    () => events.filter(({ index }) => index >= from && index <= to),
+    () => events.filter(({ index }) => index >= from - 0.5 && index <= to + 0.5),
     [events, from, to],
   );
   const seenLimits = limits.filter(({ fromIndex, toIndex }) => toIndex >= from && fromIndex <= to);
@@ -114,7 +114,9 @@ export function StreamCharts(props: StreamChartsProps) {
           onCloser={() => span.change({ about, factor: 0.5 })}
           onWider={() => span.change({ about, factor: 2 })}
           onShift={(shift) => span.change({ shift })}
-          onAll={() => span.show(null)}
+          onAll={span.all}
+          isLatest={span.isLatest}
+          onLatest={span.latest}
         />
         <p className={styles.readout} aria-hidden="true">
           <b>{point.texts.level}</b> <span className="quiet">{point.label}</span>{' '}
@@ -159,7 +161,7 @@ export function StreamCharts(props: StreamChartsProps) {
         <AtCursor
           point={point}
           signals={point.completions.map((completion) => completionWords[completion] ?? completion)}
-          events={events.filter(({ index }) => index === point.index)}
+          events={seenEvents.filter(({ index }) => Math.ceil(index) === point.index)}
           hasExpected={expected.length > 0}
           hasBetween={panels.length > 3}
         />

@@ -2,6 +2,7 @@
 
 import { ZIndexLayer } from 'recharts';
 import type { ChartName } from '@/lib/control/completions-at';
+import { formatNumber } from '@/lib/format';
 import { chartMarkShape } from './chart-mark-shape';
 import { chartValue } from './chart-value';
 import type { LimitSegment } from './limit-segments';
@@ -83,7 +84,7 @@ function Expected(props: { span: ExpectedSpan; ends: readonly [number, number]; 
       />
       {place.holds(span.value) && <path d={`M${left} ${place.y(span.value)}H${right}`} />}
       {[span.toleranceLower, span.toleranceUpper].map((edge, at) => {
-        if (!place.holds(edge)) return null;
+        if (edge === null || !place.holds(edge)) return null;
         const y = place.y(edge);
         const back = y + (at === 0 ? -7 : 7);
         return (
@@ -136,16 +137,42 @@ export function PanelMarks(props: {
     if (value === null) return [];
     const shape = chartMarkShape(point, props.chart);
     return [
-      { id: point.id, x: place.x(point.index), y: place.y(value), shape, call: shape.endsWith('diamond') },
+      {
+        id: point.id,
+        x: place.x(point.index),
+        y: place.y(value),
+        shape,
+        call: shape.endsWith('diamond'),
+        stray: place.holds(value) ? null : { value, isHigh: value > props.domain[1] },
+      },
     ];
   });
   return (
     <ZIndexLayer zIndex={700}>
       {[...marks.filter((mark) => !mark.call), ...marks.filter((mark) => mark.call)].map(
-        ({ id, x, y, shape }) => (
-          <Mark key={id} x={x} y={y} shape={shape} size={shape === 'dot' ? 1.9 : 2.2} />
+        ({ id, x, y, shape, stray }) => (
+          <g key={id}>
+            <Mark x={x} y={y} shape={shape} size={shape === 'dot' ? 1.9 : 2.2} />
+            {stray !== null && <Stray x={x} y={y} {...stray} right={place.right} />}
+          </g>
         ),
       )}
     </ZIndexLayer>
+  );
+}
+
+/** A point beyond the axis stands at its edge, with an arrow that way and its value. */
+function Stray(props: { x: number; y: number; value: number; isHigh: boolean; right: number }) {
+  const { x, y, isHigh } = props;
+  const isNearEnd = props.right - x < 60;
+  return (
+    <text
+      x={isNearEnd ? x - 10 : x + 10}
+      y={isHigh ? y + 10 : y - 4}
+      textAnchor={isNearEnd ? 'end' : 'start'}
+      style={{ fill: 'var(--ink)' }}
+    >
+      {isHigh ? '↑' : '↓'} {formatNumber(props.value, 4)}
+    </text>
   );
 }

@@ -3,6 +3,7 @@ import { chartDomain } from './chart-domain';
 import { chartValue } from './chart-value';
 import { type LimitSegment, limitSegments } from './limit-segments';
 import type { ExpectedSpan, LimitSpan, StreamChartPoint } from './stream-chart-point';
+import { withoutStrays } from './without-strays';
 
 /** What one of a stream's charts draws besides its points. */
 export interface PanelPlan {
@@ -25,8 +26,8 @@ const titles: Record<ChartName, { title: string; height: number }> = {
 
 /**
  * The charts of a stream from top to bottom: level, moving range, within wafer, and between wafers where any point
- * has that figure. Each axis holds its points and limits; the level's also the expected band and the tolerance,
- * unless that would squeeze the points.
+ * has that figure. Each axis holds its limits and all points but strays; the level's also the expected band and the
+ * tolerance, unless that would squeeze the points.
  */
 export function streamPanels(args: {
   points: readonly StreamChartPoint[];
@@ -47,13 +48,16 @@ export function streamPanels(args: {
   return charts.map((chart) => {
     const segments = limitSegments(args.limits, chart, view);
     const values = points.map((point) => chartValue(point, chart)).filter((value) => value !== null);
-    const core = [...values, ...segments.map((piece) => piece.y)];
+    const lines = segments.map((piece) => piece.y);
+    const core = [...withoutStrays(values, lines), ...lines];
     const isLevel = chart === 'level';
     const wishes = isLevel
       ? [
           expected.flatMap((span) => [span.lower, span.upper]),
           segments.flatMap((piece) => piece.interval ?? []),
-          expected.flatMap((span) => [span.toleranceLower, span.toleranceUpper]),
+          expected
+            .flatMap((span) => [span.toleranceLower, span.toleranceUpper])
+            .filter((edge) => edge !== null),
         ].filter((wish) => wish.length > 0)
       : [];
     return {

@@ -27,7 +27,8 @@ export function signalSentence(signal: {
     return SPECIFICATION_WORDS[`${signal.rule}:${signal.side}`] ?? 'out of specification';
   }
   const inARow = signal.participantIds.length + signal.completions - 1;
-  const words = ruleSentence(signal.rule, signal.side, inARow, signal.chart as ChartName);
+  const words = (count: number) => ruleSentence(signal.rule, signal.side, count, signal.chart as ChartName);
   const chart = CHART_WORDS[signal.chart];
-  return chart === undefined ? words : `${chart} ${words}`;
+  if (chart === undefined) return words(inARow);
+  return `${chart} ${inARow > 1 ? `${inARow} times ` : ''}${words(1)}`;
 }

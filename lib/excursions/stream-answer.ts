@@ -1,7 +1,7 @@
 import { limitAge } from '@/lib/control/limit-age';
 import { FIRST_BASELINE } from './line';
 import { signalSentence } from './signal-sentence';
-import type { StandingCase, StandingLimits } from './stream-standing';
+import { SINCE_MOST, type StandingCase, type StandingLimits } from './stream-standing';
 import { type SubgroupWord, subgroupLabel } from './subgroup-label';
 
 /** What the answer of a stream's page is made of. */
@@ -14,6 +14,8 @@ export interface StreamFigures {
   limits: StandingLimits | null;
   /** Subgroups judged since these took effect; without limits, ever. */
   judged: number;
+  /** How many of these have a signal. */
+  withSignal: number;
   /** Among the newest subgroups. */
   toMeasureAgain: number;
   /** Of the stretch shown. */
@@ -56,19 +58,29 @@ export function when(signal: NonNullable<StandingCase['signal']>, subgroup: Subg
 
 /** What stands under the answer: further cases, specification, and how far the limits can be trusted. */
 export function streamRemarks(figures: StreamFigures): string[] {
-  const { cases, openCases, limits, shown, hasSpecification } = figures;
+  const { cases, openCases, limits, judged, withSignal, shown, hasSpecification } = figures;
   const remarks: string[] = [];
   const further = openCases - (cases.length > 0 ? 1 : 0);
   if (further > 0)
     remarks.push(further === 1 ? 'One more case is not closed.' : `${further} more cases are not closed.`);
   if (shown.outOfSpecification > 0) {
+    const are = shown.outOfSpecification === 1 ? 'is' : 'are';
     remarks.push(
-      `${shown.outOfSpecification} of ${shown.subgroups} subgroups shown are out of specification.`,
+      `${shown.outOfSpecification} of ${shown.subgroups} subgroups shown ${are} out of specification.`,
     );
   } else if (hasSpecification && shown.subgroups > 0) {
     remarks.push(`Specification is not touched in the ${shown.subgroups} subgroups shown.`);
   }
-  if (limits !== null) remarks.push(`Limits are ${limitsWords(limits)}.`);
+  if (limits !== null) {
+    remarks.push(`Limits are ${limitsWords(limits)}.`);
+    if (openCases === 0 && withSignal > 0) {
+      remarks.push(
+        `Of ${judged > SINCE_MOST ? `the last ${SINCE_MOST}` : judged} judged by them ${withSignal} ${
+          withSignal === 1 ? 'has' : 'have'
+        } a signal; every case is closed.`,
+      );
+    }
+  }
   return remarks;
 }
 

@@ -1,0 +1,72 @@
+import type { StreamChartPoint } from '@/app/_charts/stream-chart-point';
+import { subgroupLabel } from '@/lib/excursions/subgroup-label';
+import type { SpanWafer } from '@/lib/excursions/span-wafers';
+import { formatDateTime, formatDay } from '@/lib/format';
+import type { Target } from '@/lib/physics/target';
+import type { Stream } from '@/lib/streams/types';
+import type { ChartUnit } from './chart-unit';
+import type { DrawnPoint } from './drawn-points';
+import { lateOnes } from './late-ones';
+import { type PointExpected, pointExpected } from './point-expected';
+import { pointTexts } from './point-texts';
+
+/** What the rows of a stream's charts are made of. */
+export interface ChartSource {
+  stream: Pick<Stream, 'subgroup' | 'chartedValue'>;
+  points: readonly DrawnPoint[];
+  wafersOf: ReadonlyMap<string, readonly SpanWafer[]>;
+  targetOf: ReadonlyMap<string, Target>;
+  unit: ChartUnit;
+  timeZone: string;
+  /** Only some subgroups are shown: limits, rules and moving ranges of the whole stream say nothing about these. */
+  isFiltered: boolean;
+}
+
+/** A drawn point, and what was expected of it. */
+export type ChartRow = StreamChartPoint & { expected: PointExpected | null };
+
+/**
+ * The rows of a stream's charts. In a filtered view the moving range runs from one shown subgroup to the next, and no
+ * rule is marked: the rules looked at neighbours that are not shown. Out of specification stays: it is a wafer's own.
+ */
+export function chartRows(source: ChartSource): ChartRow[] {
+  const { stream, unit, isFiltered } = source;
+  const late = lateOnes(source.points, source.wafersOf);
+  const scaled = (value: number | null) => value && value * unit.factor;
+  let before: number | null = null;
+  return source.points.map((point) => {
+    const wafers = source.wafersOf.get(point.id) ?? [];
+    const expected = pointExpected(wafers, source.targetOf);
+    const ownRange = before === null || point.level === null ? null : Math.abs(point.level - before);
+    if (point.level !== null) before = point.level;
+    const shown = { ...point, movingRange: isFiltered ? ownRange : point.movingRange };
+    const at = new Date(point.at);
+    return {
+      id: point.id,
+      index: point.index,
+      label: subgroupLabel(stream.subgroup, point.key),
+      at: at.toISOString(),
+      day: formatDay(at, source.timeZone),
+      level: scaled(shown.level),
+      movingRange: scaled(shown.movingRange),
+      within: shown.within,
+      between: scaled(shown.between),
+      completions: isFiltered ? [] : point.completions,
+      outOfSpecification: point.outOfSpecification,
+      open: point.state === 'open',
+      judged: point.state === 'judged',
+      hollow: late.has(point.id) || wafers.some((wafer) => wafer.isMeasuredAgain),
+      href: wafers[0] === undefined ? '' : `/wafers/${wafers[0].id}`,
+      texts: {
+        at: formatDateTime(at, source.timeZone),
+        ...pointTexts({ shown, wafers, expected, unit, chartedValue: stream.chartedValue }),
+      },
+      expected,
+    };
+  });
+}
+
+/** The rows as the charts take them, without what only the server needs. */
+export function chartPoints(rows: readonly ChartRow[]): StreamChartPoint[] {
+  return rows.map(({ expected: _expected, ...point }) => point);
+}

@@ -1,0 +1,36 @@
+import type { SpanWafer } from '@/lib/excursions/span-wafers';
+import { type TargetModel, targetModel } from '@/lib/excursions/target-model';
+import type { Target } from '@/lib/physics/target';
+
+/** What physics expected of the wafers of one subgroup. */
+export interface PointExpected {
+  targetId: string;
+  /** In the unit of the quantity; null where its wafers differ in what is expected of them. */
+  value: number | null;
+  uncertaintyPercent: number;
+  /** Null where the target as it stands has no model for these wafers. */
+  model: TargetModel | null;
+}
+
+/**
+ * What was expected of a subgroup when its wafers were recorded, and the model behind it, at their mean place along
+ * the crystal. Null without an expected value.
+ */
+export function pointExpected(
+  wafers: readonly SpanWafer[],
+  targetOf: ReadonlyMap<string, Target>,
+): PointExpected | null {
+  const charted = wafers.filter((wafer) => wafer.level !== null && wafer.expected !== null);
+  const last = charted.at(-1);
+  if (last?.targetId == null || last.expectedUncertaintyPercent === null) return null;
+  const target = targetOf.get(last.targetId);
+  const fractions = charted.map((wafer) => wafer.ingotFraction).filter((fraction) => fraction !== null);
+  const fraction =
+    fractions.length === 0 ? null : fractions.reduce((sum, one) => sum + one, 0) / fractions.length;
+  return {
+    targetId: last.targetId,
+    value: charted.every((wafer) => wafer.expected === last.expected) ? last.expected : null,
+    uncertaintyPercent: last.expectedUncertaintyPercent,
+    model: target === undefined ? null : targetModel(target, fraction),
+  };
+}
