@@ -2,6 +2,7 @@ import { scaleLinear } from 'd3-scale';
 import { useId } from 'react';
 import type { SiteStatus } from '@/lib/wafer/measure-wafer';
 import type { Site } from '@/lib/wafer/site';
+import { radialDomain } from './radial-domain';
 import styles from './radial-plot.module.css';
 
 export interface RadialPlotProps {
@@ -36,14 +37,12 @@ export function RadialPlot(props: RadialPlotProps) {
   });
   const good = points.filter((p) => p.status === 'good');
   if (good.length === 0) return <p className={styles['note']}>No good reading to plot.</p>;
-  const levels = [
-    ...good.map((p) => p.value),
-    ...(expected === null ? [] : [expected.lower, expected.upper]),
-    ...(props.mode === 'difference' ? [0] : []),
-  ];
-  const [least, most] = [Math.min(...levels), Math.max(...levels)];
-  const pad = (most - least || Math.abs(most) * 0.01 || 1) * 0.06;
-  const y = scaleLinear([least - pad, most + pad], [H - box.bottom, box.top]);
+  const domain = radialDomain(
+    good.map((p) => p.value),
+    expected,
+  );
+  const y = scaleLinear([domain.least, domain.most], [H - box.bottom, box.top]);
+  const within = (value: number) => Math.min(domain.most, Math.max(domain.least, value));
   const endMm = props.radiusMm ?? Math.max(...points.map((p) => p.radiusMm), 1);
   const x = scaleLinear([0, endMm], [box.left + 4, W - box.right]);
   const yTicks = y.ticks(5);
@@ -51,7 +50,7 @@ export function RadialPlot(props: RadialPlotProps) {
   const words = `${props.title}: ${good.length} good readings from ${format(Math.min(...good.map((p) => p.value)))} to ${format(Math.max(...good.map((p) => p.value)))} ${unit}${
     expected === null ? '' : `; expected ${expected.lower.toPrecision(4)} to ${expected.upper.toPrecision(4)}`
   }`;
-  const bandTop = expected === null ? 0 : y(expected.upper);
+  const bandTop = expected === null ? 0 : y(within(expected.upper));
   const hidden = points.filter(
     (p) => p.status !== 'good' && (p.value < y.domain()[0]! || p.value > y.domain()[1]!),
   );
@@ -92,18 +91,27 @@ export function RadialPlot(props: RadialPlotProps) {
             x={box.left}
             width={W - box.right - box.left}
             y={bandTop}
-            height={Math.max(1, y(expected.lower) - bandTop)}
+            height={Math.max(1, y(within(expected.lower)) - bandTop)}
             fill={`url(#${id}-expected)`}
           />
-          <line
-            x1={box.left}
-            x2={W - box.right}
-            y1={y(expected.value)}
-            y2={y(expected.value)}
-            style={{ stroke: 'var(--phys)' }}
-          />
-          <text className={styles['expected']} x={box.left + 66} y={y(expected.value) - 4}>
+          {domain.beyond === null ? (
+            <line
+              x1={box.left}
+              x2={W - box.right}
+              y1={y(expected.value)}
+              y2={y(expected.value)}
+              style={{ stroke: 'var(--phys)' }}
+            />
+          ) : null}
+          <text
+            className={styles['expected']}
+            x={box.left + 66}
+            y={domain.beyond === null ? y(expected.value) - 4 : 11}
+          >
             expected
+            {domain.beyond === null
+              ? ''
+              : ` lies ${domain.beyond}, at ${expected.value === 0 ? '0' : format(expected.value)}`}
           </text>
         </g>
       )}
@@ -137,7 +145,7 @@ export function RadialPlot(props: RadialPlotProps) {
       ))}
       {hidden.length > 0 && (
         <text x={W - box.right} y={11} textAnchor="end">
-          {hidden.length} crossed at the border: off the scale
+          {hidden.length} crossed: off the scale
         </text>
       )}
     </svg>

@@ -114,7 +114,8 @@ function relative(statistic: number, expected: Expected | null): number | null {
   return expected === null ? null : 100 * Math.log(statistic / expected.value);
 }
 
-function missingWords(target: TargetRevision | null, stream: Stream, facts: Facts): string {
+/** Why nothing is expected of a wafer. */
+export function missingWords(target: TargetRevision | null, stream: Stream, facts: Facts): string {
   if (target === null) return 'the stream has no target, so nothing is expected of the wafer';
   const missing = missingForExpected(target.target, expectedWafer(stream, facts));
   if (missing === 'ingotFraction')

@@ -15,7 +15,7 @@ const typedWord = z.preprocess(
   (value) => (Array.isArray(value) ? value[0] : value),
   z
     .string()
-    .transform((text) => text.trim().slice(0, 300))
+    .transform((text) => text.replaceAll('\u0000', '').trim().slice(0, 300))
     .optional(),
 );
 const typedWords = z.object(Object.fromEntries(WAFER_COLUMNS.map((column) => [column, typedWord])));
@@ -58,7 +58,11 @@ export const readingDecision = z.object({
     })),
   reason: z
     .string({ error: 'Say why.' })
-    .trim()
-    .min(3, 'Say why, in a few words: it stays with the wafer.')
-    .max(500, 'Say it in 500 characters or fewer.'),
+    .transform((text) => text.replaceAll('\u0000', '').trim())
+    .pipe(
+      z
+        .string()
+        .min(3, 'Say why, in a few words: it stays with the wafer.')
+        .max(500, 'Say it in 500 characters or fewer.'),
+    ),
 });
