@@ -7,7 +7,8 @@ export interface Column<Row> {
 
 /**
  * Rows as a subquery over `unnest`, one array parameter per column: one statement carries thousands of rows, and its
- * text does not depend on their number. Array columns travel as text literals (`arrayLiteral`) and are cast.
+ * text does not depend on their number. Every column travels as one array literal; a column of arrays as text of such
+ * literals (`arrayLiteral`), and is cast.
  * Appends to `parameters` and returns `(SELECT …)`.
  */
 export function rowsAsQuery<Row>(
@@ -18,7 +19,7 @@ export function rowsAsQuery<Row>(
   const sources: string[] = [];
   const selected: string[] = [];
   for (const { name, type, value } of columns) {
-    parameters.push(rows.map(value));
+    parameters.push(columnLiteral(rows.map(value), type));
     const isArray = type.endsWith('[]');
     sources.push(`$${parameters.length}::${isArray ? 'text' : type}[]`);
     selected.push(isArray ? `${name}::${type}` : name);
@@ -27,20 +28,24 @@ export function rowsAsQuery<Row>(
   return `(SELECT ${selected.join(', ')} FROM unnest(${sources.join(', ')}) AS given (${names}))`;
 }
 
+/** The values of one column as an array literal. Only free text needs escaping. */
+function columnLiteral(values: readonly unknown[], type: string): string {
+  const isText = type === 'text';
+  const isArray = type.endsWith('[]');
+  const elements = values.map((value) => {
+    if (value === null || value === undefined) return 'NULL';
+    if (isText) return `"${String(value).replace(/[\\"]/g, '\\$&')}"`;
+    return isArray ? `"${String(value).replaceAll('"', '\\"')}"` : String(value);
+  });
+  return `{${elements.join(',')}}`;
+}
+
 /** A PostgreSQL array literal of numbers, ids or words without quotes or backslashes; null elements stay null. */
 export function arrayLiteral(values: readonly (number | string | null)[]): string {
-  let literal = '{';
-  for (let i = 0; i < values.length; i += 1) {
-    const value = values[i];
-    if (i > 0) literal += ',';
-    literal +=
-      value === null || value === undefined
-        ? 'NULL'
-        : typeof value === 'number'
-          ? String(value)
-          : `"${value}"`;
-  }
-  return literal + '}';
+  const elements = values.map((value) =>
+    value === null ? 'NULL' : typeof value === 'number' ? value : `"${value}"`,
+  );
+  return `{${elements.join(',')}}`;
 }
 
 /** The names of columns, for an INSERT's list. */

@@ -76,17 +76,16 @@ export async function writeFindings(
     'signal',
     SIGNAL_COLUMNS,
     signals,
-    `ON CONFLICT (stream_id, id) DO UPDATE SET ${[
+    `ON CONFLICT (stream_id, chart, rule, side, first_subgroup_id) DO UPDATE SET ${[
       'participant_ids',
       'last_subgroup_id',
       'completions',
-      'excursion_id',
+      'limit_revision_id',
       'withdrawn_reason',
     ]
       .map((name) => `${name} = excluded.${name}`)
-      .join(
-        ', ',
-      )}, withdrawn_at = CASE WHEN excluded.withdrawn_reason IS NULL THEN NULL ELSE coalesce(signal.withdrawn_at, excluded.withdrawn_at) END`,
+      .join(', ')}, excursion_id = coalesce(excluded.excursion_id, signal.excursion_id),
+      withdrawn_at = CASE WHEN excluded.withdrawn_reason IS NULL THEN NULL ELSE coalesce(signal.withdrawn_at, excluded.withdrawn_at) END`,
   );
   for (const { excursion } of excursions) excursion.entries = [];
 }

@@ -1,6 +1,7 @@
 import type { ClientBase } from 'pg';
 import type { Actor } from '@/lib/access/actor';
 import type { SubgroupPoint } from '@/lib/control/limit-set';
+import { judgedWafers } from '@/lib/excursions/judged-points';
 import { summarise } from '@/lib/excursions/joined-members';
 import { measuredWafer, measuringStream } from '@/lib/maps/measured-wafer';
 import { loadStoredWafers } from '@/lib/maps/stored-wafers';
@@ -58,6 +59,12 @@ export async function remeasuredBaseline(
     };
     summarise(point);
     if (point.level === null) return [];
-    return { id, level: point.level, within: point.within, between: point.between, wafers: members.length };
+    return {
+      id,
+      level: point.level,
+      within: point.within,
+      between: point.between,
+      wafers: judgedWafers(point),
+    };
   });
 }

@@ -29,6 +29,8 @@ export async function checkedFile(
       problemCount: error.problems.length,
       previews: [],
       notices: [],
+      kept: [],
+      keptTo: 0,
       spoilt: true,
       fresh: 0,
     };

@@ -19,41 +19,31 @@ export class UnreadableFile extends Error {
 const LONGEST_RECORD = 1 << 20;
 
 /**
- * The rows of a CSV file (RFC 4180, UTF-8) in the order of the file, some at a time: the file is never held whole.
- * Blank lines are passed over. Throws `UnreadableFile` for an empty or binary file, text that is not UTF-8, a quote
- * that never closes and a record of more than a megabyte.
+ * The text of a CSV file (UTF-8) in pieces that hold whole records: the file is never held whole. Throws
+ * `UnreadableFile` for a binary file, text that is not UTF-8 and a record of more than a megabyte.
  */
-export async function* csvRows(bytes: AsyncIterable<Uint8Array>): AsyncGenerator<CsvRows> {
+export async function* csvPieces(bytes: AsyncIterable<Uint8Array>): AsyncGenerator<string> {
   const decoder = new TextDecoder('utf-8', { fatal: true });
-  let rest = '';
-  let line = 1;
-  let any = false;
   const decoded = (chunk?: Uint8Array) => {
     try {
       return chunk === undefined ? decoder.decode() : decoder.decode(chunk, { stream: true });
     } catch {
-      throw new UnreadableFile('this is not text in UTF-8', line);
+      throw new UnreadableFile('this is not text in UTF-8');
     }
   };
+  let rest = '';
   for await (const chunk of bytes) {
-    if (chunk.includes(0)) throw new UnreadableFile('this is a binary file, not text', line);
+    if (chunk.includes(0)) throw new UnreadableFile('this is a binary file, not text');
     rest += decoded(chunk);
     const end = lastRecordEnd(rest);
-    if (end === 0) {
-      if (rest.length > LONGEST_RECORD)
-        throw new UnreadableFile('a record longer than a megabyte: an open quote?', line);
-      continue;
+    if (end === 0 && rest.length > LONGEST_RECORD) {
+      throw new UnreadableFile('a record is longer than a megabyte: an open quote?');
     }
-    const parsed = parsedRows(rest.slice(0, end), line);
-    line = parsed.nextLine;
+    if (end > 0) yield rest.slice(0, end);
     rest = rest.slice(end);
-    any ||= parsed.rows.length > 0;
-    if (parsed.rows.length > 0) yield parsed;
   }
   rest += decoded();
-  const parsed = parsedRows(rest, line);
-  if (parsed.rows.length > 0) yield parsed;
-  else if (!any) throw new UnreadableFile('the file is empty');
+  if (rest !== '') yield rest;
 }
 
 /** Where the last whole record of the text ends: behind the last line end outside quotes. */
@@ -69,7 +59,11 @@ function lastRecordEnd(text: string): number {
   return end;
 }
 
-function parsedRows(text: string, firstLine: number): CsvRows & { nextLine: number } {
+/**
+ * The rows of a piece of CSV text (RFC 4180) that begins on `firstLine`, blank lines passed over, and the line on which
+ * the next piece begins. Throws `UnreadableFile` for quotes that do not match.
+ */
+export function csvRows(text: string, firstLine: number): CsvRows & { nextLine: number } {
   const { data, errors } = Papa.parse<string[]>(text, { delimiter: ',' });
   const error = errors.find((e) => e.type === 'Quotes');
   const quoted = text.includes('"');

@@ -1,6 +1,7 @@
 import type { ClientBase, Pool } from 'pg';
 import type { Actor } from '@/lib/access/actor';
 import type { Measurement, Outcome } from './types';
+import { sentContent } from './sent-content';
 import { runOrLot } from './wafer-rows';
 
 /** What is on record of these measurements already, and repetitions among themselves; null for the new ones. */
@@ -8,7 +9,6 @@ export async function earlierOutcomes(
   _actor: Actor,
   client: ClientBase | Pool,
   measurements: readonly Measurement[],
-  hashes: readonly string[],
 ): Promise<(Outcome | null)[]> {
   const { rows } = await client.query<{ place: number; content_hash: string }>(
     `SELECT given.place::integer - 1 AS place, w.content_hash
@@ -24,10 +24,11 @@ export async function earlierOutcomes(
   );
   const known = new Map(rows.map((row) => [row.place, row.content_hash]));
   const seen = new Map<string, string>();
-  return measurements.map(({ streamId, facts }, index) => {
+  return measurements.map((measurement, index) => {
+    const { streamId, facts } = measurement;
     const identity = JSON.stringify([streamId, runOrLot(facts), facts.wafer, facts.measuredAt.getTime()]);
     const earlier = known.get(index) ?? seen.get(identity);
-    const hash = hashes[index] as string;
+    const { hash } = sentContent(measurement);
     if (earlier === undefined) {
       seen.set(identity, hash);
       return null;

@@ -1,15 +1,16 @@
 import type { Actor } from '@/lib/access/actor';
 import { getPool } from '@/lib/database/client';
-import { listStreams, listStreamSettings } from '@/lib/streams/data';
+import { listSettingsInUse } from '@/lib/streams/data';
 import type { StreamSettings } from '@/lib/streams/types';
 import { checkedMeasurement } from './checked-measurement';
-import { csvRows, UnreadableFile } from './csv-rows';
+import { csvPieces, UnreadableFile } from './csv-rows';
 import { earlierOutcomes } from './earlier-outcomes';
 import { mapPreview, type MapPreview } from './map-preview';
-import { rawMaps, type RawMap } from './raw-maps';
+import { rawMaps, SpoiltHeader, type RawMap } from './raw-maps';
 import type { MapHeader } from './map-columns';
 import type { MapProblem, Measurement } from './types';
-import { contentHash, runOrLot } from './wafer-rows';
+import { sentContent } from './sent-content';
+import { runOrLot } from './wafer-rows';
 
 /** A file that can be read more than once, from its beginning. */
 export interface FileSource {
@@ -28,10 +29,16 @@ export interface FileCheck {
   problemCount: number;
   previews: MapPreview[];
   notices: string[];
+  /** The first measurements, kept so that a file of ordinary size need not be read twice; `keptTo` places are covered. */
+  kept: (FileMeasurement | undefined)[];
+  keptTo: number;
 }
 
 export const MOST_PROBLEMS = 1000;
 export const MOST_PREVIEWS = 50;
+
+/** So many readings are kept between checking and recording; beyond them the file is read again. */
+const MOST_KEPT_READINGS = 1_000_000;
 
 /** A measurement as a file holds it: its place among the others, the line it begins on, and what checking made of it. */
 export interface FileMeasurement {
@@ -53,11 +60,7 @@ export class SpoiltFile extends Error {
 
 /** The settings of every stream in use, by the name that stands in files. */
 export async function settingsBySlug(actor: Actor): Promise<Map<string, StreamSettings>> {
-  const streams = await listStreams(actor);
-  const settings = await listStreamSettings(
-    actor,
-    streams.map((stream) => stream.id),
-  );
+  const settings = await listSettingsInUse(actor);
   return new Map(settings.map((one) => [one.stream.slug, one]));
 }
 
@@ -82,12 +85,9 @@ export async function* fileMeasurements(
     reason,
   });
   try {
-    for await (const parts of rawMaps(csvRows(file.open()))) {
+    for await (const parts of rawMaps(csvPieces(file.open()))) {
       const some: FileMeasurement[] = [];
       for (const part of parts) {
-        if (part.kind === 'faults') {
-          throw new SpoiltFile(part.faults.map(({ line, column, reason }) => spoilt(line, column, reason)));
-        }
         if (part.kind === 'header') {
           header = part.header;
           onHeader(header);
@@ -111,6 +111,9 @@ export async function* fileMeasurements(
     }
     if (place === 0) throw new SpoiltFile([spoilt(null, null, 'there are no readings below the header')]);
   } catch (error) {
+    if (error instanceof SpoiltHeader) {
+      throw new SpoiltFile(error.faults.map(({ line, column, reason }) => spoilt(line, column, reason)));
+    }
     if (error instanceof UnreadableFile) throw new SpoiltFile([spoilt(error.line, null, error.message)]);
     throw error;
   }
@@ -134,7 +137,10 @@ export async function checkFile(
     problemCount: 0,
     previews: [],
     notices: [],
+    kept: [],
+    keptTo: 0,
   };
+  let readings = 0;
   const seen = new Map<string, { place: number; line: number; hash: string }>();
   const refuse = (place: number, problems: readonly MapProblem[]) => {
     check.faulty.add(place);
@@ -148,13 +154,18 @@ export async function checkFile(
   };
   for await (const some of fileMeasurements(file, settings, defaults, onHeader)) {
     check.measurements += some.length;
-    const sound: { place: number; line: number; name: string; measurement: Measurement; hash: string }[] = [];
+    const sound: { place: number; line: number; name: string; measurement: Measurement }[] = [];
+    if (readings < MOST_KEPT_READINGS) {
+      check.kept.push(...some);
+      check.keptTo = check.measurements;
+    }
     for (const { place, line, name, found } of some) {
       if (Array.isArray(found)) {
         refuse(place, found);
         continue;
       }
-      const hash = contentHash(found);
+      readings += found.readings.length;
+      const { hash } = sentContent(found);
       const identity = JSON.stringify([
         found.streamId,
         runOrLot(found.facts),
@@ -169,13 +180,12 @@ export async function checkFile(
         continue;
       }
       if (earlier === undefined) seen.set(identity, { place, line, hash });
-      sound.push({ place, line, name, measurement: found, hash });
+      sound.push({ place, line, name, measurement: found });
     }
     const earlier = await earlierOutcomes(
       actor,
       getPool(),
       sound.map((one) => one.measurement),
-      sound.map((one) => one.hash),
     );
     sound.forEach(({ place, line, name, measurement }, i) => {
       const outcome = earlier[i];

@@ -1,12 +1,16 @@
 import type { Actor } from '@/lib/access/actor';
-import { getPool, getPrisma } from '@/lib/database/client';
+import { getPool } from '@/lib/database/client';
+import { columnNames, rowsAsQuery, type Column } from '@/lib/database/columnar';
 import { takeIds } from '@/lib/database/take-ids';
+import { inTransaction } from '@/lib/database/transaction';
 import {
   checkFile,
   fileMeasurements,
   MOST_PROBLEMS,
   settingsBySlug,
   SpoiltFile,
+  type FileCheck,
+  type FileMeasurement,
   type FileSource,
 } from './file-check';
 import type { RawMap } from './raw-maps';
@@ -66,7 +70,7 @@ export async function intakeFile(
     }
     if (options.checkOnly) return { ...result, repeated: check.repeated };
     if (check.faulty.size === 0 || options.sound)
-      await recordSound(actor, file, batch, check.faulty, options, result);
+      await recordSound(actor, file, batch, check, options, result);
     else if (check.measurements > check.faulty.size) {
       const left = check.measurements - check.faulty.size;
       result.notices.push(
@@ -87,11 +91,10 @@ async function recordSound(
   actor: Actor,
   file: FileSource,
   batch: Batch,
-  faulty: ReadonlySet<number>,
+  check: FileCheck,
   options: IntakeOptions,
   result: IntakeResult,
 ): Promise<void> {
-  const settings = await settingsBySlug(actor);
   let waiting: { measurement: Measurement; line: number; name: string }[] = [];
   let readings = 0;
   const record = async () => {
@@ -116,17 +119,26 @@ async function recordSound(
     readings = 0;
     options.onProgress?.(result.recorded + result.repeated);
   };
-  for await (const some of fileMeasurements(file, settings, options.defaults)) {
-    for (const { place, line, name, found } of some) {
-      if (faulty.has(place)) continue;
-      if (Array.isArray(found)) {
-        result.refused += 1;
-        result.refusals.push(...found);
-        continue;
-      }
-      waiting.push({ measurement: found, line, name });
-      readings += found.readings.length;
-      if (readings >= READINGS_AT_ONCE) await record();
+  const take = async ({ place, line, name, found }: FileMeasurement) => {
+    if (check.faulty.has(place)) return;
+    if (Array.isArray(found)) {
+      result.refused += 1;
+      result.refusals.push(...found);
+      return;
+    }
+    waiting.push({ measurement: found, line, name });
+    readings += found.readings.length;
+    if (readings >= READINGS_AT_ONCE) await record();
+  };
+  for (let i = 0; i < check.kept.length; i += 1) {
+    const one = check.kept[i];
+    check.kept[i] = undefined;
+    if (one !== undefined) await take(one);
+  }
+  if (check.measurements > check.keptTo) {
+    const settings = await settingsBySlug(actor);
+    for await (const some of fileMeasurements(file, settings, options.defaults)) {
+      for (const one of some) if (one.place >= check.keptTo) await take(one);
     }
   }
   await record();
@@ -134,26 +146,31 @@ async function recordSound(
 
 /** Writes down what became of the file, its refusals with it. */
 async function fileBatch(actor: Actor, batch: Batch, result: IntakeResult): Promise<void> {
-  const { repeated, refused } = result;
-  const prisma = getPrisma();
-  const id = BigInt(batch.id);
-  const { source, origin, history } = batch;
-  const listed: MapProblem[] = result.refusals.slice(0, MOST_PROBLEMS);
-  await prisma.$transaction([
-    prisma.intakeBatch.upsert({
-      where: { id },
-      create: { id, source, origin, history, actor: actor.name, repeated, refused, finishedAt: new Date() },
-      update: { repeated, refused, finishedAt: new Date() },
-    }),
-    prisma.intakeRefusal.createMany({
-      data: listed.map(({ file, line, column, measurement, reason }) => ({
-        batchId: id,
-        file,
-        line,
-        columnName: column,
-        measurement,
-        reason,
-      })),
-    }),
-  ]);
+  const listed = result.refusals
+    .slice(0, MOST_PROBLEMS)
+    .map((refusal) => ({ batchId: batch.id, ...refusal }));
+  await inTransaction(async (client) => {
+    await client.query(
+      `INSERT INTO intake_batch (id, source, origin, history, actor, repeated, refused, finished_at)
+       VALUES ($1, $2, $3, $4, $5, $6, $7, now())
+       ON CONFLICT (id) DO UPDATE SET repeated = excluded.repeated, refused = excluded.refused, finished_at = now()`,
+      [batch.id, batch.source, batch.origin, batch.history, actor.name, result.repeated, result.refused],
+    );
+    const parameters: unknown[] = [];
+    const given = rowsAsQuery(REFUSAL_COLUMNS, listed, parameters);
+    const columns = columnNames(REFUSAL_COLUMNS);
+    await client.query(
+      `INSERT INTO intake_refusal (${columns}) SELECT given.* FROM ${given} given`,
+      parameters,
+    );
+  });
 }
+
+const REFUSAL_COLUMNS: readonly Column<MapProblem & { batchId: string }>[] = [
+  { name: 'batch_id', type: 'bigint', value: (row) => row.batchId },
+  { name: 'file', type: 'text', value: (row) => row.file },
+  { name: 'line', type: 'integer', value: (row) => row.line },
+  { name: 'column_name', type: 'text', value: (row) => row.column },
+  { name: 'measurement', type: 'text', value: (row) => row.measurement },
+  { name: 'reason', type: 'text', value: (row) => row.reason },
+];

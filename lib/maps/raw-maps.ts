@@ -1,6 +1,7 @@
-import type { CsvRows } from './csv-rows';
-import { UnreadableFile } from './csv-rows';
+import { csvRows, UnreadableFile } from './csv-rows';
 import { mapHeader, type MapHeader, type WaferColumn } from './map-columns';
+import { readNumber } from './read-number';
+import { repeatedRows, rowCore, rowFrame, type RowCore, type RowFrame } from './repeated-rows';
 
 /** The rows of one measurement as they stand in the file: places and values as numbers, the rest still as words. */
 export interface RawMap {
@@ -16,52 +17,81 @@ export interface RawMap {
 }
 
 /** What a reader of a file yields: its header once, then each measurement, whole. */
-export type MapPart =
-  | { kind: 'header'; header: MapHeader }
-  | { kind: 'faults'; faults: { line: number; column: string | null; reason: string }[] }
-  | { kind: 'map'; map: RawMap };
+export type MapPart = { kind: 'header'; header: MapHeader } | { kind: 'map'; map: RawMap };
 
 const IDENTITY: readonly WaferColumn[] = ['stream', 'lot', 'run', 'wafer', 'measured_at'];
-const NUMBER = /^[+-]?(\d+\.?\d*|\.\d+)([eE][+-]?\d+)?$/;
 const NOT_FINITE = /^[+-]?(nan|inf|infinity)$/i;
 
 /** Cells of one wafer that disagree are told once per column, and no more than this many faults per wafer are kept. */
 const MOST_FAULTS = 20;
 
+/** The measurement being gathered, the cells of its first row, and what its rows share. */
+interface Gathering {
+  map: RawMap;
+  cells: readonly string[];
+  frame: RowFrame | null;
+}
+
 /**
  * Gathers the rows of a wafer-map file into measurements: rows that follow each other and name the same stream, lot,
- * run, wafer and time of measurement. Holds one measurement at a time.
+ * run, wafer and time of measurement. Holds one measurement at a time. `pieces` are texts of whole records.
  */
-export async function* rawMaps(batches: AsyncIterable<CsvRows>): AsyncGenerator<MapPart[]> {
+export async function* rawMaps(pieces: AsyncIterable<string>): AsyncGenerator<MapPart[]> {
   let header: MapHeader | null = null;
-  let current: { map: RawMap; cells: string[] } | null = null;
-  for await (const { rows, lines } of batches) {
+  let core: RowCore | null = null;
+  let current: Gathering | null = null;
+  let line = 1;
+  for await (const text of pieces) {
     const parts: MapPart[] = [];
-    let index = 0;
-    if (header === null) {
-      const found = mapHeader(rows[0] as string[]);
-      const line = lines[0] as number;
-      if ('faults' in found) {
-        yield [{ kind: 'faults', faults: found.faults.map((fault) => ({ line, ...fault })) }];
-        return;
-      }
-      header = found;
-      parts.push({ kind: 'header', header });
-      index = 1;
-    }
-    for (; index < rows.length; index += 1) {
-      const row = rows[index] as string[];
-      const line = lines[index] as number;
-      if (current === null || !sameIdentity(header, current.cells, row)) {
+    const take = (header: MapHeader, cells: readonly string[], at: number) => {
+      if (current === null || !sameIdentity(header, current.cells, cells)) {
         if (current !== null) parts.push({ kind: 'map', map: current.map });
-        current = { map: begun(header, row, line), cells: row };
+        current = { map: begun(header, cells, at), cells, frame: core && rowFrame(core, cells) };
       }
-      addRow(header, current.map, current.cells, row, line);
+      addRow(header, current.map, current.cells, cells, at);
+    };
+    if (header !== null && core !== null && !text.includes('"')) {
+      for (let position = 0; position < text.length; line += 1) {
+        const going = current as Gathering | null;
+        if (going !== null && going.frame !== null) {
+          const taken = repeatedRows(text, position, line, going.frame, core, going.map);
+          position = taken.position;
+          line += taken.rows;
+          if (position >= text.length) break;
+        }
+        const end = text.indexOf('\n', position);
+        const row = text.slice(position, end === -1 ? text.length : end).replace(/\r$/, '');
+        if (row !== '') take(header, row.split(','), line);
+        position = end === -1 ? text.length : end + 1;
+      }
+    } else {
+      const { rows, lines, nextLine } = csvRows(text, line);
+      line = nextLine;
+      rows.forEach((row, index) => {
+        const at = lines[index] as number;
+        if (header !== null) return take(header, row, at);
+        const found = mapHeader(row);
+        if ('faults' in found) throw new SpoiltHeader(found.faults.map((fault) => ({ line: at, ...fault })));
+        header = found;
+        core = rowCore(found);
+        parts.push({ kind: 'header', header: found });
+      });
     }
     yield parts;
   }
   if (header === null) throw new UnreadableFile('the file is empty');
-  yield current === null ? [] : [{ kind: 'map', map: current.map }];
+  const last = current as Gathering | null;
+  yield last === null ? [] : [{ kind: 'map', map: last.map }];
+}
+
+/** The header of a file cannot serve. */
+export class SpoiltHeader extends Error {
+  readonly faults: RawMap['faults'];
+
+  constructor(faults: RawMap['faults']) {
+    super(faults.map((fault) => fault.reason).join('; '));
+    this.faults = faults;
+  }
 }
 
 function sameIdentity(header: MapHeader, first: readonly string[], row: readonly string[]): boolean {
@@ -98,30 +128,18 @@ function addRow(
       if (!known) fault(column, `"${row[index]}" here, but "${first[index]}" on the wafer's first row`);
     }
   }
-  const x = number(row[header.x] as string);
-  const y = number(row[header.y] as string);
+  const x = readNumber(row[header.x] as string);
+  const y = readNumber(row[header.y] as string);
   if (x === null || !Number.isFinite(x)) fault('x_mm', notANumber(row[header.x]));
   if (y === null || !Number.isFinite(y)) fault('y_mm', notANumber(row[header.y]));
   const cell = row[header.value] as string;
-  const value = number(cell);
+  const value = readNumber(cell);
   if (value !== null && Number.isNaN(value) && !NOT_FINITE.test(cell.trim()))
     fault(header.valueColumn, notANumber(cell));
   map.xMm.push(x ?? NaN);
   map.yMm.push(y ?? NaN);
   map.values.push(value);
   map.lines.push(line);
-}
-
-/** A cell as a number; null when it is empty, NaN when it is no finite number. */
-function number(cell: string): number | null {
-  if (NUMBER.test(cell)) return finite(Number(cell));
-  const trimmed = cell.trim();
-  if (trimmed === '') return null;
-  return NUMBER.test(trimmed) ? finite(Number(trimmed)) : NaN;
-}
-
-function finite(value: number): number {
-  return Number.isFinite(value) ? value : NaN;
 }
 
 function notANumber(cell: string | undefined): string {

@@ -17,7 +17,7 @@ export function readFacts(
   defaults: RawMap['words'],
 ): { facts: MeasurementFacts; diameterMm: number | null; faults: WordFault[] } {
   const faults: WordFault[] = [];
-  const word = (column: WaferColumn): string | null => words[column] || defaults[column] || null;
+  const word = (column: WaferColumn): string | null => detached(words[column] || defaults[column]) || null;
   const time = (column: 'measured_at' | 'processed_at'): Date | null => {
     const text = word(column);
     if (text === null) return null;
@@ -77,6 +77,11 @@ export function readFacts(
     note: word('note'),
   };
   return { facts, diameterMm: number('diameter_mm', 'a diameter above 0', positive), faults };
+}
+
+/** A copy of its own: a piece of a larger text would keep the whole of that text in memory. */
+function detached(text: string | undefined): string {
+  return text === undefined ? '' : Buffer.from(text).toString();
 }
 
 /** Without a word of its own a resistivity or sheet resistance has had every correction. */

@@ -10,7 +10,7 @@ import { earlierOutcomes } from './earlier-outcomes';
 import { measuredWafer } from './measured-wafer';
 import { recordStatement, type Batch } from './record-statement';
 import type { Measurement, Outcome } from './types';
-import { contentHash, subgroupKey, type WaferRow } from './wafer-rows';
+import { subgroupKey, type WaferRow } from './wafer-rows';
 
 /** Why a signal that no longer holds was withdrawn, when wafers were recorded. */
 const LATE = 'a wafer recorded later changed the order or the values of its points';
@@ -55,13 +55,7 @@ async function recordedAlone(
   }
   const [id = ''] = await takeIds(pool, 'wafer_measurement', 1);
   const [subgroupId = ''] = await takeIds(pool, 'subgroup', 1);
-  const work = worked(
-    desk,
-    actor,
-    batch,
-    [{ measurement, id, hash: contentHash(measurement) }],
-    () => subgroupId,
-  );
+  const work = worked(desk, actor, batch, [{ measurement, id }], () => subgroupId);
   if (work === null || !isPlain(work.judged)) return null;
   try {
     const { text, values } = recordStatement([work.judged], work.rows, batch);
@@ -92,8 +86,7 @@ async function recordedTogether(
       'SELECT id, version FROM stream WHERE id = ANY($1::bigint[]) ORDER BY id FOR UPDATE',
       [streamIds],
     );
-    const hashes = measurements.map(contentHash);
-    const outcomes = await earlierOutcomes(actor, client, measurements, hashes);
+    const outcomes = await earlierOutcomes(actor, client, measurements);
     const fresh = measurements.flatMap((measurement, index) =>
       outcomes[index] ? [] : [{ measurement, index }],
     );
@@ -108,7 +101,7 @@ async function recordedTogether(
         if (measurement.streamId !== streamId) return [];
         const id = ids[place] as string;
         outcomes[index] = { kind: 'recorded', waferId: id };
-        return [{ measurement, id, hash: hashes[index] as string }];
+        return [{ measurement, id }];
       });
       const work = worked(desk, actor, batch, own, () => subgroupIds.pop() as string);
       if (work === null) throw new LineTooShort();
@@ -140,7 +133,7 @@ function worked(
   desk: Desk,
   actor: Actor,
   batch: Batch,
-  fresh: readonly { measurement: Measurement; id: string; hash: string }[],
+  fresh: readonly { measurement: Measurement; id: string }[],
   newId: () => string,
 ): { judged: JudgedLine; rows: WaferRow[] } | null {
   const { stream } = desk.by.settings;
@@ -156,12 +149,11 @@ function worked(
   try {
     const { touched, pointOf, from } = joinedMembers(desk.line, additions, newId);
     const change = judgedLine(desk.line, touched, from, LATE);
-    const rows = fresh.map(({ measurement, id, hash }, i) => ({
+    const rows = fresh.map(({ measurement, id }, i) => ({
       id,
       subgroupId: pointOf[i]?.id ?? '',
       batchId: batch.id,
       measurement,
-      hash,
       history: batch.history,
       recordedAt: batch.at ?? new Date(),
       recordedBy: actor.name,

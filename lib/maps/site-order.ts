@@ -23,6 +23,10 @@ export function inSiteOrder(
     lines: readonly number[];
   },
 ): { readings: (number | null)[]; faults: SiteFault[] } {
+  const isPlanOrder =
+    rows.values.length === plan.sites.length &&
+    rows.values.every((_, row) => isAt(plan, row, rows.xMm[row] as number, rows.yMm[row] as number));
+  if (isPlanOrder) return { readings: rows.values.slice(), faults: [] };
   const readings = new Array<number | null>(plan.sites.length).fill(null);
   const rowOf = new Int32Array(plan.sites.length).fill(-1);
   const faults: SiteFault[] = [];

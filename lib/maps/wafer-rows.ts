@@ -1,6 +1,6 @@
-import { createHash } from 'node:crypto';
 import { arrayLiteral, type Column } from '@/lib/database/columnar';
 import type { MeasuredWafer } from './measured-wafer';
+import { sentContent } from './sent-content';
 import type { Measurement, MeasurementFacts } from './types';
 import { correctedBy } from './values-at-23c';
 
@@ -10,7 +10,6 @@ export interface WaferRow {
   subgroupId: string;
   batchId: string;
   measurement: Measurement;
-  hash: string;
   history: boolean;
   recordedAt: Date;
   recordedBy: string;
@@ -27,36 +26,6 @@ export function runOrLot(facts: MeasurementFacts): string {
 export function subgroupKey(kind: 'wafer' | 'run' | 'lot' | 'ingot', facts: MeasurementFacts): string {
   if (kind === 'wafer') return `${runOrLot(facts)}/${facts.wafer}/${facts.measuredAt.toISOString()}`;
   return (kind === 'run' ? facts.run : facts.lot) ?? '';
-}
-
-/** A digest of all that was sent: the same measurement with the same content is recorded once. */
-export function contentHash({ facts, readings }: Measurement): string {
-  const { lot, run, wafer, slot, measuredAt, processedAt, stage, tool, chamber, recipe, gauge, operator } =
-    facts;
-  const { temperatureC, thicknessUm, ingotFraction, correctionsApplied, note } = facts;
-  const words = [
-    lot,
-    run,
-    wafer,
-    slot,
-    measuredAt.getTime(),
-    processedAt.getTime(),
-    stage,
-    tool,
-    chamber,
-    recipe,
-  ];
-  const more = [
-    gauge,
-    operator,
-    temperatureC,
-    thicknessUm,
-    ingotFraction,
-    correctionsApplied.join(' '),
-    note,
-  ];
-  const text = `${JSON.stringify([words, more])}${readings.join()}`;
-  return createHash('sha256').update(text).digest('hex').slice(0, 32);
 }
 
 /** What measuring a wafer decides, under a certain screening. */
@@ -161,7 +130,7 @@ export const WAFER_COLUMNS: readonly Column<WaferRow>[] = [
     value: ({ measurement }) => correctedBy(measurement.facts.correctionsApplied),
   },
   fact('note', 'note', 'text'),
-  { name: 'content_hash', type: 'text', value: (row) => row.hash },
+  { name: 'content_hash', type: 'text', value: (row) => sentContent(row.measurement).hash },
   { name: 'history', type: 'boolean', value: (row) => row.history },
   { name: 'recorded_at', type: 'timestamptz', value: (row) => row.recordedAt.toISOString() },
   { name: 'recorded_by', type: 'text', value: (row) => row.recordedBy },
@@ -172,7 +141,7 @@ export const WAFER_COLUMNS: readonly Column<WaferRow>[] = [
 export const READING_COLUMNS: readonly Column<WaferRow>[] = [
   { name: 'stream_id', type: 'bigint', value: (row) => row.measurement.streamId },
   { name: 'wafer_id', type: 'bigint', value: (row) => row.id },
-  { name: 'reading', type: 'float8[]', value: (row) => arrayLiteral(row.measurement.readings) },
+  { name: 'reading', type: 'float8[]', value: (row) => sentContent(row.measurement).readings },
 ];
 
 function badSites({ measure }: MeasuredWafer): number[] {

@@ -58,7 +58,7 @@ async function recordFiles(args: string[], output: VerbOutput): Promise<ExitStat
     for (const path of positionals) {
       const result = await intakeFile(
         commandActor(),
-        { name: basename(path), open: () => createReadStream(path, { highWaterMark: 1 << 20 }) },
+        { name: basename(path), open: () => createReadStream(path, { highWaterMark: 1 << 17 }) },
         {
           origin: 'command',
           history: values.history === true,
