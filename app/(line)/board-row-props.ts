@@ -1,6 +1,7 @@
 import type { BoardRowProps } from '@/app/_charts/board-row';
 import type { BoardRow } from '@/lib/excursions/board-rows';
 import { toMeasureWords } from '@/lib/excursions/board-state';
+import { whoWords } from '@/lib/excursions/excursion-words';
 import { formatAge, formatPercent, formatSignedPercent } from '@/lib/format';
 
 type Drawn = Omit<BoardRowProps, 'cases'> & {
@@ -31,9 +32,7 @@ export function boardRowProps(row: BoardRow, now: Date, reachPercent: number): D
       ? {
           id: worst.id,
           words: [
-            worst.acknowledgedBy === null
-              ? 'nobody yet'
-              : `${STATE_WORDS[worst.state]} by ${worst.acknowledgedBy}`,
+            whoWords(worst),
             age(worst.openedAt),
             ...(stream.openCases > 1 ? [`${stream.openCases - 1} more`] : []),
           ].join(' · '),
@@ -47,13 +46,6 @@ export function boardRowProps(row: BoardRow, now: Date, reachPercent: number): D
 export function carried({ wafer, runOrLot }: { wafer: string; runOrLot: string }): string {
   return runOrLot === '' ? wafer : `${wafer} (${runOrLot})`;
 }
-
-const STATE_WORDS = {
-  open: 'open',
-  acknowledged: 'acknowledged',
-  'under-investigation': 'under investigation',
-  closed: 'closed',
-} as const;
 
 function expectedProps({ expected, stream, calls }: BoardRow, reachPercent: number) {
   if (expected === null) return null;

@@ -1,5 +1,6 @@
 import type { Pool } from 'pg';
 import { type BoardStreamRow, boardStreamOf } from './board-stream-rows';
+import { LEAD_SIGNAL } from './lead-signal-statement';
 import type { BoardStream } from './types';
 
 /** How many levels a row of the board shows. */
@@ -75,8 +76,7 @@ CROSS JOIN LATERAL (
     ORDER BY e.family = 'specification' DESC, e.state = 'open' DESC, e.id DESC) AS cases
   FROM (SELECT * FROM excursion x WHERE x.stream_id = s.id AND x.state <> 'closed'
     ORDER BY x.family = 'specification' DESC, x.state = 'open' DESC, x.id DESC LIMIT ${CASES_READ}) e
-  LEFT JOIN LATERAL (SELECT * FROM signal
-    WHERE stream_id = e.stream_id AND excursion_id = e.id AND withdrawn_at IS NULL ORDER BY id DESC LIMIT 1) g ON true
+  LEFT JOIN LATERAL (${LEAD_SIGNAL}) g ON true
   LEFT JOIN subgroup p ON p.stream_id = g.stream_id AND p.id = g.last_subgroup_id
   LEFT JOIN limit_revision l ON l.stream_id = p.stream_id AND l.id = p.limit_revision_id) cases
 WHERE s.retired_at IS NULL ORDER BY s.name, s.id`;

@@ -1,4 +1,5 @@
 import type { Pool } from 'pg';
+import { LEAD_SIGNAL } from './lead-signal-statement';
 import type { ExcursionFilter, ExcursionList, ExcursionState, ListedExcursion, SignalWords } from './types';
 
 export interface ExcursionWish {
@@ -35,8 +36,7 @@ JOIN subgroup z ON z.stream_id = e.stream_id AND z.id = e.last_subgroup_id
 LEFT JOIN LATERAL (
   SELECT json_build_object('chart', g.chart, 'rule', g.rule, 'side', g.side, 'completions', g.completions,
     'participantIds', g.participant_ids::text[]) AS signal
-  FROM signal g WHERE g.stream_id = e.stream_id AND g.excursion_id = e.id AND g.withdrawn_at IS NULL
-  ORDER BY g.id DESC LIMIT 1) held ON true
+  FROM (${LEAD_SIGNAL}) g) held ON true
 ORDER BY array_position('{open,acknowledged,under-investigation,closed}', e.state), e.opened_at DESC, e.id DESC`;
 
 const COUNTS = `

@@ -179,8 +179,13 @@ export interface CaseLimits {
 }
 
 /** One excursion with all that its page tells. */
-export interface ExcursionCase extends Omit<ListedExcursion, 'stream' | 'signals' | 'signal'> {
+export interface ExcursionCase extends Omit<
+  ListedExcursion,
+  'stream' | 'signals' | 'signal' | 'first' | 'last'
+> {
   stream: CaseStream;
+  first: NamedSubgroup;
+  last: NamedSubgroup;
   acknowledgedAt: Date | null;
   /** Newest first; withdrawn ones are among them. */
   signals: CaseSignal[];

@@ -1,0 +1,34 @@
+'use server';
+
+import { revalidatePath } from 'next/cache';
+import { doneForm, type FormState, formWords, refusedForm } from '@/app/_ui/form-state';
+import { localActor } from '@/lib/access/local-actor';
+import { stepExcursion } from '@/lib/excursions/mutations';
+import { excursionId, excursionStep } from '@/lib/excursions/schema';
+
+const DONE = {
+  acknowledged: 'Acknowledged.',
+  'under-investigation': 'Under investigation.',
+  noted: 'The note is in the log.',
+  closed: 'Closed.',
+} as const;
+
+/** Takes an excursion a step further: acknowledge, investigate, note, or close with its cause. */
+export async function takeStep(id: string, before: FormState, form: FormData): Promise<FormState> {
+  const actor = localActor();
+  const excursion = excursionId.safeParse(id);
+  const step = excursionStep.safeParse(formWords(form));
+  if (!excursion.success) return refusedForm(before, { message: 'There is no such excursion.' });
+  if (!step.success) {
+    const errors = step.error.issues.map(({ path, message }) => ({
+      field: String(path[0] ?? ''),
+      reason: message,
+    }));
+    const known = errors.filter(({ field }) => field === 'note' || field === 'cause');
+    return refusedForm(before, known.length > 0 ? { errors: known } : { message: 'This step is not known.' });
+  }
+  const result = await stepExcursion(actor, excursion.data, step.data);
+  revalidatePath(`/excursions/${excursion.data}`);
+  if (!result.ok) return refusedForm(before, { message: result.reason });
+  return doneForm(before, DONE[step.data.to]);
+}

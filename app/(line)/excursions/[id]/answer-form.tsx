@@ -1,0 +1,56 @@
+'use client';
+
+import { ActionForm } from '@/app/_ui/action-form';
+import { Button } from '@/app/_ui/button';
+import { TextField } from '@/app/_ui/field';
+import type { FormState } from '@/app/_ui/form-state';
+import type { ExcursionState } from '@/lib/excursions/types';
+
+type Action = (state: FormState, form: FormData) => Promise<FormState>;
+type Step = 'acknowledged' | 'under-investigation' | 'noted';
+
+const WORDS: Record<Step, string> = {
+  acknowledged: 'Acknowledge',
+  'under-investigation': 'Investigate',
+  noted: 'Add the note',
+};
+
+/** The steps a state leaves open; the first is the one it waits for. */
+const STEPS: Record<ExcursionState, readonly [Step, ...Step[]]> = {
+  open: ['acknowledged', 'under-investigation', 'noted'],
+  acknowledged: ['under-investigation', 'noted'],
+  'under-investigation': ['noted'],
+  closed: ['noted'],
+};
+
+/** Answers an excursion: says that someone looks after it, or adds what was found. */
+export function AnswerForm({ action, state }: { action: Action; state: ExcursionState }) {
+  const [first, ...others] = STEPS[state];
+  return (
+    <ActionForm
+      action={action}
+      label="Answer this excursion"
+      submit={WORDS[first]}
+      weight={state === 'open' ? 'main' : 'plain'}
+      aside={others.map((step) => (
+        <Button key={step} type="submit" name="to" value={step}>
+          {WORDS[step]}
+        </Button>
+      ))}
+    >
+      {(sent) => (
+        <>
+          <input type="hidden" name="to" value={first} />
+          <TextField
+            name="note"
+            id="answer-note"
+            label="Note"
+            hint={state === 'open' ? 'What you saw, what you will do; may stay empty.' : undefined}
+            maxLength={2000}
+            error={sent.errors.note ?? null}
+          />
+        </>
+      )}
+    </ActionForm>
+  );
+}

@@ -1,0 +1,114 @@
+import type { CaseChartProps } from '@/app/_charts/case-chart';
+import { chartMarkShape } from '@/app/_charts/chart-mark-shape';
+import { chartValue } from '@/app/_charts/chart-value';
+import type { LimitSpan } from '@/app/_charts/stream-chart-point';
+import { thinned } from '@/app/_charts/thinned';
+import type { ChartName } from '@/lib/control/completions-at';
+import { limitAge } from '@/lib/control/limit-age';
+import { limitInterval } from '@/lib/control/limit-interval';
+import { leadSignal } from '@/lib/excursions/case-answer';
+import { signalSentence } from '@/lib/excursions/signal-sentence';
+import type { CaseLimits, CasePoint, ExcursionCase } from '@/lib/excursions/types';
+import { formatShortDay } from './short-day';
+
+const MOST_POINTS = 240;
+
+/** The chart that a case is about; out of specification is about the level, or the spread within. */
+export function caseChartName(found: Pick<ExcursionCase, 'chart' | 'signals'>): ChartName {
+  if (found.chart !== 'specification') return found.chart as ChartName;
+  return found.signals.some((signal) => signal.rule !== 'nonuniformity') ? 'level' : 'within';
+}
+
+/** What the chart of a case draws. Limits are those that judged each subgroup; a long case is thinned. */
+export function caseChartProps(found: ExcursionCase, timeZone: string): Omit<CaseChartProps, 'axis'> {
+  const chart = caseChartName(found);
+  const held = found.signals.filter((signal) => signal.withdrawnAt === null);
+  const tookPart = new Set(held.flatMap((signal) => signal.participantIds));
+  const isFault = found.chart === 'specification';
+  const numbered = found.points.map((point, index) => ({ ...point, index }));
+  const place = (id: string, missing: number) => {
+    const at = found.points.findIndex((point) => point.id === id);
+    return at === -1 ? missing : at;
+  };
+  const reach = { from: place(found.first.id, 0), to: place(found.last.id, found.points.length - 1) };
+  const lead = leadSignal(found.signals);
+  const shown = thinned(numbered, MOST_POINTS);
+  const call = lead && { index: place(lead.first.id, -1), words: signalSentence(lead) };
+  return {
+    chart,
+    points: shown.map((point) => ({
+      index: point.index,
+      day: formatShortDay(point.at, timeZone),
+      value: chartValue(point, chart),
+      shape: shapeOf(point, chart, isFault),
+      tookPart: tookPart.has(point.id),
+    })),
+    limits: limitSpans(found.points, found.limits),
+    specification: isFault && chart === 'level' ? found.specification : null,
+    events: found.events.map(({ at, text }) => ({
+      index: numbered.findIndex((point) => point.at >= at) - 0.5,
+      text,
+    })),
+    reach: { from: Math.min(reach.from, reach.to), to: Math.max(reach.from, reach.to) },
+    call,
+    label: `${found.points.length} subgroups about case ${found.id}, ${tookPart.size} of which took part in its signals${
+      lead ? `: ${signalSentence(lead)}` : ''
+    }`,
+  };
+}
+
+function shapeOf(point: CasePoint, chart: ChartName, isFault: boolean) {
+  return chartMarkShape(
+    {
+      completions: point.completions,
+      outOfSpecification: isFault && point.outOfSpecification,
+      open: point.state === 'open',
+      judged: point.state === 'judged',
+      hollow: false,
+    },
+    chart,
+  );
+}
+
+/** Stretches of subgroups judged by the same revision. */
+export function limitSpans(
+  points: readonly Pick<CasePoint, 'limitsId'>[],
+  limits: readonly CaseLimits[],
+): LimitSpan[] {
+  const byId = new Map(limits.map((revision) => [revision.id, revision]));
+  const spans: LimitSpan[] = [];
+  let current: { id: string; span: LimitSpan } | null = null;
+  points.forEach(({ limitsId }, index) => {
+    const revision = limitsId === null ? undefined : byId.get(limitsId);
+    if (revision === undefined) {
+      current = null;
+    } else if (current?.id === revision.id) {
+      current.span.toIndex = index;
+    } else {
+      current = { id: revision.id, span: spanOf(revision, index) };
+      spans.push(current.span);
+    }
+  });
+  return spans;
+}
+
+function spanOf({ revision, state: approval, limits }: CaseLimits, index: number): LimitSpan {
+  const state = approval === 'provisional' ? 'provisional' : limitAge(limits.n);
+  const interval = state === 'young' ? limitInterval(limits).level : null;
+  return {
+    fromIndex: index,
+    toIndex: index,
+    revision,
+    state,
+    level: {
+      ...limits.level,
+      ...(interval && {
+        lowerInterval: [interval.lower.low, interval.lower.high] as const,
+        upperInterval: [interval.upper.low, interval.upper.high] as const,
+      }),
+    },
+    movingRange: limits.movingRange,
+    within: limits.within,
+    between: limits.between,
+  };
+}

@@ -1,0 +1,54 @@
+import { signalSentence } from './signal-sentence';
+import { subgroupLabel } from './subgroup-label';
+import type { CaseSignal, ExcursionCase } from './types';
+
+/**
+ * The signal that speaks for a case: of those that hold the one that went on longest, by its last subgroup, then by
+ * how many subgroups it counts. Null when none holds. The board and the lists choose by the same order.
+ */
+export function leadSignal(signals: readonly CaseSignal[]): CaseSignal | null {
+  const size = ({ participantIds, completions }: CaseSignal) => participantIds.length + completions;
+  return signals
+    .filter((signal) => signal.withdrawnAt === null)
+    .reduce<CaseSignal | null>((lead, signal) => {
+      if (lead === null) return signal;
+      const later = signal.last.at.getTime() - lead.last.at.getTime();
+      return later > 0 || (later === 0 && size(signal) > size(lead)) ? signal : lead;
+    }, null);
+}
+
+type Told = Pick<ExcursionCase, 'stream' | 'signals' | 'points'>;
+
+/**
+ * What happened in one sentence: the stream, its signal, and from which subgroup to which; "since" while the newest
+ * judged subgroup takes part.
+ *
+ * @example caseAnswer(found) // 'N-epi, Reactor 2: 8 in a row below the centre line, since run R1177'
+ */
+export function caseAnswer(found: Told): string {
+  const lead = leadSignal(found.signals);
+  if (lead === null) return `${found.stream.name}: the signals of this case no longer hold`;
+  return `${found.stream.name}: ${signalSentence(lead)}, ${when(lead, found)}`;
+}
+
+function when({ participants, first, last }: CaseSignal, { stream, points }: Told): string {
+  const begin = participants[0] ?? first;
+  const name = (one: { key: string }) => subgroupLabel(stream.subgroup, one.key);
+  const newest = points.findLast((point) => point.state === 'judged');
+  if (begin.id !== last.id && newest?.id === last.id) return `since ${name(begin)}`;
+  return begin.id === last.id ? `at ${name(last)}` : `from ${name(begin)} to ${name(last)}`;
+}
+
+/** How many signals hold, how many were withdrawn, and over how many subgroups the case reaches. */
+export function caseExtent(found: Pick<ExcursionCase, 'signals' | 'points' | 'first' | 'last'>): string {
+  const withdrawn = found.signals.filter((signal) => signal.withdrawnAt !== null).length;
+  const held = found.signals.length - withdrawn;
+  const from = found.points.findIndex((point) => point.id === found.first.id);
+  const to = found.points.findIndex((point) => point.id === found.last.id);
+  const reach = from === -1 || to === -1 ? null : Math.abs(to - from) + 1;
+  return [
+    held === 1 ? '1 signal' : `${held} signals`,
+    ...(withdrawn > 0 ? [`${withdrawn} withdrawn`] : []),
+    ...(reach === null ? [] : [reach === 1 ? 'one subgroup' : `over ${reach} subgroups`]),
+  ].join(', ');
+}

@@ -1,0 +1,80 @@
+import { describe, expect, it } from 'vitest';
+import { casePlot, type CasePlotInput, type CasePlotPoint } from '@/app/_charts/case-plot';
+
+const size = { width: 600, height: 200 };
+
+function input(values: readonly (number | null)[], change: Partial<CasePlotInput> = {}): CasePlotInput {
+  const points = values.map((value, index): CasePlotPoint => {
+    return { index, day: `${index} Mar`, value, shape: 'dot', tookPart: false };
+  });
+  const limits = {
+    fromIndex: 0,
+    toIndex: values.length - 1,
+    revision: 1,
+    state: 'young' as const,
+    level: {
+      centre: 10,
+      lower: 7,
+      upper: 13,
+      lowerInterval: [6, 8] as const,
+      upperInterval: [12, 14] as const,
+    },
+    movingRange: { centre: 1, upper: 4 },
+    within: null,
+    between: null,
+  };
+  return {
+    chart: 'level',
+    points,
+    limits: [limits],
+    specification: null,
+    events: [],
+    reach: { from: 1, to: 2 },
+    ...change,
+  };
+}
+
+describe('the chart of a case', () => {
+  it('stands inside its frame, higher values higher', () => {
+    const { marks, frame } = casePlot(input([8, 12, 10]), size);
+    for (const { x, y } of marks) {
+      expect(x).toBeGreaterThan(frame.left);
+      expect(x).toBeLessThan(frame.right);
+      expect(y).toBeGreaterThan(frame.top);
+      expect(y).toBeLessThan(frame.bottom);
+    }
+    expect(marks[1]?.y).toBeLessThan(marks[0]?.y ?? 0);
+  });
+
+  it('washes the reach of the case, half a step to either side', () => {
+    const { wash, marks } = casePlot(input([8, 9, 10, 11]), size);
+    const step = (marks[1]?.x ?? 0) - (marks[0]?.x ?? 0);
+    expect(wash.x).toBeCloseTo((marks[1]?.x ?? 0) - step / 2, 0);
+    expect(wash.width).toBeCloseTo(2 * step, 0);
+  });
+
+  it('keeps gaps gaps, and passes by what is left out', () => {
+    expect(casePlot(input([8, 9, null, 10, 11]), size).lines).toHaveLength(2);
+    const crossed = input([8, 9, 10]);
+    const points = crossed.points.map((point, at) =>
+      at === 1 ? { ...point, shape: 'cross' as const } : point,
+    );
+    const plot = casePlot({ ...crossed, points }, size);
+    expect(plot.lines[0]?.split(' ')).toHaveLength(2);
+    expect(plot.marks).toHaveLength(3);
+  });
+
+  it('draws the specification only where it does not squeeze the points', () => {
+    const near = casePlot(input([8, 12], { specification: { lower: 6, upper: null } }), size);
+    expect(near.specification).toHaveLength(1);
+    const far = casePlot(input([8, 12], { specification: { lower: null, upper: 1000 } }), size);
+    expect(far.specification).toHaveLength(0);
+  });
+
+  it('holds for one point and for none', () => {
+    expect(casePlot(input([10]), size).marks).toHaveLength(1);
+    const none = casePlot(input([], { limits: [], reach: { from: 0, to: 0 } }), size);
+    expect(none.marks).toHaveLength(0);
+    expect(none.lines).toHaveLength(0);
+  });
+});
