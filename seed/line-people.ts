@@ -9,14 +9,18 @@ const PROCESS_OWNER = 'process owner (demonstration)';
 
 const DAY_MS = 86_400_000;
 
-/** What the process owner wrote when the cause of a mishap had been found. */
-const FOUND: Partial<Record<Mishap['effect']['kind'], { afterDays: number; cause: string }>> = {
+/** What the process owner wrote when the cause of a mishap had been found, and for how long it made cases. */
+const FOUND: Partial<
+  Record<Mishap['effect']['kind'], { afterDays: number; lastsDays: number; cause: string }>
+> = {
   'gauge-offset': {
     afterDays: 4,
+    lastsDays: 4,
     cause: 'Gauge 4 read high; its probe head was changed. The wafers are good.',
   },
   'misrouted-wafer': {
     afterDays: 1,
+    lastsDays: 1.5,
     cause: 'A wafer of another recipe was measured as a monitor of this one.',
   },
 };
@@ -45,10 +49,10 @@ export async function lineDay(
   );
   for (const open of rows) {
     const known = mishapDays.get(open.slug);
-    const isMishap = known !== undefined && open.openedAt >= known.onset;
-    const found = isMishap
-      ? FOUND[known.mishap.effect.kind]
-      : { afterDays: 1, cause: 'No cause found: what chance brings.' };
+    const cause = known && FOUND[known.mishap.effect.kind];
+    const sinceOnset = known === undefined ? -1 : open.openedAt.getTime() - known.onset.getTime();
+    const isMishap = sinceOnset >= 0 && sinceOnset <= (cause?.lastsDays ?? Infinity) * DAY_MS;
+    const found = isMishap ? cause : { afterDays: 1, cause: 'No cause found: what chance brings.' };
     const age = now.getTime() - open.openedAt.getTime();
     if (open.state === 'open' && age >= DAY_MS / 2) {
       await write(open, now, 'acknowledged', SHIFT_LEAD, '', null);

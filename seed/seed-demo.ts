@@ -1,33 +1,42 @@
-import { programActor } from '@/lib/access/local-actor';
+import { demonstrationActor, programActor } from '@/lib/access/local-actor';
 import type { Actor } from '@/lib/access/actor';
 import { getPool } from '@/lib/database/client';
 import { takeIds } from '@/lib/database/take-ids';
 import { recordMeasurements } from '@/lib/maps/record-measurements';
 import { CORRECTIONS, type Measurement } from '@/lib/maps/types';
+import { findStreamSettings, listSitePlans, listStreamEvents } from '@/lib/streams/data';
 import { createSitePlan, createStream, recordStreamEvent } from '@/lib/streams/mutations';
 import type { DemoStream } from './demo-stream';
 import type { DemoWafer } from './demo-wafer';
 import { lineEvents } from './events';
+import { BASELINE_DAY, settleBaseline } from './line-baseline';
 import { lineDay } from './line-people';
 import { PLANT } from './plant';
 import { simulateStream } from './simulate';
 
-/** Whether the database holds no stream yet: only then the demonstration line is put in. */
-export async function isEmptyLine(): Promise<boolean> {
-  const { rowCount } = await getPool().query('SELECT FROM stream LIMIT 1');
-  return rowCount === 0;
+/**
+ * The instant at which the demonstration line ends, if it is still to be put in: now, where the database holds no
+ * stream; where an earlier start was interrupted, the instant that start had chosen. Null where there is nothing to do.
+ */
+export async function demoDue(now = new Date()): Promise<Date | null> {
+  const { rows } = await getPool().query<{ begun: Date | null; streams: boolean }>(
+    `SELECT (SELECT started_at FROM intake_batch WHERE origin = 'demonstration' AND source = $1 AND finished_at IS NULL) AS begun,
+       EXISTS (SELECT FROM stream) AS streams`,
+    [PLANT.name],
+  );
+  return rows[0]?.begun ?? (rows[0]?.streams ? null : now);
 }
 
 /**
- * Fills an empty database with the demonstration line, by the same way that any wafer takes: its streams, its log, and
- * the wafers of the days before `endAt` in the order in which they were measured. Returns the number of wafers.
+ * Fills a database with the demonstration line, by the same way that any wafer takes: its streams, its log, and the
+ * wafers of the days before `endAt`, day by day, with what its people did in the evening. It may be interrupted at any
+ * instant and begun again: what is there already is passed over. Returns the number of wafers.
  */
 export async function seedDemo(say: (text: string) => void, endAt = new Date()): Promise<number> {
   const actor = programActor();
+  const mark = await markBegun(endAt);
   const idOf = await createDemoStreams(actor, PLANT.streams);
-  for (const event of lineEvents(PLANT.days, endAt)) {
-    await recordStreamEvent(actor, idOf.get(event.streamSlug) ?? '', event);
-  }
+  await recordLog(actor, idOf, endAt);
   const measurements: Measurement[] = [];
   for (const stream of PLANT.streams) {
     for (const wafer of simulateStream(stream, { days: PLANT.days, endAt, seed: PLANT.seed })) {
@@ -35,40 +44,70 @@ export async function seedDemo(say: (text: string) => void, endAt = new Date()):
     }
   }
   measurements.sort((a, b) => a.facts.measuredAt.getTime() - b.facts.measuredAt.getTime());
-  const startMs = endAt.getTime() - PLANT.days * DAY_MS;
+  const start = new Date(endAt.getTime() - PLANT.days * DAY_MS);
   const onsets = new Map(
     PLANT.mishaps.map((mishap) => [
       mishap.streamSlug,
-      { mishap, onset: new Date(startMs + mishap.onsetDay * DAY_MS) },
+      { mishap, onset: new Date(start.getTime() + mishap.onsetDay * DAY_MS) },
     ]),
   );
   const batches = await takeIds(getPool(), 'intake_batch', PLANT.days);
   let done = 0;
-  for (let day = 0; day < PLANT.days; day += 1) {
-    const evening = new Date(startMs + (day + 1) * DAY_MS);
-    const rest = measurements.slice(done);
-    const next = rest.findIndex(({ facts }) => facts.measuredAt > evening);
-    const ofDay = next === -1 ? rest : rest.slice(0, next);
-    const batch = { id: batches[day] ?? '', source: `${PLANT.name}, day ${day + 1}`, at: evening, ...SENT };
+  for (let day = 1; day <= PLANT.days; day += 1) {
+    const evening = new Date(start.getTime() + day * DAY_MS);
+    const next = measurements.findIndex(({ facts }, i) => i >= done && facts.measuredAt > evening);
+    const ofDay = measurements.slice(done, next === -1 ? undefined : next);
+    const batch = { id: batches[day - 1] ?? '', source: `${PLANT.name}, day ${day}`, at: evening, ...SENT };
     await recordMeasurements(actor, batch, ofDay);
     await lineDay(actor, evening, onsets);
+    if (day === BASELINE_DAY) {
+      const owner = demonstrationActor('process owner');
+      for (const { slug } of PLANT.streams) await settleBaseline(owner, slug, start, evening);
+    }
     done += ofDay.length;
-    if (day % 10 === 9) say(`Demonstration line: day ${day + 1} of ${PLANT.days}, ${done} wafers.`);
+    if (day % 10 === 0) say(`Demonstration line: day ${day} of ${PLANT.days}, ${done} wafers.`);
   }
+  await getPool().query('UPDATE intake_batch SET finished_at = now() WHERE id = $1', [mark]);
   return done;
+}
+
+async function markBegun(endAt: Date): Promise<string> {
+  const { rows } = await getPool().query<{ id: string }>(
+    `WITH earlier AS (SELECT id FROM intake_batch WHERE origin = 'demonstration' AND source = $1 AND finished_at IS NULL),
+       begun AS (INSERT INTO intake_batch (source, origin, actor, started_at)
+         SELECT $1, 'demonstration', 'Evenohm', $2 WHERE NOT EXISTS (SELECT FROM earlier) RETURNING id)
+     SELECT id FROM earlier UNION ALL SELECT id FROM begun`,
+    [PLANT.name, endAt],
+  );
+  return rows[0]?.id ?? '';
+}
+
+async function recordLog(actor: Actor, idOf: ReadonlyMap<string, string>, endAt: Date): Promise<void> {
+  for (const event of lineEvents(PLANT.days, endAt)) {
+    const streamId = idOf.get(event.streamSlug) ?? '';
+    const known = await listStreamEvents(actor, streamId);
+    if (!known.some(({ at }) => at.getTime() === event.at.getTime())) {
+      await recordStreamEvent(actor, streamId, event);
+    }
+  }
 }
 
 const DAY_MS = 86_400_000;
 const SENT = { origin: 'demonstration', history: false, actor: 'Evenohm' } as const;
 
-/** Creates streams with their site plans; streams that share a plan's name share the plan. Returns ids by name. */
+/** Creates the streams and site plans that are not there yet; a plan is shared by its name. Returns ids by name. */
 export async function createDemoStreams(
   actor: Actor,
   streams: readonly DemoStream[],
 ): Promise<Map<string, string>> {
-  const planIds = new Map<string, string>();
+  const planIds = new Map((await listSitePlans(actor)).map((plan) => [plan.name, plan.id]));
   const idOf = new Map<string, string>();
   for (const stream of streams) {
+    const known = await findStreamSettings(actor, stream.slug);
+    if (known !== null) {
+      idOf.set(stream.slug, known.stream.id);
+      continue;
+    }
     const { sitePlanName: name, diameterMm, edgeExclusionMm } = stream;
     if (!planIds.has(name)) {
       const orientation = diameterMm <= 150 ? ('flat' as const) : ('notch' as const);

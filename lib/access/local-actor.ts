@@ -18,3 +18,8 @@ export function commandActor(): Actor {
 export function programActor(): Actor {
   return provenActor('Evenohm');
 }
+
+/** Someone in a role on the demonstration line: nobody in particular. */
+export function demonstrationActor(role: 'shift lead' | 'process owner'): Actor {
+  return provenActor(`${role} (demonstration)`);
+}

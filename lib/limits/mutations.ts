@@ -18,6 +18,7 @@ export async function draftLimits(
   streamId: string,
   span: { from: Date; to: Date },
   reason: string,
+  draftedAt = new Date(),
 ): Promise<Result> {
   const points = await listBaselinePoints(actor, streamId, span);
   if (points.length < 2)
@@ -31,7 +32,8 @@ export async function draftLimits(
       state: 'draft',
       origin: 'chosen-span',
       baselineIds,
-      at: new Date(),
+      at: draftedAt,
+      draftedAt,
       reason,
     }),
   );
@@ -65,7 +67,7 @@ export async function enterInheritedLimits(
 export async function approveLimits(
   actor: Actor,
   revisionId: string,
-  approval: { reason: string; effectiveFrom: Date },
+  approval: { reason: string; effectiveFrom: Date; at?: Date },
 ): Promise<Result> {
   return inTransaction(async (client) => {
     const { rows } = await client.query<{ stream_id: string; state: LimitState; revision: number }>(
@@ -79,9 +81,9 @@ export async function approveLimits(
     }
     await holdStream(client, found.stream_id);
     await client.query(
-      `UPDATE limit_revision SET state = 'approved', approved_by = $2, approved_at = now(), approval_reason = $3,
+      `UPDATE limit_revision SET state = 'approved', approved_by = $2, approved_at = $5, approval_reason = $3,
          effective_from = CASE WHEN state = 'draft' THEN $4 ELSE effective_from END WHERE id = $1`,
-      [revisionId, actor.name, approval.reason, approval.effectiveFrom],
+      [revisionId, actor.name, approval.reason, approval.effectiveFrom, approval.at ?? new Date()],
     );
     if (found.state === 'draft') {
       const why = `limit revision ${found.revision} took force`;
@@ -144,7 +146,14 @@ async function insertLimits(
   client: ClientBase,
   streamId: string,
   limits: LimitSet,
-  meta: { state: LimitState; origin: LimitOrigin; baselineIds: string[]; at: Date; reason: string },
+  meta: {
+    state: LimitState;
+    origin: LimitOrigin;
+    baselineIds: string[];
+    at: Date;
+    draftedAt?: Date;
+    reason: string;
+  },
 ): Promise<void> {
   await holdStream(client, streamId);
   const { rows } = await client.query<{ next: number }>(
@@ -163,7 +172,11 @@ async function insertLimits(
     column.name in own ? { ...column, value: () => own[column.name as keyof typeof own] } : column,
   );
   const parameters: unknown[] = [];
-  const given = rowsAsQuery(columns, [{ streamId, limits: line, author: actor.name, at: new Date() }], parameters);
+  const given = rowsAsQuery(
+    columns,
+    [{ streamId, limits: line, author: actor.name, at: meta.draftedAt ?? new Date() }],
+    parameters,
+  );
   await client.query(
     `INSERT INTO limit_revision (${columnNames(columns)}) SELECT given.* FROM ${given} given`,
     parameters,

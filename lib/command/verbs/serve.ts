@@ -76,12 +76,12 @@ async function serveUntilStopped(
   return 0;
 }
 
-/** Puts the demonstration line into a database that holds no stream yet. */
+/** Puts the demonstration line into a database that holds no stream yet, or goes on with it after an interruption. */
 async function seedFirstStart(say: (text: string) => void): Promise<void> {
-  const { isEmptyLine, seedDemo } = await import('@/seed/seed-demo');
-  if (await isEmptyLine()) {
-    await withProgress(say, 'Filling in the demonstration line', () => seedDemo(say));
-  }
+  const { demoDue, seedDemo } = await import('@/seed/seed-demo');
+  const endAt = await demoDue();
+  if (endAt === null) return;
+  await withProgress(say, 'Filling in the demonstration line', () => seedDemo(say, endAt));
 }
 
 /** Until there are accounts, whoever reaches the server may do everything: so nobody else may reach it. */
