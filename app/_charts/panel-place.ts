@@ -10,6 +10,9 @@ export interface PanelPlace {
   bottom: number;
   x: (index: number) => number;
   y: (value: number) => number;
+  /** Ends of the vertical axis. */
+  low: number;
+  high: number;
   /** Whether a value lies within the vertical axis. */
   holds: (value: number) => boolean;
 }
@@ -27,6 +30,8 @@ export function usePanelPlace(domain: readonly [number, number]): PanelPlace | n
     right,
     top,
     bottom,
+    low: domain[0],
+    high: domain[1],
     holds,
     x: (index) => Math.max(left, Math.min(right, xScale(index) ?? left)),
     y: (value) => (value < domain[0] ? bottom : value > domain[1] ? top : (yScale(value) ?? bottom)),

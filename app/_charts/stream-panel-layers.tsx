@@ -72,6 +72,14 @@ function Expected(props: { span: ExpectedSpan; ends: readonly [number, number]; 
   if (right <= left) return null;
   const top = place.y(span.upper);
   const serif = Math.min(14, (right - left) / 2);
+  if (span.upper < place.low || span.lower > place.high) {
+    const isBelow = span.upper < place.low;
+    return (
+      <text x={left + 6} y={isBelow ? place.bottom - 6 : place.top + 14} style={{ fill: 'var(--phys)' }}>
+        {isBelow ? '↓' : '↑'} expected {formatNumber(span.value, 4)}
+      </text>
+    );
+  }
   return (
     <g fill="none" style={{ stroke: 'var(--phys)' }}>
       <rect
@@ -132,18 +140,24 @@ export function PanelMarks(props: {
 }) {
   const place = usePanelPlace(props.domain);
   if (place === null) return null;
+  let labelledX = Number.NEGATIVE_INFINITY;
   const marks = props.points.flatMap((point) => {
     const value = chartValue(point, props.chart);
     if (value === null) return [];
     const shape = chartMarkShape(point, props.chart);
+    const x = place.x(point.index);
+    const edge = value > props.domain[1] ? place.top + STRAY_INSET : place.bottom - STRAY_INSET;
+    const isStray = !place.holds(value);
+    const isLabelled = isStray && x - labelledX > STRAY_LABEL;
+    if (isLabelled) labelledX = x;
     return [
       {
         id: point.id,
-        x: place.x(point.index),
-        y: place.y(value),
+        x,
+        y: isStray ? edge : place.y(value),
         shape,
         call: shape.endsWith('diamond'),
-        stray: place.holds(value) ? null : { value, isHigh: value > props.domain[1] },
+        stray: isLabelled ? { value, isHigh: value > props.domain[1] } : null,
       },
     ];
   });
@@ -161,14 +175,19 @@ export function PanelMarks(props: {
   );
 }
 
+/** How far inside the edge a stray's mark lies, and the room its label takes: of strays close together the first has one. */
+const STRAY_INSET = 8;
+const STRAY_LABEL = 60;
+
 /** A point beyond the axis stands at its edge, with an arrow that way and its value. */
 function Stray(props: { x: number; y: number; value: number; isHigh: boolean; right: number }) {
   const { x, y, isHigh } = props;
-  const isNearEnd = props.right - x < 60;
+  const isNearEnd = props.right - x < STRAY_LABEL;
   return (
     <text
       x={isNearEnd ? x - 10 : x + 10}
-      y={isHigh ? y + 10 : y - 4}
+      y={y}
+      dy="0.35em"
       textAnchor={isNearEnd ? 'end' : 'start'}
       style={{ fill: 'var(--ink)' }}
     >

@@ -18,7 +18,10 @@ export interface StandingLimits {
   approvedAt: Date | null;
 }
 
-/** A case that is not closed, with the newest of its signals that holds; the keys name subgroups. */
+/**
+ * A case that is not closed, with the one of its signals that went on last and, among these, longest; the keys name
+ * subgroups.
+ */
 export interface StandingCase {
   id: string;
   family: ExcursionFamily;
@@ -75,7 +78,8 @@ FROM excursion e LEFT JOIN LATERAL (
         AND n.state = 'judged'))) AS signal
   FROM signal g JOIN subgroup p ON p.stream_id = g.stream_id AND p.id = g.last_subgroup_id
   WHERE g.stream_id = e.stream_id AND g.excursion_id = e.id AND g.withdrawn_at IS NULL
-  ORDER BY p.position_at DESC, p.key DESC, g.id DESC LIMIT 1) found ON true
+  ORDER BY p.position_at DESC, p.key DESC, g.completions + cardinality(g.participant_ids) DESC, g.id DESC
+  LIMIT 1) found ON true
 WHERE e.stream_id = $1 AND e.state <> 'closed'
 ORDER BY e.family = 'specification' DESC, e.state = 'open' DESC, e.id DESC LIMIT ${CASES_READ}`;
 

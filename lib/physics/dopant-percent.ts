@@ -15,5 +15,6 @@ export function dopantPercent(ratio: number, sensitivity: number): number | null
     throw new RangeError(`A sensitivity is a number other than zero, not ${sensitivity}.`);
   }
   const percent = 100 * Math.expm1(Math.log(ratio) / sensitivity);
+  if (percent === 0) return 0;
   return Number.isFinite(percent) ? percent : null;
 }

@@ -3,6 +3,7 @@ import {
   formatAge,
   formatDate,
   formatDateTime,
+  formatDay,
   formatDensity,
   formatDensityPerCm3,
   formatNumber,
@@ -114,5 +115,14 @@ describe('formatAge', () => {
   });
   it('does not go below zero for a clock that runs ahead', () => {
     expect(plain(formatAge(-5 * minute))).toBe('under 1 min');
+  });
+});
+
+describe('formatDay', () => {
+  it('names the day of the site as an axis does', () => {
+    const moment = new Date('2031-04-05T22:30:00Z');
+    expect(formatDay(moment, 'UTC')).toBe('5 Apr');
+    expect(formatDay(moment, 'Europe/Berlin')).toBe('6 Apr');
+    expect(formatDay(null, 'UTC')).toBe('—');
   });
 });

@@ -2,6 +2,7 @@ import Link from 'next/link';
 import { DataTable } from '@/app/_ui/data-table';
 import { SectionHead } from '@/app/_ui/section-head';
 import { formatDateTime } from '@/lib/format';
+import styles from './stream-page.module.css';
 import type { StreamView } from './stream-view';
 
 /** Wafers of the stretch that were recorded but not judged, and not measured again since; nothing when there are none. */
@@ -20,18 +21,20 @@ export function MeasureAgain({ view }: { view: StreamView }) {
             key: 'wafer',
             head: 'Wafer',
             cell: ({ id, wafer, runOrLot }) => (
-              <>
+              <span className={styles.nowrap}>
                 <Link href={`/wafers/${id}`} prefetch={false}>
                   {wafer}
                 </Link>{' '}
                 <span className="quiet">{runOrLot}</span>
-              </>
+              </span>
             ),
           },
           {
             key: 'at',
             head: 'Measured',
-            cell: ({ measuredAt }) => formatDateTime(measuredAt, view.timeZone),
+            cell: ({ measuredAt }) => (
+              <span className={styles.nowrap}>{formatDateTime(measuredAt, view.timeZone)}</span>
+            ),
           },
           { key: 'reason', head: 'Why it is not judged', cell: ({ reason }) => reason },
         ]}

@@ -5,6 +5,7 @@ import { StateMark } from '@/app/_ui/state-mark';
 import type { SpanWafer } from '@/lib/excursions/span-wafers';
 import { formatDateTime, formatPercent, formatReading, formatSignedPercent } from '@/lib/format';
 import { streamHref } from './span-wish';
+import styles from './stream-page.module.css';
 import type { StreamView } from './stream-view';
 
 const MOST_WAFERS = 12;
@@ -31,20 +32,26 @@ export function WaferTable({ view }: { view: StreamView }) {
             key: 'wafer',
             head: 'Wafer',
             cell: ({ id, wafer, runOrLot }) => (
-              <>
+              <span className={styles.nowrap}>
                 <Link href={`/wafers/${id}`} prefetch={false}>
                   {wafer}
                 </Link>{' '}
                 <span className="quiet">{runOrLot}</span>
-              </>
+              </span>
             ),
           },
           {
             key: 'at',
             head: 'Measured',
-            cell: ({ measuredAt }) => formatDateTime(new Date(measuredAt), timeZone),
+            cell: ({ measuredAt }) => (
+              <span className={styles.nowrap}>{formatDateTime(new Date(measuredAt), timeZone)}</span>
+            ),
           },
-          { key: 'gauge', head: 'Gauge', cell: ({ gauge }) => gauge ?? '—' },
+          {
+            key: 'gauge',
+            head: 'Gauge',
+            cell: ({ gauge }) => <span className={styles.nowrap}>{gauge ?? '—'}</span>,
+          },
           {
             key: 'value',
             head: 'Value',

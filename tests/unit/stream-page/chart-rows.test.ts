@@ -1,0 +1,94 @@
+import { describe, expect, it } from 'vitest';
+import { type ChartSource, chartRows } from '@/app/(line)/streams/[slug]/chart-points';
+import { spanPoint, spanWafer, BORON } from './fixtures';
+
+const source = (over: Partial<ChartSource> = {}): ChartSource => ({
+  stream: { subgroup: 'wafer', chartedValue: 'statistic' },
+  points: [0, 1, 2].map((nth) => ({ ...spanPoint(nth, { level: 13 + nth / 10 }), index: nth })),
+  wafersOf: new Map(['1', '2', '3'].map((id) => [id, [spanWafer(id)]])),
+  targetOf: new Map([['t1', BORON]]),
+  unit: { unit: 'Ω·cm', factor: 1, levelLabel: '' },
+  timeZone: 'Europe/Berlin',
+  isFiltered: false,
+  ...over,
+});
+
+describe('the rows of a stream’s charts', () => {
+  it('name the wafer, lead to it, and say the time of the site', () => {
+    const [row] = chartRows(source());
+    expect(row?.label).toBe('wafer M0001/0');
+    expect(row?.href).toBe('/wafers/w1');
+    expect(row?.texts.at).toBe('2031-04-05 08:00');
+    expect(row?.day).toBe('5 Apr');
+  });
+
+  it('hold the level against expected, in percent and as percent dopant with its uncertainty', () => {
+    const [row] = chartRows(source({ points: [{ ...spanPoint(0, { level: 13.306 * 0.98 }), index: 0 }] }));
+    expect(row?.texts.difference).toMatch(/^−2\.0\s%$/);
+    expect(row?.texts.dopant).toMatch(/^\+2\.1 ± 2\.0\s%$/);
+    expect(row?.texts.expected).toMatch(/^13\.31 ± 0\.27\sΩ·cm$/);
+  });
+
+  it('read a relative level as what it is: 100·ln(measured/expected)', () => {
+    const [row] = chartRows(
+      source({
+        stream: { subgroup: 'run', chartedValue: 'relative' },
+        points: [{ ...spanPoint(0, { key: 'R0042', level: -2.02 }), index: 0 }],
+        unit: { unit: '%', factor: 1, levelLabel: '' },
+      }),
+    );
+    expect(row?.label).toBe('run R0042');
+    expect(row?.texts.level).toMatch(/^−2\.02\s%$/);
+    expect(row?.texts.difference).toMatch(/^−2\.0\s%$/);
+    expect(row?.texts.dopant).toMatch(/^\+2\.1 ± 2\.0\s%$/);
+  });
+
+  it('are in the unit of the chart', () => {
+    const unit = { unit: 'mΩ·cm', factor: 1000, levelLabel: '' };
+    const [row] = chartRows(source({ unit, points: [{ ...spanPoint(0, { level: 0.0123 }), index: 0 }] }));
+    expect(row?.level).toBeCloseTo(12.3, 12);
+    expect(row?.texts.level).toMatch(/^12\.30\smΩ·cm$/);
+  });
+
+  it('of a filtered view mark no rule and range from one shown subgroup to the next', () => {
+    const points = [0, 1, 2].map((nth) => ({
+      ...spanPoint(nth, { level: [10, 12, 11][nth] ?? 0, movingRange: 7, completions: ['level:a:above'] }),
+      index: nth,
+    }));
+    const rows = chartRows(source({ points, isFiltered: true }));
+    expect(rows.map((row) => row.movingRange)).toEqual([null, 2, 1]);
+    expect(rows.flatMap((row) => row.completions)).toEqual([]);
+    expect(chartRows(source({ points })).map((row) => row.movingRange)).toEqual([7, 7, 7]);
+  });
+
+  it('leave a gap where nothing was judged, and say why', () => {
+    const point = spanPoint(0, { level: null, within: null, state: 'not-judged' });
+    const wafers = [spanWafer('1', { level: null, expected: null, notJudgedReason: 'too few good sites' })];
+    const [row] = chartRows(source({ points: [{ ...point, index: 0 }], wafersOf: new Map([['1', wafers]]) }));
+    expect([row?.level, row?.judged, row?.texts.level]).toEqual([null, false, '—']);
+    expect(row?.texts.notes.join()).toContain('Wafer 07 is not judged: too few good sites');
+    expect(row?.texts.difference).toBeNull();
+  });
+
+  it('are hollow where a subgroup came late or a wafer was measured again, not for history', () => {
+    const recorded = (times: number[], over = {}) =>
+      new Map(
+        times.map((recordedAt, nth) => [
+          String(nth + 1),
+          [spanWafer(String(nth + 1), { recordedAt, ...over })],
+        ]),
+      );
+    const hollow = (wafersOf: ChartSource['wafersOf']) =>
+      chartRows(source({ wafersOf })).map((row) => row.hollow);
+    expect(hollow(recorded([1, 2, 3]))).toEqual([false, false, false]);
+    expect(hollow(recorded([5, 2, 3]))).toEqual([true, false, false]);
+    expect(hollow(recorded([5, 2, 3], { history: true }))).toEqual([false, false, false]);
+    expect(hollow(recorded([1, 2, 3], { isMeasuredAgain: true }))).toEqual([true, true, true]);
+  });
+
+  it('say that expected differs where the wafers of a subgroup differ in it', () => {
+    const wafers = [spanWafer('1', { expected: 13 }), spanWafer('1', { expected: 14 })];
+    const [row] = chartRows(source({ wafersOf: new Map([['1', wafers]]) }));
+    expect([row?.texts.expected, row?.texts.difference]).toEqual(['differs by wafer', null]);
+  });
+});
