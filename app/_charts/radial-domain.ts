@@ -6,7 +6,7 @@ export interface RadialDomain {
 }
 
 /** Expected is brought into the plot while that leaves the readings at least this share of its height. */
-const LEAST_SHARE = 0.2;
+const LEAST_SHARE = 0.3;
 const PAD = 0.06;
 
 /**

@@ -16,7 +16,7 @@ export interface ShapeBarsProps {
 export function ShapeBars({ terms, residualPercent, reachPercent, usual }: ShapeBarsProps) {
   const shapes = terms.filter((term) => term.name !== 'level');
   if (shapes.length === 0) {
-    return <p className={styles['residual']}>This site plan has too few sites to tell shapes apart.</p>;
+    return <p className={styles['residual']}>Too few readings count to tell shapes apart.</p>;
   }
   const reach =
     reachPercent ??

@@ -22,7 +22,8 @@ const MOST_USUAL_NAMED = 2;
 
 /**
  * A wafer in one sentence: where it lies against expected, and whether its shape is as usual. A shape is called usual
- * only where every shape is, and nothing is said of it where too few wafers are known.
+ * only where every shape is, and nothing is said of it where too few wafers are known. A plan that tells but a shape or
+ * two apart is not said to know the whole.
  *
  * @example "W-2207: 1.6 % below expected, bowl and tilt as usual for this chamber"
  */
@@ -50,7 +51,8 @@ function shapeWords({ habits, whose }: WaferAnswerFacts): string | null {
   }
   if (habits.length === 0 || habits.some((habit) => habit.isUnusual === null)) return null;
   const seen = habits.filter((habit) => habit.isSeen).slice(0, MOST_USUAL_NAMED);
-  const what = seen.length === 0 ? 'shape' : listed(seen.map((habit) => habit.name));
+  const said = seen.length === 0 && habits.length <= MOST_USUAL_NAMED ? habits : seen;
+  const what = said.length === 0 ? 'shape' : listed(said.map((habit) => habit.name));
   return `${what} as usual for ${whose}`;
 }
 

@@ -22,9 +22,9 @@ export function mapViewValues(
   scale: number,
 ): { values: (number | null)[] } | { gap: MapGap } {
   const { values, statistic, against, usual, meanOfSites } = study;
-  if (statistic === null || statistic <= 0 || meanOfSites === null) return { gap: 'no-reading' };
   if (view === 'value')
     return { values: values.map((value) => finite(value === null ? null : value / scale)) };
+  if (statistic === null || statistic <= 0 || meanOfSites === null) return { gap: 'no-reading' };
   if (view === 'expected' && against === null) return { gap: 'nothing-expected' };
   if (view === 'usual' && usual === null) return { gap: 'no-habit' };
   return {

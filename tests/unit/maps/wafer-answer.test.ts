@@ -41,7 +41,12 @@ describe('the answer of a wafer', () => {
   });
 
   it('says "shape" where no shape stands out of its noise', () => {
-    expect(waferAnswer({ ...facts, habits: [habit('bowl', false, false)] })).toContain('shape as usual');
+    const habits = ['bowl', 'tilt', 'ring'].map((name) => habit(name, false, false));
+    expect(waferAnswer({ ...facts, habits })).toContain('shape as usual');
+  });
+
+  it('does not speak for the whole shape where the plan tells only tilt', () => {
+    expect(waferAnswer({ ...facts, habits: [habit('tilt', false, false)] })).toContain('tilt as usual');
   });
 
   it('calls a difference that rounds to nothing "as expected", and drops decimals from a large one', () => {

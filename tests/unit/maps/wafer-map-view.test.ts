@@ -34,7 +34,8 @@ describe('a view of a wafer’s map', () => {
   it('says what is missing for a view that cannot be drawn', () => {
     expect(mapViewValues('expected', { ...study, against: null }, 1)).toEqual({ gap: 'nothing-expected' });
     expect(mapViewValues('usual', { ...study, usual: null }, 1)).toEqual({ gap: 'no-habit' });
-    expect(mapViewValues('value', { ...study, statistic: null }, 1)).toEqual({ gap: 'no-reading' });
+    expect(mapViewValues('mean', { ...study, statistic: null }, 1)).toEqual({ gap: 'no-reading' });
+    expect(mapViewValues('value', { ...study, statistic: null }, 1)).toHaveProperty('values');
   });
 });
 

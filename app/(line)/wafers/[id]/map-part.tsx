@@ -5,6 +5,7 @@ import { Tabs } from '@/app/_ui/tabs';
 import { MAP_VIEWS, mapViewValues } from '@/lib/maps/wafer-map-view';
 import { waferTitle } from '@/lib/maps/wafer-title';
 import { GAP_WORDS, VIEW_NAMES, viewNote } from './map-words';
+import { waferHref } from './wafer-href';
 import type { WaferShown } from './wafer-shown';
 import styles from './page.module.css';
 
@@ -21,7 +22,7 @@ export function MapPart({ shown }: { shown: WaferShown }) {
       <Tabs
         label="What the map shows"
         tabs={MAP_VIEWS.map((one) => ({
-          href: `/wafers/${wafer.id}${one === 'value' ? '' : `?map=${one}`}`,
+          href: waferHref(wafer.id, one),
           name: VIEW_NAMES[one],
           current: one === view,
         }))}

@@ -1,9 +1,9 @@
-import Link from 'next/link';
 import { DataTable, type DataColumn } from '@/app/_ui/data-table';
 import { formatNumber, formatSignedPercent, undefinedMark } from '@/lib/format';
 import { STATUS_WORDS } from '@/lib/maps/bad-reason-words';
 import { waferReadings, type WaferReadingRow } from '@/lib/maps/wafer-readings';
 import { formatMm } from './format-site';
+import { waferHref } from './wafer-href';
 import type { WaferShown } from './wafer-shown';
 
 /** Every reading of the wafer, in the order of the site plan. */
@@ -52,13 +52,12 @@ export function ReadingTable({ shown, title }: { shown: WaferShown; title: strin
           {row.decision !== null && (
             <>
               {' · '}
-              <Link
-                href={`/wafers/${wafer.id}?site=${row.decision}-${row.site - 1}#decide`}
-                prefetch={false}
+              <a
+                href={waferHref(wafer.id, shown.view, `${row.decision}-${row.site - 1}`)}
                 aria-label={`${row.decision === 'in' ? 'put back' : 'take out'} site ${row.site}`}
               >
                 {row.decision === 'in' ? 'put back…' : 'take out…'}
-              </Link>
+              </a>
             </>
           )}
         </>

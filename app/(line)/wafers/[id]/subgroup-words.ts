@@ -4,7 +4,10 @@ import type { Stream } from '@/lib/streams/types';
 /** What became of the wafer's point on the charts, in a sentence. */
 export function subgroupWords({ subgroup, history }: WaferRecord, stream: Stream): string {
   const point = stream.subgroup === 'wafer' ? 'Its point' : `The point of its ${stream.subgroup}`;
-  if (subgroup.state === 'not-judged') return `${point} is not charted: no wafer of it was judged.`;
+  if (subgroup.state === 'not-judged')
+    return stream.subgroup === 'wafer'
+      ? `${point} is not charted.`
+      : `${point} is not charted: no wafer of it was judged.`;
   if (subgroup.state === 'open') {
     return `${point} is not complete yet, ${subgroup.wafers} of ${stream.subgroupSize} wafers: no rule is looked at until it is.`;
   }

@@ -6,6 +6,7 @@ import { signalSentence } from '@/lib/excursions/signal-sentence';
 import { formatDateTime, formatNumber, formatPercent } from '@/lib/format';
 import { specificationVerdicts, type SpecificationVerdict } from '@/lib/maps/specification-verdicts';
 import { subgroupWords } from './subgroup-words';
+import { waferHref } from './wafer-href';
 import type { WaferShown } from './wafer-shown';
 import styles from './page.module.css';
 
@@ -60,7 +61,7 @@ export function VerdictPart({ shown }: { shown: WaferShown }) {
             {siblings.map((sibling) => (
               <li key={sibling.id}>
                 <Link
-                  href={`/wafers/${sibling.id}${shown.view === 'value' ? '' : `?map=${shown.view}`}`}
+                  href={waferHref(sibling.id, shown.view)}
                   aria-current={sibling.id === wafer.id ? 'page' : undefined}
                   title={`processed ${formatDateTime(sibling.processedAt, shown.timeZone)}`}
                 >

@@ -5,6 +5,7 @@ import { formatDateTime, formatNumber } from '@/lib/format';
 import { waferAnswer } from '@/lib/maps/wafer-answer';
 import type { WaferNeighbour } from '@/lib/maps/wafer-record';
 import { waferTitle } from '@/lib/maps/wafer-title';
+import { waferHref } from './wafer-href';
 import type { WaferShown } from './wafer-shown';
 import styles from './page.module.css';
 
@@ -21,7 +22,7 @@ export function WaferHead({ shown }: { shown: WaferShown }) {
     habits: study.habits,
     whose: stream.chamber === '' ? 'this tool' : 'this chamber',
   });
-  const href = ({ id }: WaferNeighbour) => `/wafers/${id}${view === 'value' ? '' : `?map=${view}`}`;
+  const href = ({ id }: WaferNeighbour) => waferHref(id, view);
   const { previous, next } = shown;
   return (
     <PageHead
