@@ -1,4 +1,5 @@
 import type { Metadata, Viewport } from 'next';
+import Link from 'next/link';
 import type { ReactNode } from 'react';
 import '@fontsource-variable/atkinson-hyperlegible-next/wght.css';
 import './globals.css';
@@ -59,7 +60,8 @@ export default function RootLayout({ children }: { children: ReactNode }) {
         </main>
         <SiteFooter>
           Figures are at 23 °C unless a page says otherwise. Before acting on equipment, follow site
-          procedures and change control, with qualified staff.
+          procedures and change control, with qualified staff.{' '}
+          <Link href="/methods">Methods and sources</Link>
         </SiteFooter>
         <Keys keys={keys} />
       </body>

@@ -29,7 +29,7 @@ export async function settleBaseline(actor: Actor, slug: string, from: Date, eve
       const calibrated = { ...target, calibrationFactor: found.factor, calibrationPercent: found.percent };
       const reason = `calibrated on the ${found.subgroups} subgroups of the first five weeks`;
       await reviseTarget(actor, stream.id, calibrated, {
-        effectiveFrom: from,
+        effectiveFrom: evening,
         reason,
         calibrationWafers: found.wafers,
       });

@@ -9,6 +9,7 @@ import { createDemoStreams } from '@/seed/seed-demo';
 import type { Figure } from './figure';
 import { copyText, keyedCopySeconds } from './keyed-copy';
 import { middle } from './figure';
+import { peakMemoryMb } from './peak-memory';
 import type { ScratchServer } from './scratch-database';
 import { writeWaferFile } from './wafer-file';
 
@@ -17,8 +18,7 @@ const STREAMS = 40;
 
 /**
  * Bulk intake by the whole path (parse, check, screen, measure, judge, store) of 20 000 wafers of 49 readings, against a
- * bare COPY of the same rows into the same keyed tables. `largeMb` makes the file as large as wanted for the memory
- * figure.
+ * bare COPY of the same rows into the same keyed tables; and the peak memory of the command that takes such a file.
  */
 export async function intakeBench(server: ScratchServer): Promise<Figure[]> {
   const folder = mkdtempSync(path.join(tmpdir(), 'evenohm-file-'));
@@ -44,6 +44,9 @@ export async function intakeBench(server: ScratchServer): Promise<Figure[]> {
       const text = await copyText(getPool());
       for (let i = 0; i < 3; i += 1) bare.push(await keyedCopySeconds(getPool(), text));
     }
+    const url = await server.use();
+    await createDemoStreams(programActor(), streams);
+    const peak = await peakMemoryMb(['intake', file], { DATABASE_URL: url });
     const whole = middle(seconds);
     const copy = middle(bare);
     return [
@@ -51,6 +54,9 @@ export async function intakeBench(server: ScratchServer): Promise<Figure[]> {
       { name: 'bare keyed COPY of the same rows', value: WAFERS / copy, unit: 'wafers/s' },
       { name: 'file taken through everything', value: WAFERS / whole, unit: 'wafers/s' },
       { name: 'intake against bare keyed COPY', value: copy / whole, unit: '', atLeast: 0.15 },
+      ...(peak === null
+        ? []
+        : [{ name: 'peak memory of the intake command', value: peak, unit: 'MB', atMost: 300 }]),
     ];
   } finally {
     rmSync(folder, { recursive: true, force: true });

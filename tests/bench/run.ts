@@ -1,12 +1,14 @@
 import { figureLine, holds, type Figure } from './figure';
 import { intakeBench } from './intake-bench';
 import { oneWaferBench } from './one-wafer-bench';
+import { pageBench } from './page-bench';
 import { scratchServer, type ScratchServer } from './scratch-database';
 
 /** `npm run bench [part…]`: every figure is a ratio of two things measured in the same run; absolutes stand beside. */
 const parts: Record<string, (server: ScratchServer) => Promise<Figure[]>> = {
   wafer: oneWaferBench,
   intake: intakeBench,
+  pages: pageBench,
 };
 
 const wanted = process.argv.slice(2);

@@ -5,7 +5,7 @@ import { UsageError, type Verb } from '../verb';
 
 export const build: Verb = {
   name: 'build',
-  summary: 'Builds the web app where its build is missing or older than its sources.',
+  summary: 'build the web app, where its build is older than its sources',
   usage: 'evenohm build',
   async run(args, output) {
     if (args.length > 0) throw new UsageError(`“${args[0]}” is not understood.`);

@@ -10,7 +10,7 @@ import { startWebServer } from '../web-server';
 
 export const serve: Verb = {
   name: 'serve',
-  summary: 'Starts the database and the web app, and prints the address.',
+  summary: 'start the database and the web app',
   usage: [
     'evenohm serve [--dev]',
     '',

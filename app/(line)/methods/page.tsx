@@ -1,0 +1,33 @@
+import type { Metadata } from 'next';
+import { Figures } from '@/app/_ui/figures';
+import { PageHead } from '@/app/_ui/page-head';
+
+export const metadata: Metadata = { title: 'Methods' };
+
+/** Each method in use, and where it was published. */
+const METHODS = [
+  ['Doping and resistivity at 23 °C', 'ASTM F723 / SEMI MF723, after NBS Special Publication 400-64 (1981)'],
+  [
+    'Temperature coefficient, 18 to 28 °C',
+    'ASTM F84 / SEMI MF84, after Bullis et al., Solid-State Electron. 11, 639 (1968)',
+  ],
+  ['Along a crystal', 'Scheil’s law, with the segregation coefficients of the trade'],
+  ['Limits of the level', 'Moving range of the subgroups; NIST/SEMATECH e-Handbook, section 6.3.2.2'],
+  ['Rules', 'Western Electric, Statistical Quality Control Handbook (1956)'],
+  ['How often rules signal by chance', 'Champ and Woodall, Technometrics 29, 393 (1987)'],
+  ['Tolerance kept apart from uncertainty', 'JCGM 106:2012; standard uncertainties by JCGM 100:2008'],
+  ['Wafer sizes and thicknesses', 'SEMI M1'],
+] as const;
+
+export default function MethodsPage() {
+  return (
+    <>
+      <PageHead
+        answer="Every figure comes from a published method."
+        sub="A figure’s own page names its definition; here is where the methods were published."
+        back={{ href: '/', label: 'Board' }}
+      />
+      <Figures figures={METHODS.map(([name, source]) => ({ name, value: source }))} />
+    </>
+  );
+}
