@@ -35,3 +35,10 @@ export function formWords(form: FormData): Record<string, string> {
   for (const [name, value] of form) if (typeof value === 'string') words[name] = value.trim();
   return words;
 }
+
+/** The faults that a schema found, by the field each belongs to. */
+export function faultsOf(error: {
+  issues: readonly { path: readonly PropertyKey[]; message: string }[];
+}): { field: string; reason: string }[] {
+  return error.issues.map(({ path, message }) => ({ field: String(path[0] ?? ''), reason: message }));
+}

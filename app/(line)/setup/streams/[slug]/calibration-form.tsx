@@ -1,0 +1,51 @@
+'use client';
+
+import { ActionForm } from '@/app/_ui/action-form';
+import { Beside } from '@/app/_ui/beside';
+import type { CalibrationFactor } from '@/lib/limits/calibration-factor';
+import type { Target } from '@/lib/physics/target';
+import { ExpectedFigures } from '../../expected-note';
+import { RevisionFields } from '../../revision-fields';
+import { reviseTargetAction } from './target-actions';
+import styles from '../../expected-note.module.css';
+
+/** Makes the factor that a baseline gave part of the target: a new revision, otherwise as the one in force. */
+export function CalibrationForm(props: {
+  slug: string;
+  target: Target;
+  found: CalibrationFactor;
+  now: string;
+  timeZone: string;
+}) {
+  const { target, found } = props;
+  const calibrated: Target = {
+    ...target,
+    calibrationFactor: Number(found.factor.toPrecision(6)),
+    calibrationPercent: Number(found.percent.toPrecision(3)),
+  };
+  const kept = Object.entries(calibrated).filter(([, value]) => value !== null && value !== false);
+  return (
+    <Beside summary="Make it the target’s calibration">
+      <ActionForm
+        action={reviseTargetAction.bind(null, props.slug)}
+        label="Calibrate the target"
+        submit="Record the calibrated target"
+        working="Recording it…"
+        weight="plain"
+      >
+        {({ errors }) => (
+          <>
+            {kept.map(([name, value]) => (
+              <input key={name} type="hidden" name={name} value={String(value)} />
+            ))}
+            <input type="hidden" name="calibrationWafers" value={found.wafers} />
+            <div className={styles.note}>
+              <ExpectedFigures target={calibrated} />
+            </div>
+            <RevisionFields id="calibration" now={props.now} timeZone={props.timeZone} errors={errors} />
+          </>
+        )}
+      </ActionForm>
+    </Beside>
+  );
+}

@@ -1,0 +1,78 @@
+'use server';
+
+import { revalidatePath } from 'next/cache';
+import { doneForm, faultsOf, formWords, refusedForm, type FormState } from '@/app/_ui/form-state';
+import { localActor } from '@/lib/access/local-actor';
+import { readEnvironment } from '@/lib/env';
+import { approveLimits, discardLimits, draftLimits, enterInheritedLimits } from '@/lib/limits/mutations';
+import { baselineSpan, inheritedLimits, limitApproval, limitDraft } from '@/lib/limits/schema';
+import { findStreamSettings } from '@/lib/streams/data';
+
+const NO_STREAM = { message: 'There is no such stream.' };
+const zone = () => readEnvironment().siteTimeZone;
+
+/** Drafts the limits that a span of subgroups sets. */
+export async function draftLimitsAction(
+  slug: string,
+  span: { from: string; to: string },
+  before: FormState,
+  form: FormData,
+): Promise<FormState> {
+  const actor = localActor();
+  const found = await findStreamSettings(actor, String(slug));
+  if (found === null) return refusedForm(before, NO_STREAM);
+  const parsed = baselineSpan(zone()).safeParse(span);
+  if (!parsed.success) return refusedForm(before, { message: 'That span is none: choose it again.' });
+  const draft = limitDraft.safeParse(formWords(form));
+  if (!draft.success) return refusedForm(before, { errors: faultsOf(draft.error) });
+  const made = await draftLimits(actor, found.stream.id, parsed.data, draft.data.reason);
+  if (!made.ok) return refusedForm(before, { message: made.reason });
+  revalidatePath('/setup', 'layout');
+  return doneForm(
+    before,
+    'The draft is made: it stands at the top of this page, to be approved or set aside.',
+  );
+}
+
+/** Enters limits from elsewhere as a draft. */
+export async function enterInheritedAction(
+  slug: string,
+  before: FormState,
+  form: FormData,
+): Promise<FormState> {
+  const actor = localActor();
+  const found = await findStreamSettings(actor, String(slug));
+  if (found === null) return refusedForm(before, NO_STREAM);
+  const { id, subgroupSize } = found.stream;
+  const given = inheritedLimits(zone(), subgroupSize).safeParse(formWords(form));
+  if (!given.success) return refusedForm(before, { errors: faultsOf(given.error) });
+  const { limits, effectiveFrom, reason } = given.data;
+  const made = await enterInheritedLimits(actor, id, limits, effectiveFrom, reason);
+  if (!made.ok) return refusedForm(before, { message: made.reason });
+  revalidatePath('/setup', 'layout');
+  return doneForm(before, 'They are entered: approve them at the top of this page, and they judge.');
+}
+
+/** Approves a draft or the provisional limits. */
+export async function approveLimitsAction(
+  slug: string,
+  before: FormState,
+  form: FormData,
+): Promise<FormState> {
+  const actor = localActor();
+  if ((await findStreamSettings(actor, String(slug))) === null) return refusedForm(before, NO_STREAM);
+  const approval = limitApproval(zone()).safeParse(formWords(form));
+  if (!approval.success) return refusedForm(before, { errors: faultsOf(approval.error) });
+  const { revisionId, reason, effectiveFrom } = approval.data;
+  const approved = await approveLimits(actor, revisionId, { reason, effectiveFrom });
+  if (!approved.ok) return refusedForm(before, { message: approved.reason });
+  revalidatePath('/', 'layout');
+  return doneForm(before, 'They are approved.');
+}
+
+/** Sets a draft aside; it stays on record. */
+export async function discardLimitsAction(revisionId: string): Promise<void> {
+  const actor = localActor();
+  if (/^\d{1,18}$/.test(String(revisionId))) await discardLimits(actor, revisionId);
+  revalidatePath('/setup', 'layout');
+}

@@ -1,0 +1,58 @@
+import type { Metadata } from 'next';
+import { SectionHead } from '@/app/_ui/section-head';
+import { localActor } from '@/lib/access/local-actor';
+import { readEnvironment } from '@/lib/env';
+import { isImplantedOrDiffused } from '@/lib/physics/is-implanted-or-diffused';
+import { siteTimeField } from '@/lib/site-time';
+import { inForce } from '@/lib/streams/in-force';
+import { foundStream } from '../../found-stream';
+import { StreamHead } from '../../stream-head';
+import { targetWords } from '../../words';
+import { Calibration } from './calibration';
+import { TargetForm } from './target-form';
+import { TargetTable } from './target-table';
+
+export const metadata: Metadata = { title: 'Target' };
+
+export default async function TargetPage(props: {
+  params: Promise<{ slug: string }>;
+  searchParams: Promise<Record<string, string | string[]>>;
+}) {
+  const actor = localActor();
+  const { stream, targets } = await foundStream(actor, props.params);
+  const { siteTimeZone } = readEnvironment();
+  const now = new Date();
+  const target = inForce(targets, now)?.target ?? null;
+  return (
+    <>
+      <StreamHead
+        stream={stream}
+        place="Target"
+        answer={
+          target === null
+            ? `${stream.name} has no target, so nothing is expected of it`
+            : `${stream.name} aims at ${targetWords(target)}`
+        }
+      />
+      <SectionHead id="revisions">Revisions</SectionHead>
+      <TargetTable slug={stream.slug} targets={targets} timeZone={siteTimeZone} />
+      {target !== null && isImplantedOrDiffused(target) && (
+        <Calibration
+          actor={actor}
+          stream={stream}
+          target={target}
+          asked={await props.searchParams}
+          timeZone={siteTimeZone}
+        />
+      )}
+      <SectionHead id="new">A new revision</SectionHead>
+      <TargetForm
+        slug={stream.slug}
+        quantity={stream.quantity}
+        target={target}
+        now={siteTimeField(now, siteTimeZone)}
+        timeZone={siteTimeZone}
+      />
+    </>
+  );
+}

@@ -1,0 +1,41 @@
+'use server';
+
+import { revalidatePath } from 'next/cache';
+import { doneForm, faultsOf, formWords, refusedForm, type FormState } from '@/app/_ui/form-state';
+import { localActor } from '@/lib/access/local-actor';
+import { readEnvironment } from '@/lib/env';
+import { findStreamSettings } from '@/lib/streams/data';
+import { reviseSpecification } from '@/lib/streams/mutations';
+import { revisionMeta, typedSpecification } from '@/lib/streams/schema';
+import type { Specification } from '@/lib/streams/types';
+
+const NOTHING: Specification = {
+  meanLower: null,
+  meanUpper: null,
+  siteLower: null,
+  siteUpper: null,
+  nonuniformityMetric: null,
+  nonuniformityUpper: null,
+};
+
+/** Records a new revision of a stream's specification; with every field empty nothing is specified any more. */
+export async function reviseSpecificationAction(
+  slug: string,
+  before: FormState,
+  form: FormData,
+): Promise<FormState> {
+  const actor = localActor();
+  const words = formWords(form);
+  const found = await findStreamSettings(actor, String(slug));
+  if (found === null) return refusedForm(before, { message: 'There is no such stream.' });
+  const specification = typedSpecification.safeParse(words);
+  const meta = revisionMeta(readEnvironment().siteTimeZone).safeParse(words);
+  if (!specification.success || !meta.success) {
+    const errors = [specification, meta].flatMap((part) => (part.success ? [] : faultsOf(part.error)));
+    return refusedForm(before, { errors });
+  }
+  await reviseSpecification(actor, found.stream.id, specification.data ?? NOTHING, meta.data);
+  revalidatePath('/', 'layout');
+  const next = Math.max(0, ...found.specifications.map(({ revision }) => revision)) + 1;
+  return doneForm(before, `Specification revision ${next} is recorded.`);
+}

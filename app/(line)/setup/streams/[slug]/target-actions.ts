@@ -1,0 +1,35 @@
+'use server';
+
+import { revalidatePath } from 'next/cache';
+import { doneForm, faultsOf, formWords, refusedForm, type FormState } from '@/app/_ui/form-state';
+import { localActor } from '@/lib/access/local-actor';
+import { readEnvironment } from '@/lib/env';
+import { findStreamSettings } from '@/lib/streams/data';
+import { reviseTarget } from '@/lib/streams/mutations';
+import { revisionMeta, typedTarget } from '@/lib/streams/schema';
+import { typedNumberOrNone } from '@/lib/typed';
+
+const wafers = typedNumberOrNone({ wish: 'a number of wafers', holds: (v) => Number.isInteger(v) && v > 0 });
+
+/** Records a new revision of a stream's target. */
+export async function reviseTargetAction(
+  slug: string,
+  before: FormState,
+  form: FormData,
+): Promise<FormState> {
+  const actor = localActor();
+  const words = formWords(form);
+  const found = await findStreamSettings(actor, String(slug));
+  if (found === null) return refusedForm(before, { message: 'There is no such stream.' });
+  const target = typedTarget(found.stream.quantity).safeParse(words);
+  const meta = revisionMeta(readEnvironment().siteTimeZone).safeParse(words);
+  if (!target.success || !meta.success) {
+    const errors = [target, meta].flatMap((part) => (part.success ? [] : faultsOf(part.error)));
+    return refusedForm(before, { errors });
+  }
+  const calibrationWafers = wafers.catch(null).parse(words['calibrationWafers']);
+  await reviseTarget(actor, found.stream.id, target.data, { ...meta.data, calibrationWafers });
+  revalidatePath('/', 'layout');
+  const next = Math.max(0, ...found.targets.map(({ revision }) => revision)) + 1;
+  return doneForm(before, `Target revision ${next} is recorded.`);
+}
