@@ -9,7 +9,7 @@ import type { StreamView } from './stream-view';
 export function MeasureAgain({ view }: { view: StreamView }) {
   if (view.toMeasure.length === 0) return null;
   return (
-    <section aria-labelledby="measure-again">
+    <section>
       <SectionHead id="measure-again">To be measured again</SectionHead>
       <DataTable
         caption="Wafers of this stretch that were recorded, not judged"

@@ -14,7 +14,7 @@ export function StreamCases({ view }: { view: StreamView }) {
   const { subgroup, slug } = settings.stream;
   return (
     <section aria-labelledby="cases">
-      <SectionHead id="cases" level={3} aside={<Link href={`/excursions?stream=${slug}`}>All cases</Link>}>
+      <SectionHead id="cases" aside={<Link href={`/excursions?stream=${slug}`}>All cases</Link>}>
         {standing.openCases === 1 ? 'One case not closed' : `${standing.openCases} cases not closed`}
       </SectionHead>
       <ul className="plain-list">

@@ -26,7 +26,7 @@ export function StreamFacts({ view }: { view: StreamView }) {
   const setup = `/setup/streams/${stream.slug}`;
   return (
     <section aria-labelledby="the-stream">
-      <SectionHead id="the-stream" level={3} aside={<Link href={setup}>Set up</Link>}>
+      <SectionHead id="the-stream" aside={<Link href={setup}>Set up</Link>}>
         The stream
       </SectionHead>
       <Figures
@@ -48,7 +48,7 @@ export function StreamFacts({ view }: { view: StreamView }) {
           },
         ]}
       />
-      <SectionHead id="the-limits" level={3} aside={<Link href={`${setup}#limits`}>Limits</Link>}>
+      <SectionHead id="the-limits" aside={<Link href={`${setup}#limits`}>Limits</Link>}>
         The limits in force
       </SectionHead>
       {standing.inForce === null ? (
@@ -58,7 +58,7 @@ export function StreamFacts({ view }: { view: StreamView }) {
       )}
       {view.events.length > 0 && (
         <>
-          <SectionHead level={3}>Last in the log</SectionHead>
+          <SectionHead>Last in the log</SectionHead>
           <ul className="plain-list small">
             {view.events.slice(0, 3).map((event) => (
               <li key={event.id}>

@@ -16,7 +16,7 @@ export function WaferTable({ view }: { view: StreamView }) {
   const { slug, quantity } = settings.stream;
   if (shown === null || wafers.length === 0) return null;
   return (
-    <section aria-labelledby="newest-wafers">
+    <section>
       <SectionHead id="newest-wafers">The newest wafers of this stretch</SectionHead>
       <DataTable
         caption="The newest wafers of this stretch"
