@@ -70,6 +70,14 @@ export async function stepExcursion(
   step: ExcursionStep,
 ): Promise<{ ok: true } | { ok: false; reason: string }> {
   return inTransaction(async (client) => {
+    // The stream before its excursion, as those who record wafers hold them.
+    if (step.to !== 'noted') {
+      const { rows } = await client.query<{ stream_id: string }>(
+        'SELECT stream_id FROM excursion WHERE id = $1',
+        [excursionId],
+      );
+      if (rows[0] !== undefined) await holdStream(client, rows[0].stream_id);
+    }
     const { rows } = await client.query<{ stream_id: string; state: string }>(
       'SELECT stream_id, state FROM excursion WHERE id = $1 FOR UPDATE',
       [excursionId],
@@ -88,7 +96,6 @@ export async function stepExcursion(
          WHERE id = $1`,
         [excursionId, step.to, actor.name, step.to === 'closed' ? step.cause : null],
       );
-      await holdStream(client, found.stream_id);
     }
     const note =
       step.to === 'closed' ? [step.cause, step.note].filter((text) => text !== '').join('. ') : step.note;

@@ -123,13 +123,13 @@ export async function changeScreening(
     if (before === undefined) return { ok: false, reason: 'There is no such stream.' };
     if (before === screening) return { ok: false, reason: 'Readings are screened so already.' };
     const points = await remeasuredBaseline(actor, client, streamId, screening);
-    await client.query('UPDATE stream SET screening = $2 WHERE id = $1', [streamId, screening]);
-    if (points === null) return { ok: true };
-    if (points.length < 2)
+    if (points !== null && points.length < 2)
       return { ok: false, reason: 'The baseline in force leaves too few wafers under that screening.' };
-    const limits = limitSet(points);
-    if (limits.level.sigma === 0)
+    const limits = points === null ? null : limitSet(points);
+    if (limits?.level.sigma === 0)
       return { ok: false, reason: 'Under that screening all levels of the baseline are equal.' };
+    await client.query('UPDATE stream SET screening = $2 WHERE id = $1', [streamId, screening]);
+    if (points === null || limits === null) return { ok: true };
     await insertLimits(actor, client, streamId, limits, {
       state: 'provisional',
       origin: 'screening',

@@ -3,6 +3,7 @@ import { VALUE_COLUMNS, type ValueColumn } from './map-columns';
 import type { RawMap } from './raw-maps';
 import { readFacts } from './read-facts';
 import { inSiteOrder } from './site-order';
+import { runOrLot } from './wafer-rows';
 import { measurementName, type MapProblem, type Measurement } from './types';
 
 /** What a file's own words leave to the caller: flags of the command, fields of the page. */
@@ -18,27 +19,35 @@ export interface CheckContext {
 /** Clocks of gauges and of this machine may differ by so much. */
 const CLOCKS_DIFFER_MS = 10 * 60_000;
 
+/** What checking made of a measurement; `identity` tells it from the others of a file, whatever its faults. */
+export type Checked = { name: string; identity: string } & (
+  { measurement: Measurement } | { problems: MapProblem[] }
+);
+
 /** A measurement checked against its stream, or every fault found in it. */
-export function checkedMeasurement(
-  map: RawMap,
-  context: CheckContext,
-): { measurement: Measurement; name: string } | { problems: MapProblem[]; name: string } {
+export function checkedMeasurement(map: RawMap, context: CheckContext): Checked {
   const { facts, diameterMm, faults: words } = readFacts(map.words, context.defaults);
-  const name = measurementName(facts);
+  const name = facts.wafer === '' ? '' : measurementName(facts);
   const problems: MapProblem[] = [];
   const problem = (line: number, column: string | null, reason: string) =>
     problems.push({ file: context.file, line, column, measurement: name === '' ? null : name, reason });
   for (const fault of map.faults) problem(fault.line, fault.column, fault.reason);
   for (const fault of words) problem(map.firstLine, fault.column, fault.reason);
-  if (facts.measuredAt.getTime() > context.now.getTime() + CLOCKS_DIFFER_MS) {
-    problem(map.firstLine, 'measured_at', 'this time lies in the future');
+  for (const [column, at] of [
+    ['measured_at', facts.measuredAt],
+    ['processed_at', facts.processedAt],
+  ] as const) {
+    const isFuture = at.getTime() > context.now.getTime() + CLOCKS_DIFFER_MS;
+    if (isFuture && (column === 'measured_at' || facts.processedAt !== facts.measuredAt))
+      problem(map.firstLine, column, 'this time lies in the future');
   }
-  const slug = map.words.stream || context.defaults.stream || '';
+  const slug = map.words.stream || context.defaults.stream?.trim() || '';
+  const identity = JSON.stringify([slug, runOrLot(facts), facts.wafer, facts.measuredAt.getTime()]);
   const settings = context.settingsOf(slug);
   if (!settings) {
     const reason = slug === '' ? 'no stream is named' : `there is no stream "${slug.slice(0, 60)}"`;
     problem(map.firstLine, 'stream', reason);
-    return { problems, name };
+    return { problems, name, identity };
   }
   const { stream } = settings;
   const quantity = VALUE_COLUMNS[context.valueColumn];
@@ -86,6 +95,6 @@ export function checkedMeasurement(
     for (const fault of faults.slice(0, 20))
       problem(map.lines[fault.row] as number, fault.column, fault.reason);
   }
-  if (problems.length > 0) return { problems, name };
-  return { measurement: { streamId: stream.id, facts, readings }, name };
+  if (problems.length > 0) return { problems, name, identity };
+  return { measurement: { streamId: stream.id, facts, readings }, name, identity };
 }

@@ -1,43 +1,31 @@
-import Papa from 'papaparse';
-
-/** Some rows of a CSV file that follow each other; `lines[i]` is the line on which row i begins, counted from 1. */
-export interface CsvRows {
-  rows: string[][];
-  lines: number[];
-}
-
-/** The file cannot be read as CSV text at all. */
-export class UnreadableFile extends Error {
-  readonly line: number | null;
-
-  constructor(reason: string, line: number | null = null) {
-    super(reason);
-    this.line = line;
-  }
-}
+import { unreadable } from './unreadable-file';
 
 const LONGEST_RECORD = 1 << 20;
 
 /**
  * The text of a CSV file (UTF-8) in pieces that hold whole records: the file is never held whole. Throws
- * `UnreadableFile` for a binary file, text that is not UTF-8 and a record of more than a megabyte.
+ * `UnreadableFile` for a binary file, text that is not UTF-8 and a record of more than a megabyte; that record is the
+ * last piece, so that its reader may find what is wrong with it first.
  */
-export async function* csvPieces(bytes: AsyncIterable<Uint8Array>): AsyncGenerator<string> {
+export async function* csvPieces(
+  bytes: Iterable<Uint8Array> | AsyncIterable<Uint8Array>,
+): AsyncGenerator<string> {
   const decoder = new TextDecoder('utf-8', { fatal: true });
   const decoded = (chunk?: Uint8Array) => {
     try {
       return chunk === undefined ? decoder.decode() : decoder.decode(chunk, { stream: true });
     } catch {
-      throw new UnreadableFile('this is not text in UTF-8');
+      throw unreadable('this is not text in UTF-8');
     }
   };
   let rest = '';
   for await (const chunk of bytes) {
-    if (chunk.includes(0)) throw new UnreadableFile('this is a binary file, not text');
+    if (chunk.includes(0)) throw unreadable('this is a binary file, not text');
     rest += decoded(chunk);
     const end = lastRecordEnd(rest);
     if (end === 0 && rest.length > LONGEST_RECORD) {
-      throw new UnreadableFile('a record is longer than a megabyte: an open quote?');
+      yield rest;
+      throw unreadable('a row is longer than a megabyte');
     }
     if (end > 0) yield rest.slice(0, end);
     rest = rest.slice(end);
@@ -60,26 +48,67 @@ function lastRecordEnd(text: string): number {
 }
 
 /**
- * The rows of a piece of CSV text (RFC 4180) that begins on `firstLine`, blank lines passed over, and the line on which
- * the next piece begins. Throws `UnreadableFile` for quotes that do not match.
+ * Hands over the rows of a piece of CSV text (RFC 4180, lines that end with CR LF or LF alone) that begins on
+ * `firstLine`, each with the line on which it begins, blank lines passed over. Returns the line on which the next piece
+ * begins. Throws `UnreadableFile` for quotes that do not match, after the rows before them.
+ *
+ * @example csvRows('a,"b, c"\r\n', 1, onRow) // onRow(['a', 'b, c'], 1), and 2 comes back
  */
-export function csvRows(text: string, firstLine: number): CsvRows & { nextLine: number } {
-  const { data, errors } = Papa.parse<string[]>(text, { delimiter: ',' });
-  const error = errors.find((e) => e.type === 'Quotes');
-  const quoted = text.includes('"');
-  const rows: string[][] = [];
-  const lines: number[] = [];
+export function csvRows(
+  text: string,
+  firstLine: number,
+  onRow: (cells: string[], line: number) => void,
+): number {
   let line = firstLine;
-  data.forEach((row, index) => {
-    if (error && error.row === index)
-      throw new UnreadableFile(`quotes that do not match: ${error.message}`, line);
-    if (index === data.length - 1 && row.length === 1 && row[0] === '') return;
-    if (row.length > 1 || row[0] !== '') {
-      rows.push(row);
-      lines.push(line);
+  for (let position = 0; position < text.length;) {
+    const lineEnd = text.indexOf('\n', position);
+    const end = lineEnd === -1 ? text.length : lineEnd;
+    const plain = withoutReturn(text.slice(position, end));
+    const { cells, next, newlines } = plain.includes('"')
+      ? quotedRow(text, position, line)
+      : { cells: plain.split(','), next: end + 1, newlines: 0 };
+    if (cells.length > 1 || cells[0]?.trim() !== '') onRow(cells, line);
+    position = next;
+    line += 1 + newlines;
+  }
+  return line;
+}
+
+/** One row whose cells may be quoted, with where the next begins and how many line ends its cells hold. */
+function quotedRow(
+  text: string,
+  from: number,
+  line: number,
+): { cells: string[]; next: number; newlines: number } {
+  const cells: string[] = [];
+  let newlines = 0;
+  for (let position = from; ;) {
+    let end: number;
+    if (text.charCodeAt(position) === 34) {
+      let close = text.indexOf('"', position + 1);
+      while (close !== -1 && text.charCodeAt(close + 1) === 34) close = text.indexOf('"', close + 2);
+      if (close === -1) throw unreadable('a quote is opened here and never closed', line + newlines);
+      const cell = text.slice(position + 1, close).replaceAll('""', '"');
+      cells.push(cell);
+      newlines += cell.split('\n').length - 1;
+      end = close + 1;
+      if (text.startsWith('\r\n', end) || (text.charCodeAt(end) === 13 && end + 1 === text.length)) end += 1;
+      if (end < text.length && text[end] !== ',' && text[end] !== '\n')
+        throw unreadable('quotes that do not match: more follows a closing quote', line + newlines);
+    } else {
+      const [comma, lineEnd] = [text.indexOf(',', position), text.indexOf('\n', position)];
+      end = Math.min(comma === -1 ? text.length : comma, lineEnd === -1 ? text.length : lineEnd);
+      const cell = text.slice(position, end);
+      if (cell.includes('"'))
+        throw unreadable('quotes that do not match: a quote within a bare cell', line + newlines);
+      cells.push(end === comma ? cell : withoutReturn(cell));
     }
-    line += 1;
-    if (quoted) for (const cell of row) line += cell.split('\n').length - 1;
-  });
-  return { rows, lines, nextLine: line };
+    if (text[end] !== ',') return { cells, next: end + 1, newlines };
+    position = end + 1;
+  }
+}
+
+/** Without the carriage return of a line that ends with CR LF. */
+function withoutReturn(text: string): string {
+  return text.endsWith('\r') ? text.slice(0, -1) : text;
 }

@@ -41,17 +41,20 @@ export function putDeskBack(pool: Pool, desk: Desk): void {
   desks.set(pool, stock.set(line.streamId, desk));
 }
 
-/** Desks loaded afresh, from one connection: each line from the given instant on. */
+/**
+ * Desks loaded afresh: each line from the given instant on. The line comes first: its version is then no newer than the
+ * settings, and whoever changes these meanwhile makes it out of date.
+ */
 export async function loadDesks(
   actor: Actor,
   client: ClientBase | Pool,
   wishes: readonly { streamId: string; from: number }[],
 ): Promise<Desk[]> {
+  const lines = await loadLines(actor, client, wishes);
   const settings = await listStreamSettings(
     actor,
     wishes.map((wish) => wish.streamId),
   );
-  const lines = await loadLines(actor, client, wishes);
   const byId = new Map(settings.map((one) => [one.stream.id, one]));
   return lines.flatMap((line) => {
     const found = byId.get(line.streamId);

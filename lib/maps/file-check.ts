@@ -3,14 +3,14 @@ import { getPool } from '@/lib/database/client';
 import { listSettingsInUse } from '@/lib/streams/data';
 import type { StreamSettings } from '@/lib/streams/types';
 import { checkedMeasurement } from './checked-measurement';
-import { csvPieces, UnreadableFile } from './csv-rows';
+import { csvPieces } from './csv-rows';
 import { earlierOutcomes } from './earlier-outcomes';
 import { mapPreview, type MapPreview } from './map-preview';
-import { rawMaps, SpoiltHeader, type RawMap } from './raw-maps';
+import { rawMaps, type RawMap } from './raw-maps';
 import type { MapHeader } from './map-columns';
 import type { MapProblem, Measurement } from './types';
 import { sentContent } from './sent-content';
-import { runOrLot } from './wafer-rows';
+import { unreadable, UnreadableFile } from './unreadable-file';
 
 /** A file that can be read more than once, from its beginning. */
 export interface FileSource {
@@ -45,6 +45,7 @@ export interface FileMeasurement {
   place: number;
   line: number;
   name: string;
+  identity: string;
   found: Measurement | MapProblem[];
 }
 
@@ -77,13 +78,6 @@ export async function* fileMeasurements(
   let header: MapHeader | null = null;
   let place = 0;
   const now = new Date();
-  const spoilt = (line: number | null, column: string | null, reason: string): MapProblem => ({
-    file: file.name,
-    line,
-    column,
-    measurement: null,
-    reason,
-  });
   try {
     for await (const parts of rawMaps(csvPieces(file.open()))) {
       const some: FileMeasurement[] = [];
@@ -104,18 +98,16 @@ export async function* fileMeasurements(
           place: place++,
           line: part.map.firstLine,
           name: checked.name,
+          identity: checked.identity,
           found: 'measurement' in checked ? checked.measurement : checked.problems,
         });
       }
       yield some;
     }
-    if (place === 0) throw new SpoiltFile([spoilt(null, null, 'there are no readings below the header')]);
+    if (place === 0) throw unreadable('there are no readings below the header', 1);
   } catch (error) {
-    if (error instanceof SpoiltHeader) {
-      throw new SpoiltFile(error.faults.map(({ line, column, reason }) => spoilt(line, column, reason)));
-    }
-    if (error instanceof UnreadableFile) throw new SpoiltFile([spoilt(error.line, null, error.message)]);
-    throw error;
+    if (!(error instanceof UnreadableFile)) throw error;
+    throw new SpoiltFile(error.faults.map((fault) => ({ ...fault, file: file.name, measurement: null })));
   }
 }
 
@@ -141,7 +133,7 @@ export async function checkFile(
     keptTo: 0,
   };
   let readings = 0;
-  const seen = new Map<string, { place: number; line: number; hash: string }>();
+  const seen = new Map<string, { places: number[]; line: number; hash: string | null }>();
   const refuse = (place: number, problems: readonly MapProblem[]) => {
     check.faulty.add(place);
     check.problemCount += problems.length;
@@ -159,28 +151,26 @@ export async function checkFile(
       check.kept.push(...some);
       check.keptTo = check.measurements;
     }
-    for (const { place, line, name, found } of some) {
+    for (const { place, line, name, identity, found } of some) {
+      const hash = Array.isArray(found) ? null : sentContent(found).hash;
+      const earlier = seen.get(identity);
+      if (earlier === undefined) seen.set(identity, { places: [place], line, hash });
+      else earlier.places.push(place);
       if (Array.isArray(found)) {
         refuse(place, found);
+        for (const other of earlier?.places ?? []) check.faulty.add(other);
         continue;
       }
       readings += found.readings.length;
-      const { hash } = sentContent(found);
-      const identity = JSON.stringify([
-        found.streamId,
-        runOrLot(found.facts),
-        found.facts.wafer,
-        +found.facts.measuredAt,
-      ]);
-      const earlier = seen.get(identity);
-      if (earlier !== undefined && earlier.hash !== hash) {
+      if (earlier !== undefined && earlier.hash === hash) {
+        check.repeated += 1;
+      } else if (earlier !== undefined) {
         const reason = `the same measurement begins on line ${earlier.line} already: its rows stand apart, or contradict each other`;
         refuse(place, [{ file: file.name, line, column: null, measurement: name, reason }]);
-        check.faulty.add(earlier.place);
-        continue;
+        for (const other of earlier.places) check.faulty.add(other);
+      } else {
+        sound.push({ place, line, name, measurement: found });
       }
-      if (earlier === undefined) seen.set(identity, { place, line, hash });
-      sound.push({ place, line, name, measurement: found });
     }
     const earlier = await earlierOutcomes(
       actor,

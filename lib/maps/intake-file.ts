@@ -68,7 +68,11 @@ export async function intakeFile(
     if (check.problemCount > check.problems.length) {
       result.notices.push(`${check.problemCount} problems in all; the first ${MOST_PROBLEMS} are listed`);
     }
-    if (options.checkOnly) return { ...result, repeated: check.repeated };
+    if (options.checkOnly) {
+      const fresh = check.measurements - check.faulty.size - check.repeated;
+      result.notices.push(`${fresh} measurements could be recorded`);
+      return { ...result, repeated: check.repeated };
+    }
     if (check.faulty.size === 0 || options.sound)
       await recordSound(actor, file, batch, check, options, result);
     else if (check.measurements > check.faulty.size) {

@@ -63,7 +63,7 @@ export interface MapHeader {
 export function mapHeader(
   cells: readonly string[],
 ): MapHeader | { faults: { column: string | null; reason: string }[] } {
-  const names = cells.map((cell) => cell.trim().replace(/^\uFEFF/, ''));
+  const names = cells.map((cell) => cell.trim());
   const faults: { column: string | null; reason: string }[] = [];
   const seen = new Set<string>();
   for (const name of names) {
@@ -74,7 +74,7 @@ export function mapHeader(
   for (const name of ['x_mm', 'y_mm']) {
     if (!seen.has(name)) faults.push({ column: name, reason: `the header has no column ${name}` });
   }
-  const values = names.filter((name): name is ValueColumn => name in VALUE_COLUMNS);
+  const values = names.filter((name): name is ValueColumn => Object.hasOwn(VALUE_COLUMNS, name));
   const raw = names.filter((name) => RAW_COLUMNS.includes(name));
   if (values.length > 1) {
     faults.push({

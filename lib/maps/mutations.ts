@@ -21,11 +21,11 @@ export async function decideReading(
   waferId: string,
   decision: { siteIndex: number; action: 'out' | 'in'; reason: string },
 ): Promise<{ ok: true } | { ok: false; reason: string }> {
-  const [settings] = await listStreamSettings(actor, [streamId]);
-  if (settings === undefined) return { ok: false, reason: 'There is no such stream.' };
   const { siteIndex, action, reason } = decision;
   return inTransaction(async (client) => {
     await holdStream(client, streamId);
+    const [settings] = await listStreamSettings(actor, [streamId]);
+    if (settings === undefined) return { ok: false, reason: 'There is no such stream.' };
     const before = (await loadStoredWafers(actor, client, streamId, [waferId])).get(waferId);
     if (before === undefined) return { ok: false, reason: 'There is no such wafer.' };
     const value = before.readings[siteIndex];

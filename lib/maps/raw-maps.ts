@@ -1,7 +1,8 @@
-import { csvRows, UnreadableFile } from './csv-rows';
+import { csvRows } from './csv-rows';
 import { mapHeader, type MapHeader, type WaferColumn } from './map-columns';
 import { readNumber } from './read-number';
 import { repeatedRows, rowCore, rowFrame, type RowCore, type RowFrame } from './repeated-rows';
+import { unreadable, UnreadableFile } from './unreadable-file';
 
 /** The rows of one measurement as they stand in the file: places and values as numbers, the rest still as words. */
 export interface RawMap {
@@ -19,7 +20,8 @@ export interface RawMap {
 /** What a reader of a file yields: its header once, then each measurement, whole. */
 export type MapPart = { kind: 'header'; header: MapHeader } | { kind: 'map'; map: RawMap };
 
-const IDENTITY: readonly WaferColumn[] = ['stream', 'lot', 'run', 'wafer', 'measured_at'];
+/** What tells one measurement of a file from the next. */
+export const IDENTITY_COLUMNS: readonly WaferColumn[] = ['stream', 'lot', 'run', 'wafer', 'measured_at'];
 const NOT_FINITE = /^[+-]?(nan|inf|infinity)$/i;
 
 /** Cells of one wafer that disagree are told once per column, and no more than this many faults per wafer are kept. */
@@ -32,6 +34,8 @@ interface Gathering {
   frame: RowFrame | null;
 }
 
+type RowFault = RawMap['faults'][number];
+
 /**
  * Gathers the rows of a wafer-map file into measurements: rows that follow each other and name the same stream, lot,
  * run, wafer and time of measurement. Holds one measurement at a time. `pieces` are texts of whole records.
@@ -40,20 +44,30 @@ export async function* rawMaps(pieces: AsyncIterable<string>): AsyncGenerator<Ma
   let header: MapHeader | null = null;
   let core: RowCore | null = null;
   let current: Gathering | null = null;
+  // Rows whose cells do not match the header: whose they are cannot be told, so they spoil the measurements on both sides.
+  let strays: RowFault[] = [];
   let line = 1;
   for await (const text of pieces) {
     const parts: MapPart[] = [];
     const take = (header: MapHeader, cells: readonly string[], at: number) => {
-      if (current === null || !sameIdentity(header, current.cells, cells)) {
-        if (current !== null) parts.push({ kind: 'map', map: current.map });
-        current = { map: begun(header, cells, at), cells, frame: core && rowFrame(core, cells) };
+      if (cells.length !== header.width) {
+        const reason = `this row has ${cells.length} cells, the header ${header.width}`;
+        strays = addFault(strays, { line: at, column: null, reason });
+        return;
       }
+      const isNext = current === null || !sameIdentity(header, current.cells, cells);
+      if (current !== null) for (const stray of strays) addFault(current.map.faults, stray);
+      if (current === null || isNext) {
+        if (current !== null) parts.push({ kind: 'map', map: current.map });
+        current = { map: begun(header, cells, at, strays), cells, frame: core && rowFrame(core, cells) };
+      }
+      strays = [];
       addRow(header, current.map, current.cells, cells, at);
     };
     if (header !== null && core !== null && !text.includes('"')) {
       for (let position = 0; position < text.length; line += 1) {
         const going = current as Gathering | null;
-        if (going !== null && going.frame !== null) {
+        if (going !== null && going.frame !== null && strays.length === 0) {
           const taken = repeatedRows(text, position, line, going.frame, core, going.map);
           position = taken.position;
           line += taken.rows;
@@ -61,17 +75,15 @@ export async function* rawMaps(pieces: AsyncIterable<string>): AsyncGenerator<Ma
         }
         const end = text.indexOf('\n', position);
         const row = text.slice(position, end === -1 ? text.length : end).replace(/\r$/, '');
-        if (row !== '') take(header, row.split(','), line);
+        if (row.trim() !== '') take(header, row.split(','), line);
         position = end === -1 ? text.length : end + 1;
       }
     } else {
-      const { rows, lines, nextLine } = csvRows(text, line);
-      line = nextLine;
-      rows.forEach((row, index) => {
-        const at = lines[index] as number;
+      line = csvRows(text, line, (row, at) => {
         if (header !== null) return take(header, row, at);
         const found = mapHeader(row);
-        if ('faults' in found) throw new SpoiltHeader(found.faults.map((fault) => ({ line: at, ...fault })));
+        if ('faults' in found)
+          throw new UnreadableFile(found.faults.map((fault) => ({ line: at, ...fault })));
         header = found;
         core = rowCore(found);
         parts.push({ kind: 'header', header: found });
@@ -79,32 +91,31 @@ export async function* rawMaps(pieces: AsyncIterable<string>): AsyncGenerator<Ma
     }
     yield parts;
   }
-  if (header === null) throw new UnreadableFile('the file is empty');
+  if (header === null) throw unreadable('the file is empty', 1);
   const last = current as Gathering | null;
+  if (last !== null) for (const stray of strays) addFault(last.map.faults, stray);
+  else if (strays.length > 0) throw new UnreadableFile(strays);
   yield last === null ? [] : [{ kind: 'map', map: last.map }];
-}
-
-/** The header of a file cannot serve. */
-export class SpoiltHeader extends Error {
-  readonly faults: RawMap['faults'];
-
-  constructor(faults: RawMap['faults']) {
-    super(faults.map((fault) => fault.reason).join('; '));
-    this.faults = faults;
-  }
 }
 
 function sameIdentity(header: MapHeader, first: readonly string[], row: readonly string[]): boolean {
   for (const { column, index } of header.wafer) {
-    if (first[index] !== row[index] && IDENTITY.includes(column)) return false;
+    if (first[index] === row[index] || !IDENTITY_COLUMNS.includes(column)) continue;
+    if (first[index]?.trim() !== row[index]?.trim()) return false;
   }
   return true;
 }
 
-function begun(header: MapHeader, row: readonly string[], line: number): RawMap {
+function begun(header: MapHeader, row: readonly string[], line: number, strays: readonly RowFault[]): RawMap {
   const words: RawMap['words'] = {};
   for (const { column, index } of header.wafer) words[column] = (row[index] ?? '').trim();
-  return { firstLine: line, words, xMm: [], yMm: [], values: [], lines: [], faults: [] };
+  return { firstLine: line, words, xMm: [], yMm: [], values: [], lines: [], faults: [...strays] };
+}
+
+/** The faults with one more, as long as there is room. */
+function addFault(faults: RowFault[], fault: RowFault): RowFault[] {
+  if (faults.length < MOST_FAULTS) faults.push(fault);
+  return faults;
 }
 
 function addRow(
@@ -114,18 +125,15 @@ function addRow(
   row: readonly string[],
   line: number,
 ): void {
-  const fault = (column: string | null, reason: string) => {
-    if (map.faults.length < MOST_FAULTS) map.faults.push({ line, column, reason });
-  };
-  if (row.length !== header.width) {
-    fault(null, `this row has ${row.length} cells, the header ${header.width}`);
-    return;
-  }
+  const fault = (column: string | null, reason: string) => addFault(map.faults, { line, column, reason });
   if (row !== first) {
     for (const { column, index } of header.wafer) {
       if (row[index] === first[index] || row[index]?.trim() === first[index]?.trim()) continue;
       const known = map.faults.some((other) => other.column === column);
-      if (!known) fault(column, `"${row[index]}" here, but "${first[index]}" on the wafer's first row`);
+      if (!known) {
+        const [here, there] = [row[index], first[index]].map((cell) => (cell ?? '').trim().slice(0, 40));
+        fault(column, `"${here}" here, but "${there}" on the wafer's first row`);
+      }
     }
   }
   const x = readNumber(row[header.x] as string);

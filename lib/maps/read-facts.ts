@@ -1,13 +1,19 @@
 import type { RawMap } from './raw-maps';
 import { CORRECTIONS, type MeasurementFacts } from './types';
 import type { WaferColumn } from './map-columns';
+import { readNumber } from './read-number';
 
 export type WordFault = { column: WaferColumn; reason: string };
 
 /** A time that names its offset from UTC: ISO 8601, `2031-04-05T06:07:08+02:00` or with Z. */
 const WITH_OFFSET = /^\d{4}-\d{2}-\d{2}[T ]\d{2}:\d{2}(:\d{2}(\.\d{1,6})?)?(Z|[+-]\d{2}:?\d{2})$/;
 const WITHOUT_OFFSET = /^\d{4}-\d{2}-\d{2}([T ]\d{2}:\d{2}(:\d{2}(\.\d+)?)?)?$/;
-const NUMBER = /^[+-]?(\d+\.?\d*|\.\d+)([eE][+-]?\d+)?$/;
+
+/** Nobody probed silicon before; a database knows no year 0. */
+const EARLIEST = Date.UTC(1950, 0, 1);
+/** Names are keys of the database's indexes, which hold no long texts. */
+const LONGEST_NAME = 200;
+const LONGEST_NOTE = 2000;
 
 /**
  * What the columns of a wafer say of it, as values. `defaults` stand in where the file has no column or an empty cell.
@@ -17,7 +23,12 @@ export function readFacts(
   defaults: RawMap['words'],
 ): { facts: MeasurementFacts; diameterMm: number | null; faults: WordFault[] } {
   const faults: WordFault[] = [];
-  const word = (column: WaferColumn): string | null => detached(words[column] || defaults[column]) || null;
+  const word = (column: WaferColumn): string | null => {
+    const text = detached(words[column] || defaults[column]);
+    const most = column === 'note' ? LONGEST_NOTE : LONGEST_NAME;
+    if (text.length > most) faults.push({ column, reason: `this is longer than ${most} characters` });
+    return text.slice(0, most) || null;
+  };
   const time = (column: 'measured_at' | 'processed_at'): Date | null => {
     const text = word(column);
     if (text === null) return null;
@@ -28,16 +39,19 @@ export function readFacts(
       });
       return null;
     }
-    const date = WITH_OFFSET.test(text) ? new Date(text.replace(' ', 'T')) : new Date(NaN);
-    if (!Number.isNaN(date.getTime())) return date;
-    faults.push({ column, reason: `"${text.slice(0, 40)}" is not a time such as 2031-04-05T06:07:08+00:00` });
+    const date = WITH_OFFSET.test(text) && isDay(text) ? new Date(text.replace(' ', 'T')) : new Date(NaN);
+    if (date.getTime() >= EARLIEST) return date;
+    const reason = Number.isNaN(date.getTime())
+      ? `"${text.slice(0, 40)}" is not a time such as 2031-04-05T06:07:08+00:00`
+      : 'this time lies before 1950';
+    faults.push({ column, reason });
     return null;
   };
   const number = (column: WaferColumn, wish: string, holds: (value: number) => boolean): number | null => {
     const text = word(column);
     if (text === null) return null;
-    const value = NUMBER.test(text) ? Number(text) : NaN;
-    if (Number.isFinite(value) && holds(value)) return value;
+    const value = readNumber(text);
+    if (value !== null && !Number.isNaN(value) && holds(value)) return value;
     faults.push({ column, reason: `"${text.slice(0, 40)}" is not ${wish}` });
     return null;
   };
@@ -77,6 +91,12 @@ export function readFacts(
     note: word('note'),
   };
   return { facts, diameterMm: number('diameter_mm', 'a diameter above 0', positive), faults };
+}
+
+/** Whether the day of a time is one of its month: a `Date` takes 30 February for 2 March. */
+function isDay(text: string): boolean {
+  const [year = 0, month = 0, day = 0] = text.slice(0, 10).split('-').map(Number);
+  return day <= new Date(Date.UTC(year, month, 0)).getUTCDate();
 }
 
 /** A copy of its own: a piece of a larger text would keep the whole of that text in memory. */

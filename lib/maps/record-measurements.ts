@@ -2,6 +2,7 @@ import type { Pool, PoolClient } from 'pg';
 import type { Actor } from '@/lib/access/actor';
 import { getPool } from '@/lib/database/client';
 import { takeIds } from '@/lib/database/take-ids';
+import { inTransaction } from '@/lib/database/transaction';
 import { judgedLine, LineTooShort } from '@/lib/excursions/judged-line';
 import { joinedMembers } from '@/lib/excursions/joined-members';
 import { isPlain, withIds, writeFindings, type JudgedLine } from '@/lib/excursions/write-judgement';
@@ -77,55 +78,61 @@ async function recordedTogether(
   measurements: readonly Measurement[],
   wholeLines = false,
 ): Promise<Outcome[]> {
-  const client = await pool.connect();
-  const taken: Desk[] = [];
   try {
-    await client.query('BEGIN');
-    const streamIds = [...new Set(measurements.map((measurement) => measurement.streamId))];
-    const { rows: held } = await client.query<{ id: string; version: string }>(
-      'SELECT id, version FROM stream WHERE id = ANY($1::bigint[]) ORDER BY id FOR UPDATE',
-      [streamIds],
+    const { outcomes, desks } = await inTransaction((client) =>
+      written(pool, client, actor, batch, measurements, wholeLines),
     );
-    const outcomes = await earlierOutcomes(actor, client, measurements);
-    const fresh = measurements.flatMap((measurement, index) =>
-      outcomes[index] ? [] : [{ measurement, index }],
-    );
-    const ids = await takeIds(pool, 'wafer_measurement', fresh.length);
-    const deskOf = await desksFor(pool, client, actor, held, fresh, wholeLines);
-    taken.push(...deskOf.values());
-    const subgroupIds = await takeIds(pool, 'subgroup', fresh.length);
-    const judged: JudgedLine[] = [];
-    const rows: WaferRow[] = [];
-    for (const [streamId, desk] of deskOf) {
-      const own = fresh.flatMap(({ measurement, index }, place) => {
-        if (measurement.streamId !== streamId) return [];
-        const id = ids[place] as string;
-        outcomes[index] = { kind: 'recorded', waferId: id };
-        return [{ measurement, id }];
-      });
-      const work = worked(desk, actor, batch, own, () => subgroupIds.pop() as string);
-      if (work === null) throw new LineTooShort();
-      judged.push(work.judged);
-      rows.push(...work.rows);
-    }
-    if (rows.length > 0) {
-      await withIds(pool, judged);
-      const { text, values } = recordStatement(judged, rows, batch);
-      const { rows: answer } = await client.query<{ streams: number }>({ name: 'record', text, values });
-      if (answer[0]?.streams !== judged.length)
-        throw new Error('A stream that was held moved on all the same.');
-      await writeFindings(client, judged, actor.name, batch.at ?? new Date());
-    }
-    await client.query('COMMIT');
-    for (const desk of taken) putDeskBack(pool, desk);
-    return outcomes as Outcome[];
+    for (const desk of desks) putDeskBack(pool, desk);
+    return outcomes;
   } catch (error) {
-    await client.query('ROLLBACK');
     if (!(error instanceof LineTooShort) || wholeLines) throw error;
-  } finally {
-    client.release();
   }
   return recordedTogether(pool, actor, batch, measurements, true);
+}
+
+async function written(
+  pool: Pool,
+  client: PoolClient,
+  actor: Actor,
+  batch: Batch,
+  measurements: readonly Measurement[],
+  wholeLines: boolean,
+): Promise<{ outcomes: Outcome[]; desks: Desk[] }> {
+  const streamIds = [...new Set(measurements.map((measurement) => measurement.streamId))];
+  const { rows: held } = await client.query<{ id: string; version: string }>(
+    'SELECT id, version FROM stream WHERE id = ANY($1::bigint[]) ORDER BY id FOR UPDATE',
+    [streamIds],
+  );
+  const outcomes = await earlierOutcomes(actor, client, measurements);
+  const fresh = measurements.flatMap((measurement, index) =>
+    outcomes[index] ? [] : [{ measurement, index }],
+  );
+  const ids = await takeIds(pool, 'wafer_measurement', fresh.length);
+  const deskOf = await desksFor(pool, client, actor, held, fresh, wholeLines);
+  const subgroupIds = await takeIds(pool, 'subgroup', fresh.length);
+  const judged: JudgedLine[] = [];
+  const rows: WaferRow[] = [];
+  for (const [streamId, desk] of deskOf) {
+    const own = fresh.flatMap(({ measurement, index }, place) => {
+      if (measurement.streamId !== streamId) return [];
+      const id = ids[place] as string;
+      outcomes[index] = { kind: 'recorded', waferId: id };
+      return [{ measurement, id }];
+    });
+    const work = worked(desk, actor, batch, own, () => subgroupIds.pop() as string);
+    if (work === null) throw new LineTooShort();
+    judged.push(work.judged);
+    rows.push(...work.rows);
+  }
+  if (rows.length > 0) {
+    await withIds(pool, judged);
+    const { text, values } = recordStatement(judged, rows, batch);
+    const { rows: answer } = await client.query<{ streams: number }>({ name: 'record', text, values });
+    if (answer[0]?.streams !== judged.length)
+      throw new Error('A stream that was held moved on all the same.');
+    await writeFindings(client, judged, actor.name, batch.at ?? new Date());
+  }
+  return { outcomes: outcomes as Outcome[], desks: [...deskOf.values()] };
 }
 
 /** Measures and judges the new wafers of one stream; null where its line does not reach back far enough. */

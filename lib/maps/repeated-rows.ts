@@ -23,7 +23,9 @@ export function rowCore({ x, y, value }: MapHeader): RowCore | null {
     : null;
 }
 
-export function rowFrame(core: RowCore, cells: readonly string[]): RowFrame {
+/** The frame of rows that begin with these cells; null where the cells do not stand in the text as they are. */
+export function rowFrame(core: RowCore, cells: readonly string[]): RowFrame | null {
+  if (cells.some((cell) => /[",\n]/.test(cell))) return null;
   const before = cells.slice(0, core.first);
   const behind = cells.slice(core.first + 3);
   return {

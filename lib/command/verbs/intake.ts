@@ -1,5 +1,5 @@
 import { createReadStream } from 'node:fs';
-import { stat } from 'node:fs/promises';
+import { access, constants, stat } from 'node:fs/promises';
 import { basename } from 'node:path';
 import { parseArgs } from 'node:util';
 import { commandActor } from '@/lib/access/local-actor';
@@ -32,11 +32,18 @@ What a file's columns do not say may be given for all its wafers:
 
 async function recordFiles(args: string[], output: VerbOutput): Promise<ExitStatus> {
   const { values, positionals } = parsed(args);
+  if (values.follow === true)
+    throw new UsageError('--follow is not available yet: name the files, or run intake for each new one');
   if (positionals.length === 0) throw new UsageError('name at least one file');
   for (const path of positionals) {
     const found = await stat(path).catch(() => null);
     if (!found?.isFile()) {
       output.say(`${path}: there is no such file.`);
+      return 1;
+    }
+    const unreadable = await access(path, constants.R_OK).catch(() => 'unreadable');
+    if (unreadable !== undefined) {
+      output.say(`${path}: this file may not be read.`);
       return 1;
     }
   }
@@ -71,7 +78,7 @@ async function recordFiles(args: string[], output: VerbOutput): Promise<ExitStat
       total.recorded += result.recorded;
       total.repeated += result.repeated;
       total.refused += result.refused;
-      total.refusals.push(...result.refusals);
+      total.refusals.push(...result.refusals.map((refusal) => ({ ...refusal, file: path })));
       total.notices.push(...result.notices);
     }
   } finally {
@@ -97,6 +104,7 @@ function parsed(args: string[]) {
         check: { type: 'boolean' },
         sound: { type: 'boolean' },
         history: { type: 'boolean' },
+        follow: { type: 'boolean' },
         json: { type: 'boolean' },
         ...WORDS,
       },

@@ -91,7 +91,7 @@ export const map: Verb = {
       output.say(`cannot read ${file}: ${error instanceof Error ? error.message : String(error)}`);
       return 1;
     }
-    const { wafers, refusals } = readMapFile(file, bytes);
+    const { wafers, refusals } = await readMapFile(file, [bytes]);
     if (refusals.length === 0 && wafers.length > 1 && !flags.all) {
       const line = wafers[1]!.lines[0]!;
       refusals.push({ file, line, column: 1, reason: `${wafers.length} wafers in the file: say --all` });

@@ -83,20 +83,37 @@ describe('map', () => {
     expect((await run(two, '--all', '--diameter-mm', '150')).exit).toBe(3);
   });
 
+  it('gathers the rows of a wafer that stand apart, and passes over what else a file says of a wafer', async () => {
+    const apart =
+      'wafer,note,x_mm,y_mm,resistivity_ohm_cm\nA,"1, first",0,0,5\nB,2,0,0,6\nA,3,9,0,7\nB,4,9,0,8\n';
+    const { json } = await run(apart, '--json', '--all');
+    expect(json()['wafers']).toMatchObject([
+      { wafer: 'A', sites: 2, mean: 6 },
+      { wafer: 'B', sites: 2, mean: 7 },
+    ]);
+  });
+
+  it('refuses a wafer with two diameters, or none that is a number', async () => {
+    const rows = (first: string, second: string) =>
+      `x_mm,y_mm,resistivity_ohm_cm,diameter_mm\n0,0,5,${first}\n9,0,5,${second}\n`;
+    expect((await run(rows('200', '150'))).said).toMatch(/:3:4: "150" here, but "200"/);
+    expect((await run(rows('wide', 'wide'))).said).toMatch(/:2:4: the diameter is no number/);
+  });
+
   it('refuses faults with file, line and column', async () => {
     const { exit, said, json } = await run(`${five}5,five,10\r\n`, '--json');
     expect(exit).toBe(3);
-    expect(said).toMatch(/wafer\.csv:7:2: y_mm is not a number: "five"/);
+    expect(said).toMatch(/wafer\.csv:7:2: "five" is not a number/);
     expect(json()['refusals']).toMatchObject([{ line: 7, column: 2 }]);
     for (const [content, reason] of [
       ['', /empty/],
       ['x_mm,y_mm,resistivity_ohm_cm\n', /no readings/],
       ['x_mm,resistivity_ohm_cm\n1,2\n', /no column y_mm/],
-      ['x_mm,y_mm\n1,2\n', /no column resistivity_ohm_cm/],
+      ['x_mm,y_mm\n1,2\n', /neither resistivity_ohm_cm nor/],
       ['x_mm,y_mm,resistivity_ohm_cm,sheet_resistance_ohm_sq\n1,2,3,4\n', /contradict/],
-      ['x_mm,y_mm,resistivity_ohm_cm\n1,2\n', /:2:1: 2 cells where the header has 3/],
+      ['x_mm,y_mm,resistivity_ohm_cm\n1,2\n', /:2:1: this row has 2 cells, the header 3/],
       ['x_mm,y_mm,resistivity_ohm_cm\n1,2,3\n1,2,3\n', /:3:1: .* already, in line 2/],
-      [Uint8Array.of(0xff, 0xfe, 0, 1), /not a text file/],
+      [Uint8Array.of(0xff, 0xfe, 0, 1), /binary file, not text/],
     ] as const) {
       const refused = await run(content);
       expect(refused.exit).toBe(3);
