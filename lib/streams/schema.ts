@@ -103,6 +103,13 @@ function targetFault(target: Target): { field: keyof Target; reason: string } | 
   if (missingForExpected(target, { ingotFraction }) === 'layerThicknessUm' && target.profile !== 'uniform') {
     return { field: 'lengthUm', reason: `A ${target.profile} layer needs its length.` };
   }
+  const isGraded = target.profile === 'gaussian' || target.profile === 'erfc';
+  if (isGraded && target.quantity === 'sheet_resistance' && target.backgroundDopant === null) {
+    return {
+      field: 'backgroundDopant',
+      reason: `A ${target.profile} layer ends at a junction: say on what.`,
+    };
+  }
   try {
     const layerThicknessUm = target.lengthUm ?? 1;
     expectedValue(target, { ingotFraction, layerThicknessUm });

@@ -55,7 +55,7 @@ export default async function UsePage(props: { params: Promise<{ slug: string }>
         />
       </div>
       <p className="quiet small">These stay as they are: other settings are another stream.</p>
-      <SectionHead id="screening">Screening</SectionHead>
+      <SectionHead id="change-screening">Screening</SectionHead>
       <ScreeningForm slug={stream.slug} screening={stream.screening} />
       <SectionHead id="retire">
         {stream.retiredAt === null ? 'Take out of use' : 'Take back into use'}

@@ -1,0 +1,72 @@
+import fc from 'fast-check';
+import { describe, expect, it } from 'vitest';
+import { calibrationFactor } from '@/lib/limits/calibration-factor';
+import { expectedValue } from '@/lib/physics/expected-value';
+import type { Target } from '@/lib/physics/target';
+
+const target: Target = {
+  quantity: 'sheet_resistance',
+  dopant: 'boron',
+  densityPerCm3: 5e19,
+  tolerancePercent: null,
+  alongCrystal: false,
+  profile: 'gaussian',
+  lengthUm: 0.12,
+  backgroundDopant: 'phosphorus',
+  backgroundDensityPerCm3: 1e15,
+  calibrationFactor: null,
+  calibrationPercent: null,
+};
+const model = expectedValue(target).value;
+const wafer = (subgroupId: string, ratio: number) => ({
+  subgroupId,
+  measured: ratio * model,
+  ingotFraction: null,
+  thicknessUm: 725,
+});
+
+describe('calibrationFactor', () => {
+  it('is the mean of the subgroups’ ratios, with the standard uncertainty of that mean', () => {
+    const found = calibrationFactor(target, 'implant', [wafer('1', 1.1), wafer('2', 1.2), wafer('3', 1.3)]);
+    expect(found?.factor).toBeCloseTo(1.2, 12);
+    expect(found?.spreadPercent).toBeCloseTo(100 * (0.1 / 1.2), 9);
+    expect(found?.percent).toBeCloseTo(100 * (0.1 / 1.2 / Math.sqrt(3)), 9);
+  });
+
+  it('counts a subgroup once, however many wafers it has', () => {
+    const found = calibrationFactor(target, 'implant', [wafer('1', 1), wafer('1', 1.2), wafer('2', 1.3)]);
+    expect(found?.factor).toBeCloseTo(1.2, 12);
+    expect(found).toMatchObject({ subgroups: 2, wafers: 3 });
+  });
+
+  it('compares with physics alone, whatever factor the target has already', () => {
+    const wafers = [wafer('1', 1.1), wafer('2', 1.3)];
+    const before = { ...target, calibrationFactor: 2, calibrationPercent: 1 };
+    expect(calibrationFactor(before, 'implant', wafers)).toEqual(
+      calibrationFactor(target, 'implant', wafers),
+    );
+  });
+
+  it('is none with fewer than two subgroups, or where physics expects nothing', () => {
+    expect(calibrationFactor(target, 'implant', [])).toBeNull();
+    expect(calibrationFactor(target, 'implant', [wafer('1', 1), wafer('1', 2)])).toBeNull();
+    const crystal = { ...target, alongCrystal: true };
+    expect(calibrationFactor(crystal, 'implant', [wafer('1', 1), wafer('2', 2)])).toBeNull();
+  });
+
+  it('grows with the readings and keeps its relative uncertainty', () => {
+    fc.assert(
+      fc.property(fc.double({ min: 0.1, max: 10, noNaN: true }), (times) => {
+        const ratios = [1, 1.05, 0.98, 1.01];
+        const at = (scale: number) =>
+          calibrationFactor(
+            target,
+            'implant',
+            ratios.map((ratio, i) => wafer(String(i), ratio * scale)),
+          );
+        expect(at(times)!.factor / at(1)!.factor / times).toBeCloseTo(1, 9);
+        expect(at(times)!.percent).toBeCloseTo(at(1)!.percent, 6);
+      }),
+    );
+  });
+});
