@@ -88,6 +88,12 @@ export function checkedMeasurement(map: RawMap, context: CheckContext): Checked 
         'corrections_applied',
         'a layer has no general temperature coefficient: correct it at the gauge',
       );
+    } else if (settings.targets.length === 0) {
+      problem(
+        map.firstLine,
+        'corrections_applied',
+        'the stream has no target: whether its silicon is n or p, which decides the correction, is not known',
+      );
     }
   }
   const { readings, faults } = inSiteOrder(stream.plan, map);

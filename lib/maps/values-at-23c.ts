@@ -20,6 +20,7 @@ export function valuesAt23C(
   target: Target | null,
 ): readonly (number | null)[] {
   if (measured.correctionsApplied.includes('temperature') || measured.temperatureC === null) return readings;
+  // A wafer of a stream without a target is refused where it would need this.
   const type = target === null ? 'n' : conductionType(target.dopant);
   const temperatureC = measured.temperatureC;
   return readings.map((reading) => {
