@@ -45,16 +45,16 @@ export interface StreamStanding {
   cases: StandingCase[];
   openCases: number;
   /**
-   * Subgroups judged since the limits in force took effect (ever, where there are none), and how many have a signal;
-   * counted up to one more than `SINCE_MOST`.
+   * Subgroups judged since the limits in force took effect (ever, where there are none), counted up to one more than
+   * `SINCE_MOST`, and how many of the last `SINCE_MOST` of them have a signal.
    */
   since: { subgroups: number; withSignal: number };
   /** The levels of the baseline of the limits in force, in order. */
   baselineLevels: number[];
 }
 
-/** Counting ends here: "more than 1000" tells as much. */
-export const SINCE_MOST = 1000;
+/** Counting ends here: "over 500" tells as much. */
+export const SINCE_MOST = 500;
 
 const CASES_READ = 6;
 const BASELINE_READ = 500;
@@ -67,8 +67,10 @@ const LIMITS = `SELECT ${LIMIT_SELECTION}, state, origin, author, drafted_at AS 
 
 const CASES = `
 SELECT e.id::text, e.family, e.state, e.opened_at AS "openedAt", e.acknowledged_by AS "acknowledgedBy", found.signal,
-  count(*) OVER ()::integer AS total
-FROM excursion e LEFT JOIN LATERAL (
+  (SELECT count(*)::integer FROM excursion c WHERE c.stream_id = $1 AND c.state <> 'closed') AS total
+FROM (SELECT * FROM excursion x WHERE x.stream_id = $1 AND x.state <> 'closed'
+  ORDER BY x.family = 'specification' DESC, x.state = 'open' DESC, x.id DESC LIMIT ${CASES_READ}) e
+LEFT JOIN LATERAL (
   SELECT json_build_object('chart', g.chart, 'rule', g.rule, 'side', g.side, 'completions', g.completions,
     'participantIds', g.participant_ids::text[],
     'first', (SELECT json_build_object('id', f.id::text, 'key', f.key) FROM subgroup f
@@ -80,13 +82,12 @@ FROM excursion e LEFT JOIN LATERAL (
   WHERE g.stream_id = e.stream_id AND g.excursion_id = e.id AND g.withdrawn_at IS NULL
   ORDER BY p.position_at DESC, p.key DESC, g.completions + cardinality(g.participant_ids) DESC, g.id DESC
   LIMIT 1) found ON true
-WHERE e.stream_id = $1 AND e.state <> 'closed'
-ORDER BY e.family = 'specification' DESC, e.state = 'open' DESC, e.id DESC LIMIT ${CASES_READ}`;
+ORDER BY e.family = 'specification' DESC, e.state = 'open' DESC, e.id DESC`;
 
 const SINCE = `
 SELECT count(*)::integer AS subgroups,
-  (count(*) FILTER (WHERE completions <> '{}' OR specification <> '{}'))::integer AS "withSignal"
-FROM (SELECT completions, specification FROM subgroup WHERE stream_id = $1 AND position_at > $2 AND state = 'judged'
+  (count(*) FILTER (WHERE back <= ${SINCE_MOST} AND (completions <> '{}' OR specification <> '{}')))::integer AS "withSignal"
+FROM (SELECT completions, specification, row_number() OVER (ORDER BY position_at DESC, key DESC) AS back FROM subgroup WHERE stream_id = $1 AND position_at > $2 AND state = 'judged'
   ORDER BY position_at DESC, key DESC LIMIT ${SINCE_MOST + 1}) s`;
 
 const BASELINE = `

@@ -113,7 +113,6 @@ function limitFigures(
   const { since, baselineLevels } = view.standing;
   const lag = baselineLevels.length < 2 ? null : lagOneAutocorrelation(baselineLevels);
   const bound = 2 / Math.sqrt(Math.max(1, baselineLevels.length));
-  const count = since.subgroups > SINCE_MOST ? `over ${SINCE_MOST}` : String(since.subgroups);
   const approved =
     limits.approvedBy === null
       ? ''
@@ -132,7 +131,10 @@ function limitFigures(
     },
     {
       name: 'since then',
-      value: `${count} ${since.subgroups === 1 ? 'subgroup' : 'subgroups'}, ${since.withSignal} with a signal`,
+      value:
+        since.subgroups > SINCE_MOST
+          ? `${since.withSignal} of the last ${SINCE_MOST} with a signal`
+          : `${since.subgroups} ${since.subgroups === 1 ? 'subgroup' : 'subgroups'}, ${since.withSignal} with a signal`,
     },
     {
       name: 'lag-1 in the baseline',
