@@ -13,7 +13,7 @@ type Drawn = Omit<BoardRowProps, 'cases'> & {
 export function boardRowProps(row: BoardRow, now: Date, reachPercent: number): Drawn {
   const { stream, strip, state } = row;
   const age = (since: Date) => formatAge(Math.max(0, now.getTime() - since.getTime()));
-  const [worst] = stream.cases;
+  const { worst } = stream;
   const needsPerson = state.group === 'needs-someone';
   return {
     href: `/streams/${stream.slug}`,

@@ -1,5 +1,7 @@
+import { drawing, oneDecimal } from './drawing';
+import { gaugeMark } from './gauge-mark';
+import styles from './gauge.module.css';
 import { linearScale } from './linear-scale';
-import { Mark } from './mark';
 
 export interface ExpectedGaugeProps {
   /** Level against expected, in percent; null where either is undefined. */
@@ -18,58 +20,36 @@ export interface ExpectedGaugeProps {
 
 const width = 120;
 const height = 30;
+const middle = height / 2;
 
 /** Level against what physics expects: a hatched band for the uncertainty, brackets for the tolerance, one mark. */
 export function ExpectedGauge(props: ExpectedGaugeProps) {
   const { reachPercent: reach, tolerancePercent: tolerance, differencePercent: difference } = props;
-  const x = linearScale([-reach, reach], [8, width - 8], { clamp: true });
-  const left = x(-props.uncertaintyPercent);
+  const scale = linearScale([-reach, reach], [8, width - 8], { clamp: true });
+  const x = (percent: number) => oneDecimal(scale(percent));
+  const [left, right] = [x(-props.uncertaintyPercent), x(props.uncertaintyPercent)];
+  const bracket = (edge: number, arm: number) =>
+    Math.abs(edge) > reach ? '' : `M${oneDecimal(x(edge) + arm)} 3H${x(edge)}V27h${arm}`;
+  const brackets = tolerance === null ? '' : bracket(tolerance.lower, 4) + bracket(tolerance.upper, -4);
   const beyond = difference !== null && Math.abs(difference) > reach;
   return (
     <svg
       role="img"
       aria-label={props.label}
       viewBox={`0 0 ${width} ${height}`}
-      style={{ width: '100%', maxWidth: width, overflow: 'visible' }}
-    >
-      <line x1={0} x2={width} y1={height / 2} y2={height / 2} style={{ stroke: 'var(--rule)' }} />
-      <rect
-        x={left}
-        y={9}
-        width={x(props.uncertaintyPercent) - left}
-        height={12}
-        fill="url(#hatch-expected)"
-      />
-      <line x1={x(0)} x2={x(0)} y1={6} y2={24} style={{ stroke: 'var(--phys)' }} strokeWidth={1.5} />
-      {tolerance !== null &&
-        ([tolerance.lower, tolerance.upper] as const).map((edge, at) =>
-          Math.abs(edge) > reach ? null : (
-            <path
-              key={at}
-              d={`M${x(edge) + (at === 0 ? 4 : -4)} 3H${x(edge)}V27h${at === 0 ? 4 : -4}`}
-              fill="none"
-              style={{ stroke: 'var(--phys)' }}
-            />
-          ),
-        )}
-      {difference !== null && (
-        <>
-          <Mark
-            x={x(difference)}
-            y={height / 2}
-            shape={props.call ? 'diamond' : 'dot'}
-            size={props.call ? 2.6 : 4}
-          />
-          {beyond && (
-            <path
-              d={difference > 0 ? `M${width - 2} 10l5 5l-5 5` : `M2 10l-5 5l5 5`}
-              fill="none"
-              style={{ stroke: props.call ? 'var(--call)' : 'var(--ink)' }}
-              strokeWidth={1.4}
-            />
-          )}
-        </>
-      )}
-    </svg>
+      className={styles.expected}
+      dangerouslySetInnerHTML={drawing([
+        { d: `M0 ${middle}H${width}`, className: styles.rule },
+        { d: `M${left} 9H${right}v12H${left}z`, className: styles.band },
+        { d: `M${x(0)} 6V24${brackets}`, className: styles.phys },
+        difference === null ? null : gaugeMark(x(difference), middle, props.call),
+        beyond
+          ? {
+              d: difference > 0 ? `M${width - 2} 10l5 5l-5 5` : 'M2 10l-5 5l5 5',
+              className: props.call ? styles.callAway : styles.away,
+            }
+          : null,
+      ])}
+    />
   );
 }

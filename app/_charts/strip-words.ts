@@ -16,3 +16,13 @@ export function stripWords(points: readonly StripPoint[]): string {
   const called = signals === 0 ? 'no signals' : signals === 1 ? '1 signal' : `${signals} signals`;
   return `${count}; the newest ${signed(newest)}; ${called}`;
 }
+
+/**
+ * A strip without limits in words: what its levels are measured by then means nothing to a reader.
+ *
+ * @example unscaledWords([{ z: 0, signal: false }]) // "1 level, no limits yet"
+ */
+export function unscaledWords(points: readonly StripPoint[]): string {
+  const count = points.filter((point) => point.z !== null && !point.excluded).length;
+  return count === 0 ? 'No levels yet' : `${count === 1 ? '1 level' : `${count} levels`}, no limits yet`;
+}

@@ -17,7 +17,7 @@ export interface BoardRow {
   level: number | null;
   levelInSigma: number | null;
   outOfSpecification: boolean;
-  /** The farthest of its cases, in σ; null without any. */
+  /** How far its worst case stands from the centre now, in σ; null without one. */
   size: number | null;
 }
 
@@ -35,7 +35,7 @@ function boardRow(stream: BoardStream): BoardRow {
   const expected = boardExpected(stream);
   const strip = boardStrip(stream);
   const within = inForce?.limits.within ?? null;
-  const sizes = stream.cases.flatMap(({ chart, at }) => (at && sizeInSigma(chart, at, at.limits)) ?? []);
+  const { worst } = stream;
   return {
     stream,
     state: boardState(stream),
@@ -48,8 +48,8 @@ function boardRow(stream: BoardStream): BoardRow {
     calls: { level: newest?.levelCalls ?? false, within: newest?.withinCalls ?? false },
     level: newest?.level ?? null,
     levelInSigma: inForce === null ? null : (strip.points.findLast((point) => point.z !== null)?.z ?? null),
-    outOfSpecification: stream.cases.some((one) => one.family === 'specification'),
-    size: sizes.length === 0 ? null : Math.max(...sizes),
+    outOfSpecification: worst?.family === 'specification',
+    size: worst?.at ? sizeInSigma(worst.chart, worst.at, worst.at.limits) : null,
   };
 }
 
@@ -76,7 +76,7 @@ function worstFirst(a: BoardRow, b: BoardRow): number {
   );
 }
 
-function waitingSince({ oldestUnansweredAt, cases }: BoardStream): number {
-  const since = oldestUnansweredAt ?? cases.at(-1)?.openedAt;
+function waitingSince({ oldestUnansweredAt, worst }: BoardStream): number {
+  const since = oldestUnansweredAt ?? worst?.openedAt;
   return since?.getTime() ?? Number.MAX_SAFE_INTEGER;
 }

@@ -14,8 +14,8 @@ export interface BoardState {
  * again. "Steady" is said only of a stream that has limits to be steady between, with how far these can be trusted.
  */
 export function boardState(stream: BoardStream): BoardState {
-  const [worst] = stream.cases;
-  if (worst !== undefined) {
+  const { worst } = stream;
+  if (worst !== null) {
     const sentence = worst.signal === null ? null : signalSentence(worst.signal);
     if (worst.family === 'specification') {
       return { group: 'needs-someone', words: `out of specification${sentence ? `: ${sentence}` : ''}` };

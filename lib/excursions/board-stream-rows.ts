@@ -9,14 +9,13 @@ type LimitsJson = Omit<LimitRow, 'streamId' | 'revision' | 'effectiveFrom' | 'ba
 
 type CaseJson = Omit<BoardCase, 'openedAt' | 'at'> & {
   openedAt: string;
-  at: (ChartedFigures & { limits: LimitsJson | null }) | null;
+  at: ChartedFigures | null;
+  limitsId: string | null;
 };
 
-/** state, level, moving range, within, between, limit revision, completions if any, specification faults if any */
+/** state, level, within, limit revision, completions if any, specification faults if any */
 type PointJson = [
   BoardPoint['state'],
-  number | null,
-  number | null,
   number | null,
   number | null,
   string | null,
@@ -42,7 +41,7 @@ export interface BoardStreamRow {
   again: [id: string, wafer: string, runOrLot: string, measuredAt: string, reason: string][] | null;
   target: (Omit<Target, 'quantity'> & { id: string }) | null;
   limits: LimitsJson[] | null;
-  cases: CaseJson[] | null;
+  worst: CaseJson | null;
   open_cases: number;
   unanswered_cases: number;
   oldest_unanswered_at: Date | null;
@@ -50,6 +49,7 @@ export interface BoardStreamRow {
 
 export function boardStreamOf(row: BoardStreamRow): BoardStream {
   const { id, slug, name, step, tool, chamber, recipe, newest, charted } = row;
+  const limits = (row.limits ?? []).map(boardLimitsOf);
   return {
     id,
     slug,
@@ -62,7 +62,7 @@ export function boardStreamOf(row: BoardStreamRow): BoardStream {
     chartedValue: row.charted_value,
     target: row.target === null ? null : targetOf(row.target, row.quantity),
     points: (row.points ?? []).map(pointOf),
-    limits: (row.limits ?? []).map(boardLimitsOf),
+    limits,
     newest: newest && {
       id: newest[0],
       wafer: newest[1],
@@ -70,7 +70,7 @@ export function boardStreamOf(row: BoardStreamRow): BoardStream {
       measuredAt: new Date(newest[3]),
     },
     charted: charted && { expected: charted[0], targetId: charted[1], ingotFraction: charted[2] },
-    cases: (row.cases ?? []).map(caseOf),
+    worst: row.worst && caseOf(row.worst, limits),
     openCases: row.open_cases,
     unansweredCases: row.unanswered_cases,
     oldestUnansweredAt: row.oldest_unanswered_at,
@@ -92,11 +92,11 @@ function targetOf(
 }
 
 function pointOf(row: PointJson): BoardPoint {
-  const [state, level, movingRange, within, between, limitsId, completions, faults] = row;
+  const [state, level, within, limitsId, completions, faults] = row;
   const isUneven = (fault: string) => fault.includes(':nonuniformity:');
   const levelCalls = faults?.some((fault) => !isUneven(fault)) || completes(completions, 'level');
   const withinCalls = faults?.some(isUneven) || completes(completions, 'within');
-  return { state, level, movingRange, within, between, limitsId, levelCalls, withinCalls };
+  return { state, level, within, limitsId, levelCalls, withinCalls };
 }
 
 function completes(completions: readonly string[] | null, chart: string): boolean {
@@ -107,10 +107,7 @@ function boardLimitsOf(row: LimitsJson): BoardLimits {
   return { id: row.id, state: row.state, inherited: row.origin === 'inherited', limits: limitSetOf(row) };
 }
 
-function caseOf({ openedAt, at, ...rest }: CaseJson): BoardCase {
-  return {
-    ...rest,
-    openedAt: new Date(openedAt),
-    at: at && { ...at, limits: at.limits && limitSetOf(at.limits) },
-  };
+function caseOf({ openedAt, at, limitsId, ...rest }: CaseJson, limits: readonly BoardLimits[]): BoardCase {
+  const judgedBy = limits.find((revision) => revision.id === limitsId)?.limits ?? null;
+  return { ...rest, openedAt: new Date(openedAt), at: at && { ...at, limits: judgedBy } };
 }

@@ -6,9 +6,6 @@ import type { BoardStream } from './types';
 /** How many levels a row of the board shows. */
 export const BOARD_POINTS = 30;
 
-/** How many of a stream's cases are read whole; the others are counted. */
-const CASES_READ = 4;
-
 /**
  * One statement, so that the board is one snapshot, and every part of it once a stream, whatever the planner guesses.
  * What grows with a stream's history is reached by index and cut off: its last subgroups by `subgroup_position`, cases
@@ -18,12 +15,19 @@ const CASES_READ = 4;
 const STATEMENT = `
 SELECT s.id, s.slug, s.name, s.step, s.tool, s.chamber, s.recipe, s.quantity, s.charted_value, plan.diameter_mm,
   strip.points, newest.wafer AS newest, charted.facts AS charted, again.wafers AS again, target.target, limits.limits,
-  counted.*, cases.cases
+  coalesce(cases.open_cases, 0) AS open_cases, coalesce(cases.unanswered_cases, 0) AS unanswered_cases,
+  cases.oldest_unanswered_at, CASE WHEN worst.id IS NOT NULL THEN json_build_object('id', worst.id::text,
+    'chart', worst.chart, 'family', worst.family, 'state', worst.state, 'openedAt', worst.opened_at,
+    'acknowledgedBy', worst.acknowledged_by, 'limitsId', worst.point_limit_id::text,
+    'signal', CASE WHEN worst.rule IS NOT NULL THEN json_build_object('chart', worst.signal_chart, 'rule', worst.rule,
+      'side', worst.signal_side, 'completions', worst.completions, 'participantIds', worst.participant_ids::text[]) END,
+    'at', CASE WHEN worst.point_id IS NOT NULL THEN json_build_object('level', worst.level,
+      'movingRange', worst.moving_range, 'within', worst.within, 'between', worst.between) END) END AS worst
 FROM stream s
 JOIN site_plan plan ON plan.id = s.site_plan_id
 CROSS JOIN LATERAL (
   SELECT array_agg(DISTINCT limit_revision_id) AS limit_ids,
-    json_agg(json_build_array(state, level, moving_range, within, between, limit_revision_id::text,
+    json_agg(json_build_array(state, level, within, limit_revision_id::text,
       CASE WHEN completions <> '{}' THEN completions END, CASE WHEN specification <> '{}' THEN specification END)
       ORDER BY position_at, key) AS points,
     (array_agg(id ORDER BY position_at DESC, key DESC))[1] AS newest_id,
@@ -55,30 +59,25 @@ LEFT JOIN LATERAL (
   FROM target_revision t WHERE t.stream_id = s.id
   ORDER BY effective_from > now(), CASE WHEN effective_from <= now() THEN effective_from END DESC,
     CASE WHEN effective_from <= now() THEN -revision ELSE revision END LIMIT 1) target ON true
+LEFT JOIN (
+  SELECT stream_id, count(*)::integer AS open_cases, (count(*) FILTER (WHERE state = 'open'))::integer AS unanswered_cases,
+    min(opened_at) FILTER (WHERE state = 'open') AS oldest_unanswered_at,
+    max(ARRAY[(family = 'specification')::integer, (state = 'open')::integer, id]::bigint[]) AS rank
+  FROM excursion WHERE state <> 'closed' GROUP BY stream_id) cases ON cases.stream_id = s.id
+LEFT JOIN LATERAL (
+  SELECT e.*, g.chart AS signal_chart, g.rule, g.side AS signal_side, g.completions, g.participant_ids, p.id AS point_id,
+    p.level, p.moving_range, p.within, p.between, p.limit_revision_id AS point_limit_id
+  FROM excursion e
+  LEFT JOIN LATERAL (${LEAD_SIGNAL}) g ON true
+  LEFT JOIN subgroup p ON p.stream_id = g.stream_id AND p.id = g.last_subgroup_id
+  WHERE e.stream_id = s.id AND e.id = cases.rank[3]) worst ON true
 CROSS JOIN LATERAL (
   SELECT json_agg(${limitsAsJson('l')} ORDER BY l.effective_from, l.revision) AS limits
   FROM (SELECT *, row_number() OVER (ORDER BY effective_from, revision) AS from_first,
       row_number() OVER (ORDER BY effective_from DESC, revision DESC) AS from_last
     FROM limit_revision
     WHERE stream_id = s.id AND state IN ('provisional', 'approved') AND effective_from <= now()) l
-  WHERE from_first = 1 OR from_last = 1 OR l.id = ANY(strip.limit_ids)) limits
-CROSS JOIN LATERAL (
-  SELECT count(*)::integer AS open_cases, (count(*) FILTER (WHERE state = 'open'))::integer AS unanswered_cases,
-    min(opened_at) FILTER (WHERE state = 'open') AS oldest_unanswered_at
-  FROM excursion e WHERE e.stream_id = s.id AND state <> 'closed') counted
-CROSS JOIN LATERAL (
-  SELECT json_agg(json_build_object('id', e.id::text, 'chart', e.chart, 'family', e.family, 'state', e.state,
-      'openedAt', e.opened_at, 'acknowledgedBy', e.acknowledged_by, 'at', CASE WHEN p.id IS NOT NULL THEN
-        json_build_object('level', p.level, 'movingRange', p.moving_range, 'within', p.within, 'between', p.between,
-          'limits', CASE WHEN l.id IS NOT NULL THEN ${limitsAsJson('l')} END) END,
-      'signal', CASE WHEN g.id IS NOT NULL THEN json_build_object('chart', g.chart, 'rule', g.rule, 'side', g.side,
-        'completions', g.completions, 'participantIds', g.participant_ids::text[]) END)
-    ORDER BY e.family = 'specification' DESC, e.state = 'open' DESC, e.id DESC) AS cases
-  FROM (SELECT * FROM excursion x WHERE x.stream_id = s.id AND x.state <> 'closed'
-    ORDER BY x.family = 'specification' DESC, x.state = 'open' DESC, x.id DESC LIMIT ${CASES_READ}) e
-  LEFT JOIN LATERAL (${LEAD_SIGNAL}) g ON true
-  LEFT JOIN subgroup p ON p.stream_id = g.stream_id AND p.id = g.last_subgroup_id
-  LEFT JOIN limit_revision l ON l.stream_id = p.stream_id AND l.id = p.limit_revision_id) cases
+  WHERE from_first = 1 OR from_last = 1 OR l.id = worst.point_limit_id OR l.id = ANY(strip.limit_ids)) limits
 WHERE s.retired_at IS NULL ORDER BY s.name, s.id`;
 
 /** Every stream in use, by name, as the board shows it. */

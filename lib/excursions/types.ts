@@ -32,7 +32,7 @@ export interface BoardLimits {
 }
 
 /** One subgroup on the board. */
-export interface BoardPoint extends ChartedFigures {
+export interface BoardPoint extends Pick<ChartedFigures, 'level' | 'within'> {
   state: LinePoint['state'];
   limitsId: string | null;
   /** It completes a rule on the level chart, or is out of the specification of mean or site. */
@@ -77,13 +77,13 @@ export interface BoardStream {
   target: { id: string; target: Target } | null;
   /** Oldest first. */
   points: BoardPoint[];
-  /** The first revision, those that judged the points, and last the one in force now. */
+  /** The first revision, those that judged the points and the worst case, and last the one in force now. */
   limits: BoardLimits[];
   newest: { id: string; wafer: string; runOrLot: string; measuredAt: Date } | null;
   /** What the newest charted subgroup was measured against, averaged over its wafers. */
   charted: { expected: number | null; targetId: string | null; ingotFraction: number | null } | null;
-  /** The worst cases first, a few of them; `openCases` counts all that are not closed. */
-  cases: BoardCase[];
+  /** Of its `openCases`: out of specification before others, unanswered before answered, then the newest. */
+  worst: BoardCase | null;
   openCases: number;
   unansweredCases: number;
   oldestUnansweredAt: Date | null;

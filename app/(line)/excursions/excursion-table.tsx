@@ -78,10 +78,10 @@ export function ExcursionTable(props: {
           key: 'who',
           head: 'Who',
           cell: (row) => (
-            <>
+            <span className={styles.words}>
               {whoWords(row)}
               {row.cause !== null && <span className="quiet"> · {row.cause}</span>}
-            </>
+            </span>
           ),
         },
         {

@@ -18,9 +18,7 @@ export function boardPoint(level: number | null, change: Partial<BoardPoint> = {
   return {
     state: level === null ? 'not-judged' : 'judged',
     level,
-    movingRange: null,
     within: level === null ? null : 1,
-    between: null,
     limitsId: '1',
     levelCalls: false,
     withinCalls: false,
@@ -42,10 +40,10 @@ export function boardCase(change: Partial<BoardCase> = {}): BoardCase {
   };
 }
 
-/** A steady stream of established limits; `cases` count themselves. */
+/** A steady stream of established limits; its worst case counts itself. */
 export function boardStream(change: Partial<BoardStream> = {}): BoardStream {
-  const cases = change.cases ?? [];
-  const unanswered = cases.filter((one) => one.state === 'open');
+  const worst = change.worst ?? null;
+  const isUnanswered = worst?.state === 'open';
   return {
     id: '1',
     slug: 'a',
@@ -61,11 +59,11 @@ export function boardStream(change: Partial<BoardStream> = {}): BoardStream {
     limits: [boardLimits()],
     newest: { id: '9', wafer: '03', runOrLot: 'R1', measuredAt: new Date('2031-03-04T06:00:00Z') },
     charted: { expected: null, targetId: null, ingotFraction: null },
-    openCases: cases.length,
-    unansweredCases: unanswered.length,
-    oldestUnansweredAt: unanswered[0]?.openedAt ?? null,
+    worst,
+    openCases: worst === null ? 0 : 1,
+    unansweredCases: isUnanswered ? 1 : 0,
+    oldestUnansweredAt: isUnanswered ? worst.openedAt : null,
     toMeasureAgain: [],
     ...change,
-    cases,
   };
 }

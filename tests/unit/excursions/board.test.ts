@@ -35,11 +35,11 @@ describe('the order of the board', () => {
     expect(
       names([
         boardStream({ name: 'steady' }),
-        boardStream({ name: 'near', cases: [boardCase()] }),
-        boardStream({ name: 'acknowledged, far', cases: [{ ...far, ...acknowledged }] }),
-        boardStream({ name: 'near, older', cases: [older] }),
-        boardStream({ name: 'far', cases: [far] }),
-        boardStream({ name: 'out', cases: [{ ...specification, ...acknowledged }] }),
+        boardStream({ name: 'near', worst: boardCase() }),
+        boardStream({ name: 'acknowledged, far', worst: { ...far, ...acknowledged } }),
+        boardStream({ name: 'near, older', worst: older }),
+        boardStream({ name: 'far', worst: far }),
+        boardStream({ name: 'out', worst: { ...specification, ...acknowledged } }),
         boardStream({ name: 'not judged', limits: [] }),
       ]),
     ).toEqual(['out', 'far', 'near, older', 'near', 'acknowledged, far', 'steady', 'not judged']);
@@ -66,20 +66,20 @@ describe('the order of the board', () => {
 
 describe('the state of a stream in words', () => {
   it('says the newest signal of its worst case', () => {
-    expect(boardState(boardStream({ cases: [boardCase()] }))).toEqual({
+    expect(boardState(boardStream({ worst: boardCase() }))).toEqual({
       group: 'needs-someone',
       words: 'beyond the upper limit',
     });
   });
 
   it('says out of specification before anything else', () => {
-    expect(boardState(boardStream({ cases: [specification] })).words).toBe(
+    expect(boardState(boardStream({ worst: specification })).words).toBe(
       'out of specification: wafer mean below its specification',
     );
   });
 
   it('keeps a case whose signals were all withdrawn until someone closes it', () => {
-    const { group, words } = boardState(boardStream({ cases: [boardCase({ signal: null, at: null })] }));
+    const { group, words } = boardState(boardStream({ worst: boardCase({ signal: null, at: null }) }));
     expect(group).toBe('needs-someone');
     expect(words).toMatch(/no longer hold/);
   });
