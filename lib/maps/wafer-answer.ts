@@ -8,6 +8,8 @@ export interface WaferAnswerFacts {
   notJudgedReason: string | null;
   /** Each way out of specification in words, the weightiest first: the first is said. */
   outOfSpecification: readonly string[];
+  /** A signal its point completes whose case is not closed, in words; null without. Out of specification outranks it. */
+  signal: string | null;
   /** Percent from expected; null where nothing is expected. */
   differencePercent: number | null;
   /** The measured value with its unit; null without a good reading. */
@@ -28,9 +30,9 @@ const MOST_USUAL_NAMED = 2;
  * @example "W-2207: 1.6 % below expected, bowl and tilt as usual for this chamber"
  */
 export function waferAnswer(facts: WaferAnswerFacts): string {
-  const { name, notJudgedReason, outOfSpecification } = facts;
+  const { name, notJudgedReason, outOfSpecification, signal } = facts;
   if (notJudgedReason !== null) return `${name}: not judged, ${notJudgedReason}`;
-  const parts = [...outOfSpecification.slice(0, 1), levelWords(facts), shapeWords(facts)];
+  const parts = [outOfSpecification[0] ?? signal, levelWords(facts), shapeWords(facts)];
   return `${name}: ${parts.filter((part) => part !== null).join(', ')}`;
 }
 

@@ -11,6 +11,7 @@ const facts: WaferAnswerFacts = {
   name: 'W-2207',
   notJudgedReason: null,
   outOfSpecification: [],
+  signal: null,
   differencePercent: -1.62,
   value: '5.514 Ω·cm',
   habits: [habit('bowl', false), habit('tilt', false), habit('ring', false, false)],
@@ -68,7 +69,11 @@ describe('the answer of a wafer', () => {
     expect(waferAnswer({ ...facts, outOfSpecification: out, notJudgedReason: 'measure again' })).toBe(
       'W-2207: not judged, measure again',
     );
-    expect(waferAnswer({ ...facts, outOfSpecification: out, habits: [] })).toBe(
+    const signal = 'beyond the upper limit';
+    expect(waferAnswer({ ...facts, signal, habits: [] })).toBe(
+      'W-2207: beyond the upper limit, 1.6\u00a0% below expected',
+    );
+    expect(waferAnswer({ ...facts, signal, outOfSpecification: out, habits: [] })).toBe(
       'W-2207: wafer mean above its specification, 1.6\u00a0% below expected',
     );
   });

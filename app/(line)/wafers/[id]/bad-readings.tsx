@@ -26,7 +26,9 @@ export function BadReadings({ shown }: { shown: WaferShown }) {
             <li key={`${reason}-${first}`}>
               {siteIndices.length === 1
                 ? formatSite(shown, first)
-                : `Sites ${siteIndices.map((site) => site + 1).join(', ')}`}
+                : siteIndices.length === wafer.readings.length
+                  ? `All ${siteIndices.length} sites`
+                  : `Sites ${siteIndices.map((site) => site + 1).join(', ')}`}
               : {STATUS_WORDS[reason]}
               {reason === 'by-hand' && word !== undefined && ` (${word.actor}: ${word.reason})`}
               {siteIndices.length === 1 && value !== null && value > 0 && (

@@ -48,7 +48,7 @@ export function MapPart({ shown }: { shown: WaferShown }) {
             }
             toScaleOfMm={shown.largestDiameterMm}
           />
-          <p className={styles.note}>{viewNote(shown)}</p>
+          {study.statistic !== null && <p className={styles.note}>{viewNote(shown)}</p>}
         </>
       )}
       {study.features.length > 0 && (

@@ -47,10 +47,13 @@ export function PhysicsPart({ shown }: { shown: WaferShown }) {
       <Figures figures={[measured, ...(fromPhysics === null ? expectedRows(shown, against) : [])]} />
       {fromPhysics !== null && (
         <>
-          <SectionHead level={3}>Calibrated, factor {factor}</SectionHead>
+          <SectionHead level={3}>
+            Calibrated, factor {factor}
+            {target.calibrationWafers !== null && ` from ${target.calibrationWafers} wafers`}
+          </SectionHead>
           <Figures figures={expectedRows(shown, against)} />
           <SectionHead level={3}>From physics alone</SectionHead>
-          <Figures figures={expectedRows(shown, fromPhysics)} />
+          <Figures figures={expectedRows(shown, fromPhysics, { bare: true })} />
         </>
       )}
       <p className={styles.note}>
@@ -69,7 +72,8 @@ export function PhysicsPart({ shown }: { shown: WaferShown }) {
   );
 }
 
-function expectedRows(shown: WaferShown, against: AgainstExpected): Figure[] {
+/** The rows of one expectation; `bare` leaves out what the calibrated one beside it says already. */
+function expectedRows(shown: WaferShown, against: AgainstExpected, options = { bare: false }): Figure[] {
   const { expected, densityPerCm3, dopantPercent } = against;
   const { target } = shown.study;
   const value = expected.value / shown.scale;
@@ -79,6 +83,11 @@ function expectedRows(shown: WaferShown, against: AgainstExpected): Figure[] {
     dopantPercent === null
       ? undefinedMark
       : `${formatSignedPercent(dopantPercent)} dopant ± ${formatPercent(against.dopantUncertaintyPercent, 1)}`;
+  const targetRow: Figure = {
+    name: `target${peak}`,
+    ink: 'expected',
+    value: formatDensityPerCm3(against.targetDensityPerCm3),
+  };
   return [
     {
       name: 'expected',
@@ -90,12 +99,8 @@ function expectedRows(shown: WaferShown, against: AgainstExpected): Figure[] {
       value: `${formatSignedPercent(against.differencePercent)} ± ${formatPercent(against.differenceUncertaintyPercent, 1)}`,
       definition: '100 · (measured / expected − 1), with the uncertainty of expected.',
     },
-    ...toleranceRow(shown, against),
-    {
-      name: `target${peak}`,
-      ink: 'expected',
-      value: formatDensityPerCm3(against.targetDensityPerCm3),
-    },
+    ...(options.bare ? [] : toleranceRow(shown, against)),
+    ...(options.bare ? [] : [targetRow]),
     {
       name: `measured as dopant${peak}`,
       value: formatDensityPerCm3(densityPerCm3),

@@ -17,6 +17,7 @@ export function WaferHead({ shown }: { shown: WaferShown }) {
     name: waferTitle(wafer.facts),
     notJudgedReason: wafer.notJudgedReason,
     outOfSpecification: wafer.specification.map(specificationWords),
+    signal: openSignal(shown),
     differencePercent: study.against?.differencePercent ?? null,
     value: study.statistic === null ? null : shown.reading(study.statistic),
     habits: study.habits,
@@ -61,6 +62,16 @@ function subWords({ wafer, settings, timeZone }: WaferShown): string {
 
 function neighbourName({ wafer, runOrLot }: WaferNeighbour): string {
   return waferTitle({ wafer, run: runOrLot === '' ? null : runOrLot, lot: null });
+}
+
+/** The first signal of its point that still has a case to be answered. */
+function openSignal({ signals, settings }: WaferShown): string | null {
+  const { subgroup } = settings.stream;
+  const open = signals.find(
+    ({ chart, excursion }) => chart !== 'specification' && excursion !== null && excursion.state !== 'closed',
+  );
+  if (open === undefined) return null;
+  return subgroup === 'wafer' ? signalSentence(open) : `${signalSentence(open)} with its ${subgroup}`;
 }
 
 function specificationWords(fault: string): string {
