@@ -9,12 +9,14 @@ export interface MapScaleProps {
   /** What the colours say: "resistivity", "against the mean". */
   label: string;
   text: (value: number) => string;
+  /** Narrow, with room for a few values only. */
+  small?: boolean;
 }
 
 /** The scale bar of a map: a step of colour for every step of the value, with the values where it changes. */
-export function MapScale({ levels, mode, unit, label, text }: MapScaleProps) {
+export function MapScale({ levels, mode, unit, label, text, small }: MapScaleProps) {
   const steps = levels.edges.length - 1;
-  const every = Math.ceil(levels.edges.length / 7);
+  const every = Math.ceil(levels.edges.length / (small ? 4 : 7));
   const middle = mode === 'difference' ? levels.edges.findIndex((edge) => edge === 0) : 0;
   return (
     <div className={styles['scale']} aria-hidden="true">

@@ -179,7 +179,14 @@ export function WaferMap(props: WaferMapProps) {
       {levels === null ? (
         <p className={styles['note']}>No good reading to draw.</p>
       ) : (
-        <MapScale levels={levels} mode={mode} unit={unit} label={props.label} text={text} />
+        <MapScale
+          levels={levels}
+          mode={mode}
+          unit={unit}
+          label={props.label}
+          text={text}
+          small={props.small ?? false}
+        />
       )}
       {surface === null && levels !== null && (
         <p className={styles['note']}>These sites span no area: no surface is drawn between them.</p>

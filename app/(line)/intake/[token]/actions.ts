@@ -42,8 +42,10 @@ export async function recordFile(
   redirect(result.batchId === null ? '/intake' : `/intake/batches/${result.batchId}`);
 }
 
-/** Throws a waiting file away, unrecorded. */
+/** Throws a waiting file away, unrecorded; one that is being recorded meanwhile is left to that. */
 export async function discardFile(token: string): Promise<void> {
-  await dropWaitingFile(localActor(), String(token));
+  const actor = localActor();
+  const claimed = await claimWaitingFile(actor, String(token));
+  if (claimed !== null) await dropWaitingFile(actor, claimed.token);
   redirect('/intake');
 }
