@@ -9,8 +9,8 @@ export const BOARD_POINTS = 30;
 /**
  * One statement, so that the board is one snapshot, and every part of it once a stream, whatever the planner guesses.
  * What grows with a stream's history is reached by index and cut off: its last subgroups by `subgroup_position`, cases
- * not closed by `excursion_open`. Readings are not touched. Rows are packed as JSON, which the driver reads several
- * times faster than as many columns.
+ * not closed by `excursion_open`. Readings are not touched. Where a gauge's clock runs ahead, now is the time of the
+ * newest subgroup. Rows are packed as JSON, which the driver reads several times faster than as many columns.
  */
 const STATEMENT = `
 SELECT s.id, s.slug, s.name, s.step, s.tool, s.chamber, s.recipe, s.quantity, s.charted_value, plan.diameter_mm,
@@ -26,7 +26,7 @@ SELECT s.id, s.slug, s.name, s.step, s.tool, s.chamber, s.recipe, s.quantity, s.
 FROM stream s
 JOIN site_plan plan ON plan.id = s.site_plan_id
 CROSS JOIN LATERAL (
-  SELECT array_agg(DISTINCT limit_revision_id) AS limit_ids,
+  SELECT greatest(now(), max(position_at)) AS now, array_agg(DISTINCT limit_revision_id) AS limit_ids,
     json_agg(json_build_array(state, level, within, limit_revision_id::text,
       CASE WHEN completions <> '{}' THEN completions END, CASE WHEN specification <> '{}' THEN specification END)
       ORDER BY position_at, key) AS points,
@@ -57,8 +57,8 @@ LEFT JOIN LATERAL (
     'backgroundDopant', background_dopant, 'backgroundDensityPerCm3', background_density_per_cm3,
     'calibrationFactor', calibration_factor, 'calibrationPercent', calibration_percent) AS target
   FROM target_revision t WHERE t.stream_id = s.id
-  ORDER BY effective_from > now(), CASE WHEN effective_from <= now() THEN effective_from END DESC,
-    CASE WHEN effective_from <= now() THEN -revision ELSE revision END LIMIT 1) target ON true
+  ORDER BY effective_from > strip.now, CASE WHEN effective_from <= strip.now THEN effective_from END DESC,
+    CASE WHEN effective_from <= strip.now THEN -revision ELSE revision END LIMIT 1) target ON true
 LEFT JOIN (
   SELECT stream_id, count(*)::integer AS open_cases, (count(*) FILTER (WHERE state = 'open'))::integer AS unanswered_cases,
     min(opened_at) FILTER (WHERE state = 'open') AS oldest_unanswered_at,
@@ -76,7 +76,7 @@ CROSS JOIN LATERAL (
   FROM (SELECT *, row_number() OVER (ORDER BY effective_from, revision) AS from_first,
       row_number() OVER (ORDER BY effective_from DESC, revision DESC) AS from_last
     FROM limit_revision
-    WHERE stream_id = s.id AND state IN ('provisional', 'approved') AND effective_from <= now()) l
+    WHERE stream_id = s.id AND state IN ('provisional', 'approved') AND effective_from <= strip.now) l
   WHERE from_first = 1 OR from_last = 1 OR l.id = worst.point_limit_id OR l.id = ANY(strip.limit_ids)) limits
 WHERE s.retired_at IS NULL ORDER BY s.name, s.id`;
 
