@@ -2,7 +2,7 @@ import type { Actor } from '@/lib/access/actor';
 import { checkFile, SpoiltFile, type FileCheck, type FileSource } from './file-check';
 import type { RawMap } from './raw-maps';
 
-export interface CheckedFile extends FileCheck {
+export interface CheckedFile extends Omit<FileCheck, 'kept' | 'keptTo'> {
   /** The file as a whole cannot be taken; `problems` say why. */
   spoilt: boolean;
   /** Measurements that are new and can be recorded. */
@@ -17,8 +17,13 @@ export async function checkedFile(
 ): Promise<CheckedFile> {
   try {
     const check = await checkFile(actor, file, words);
-    const fresh = Math.max(0, check.measurements - check.faulty.size - check.repeated);
-    return { ...check, spoilt: false, fresh };
+    const { measurements, faulty, repeated, problems, problemCount, previews, notices } = check;
+    const fresh = Math.max(0, measurements - faulty.size - repeated);
+    return {
+      ...{ measurements, faulty, repeated, problems, problemCount, previews, notices },
+      spoilt: false,
+      fresh,
+    };
   } catch (error) {
     if (!(error instanceof SpoiltFile)) throw error;
     return {
@@ -29,8 +34,6 @@ export async function checkedFile(
       problemCount: error.problems.length,
       previews: [],
       notices: [],
-      kept: [],
-      keptTo: 0,
       spoilt: true,
       fresh: 0,
     };
