@@ -196,6 +196,7 @@ CREATE TABLE wafer_measurement (
   CHECK (good_sites + bad_sites + excluded_sites = sites)
 );
 CREATE INDEX wafer_measurement_subgroup ON wafer_measurement (stream_id, subgroup_id);
+CREATE INDEX wafer_measurement_batch ON wafer_measurement (batch_id);
 
 CREATE TABLE wafer_reading (
   stream_id bigint NOT NULL,
