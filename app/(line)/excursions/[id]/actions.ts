@@ -28,7 +28,12 @@ export async function takeStep(id: string, before: FormState, form: FormData): P
     return refusedForm(before, known.length > 0 ? { errors: known } : { message: 'This step is not known.' });
   }
   const result = await stepExcursion(actor, excursion.data, step.data);
+  // After a refusal the page stays as it is: a form that vanished would take what was typed with it.
+  if (!result.ok) {
+    return refusedForm(before, {
+      message: `${result.reason} Load the page again to see what was done meanwhile.`,
+    });
+  }
   revalidatePath(`/excursions/${excursion.data}`);
-  if (!result.ok) return refusedForm(before, { message: result.reason });
   return doneForm(before, DONE[step.data.to]);
 }
