@@ -46,7 +46,8 @@ export function RadialPlot(props: RadialPlotProps) {
   const endMm = props.radiusMm ?? Math.max(...points.map((p) => p.radiusMm), 1);
   const x = scaleLinear([0, endMm], [box.left + 4, W - box.right]);
   const yTicks = y.ticks(5);
-  const format = y.tickFormat(5, props.mode === 'difference' ? '+' : undefined);
+  const tickText = y.tickFormat(5, props.mode === 'difference' ? '+' : undefined);
+  const format = (value: number) => (value === 0 ? '0' : tickText(value));
   const words = `${props.title}: ${good.length} good readings from ${format(Math.min(...good.map((p) => p.value)))} to ${format(Math.max(...good.map((p) => p.value)))} ${unit}${
     expected === null ? '' : `; expected ${expected.lower.toPrecision(4)} to ${expected.upper.toPrecision(4)}`
   }`;
@@ -109,9 +110,7 @@ export function RadialPlot(props: RadialPlotProps) {
             y={domain.beyond === null ? y(expected.value) - 4 : 11}
           >
             expected
-            {domain.beyond === null
-              ? ''
-              : ` lies ${domain.beyond}, at ${expected.value === 0 ? '0' : format(expected.value)}`}
+            {domain.beyond === null ? '' : ` lies ${domain.beyond}, at ${format(expected.value)}`}
           </text>
         </g>
       )}
