@@ -14,6 +14,7 @@ import { formatAge, formatDateTime } from '@/lib/format';
 import styles from './case.module.css';
 import { CaseAside } from './case-aside';
 import { caseChartName, caseChartProps } from './case-chart-props';
+import { CaseEvents } from './case-events';
 import { chartAxis } from './chart-figure';
 import { LogTable } from './log-table';
 import { PointTable } from './point-table';
@@ -57,6 +58,7 @@ export default async function ExcursionPage({ params }: Props) {
             {...caseChartProps(found, timeZone)}
             axis={chartAxis(found.stream, caseChartName(found))}
           />
+          <CaseEvents events={found.events} timeZone={timeZone} />
           <PointTable found={found} timeZone={timeZone} />
         </section>
         <CaseAside found={found} timeZone={timeZone} />
