@@ -34,7 +34,7 @@ export async function judgeAgain(
   if (start === -1) return;
   const change = judgedLine(line, touched, start, why);
   const judged = [{ line, change }];
-  await withIds(getPool(), judged);
+  await withIds(getPool(), judged, client);
   const parameters: unknown[] = [];
   if (change.points.length > 0) await client.query(pointsStatement(judged, parameters), parameters);
   await writeFindings(client, judged, actor.name, new Date());

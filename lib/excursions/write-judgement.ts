@@ -17,15 +17,15 @@ export function isPlain({ change }: JudgedLine): boolean {
 }
 
 /** Gives every new limit revision, case and signal its id, so that all rows can name each other before any is written. */
-export async function withIds(pool: Pool, judged: readonly JudgedLine[]): Promise<void> {
+export async function withIds(pool: Pool, judged: readonly JudgedLine[], client: ClientBase): Promise<void> {
   const excursions = judged.flatMap(({ change }) =>
     change.excursions.filter((excursion) => excursion.id === null),
   );
   const signals = judged.flatMap(({ change }) => change.signals.filter((signal) => signal.id === null));
   const limits = judged.flatMap(({ change }) => change.limits ?? []);
-  await assign(pool, 'excursion', excursions);
-  await assign(pool, 'signal', signals);
-  await assign(pool, 'limit_revision', limits);
+  await assign(pool, client, 'excursion', excursions);
+  await assign(pool, client, 'signal', signals);
+  await assign(pool, client, 'limit_revision', limits);
 }
 
 /** Text of a statement that writes points, new or changed; `guard` may join it to a condition on the stream. */
@@ -108,10 +108,11 @@ async function insert<Row>(
 
 async function assign(
   pool: Pool,
+  client: ClientBase,
   table: 'excursion' | 'signal' | 'limit_revision',
   rows: readonly (LineExcursion | LineSignal | { id: string | null })[],
 ): Promise<void> {
   if (rows.length === 0) return;
-  const ids = await takeIds(pool, table, rows.length);
+  const ids = await takeIds(pool, table, rows.length, client);
   rows.forEach((row, i) => (row.id = ids[i] ?? null));
 }

@@ -32,7 +32,7 @@ export async function remeasuredBaseline(
            AND cardinality($2::bigint[]) = 0 ORDER BY position_at DESC, key DESC LIMIT 25) latest ORDER BY position_at, key`,
     [streamId, found.baseline_ids],
   );
-  const [settings] = await listStreamSettings(actor, [streamId]);
+  const [settings] = await listStreamSettings(actor, [streamId], client);
   if (settings === undefined) return [];
   const by = measuringStream(settings);
   const wafers = await loadStoredWafers(

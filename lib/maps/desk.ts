@@ -54,6 +54,7 @@ export async function loadDesks(
   const settings = await listStreamSettings(
     actor,
     wishes.map((wish) => wish.streamId),
+    client,
   );
   const byId = new Map(settings.map((one) => [one.stream.id, one]));
   return lines.flatMap((line) => {

@@ -51,6 +51,7 @@ export async function intakeFile(
     origin: options.origin,
     history: options.history,
     actor: actor.name,
+    goesOn: true,
   };
   const result: IntakeResult = {
     batchId: null,

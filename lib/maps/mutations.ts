@@ -24,7 +24,7 @@ export async function decideReading(
   const { siteIndex, action, reason } = decision;
   return inTransaction(async (client) => {
     await holdStream(client, streamId);
-    const [settings] = await listStreamSettings(actor, [streamId]);
+    const [settings] = await listStreamSettings(actor, [streamId], client);
     if (settings === undefined) return { ok: false, reason: 'There is no such stream.' };
     const before = (await loadStoredWafers(actor, client, streamId, [waferId])).get(waferId);
     if (before === undefined) return { ok: false, reason: 'There is no such wafer.' };

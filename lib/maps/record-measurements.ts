@@ -107,9 +107,9 @@ async function written(
   const fresh = measurements.flatMap((measurement, index) =>
     outcomes[index] ? [] : [{ measurement, index }],
   );
-  const ids = await takeIds(pool, 'wafer_measurement', fresh.length);
+  const ids = await takeIds(pool, 'wafer_measurement', fresh.length, client);
   const deskOf = await desksFor(pool, client, actor, held, fresh, wholeLines);
-  const subgroupIds = await takeIds(pool, 'subgroup', fresh.length);
+  const subgroupIds = await takeIds(pool, 'subgroup', fresh.length, client);
   const judged: JudgedLine[] = [];
   const rows: WaferRow[] = [];
   for (const [streamId, desk] of deskOf) {
@@ -125,7 +125,7 @@ async function written(
     rows.push(...work.rows);
   }
   if (rows.length > 0) {
-    await withIds(pool, judged);
+    await withIds(pool, judged, client);
     const { text, values } = recordStatement(judged, rows, batch);
     const { rows: answer } = await client.query<{ streams: number }>({ name: 'record', text, values });
     if (answer[0]?.streams !== judged.length)

@@ -10,6 +10,8 @@ export interface Batch {
   origin: Origin;
   history: boolean;
   actor: string;
+  /** More measurements of the batch may follow; whoever records them says when it is finished. */
+  goesOn?: boolean;
   /** When it was recorded, where that is not now: the demonstration line has a past. */
   at?: Date;
 }
@@ -33,6 +35,7 @@ export function recordStatement(
     batch.history,
     batch.actor,
     rows.length,
+    batch.goesOn === true,
   ];
   const guard = 'JOIN moved ON moved.id = given.stream_id';
   const points = pointsStatement(judged, values, guard);
@@ -42,7 +45,7 @@ export function recordStatement(
       WHERE stream.id = judged.id AND stream.version = judged.version RETURNING stream.id
     ), filed AS (
       INSERT INTO intake_batch (id, source, origin, history, actor, recorded, finished_at)
-      SELECT $3::bigint, $4::text, $5::text, $6::boolean, $7::text, $8::integer, now() WHERE EXISTS (SELECT FROM moved)
+      SELECT $3::bigint, $4::text, $5::text, $6::boolean, $7::text, $8::integer, CASE WHEN $9::boolean THEN NULL ELSE now() END WHERE EXISTS (SELECT FROM moved)
       ON CONFLICT (id) DO UPDATE SET recorded = intake_batch.recorded + excluded.recorded
     ), placed AS (${points}), measured AS (
       INSERT INTO wafer_measurement (${columnNames(WAFER_COLUMNS)})

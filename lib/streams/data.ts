@@ -1,3 +1,4 @@
+import type { ClientBase, Pool } from 'pg';
 import type { Actor } from '@/lib/access/actor';
 import { getPrisma } from '@/lib/database/client';
 import { settingsWhere } from './settings-query';
@@ -19,9 +20,13 @@ export async function findStreamSettings(_actor: Actor, slug: string): Promise<S
   return (await settingsWhere('s.slug = $1', [slug]))[0] ?? null;
 }
 
-/** The settings of several streams by id, by name. */
-export function listStreamSettings(_actor: Actor, ids: readonly string[]): Promise<StreamSettings[]> {
-  return settingsWhere('s.id = ANY($1::bigint[])', [ids]);
+/** The settings of several streams by id, by name; within a transaction by its client. */
+export function listStreamSettings(
+  _actor: Actor,
+  ids: readonly string[],
+  client?: ClientBase | Pool,
+): Promise<StreamSettings[]> {
+  return settingsWhere('s.id = ANY($1::bigint[])', [ids], client);
 }
 
 /** The settings of every stream in use, by name. */

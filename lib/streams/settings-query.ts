@@ -1,3 +1,4 @@
+import type { ClientBase, Pool } from 'pg';
 import { getPool } from '@/lib/database/client';
 import { SETTINGS_INCLUDE, streamSettingsOf } from './stream-rows';
 import type { StreamSettings } from './types';
@@ -20,8 +21,12 @@ const STATEMENT = `SELECT ${Object.entries(SELECTION)
   .join(', ')} FROM stream s JOIN site_plan p ON p.id = s.site_plan_id`;
 
 /** The settings of the streams that a condition on `s` picks, by name. */
-export async function settingsWhere(condition: string, parameters: unknown[]): Promise<StreamSettings[]> {
-  const { rows } = await getPool().query<{
+export async function settingsWhere(
+  condition: string,
+  parameters: unknown[],
+  client: ClientBase | Pool = getPool(),
+): Promise<StreamSettings[]> {
+  const { rows } = await client.query<{
     stream: Json;
     sitePlan: Json;
     targets: Json[];
