@@ -1,6 +1,6 @@
 import type { ClientBase, Pool } from 'pg';
 import { getPool } from '@/lib/database/client';
-import { SETTINGS_INCLUDE, streamSettingsOf } from './stream-rows';
+import { streamSettingsOf, type SETTINGS_INCLUDE } from './stream-rows';
 import type { StreamSettings } from './types';
 
 type SettingsRow = Parameters<typeof streamSettingsOf>[0];
