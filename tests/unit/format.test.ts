@@ -3,7 +3,6 @@ import {
   formatAge,
   formatDate,
   formatDateTime,
-  formatDay,
   formatDensity,
   formatDensityPerCm3,
   formatNumber,
@@ -12,6 +11,7 @@ import {
   formatSheetResistance,
   formatSignedPercent,
   formatWithUncertainty,
+  shortDay,
 } from '@/lib/format';
 
 /** Unbreakable spaces read as plain ones here. */
@@ -118,11 +118,10 @@ describe('formatAge', () => {
   });
 });
 
-describe('formatDay', () => {
-  it('names the day of the site as an axis does', () => {
-    const moment = new Date('2031-04-05T22:30:00Z');
-    expect(formatDay(moment, 'UTC')).toBe('5 Apr');
-    expect(formatDay(moment, 'Europe/Berlin')).toBe('6 Apr');
-    expect(formatDay(null, 'UTC')).toBe('—');
+describe('shortDay', () => {
+  it('names a day as an axis does', () => {
+    expect(plain(shortDay('2031-04-05'))).toBe('5 Apr');
+    expect(plain(shortDay(formatDateTime(new Date('2031-04-05T22:30:00Z'), 'Europe/Berlin')))).toBe('6 Apr');
+    expect(shortDay('—')).toBe('—');
   });
 });

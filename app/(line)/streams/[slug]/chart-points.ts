@@ -1,13 +1,12 @@
 import type { StreamChartPoint } from '@/app/_charts/stream-chart-point';
 import { subgroupLabel } from '@/lib/excursions/subgroup-label';
 import type { SpanWafer } from '@/lib/excursions/span-wafers';
-import { formatDateTime, formatDay } from '@/lib/format';
-import type { Target } from '@/lib/physics/target';
+import { formatDateTime, shortDay } from '@/lib/format';
 import type { Stream } from '@/lib/streams/types';
 import type { ChartUnit } from './chart-unit';
 import type { DrawnPoint } from './drawn-points';
 import { lateOnes } from './late-ones';
-import { type PointExpected, pointExpected } from './point-expected';
+import { type ModelOf, type PointExpected, pointExpected } from './point-expected';
 import { pointTexts } from './point-texts';
 
 /** What the rows of a stream's charts are made of. */
@@ -15,7 +14,7 @@ export interface ChartSource {
   stream: Pick<Stream, 'subgroup' | 'chartedValue'>;
   points: readonly DrawnPoint[];
   wafersOf: ReadonlyMap<string, readonly SpanWafer[]>;
-  targetOf: ReadonlyMap<string, Target>;
+  modelOf: ModelOf;
   unit: ChartUnit;
   timeZone: string;
   /** Only some subgroups are shown: limits, rules and moving ranges of the whole stream say nothing about these. */
@@ -36,17 +35,18 @@ export function chartRows(source: ChartSource): ChartRow[] {
   let before: number | null = null;
   return source.points.map((point) => {
     const wafers = source.wafersOf.get(point.id) ?? [];
-    const expected = pointExpected(wafers, source.targetOf);
+    const expected = pointExpected(wafers, source.modelOf);
     const ownRange = before === null || point.level === null ? null : Math.abs(point.level - before);
     if (point.level !== null) before = point.level;
     const shown = { ...point, movingRange: isFiltered ? ownRange : point.movingRange };
     const at = new Date(point.at);
+    const minute = formatDateTime(at, source.timeZone);
     return {
       id: point.id,
       index: point.index,
       label: subgroupLabel(stream.subgroup, point.key),
       at: at.toISOString(),
-      day: formatDay(at, source.timeZone),
+      day: shortDay(minute),
       level: scaled(shown.level),
       movingRange: scaled(shown.movingRange),
       within: shown.within,
@@ -58,15 +58,10 @@ export function chartRows(source: ChartSource): ChartRow[] {
       hollow: late.has(point.id) || wafers.some((wafer) => wafer.isMeasuredAgain),
       href: wafers[0] === undefined ? '' : `/wafers/${wafers[0].id}`,
       texts: {
-        at: formatDateTime(at, source.timeZone),
+        at: minute,
         ...pointTexts({ shown, wafers, expected, unit, chartedValue: stream.chartedValue }),
       },
       expected,
     };
   });
-}
-
-/** The rows as the charts take them, without what only the server needs. */
-export function chartPoints(rows: readonly ChartRow[]): StreamChartPoint[] {
-  return rows.map(({ expected: _expected, ...point }) => point);
 }

@@ -1,7 +1,9 @@
-import type { StreamChartsProps } from '@/app/_charts/stream-charts';
+import type { ComponentProps } from 'react';
+import { packedPoints } from '@/app/_charts/packed-points';
+import type { PackedStreamCharts } from '@/app/_charts/packed-stream-charts';
 import { streamPanels } from '@/app/_charts/stream-panels';
 import { signalSentence } from '@/lib/excursions/signal-sentence';
-import { chartPoints, type ChartRow } from './chart-points';
+import type { ChartRow } from './chart-points';
 import { dopingScale } from './doping-scale';
 import { eventMarks } from './event-marks';
 import { expectedSpans } from './expected-spans';
@@ -12,7 +14,9 @@ import type { StreamView } from './stream-view';
 const WITHIN = '1 s, % of the mean';
 
 /** What the charts of a stream draw; null where the stretch holds no point. */
-export function chartProps(page: StreamView): Omit<StreamChartsProps, 'children'> | null {
+export function chartProps(
+  page: StreamView,
+): Omit<ComponentProps<typeof PackedStreamCharts>, 'children'> | null {
   const { settings, span, shown, rows, unit, standing, wish } = page;
   const { stream } = settings;
   if (shown === null || span.whole === null || rows.length === 0) return null;
@@ -21,10 +25,9 @@ export function chartProps(page: StreamView): Omit<StreamChartsProps, 'children'
   const expected = expectedSpans(rows, { isRelative, factor: unit.factor });
   const newest = rows.findLast((row) => row.expected !== null)?.expected ?? null;
   const target = settings.targets.find((revision) => revision.id === newest?.targetId)?.target;
-  const points = chartPoints(rows);
-  const view = { from: points[0]?.index ?? 0, to: points.at(-1)?.index ?? 0 };
+  const view = { from: rows[0]?.index ?? 0, to: rows.at(-1)?.index ?? 0 };
   const units = { level: unit.levelLabel, 'moving-range': unit.unit, within: WITHIN, between: unit.unit };
-  const range = streamPanels({ points, limits, expected, view, units })[0]?.domain ?? [0, 0];
+  const range = streamPanels({ points: rows, limits, expected, view, units })[0]?.domain ?? [0, 0];
   const scale =
     target === undefined || newest === null
       ? { ticks: [], unit: '' }
@@ -35,7 +38,7 @@ export function chartProps(page: StreamView): Omit<StreamChartsProps, 'children'
         });
   return {
     name: stream.name,
-    points,
+    packed: packedPoints(rows),
     pointsInSpan: span.points.length,
     limits,
     events: eventMarks(span.points, page.isLatest ? page.events : within(page.events, shown.to), limits),

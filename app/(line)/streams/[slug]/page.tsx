@@ -1,7 +1,7 @@
 import type { Metadata } from 'next';
 import { notFound } from 'next/navigation';
 import { cache } from 'react';
-import { StreamCharts } from '@/app/_charts/stream-charts';
+import { PackedStreamCharts } from '@/app/_charts/packed-stream-charts';
 import { ButtonLink } from '@/app/_ui/button-link';
 import { EmptyState } from '@/app/_ui/empty-state';
 import { Notice } from '@/app/_ui/notice';
@@ -56,9 +56,9 @@ export default async function StreamPage(props: Props) {
       ))}
       {view.span.whole !== null && <SpanFilter view={view} />}
       {charts !== null ? (
-        <StreamCharts {...charts} key={JSON.stringify(wish)}>
+        <PackedStreamCharts {...charts} key={JSON.stringify(wish)}>
           {beside}
-        </StreamCharts>
+        </PackedStreamCharts>
       ) : (
         <div className="with-beside">
           <NoPoints isEmpty={view.span.whole === null} slug={settings.stream.slug} />

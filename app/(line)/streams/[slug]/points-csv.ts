@@ -3,7 +3,7 @@ import type { SpanPoint } from '@/lib/excursions/span-points';
 import { subgroupLabel } from '@/lib/excursions/subgroup-label';
 import { dopantPercent } from '@/lib/physics/dopant-percent';
 import type { CsvSpan } from './csv-span';
-import { pointExpected } from './point-expected';
+import { modelsOf, pointExpected } from './point-expected';
 import { ratioOf } from './point-texts';
 
 /**
@@ -14,11 +14,11 @@ export function pointsCsv(span: CsvSpan): { columns: string[]; rows: CsvCell[][]
   const { stream, targets } = span.settings;
   const isRelative = stream.chartedValue === 'relative';
   const unit = isRelative ? 'percent' : span.unit;
-  const targetOf = new Map(targets.map(({ id, target }) => [id, target]));
+  const modelOf = modelsOf(targets);
   const limitsOf = new Map(span.standing.limits.map((limits) => [limits.id, limits]));
   const rows = span.points.map((point): CsvCell[] => {
     const wafers = span.wafersOf.get(point.id) ?? [];
-    const expected = pointExpected(wafers, targetOf);
+    const expected = pointExpected(wafers, modelOf);
     const ratio = ratioOf(point.level, expected, isRelative);
     const gauges = [...new Set(wafers.map((wafer) => wafer.gauge).filter((gauge) => gauge !== null))];
     return [

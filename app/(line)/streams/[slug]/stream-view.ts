@@ -13,6 +13,7 @@ import type { StreamSettings } from '@/lib/streams/types';
 import { chartRows } from './chart-points';
 import { chartUnit } from './chart-unit';
 import { drawnPoints } from './drawn-points';
+import { modelsOf } from './point-expected';
 
 const MOST_EVENTS = 200;
 const MOST_TO_MEASURE = 20;
@@ -58,7 +59,7 @@ export async function readStreamView(
     stream,
     points: drawn,
     wafersOf,
-    targetOf: new Map(settings.targets.map(({ id, target }) => [id, target])),
+    modelOf: modelsOf(settings.targets),
     unit,
     timeZone: options.timeZone,
     isFiltered,
