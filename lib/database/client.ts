@@ -19,6 +19,10 @@ export function openClients(url: string): void {
   const pool = new pg.Pool({
     connectionString: url,
     max: 20,
+    /** Prisma writes moments without their offset and takes those it reads for UTC, whatever zone the server lives in. */
+    onConnect: async (client) => {
+      await client.query("SET TIME ZONE 'UTC'");
+    },
     types: { getTypeParser: typeParser as typeof pg.types.getTypeParser },
   });
   /** A connection lost while idle is replaced at the next query. */

@@ -13,7 +13,7 @@ import { polarSites } from '@/lib/wafer/polar-sites';
 export const actor = localActor();
 const SITES = polarSites(1, 90);
 const HOUR_MS = 3_600_000;
-export const START = Date.UTC(2031, 3, 1);
+export const START = Date.UTC(2021, 3, 1);
 
 /** The instant at which wafer `i` of a stream was processed: one an hour. */
 export const hour = (i: number) => new Date(START + i * HOUR_MS);
