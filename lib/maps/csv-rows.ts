@@ -11,27 +11,42 @@ export async function* csvPieces(
   bytes: Iterable<Uint8Array> | AsyncIterable<Uint8Array>,
 ): AsyncGenerator<string> {
   const decoder = new TextDecoder('utf-8', { fatal: true });
+  let line = 1;
+  let rest = '';
+  const spoilt = (reason: string, before: string) =>
+    unreadable(reason, line + lineEnds(rest) + lineEnds(before));
   const decoded = (chunk?: Uint8Array) => {
     try {
       return chunk === undefined ? decoder.decode() : decoder.decode(chunk, { stream: true });
     } catch {
-      throw unreadable('this is not text in UTF-8');
+      const readable = new TextDecoder().decode(chunk);
+      throw spoilt('this is not text in UTF-8', readable.slice(0, Math.max(0, readable.indexOf('\uFFFD'))));
     }
   };
-  let rest = '';
   for await (const chunk of bytes) {
-    if (chunk.includes(0)) throw unreadable('this is a binary file, not text');
+    const zero = chunk.indexOf(0);
+    if (zero !== -1)
+      throw spoilt('this is a binary file, not text', new TextDecoder().decode(chunk.subarray(0, zero)));
     rest += decoded(chunk);
     const end = lastRecordEnd(rest);
     if (end === 0 && rest.length > LONGEST_RECORD) {
       yield rest;
-      throw unreadable('a row is longer than a megabyte');
+      throw unreadable('a row is longer than a megabyte', line);
     }
-    if (end > 0) yield rest.slice(0, end);
+    if (end === 0) continue;
+    const piece = rest.slice(0, end);
+    yield piece;
+    line += lineEnds(piece);
     rest = rest.slice(end);
   }
   rest += decoded();
   if (rest !== '') yield rest;
+}
+
+function lineEnds(text: string): number {
+  let count = 0;
+  for (let at = text.indexOf('\n'); at !== -1; at = text.indexOf('\n', at + 1)) count += 1;
+  return count;
 }
 
 /** Where the last whole record of the text ends: behind the last line end outside quotes. */
@@ -90,7 +105,7 @@ function quotedRow(
       if (close === -1) throw unreadable('a quote is opened here and never closed', line + newlines);
       const cell = text.slice(position + 1, close).replaceAll('""', '"');
       cells.push(cell);
-      newlines += cell.split('\n').length - 1;
+      newlines += lineEnds(cell);
       end = close + 1;
       if (text.startsWith('\r\n', end) || (text.charCodeAt(end) === 13 && end + 1 === text.length)) end += 1;
       if (end < text.length && text[end] !== ',' && text[end] !== '\n')

@@ -64,6 +64,15 @@ export function mapHeader(
   cells: readonly string[],
 ): MapHeader | { faults: { column: string | null; reason: string }[] } {
   const names = cells.map((cell) => cell.trim());
+  const separator = /[;\t]/.exec(names[0] ?? '')?.[0];
+  if (names.length === 1 && separator !== undefined) {
+    const word = separator === ';' ? 'semicolons' : 'tabs';
+    return {
+      faults: [
+        { column: null, reason: `the cells are parted by ${word}: part them by commas, with decimal points` },
+      ],
+    };
+  }
   const faults: { column: string | null; reason: string }[] = [];
   const seen = new Set<string>();
   for (const name of names) {

@@ -230,7 +230,7 @@ describe('a file with faults', () => {
       [header, { line: 1, reason: 'there are no readings below the header' }],
       ['1,2,3\n', { line: 1, column: 'x_mm' }],
       [`${header}a,"b,c\n`, { line: 2, reason: expect.stringContaining('never closed') }],
-      [`${header}a\u0000`, { line: null, reason: expect.stringContaining('binary') }],
+      [`${header}a\u0000`, { line: 2, reason: expect.stringContaining('binary') }],
       ['x_mm;y_mm;resistivity_ohm_cm\n0;0;1\n', { line: 1 }],
     ] as const) {
       const result = await take(text, { sound: true });

@@ -38,7 +38,7 @@ async function recordFiles(args: string[], output: VerbOutput): Promise<ExitStat
   for (const path of positionals) {
     const found = await stat(path).catch(() => null);
     if (!found?.isFile()) {
-      output.say(`${path}: there is no such file.`);
+      output.say(`${path}: this is no file.`);
       return 1;
     }
     const unreadable = await access(path, constants.R_OK).catch(() => 'unreadable');
@@ -63,6 +63,7 @@ async function recordFiles(args: string[], output: VerbOutput): Promise<ExitStat
   };
   try {
     for (const path of positionals) {
+      let toldAt = Date.now();
       const result = await intakeFile(
         commandActor(),
         { name: basename(path), open: () => createReadStream(path, { highWaterMark: 1 << 17 }) },
@@ -72,7 +73,11 @@ async function recordFiles(args: string[], output: VerbOutput): Promise<ExitStat
           sound: values.sound === true,
           checkOnly: values.check === true,
           defaults,
-          onProgress: (count) => output.say(`${basename(path)}: ${count} measurements so far.`),
+          onProgress: (count) => {
+            if (Date.now() - toldAt < 1000) return;
+            toldAt = Date.now();
+            output.say(`${basename(path)}: ${count} measurements so far.`);
+          },
         },
       );
       total.recorded += result.recorded;

@@ -113,6 +113,16 @@ describe('csvPieces', () => {
     expect((await piecesOf(...single)).join('')).toBe('µΩ\n');
   });
 
+  it('names the line of what is not text', async () => {
+    const lineOf = async (...chunks: (string | Uint8Array)[]) => {
+      const error: unknown = await piecesOf(...chunks).catch((thrown: unknown) => thrown);
+      return error instanceof UnreadableFile ? error.faults[0]?.line : null;
+    };
+    expect(await lineOf('a\nb\n', 'c\nd', Uint8Array.of(0x65, 0x0a, 0x66, 0xb5, 0x0a))).toBe(5);
+    expect(await lineOf('a\nb', Uint8Array.of(0x0a, 0, 0x0a))).toBe(3);
+    expect(await lineOf('a\n', Uint8Array.of(0xc2))).toBe(2);
+  });
+
   it('refuses what is not text', async () => {
     await expect(piecesOf('a,b\n', Uint8Array.of(1, 0, 2))).rejects.toThrow('binary file');
     await expect(piecesOf('a,', Uint8Array.of(0xb5), '\n')).rejects.toThrow('not text in UTF-8');

@@ -41,6 +41,13 @@ describe('the header of a wafer-map file', () => {
     ]);
   });
 
+  it('parted by semicolons or tabs is told so, once', async () => {
+    expect(await reasons('x_mm;y_mm;resistivity_ohm_cm\n0;0;1,5\n')).toEqual([
+      expect.stringContaining('semicolons'),
+    ]);
+    expect(await reasons('x_mm\ty_mm\tresistivity_ohm_cm\n')).toEqual([expect.stringContaining('tabs')]);
+  });
+
   it('is missing in an empty file', async () => {
     for (const text of ['', '\uFEFF', '\n\n', '  \r\n'])
       expect(await reasons(text)).toEqual(['the file is empty']);
