@@ -133,7 +133,7 @@ export async function checkFile(
     keptTo: 0,
   };
   let readings = 0;
-  const seen = new Map<string, { places: number[]; line: number; hash: string | null }>();
+  const seen = new Map<string, { place: number; line: number; hash: string | null; repeats?: number[] }>();
   const refuse = (place: number, problems: readonly MapProblem[]) => {
     check.faulty.add(place);
     check.problemCount += problems.length;
@@ -154,20 +154,20 @@ export async function checkFile(
     for (const { place, line, name, identity, found } of some) {
       const hash = Array.isArray(found) ? null : sentContent(found).hash;
       const earlier = seen.get(identity);
-      if (earlier === undefined) seen.set(identity, { places: [place], line, hash });
-      else earlier.places.push(place);
+      if (earlier === undefined) seen.set(identity, { place, line, hash });
+      else (earlier.repeats ??= [earlier.place]).push(place);
       if (Array.isArray(found)) {
         refuse(place, found);
-        for (const other of earlier?.places ?? []) check.faulty.add(other);
+        for (const other of earlier?.repeats ?? []) check.faulty.add(other);
         continue;
       }
       readings += found.readings.length;
-      if (earlier !== undefined && earlier.hash === hash) {
+      if (earlier !== undefined && earlier.hash === hash && !check.faulty.has(earlier.place)) {
         check.repeated += 1;
       } else if (earlier !== undefined) {
         const reason = `the same measurement begins on line ${earlier.line} already: its rows stand apart, or contradict each other`;
         refuse(place, [{ file: file.name, line, column: null, measurement: name, reason }]);
-        for (const other of earlier.places) check.faulty.add(other);
+        for (const other of earlier.repeats ?? []) check.faulty.add(other);
       } else {
         sound.push({ place, line, name, measurement: found });
       }

@@ -1,21 +1,18 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { getPool } from '@/lib/database/client';
 import { checkFile } from '@/lib/maps/file-check';
-import { intakeFile, type IntakeOptions } from '@/lib/maps/intake-file';
-import { createSitePlan } from '@/lib/streams/mutations';
-import { polarSites } from '@/lib/wafer/polar-sites';
 import { freshDatabase, type FreshDatabase } from '../support/fresh-database';
 import {
   actor,
   casesOf,
   fileText,
   forgetPlan,
-  hour,
   newStream,
   rowCounts,
   settleLimits,
   wafer,
 } from '../support/store-line';
+import { batchOf, source, take } from '../support/store-file';
 
 let database: FreshDatabase;
 let stream: { id: string; slug: string };
@@ -29,25 +26,6 @@ beforeAll(async () => {
 
 afterAll(() => database.drop());
 
-/** A file in chunks of a size that cuts rows anywhere. */
-const source = (text: string, chunk = 1000) => ({
-  name: 'monday.csv',
-  open: () =>
-    (async function* () {
-      const bytes = new TextEncoder().encode(text);
-      for (let i = 0; i < bytes.length; i += chunk) yield bytes.subarray(i, i + chunk);
-    })(),
-});
-
-const take = (text: string, options: Partial<IntakeOptions> = {}, chunk?: number) =>
-  intakeFile(actor, source(text, chunk), {
-    origin: 'command',
-    history: false,
-    sound: false,
-    defaults: {},
-    ...options,
-  });
-
 /** Wafers of the next hours that no test has used yet, as a file. */
 let used = 0;
 function freshText(count: number, edit: (lines: string[]) => void = () => undefined): string {
@@ -58,15 +36,6 @@ function freshText(count: number, edit: (lines: string[]) => void = () => undefi
   edit(lines);
   return lines.join('\n');
 }
-
-const batchOf = async (id: string | null) =>
-  (
-    await getPool().query(
-      `SELECT b.recorded, b.repeated, b.refused, b.history, b.source, b.finished_at IS NOT NULL AS finished,
-         (SELECT count(*)::integer FROM intake_refusal r WHERE r.batch_id = b.id) AS listed FROM intake_batch b WHERE id = $1`,
-      [id],
-    )
-  ).rows[0];
 
 describe('a sound file', () => {
   it('is recorded, and taken again records nothing', async () => {
@@ -212,7 +181,8 @@ describe('a file with faults', () => {
     const text = freshText(1);
     const body = text.split('\n').slice(1).join('\n');
     const other = body.replace(/[^,\n]*\n$/, '11\n');
-    expect(await take(text + body + other, { sound: true })).toMatchObject({ recorded: 0 });
+    for (const rows of [body + other, other + body])
+      expect(await take(text + rows, { sound: true })).toMatchObject({ recorded: 0, refused: 3 });
   });
 
   it('with another content than on record is refused, and the record stays', async () => {
@@ -249,60 +219,5 @@ describe('a file with faults', () => {
     expect(result.refused).toBe(200);
     expect(result.refusals).toHaveLength(1000);
     expect(result.notices[0]).toBe('1800 problems in all; the first 1000 are listed');
-  });
-});
-
-describe('taking a file that is cut off', () => {
-  it('while it is checked records nothing', async () => {
-    const text = freshText(4);
-    const counts = await rowCounts();
-    const broken = {
-      name: 'broken.csv',
-      open: () =>
-        (async function* () {
-          yield new TextEncoder().encode(text.slice(0, 1500));
-          throw new Error('the disk is gone');
-        })(),
-    };
-    const options = { origin: 'command', history: false, sound: true, defaults: {} } as const;
-    await expect(intakeFile(actor, broken, options)).rejects.toThrow('the disk is gone');
-    expect(await rowCounts()).toEqual(counts);
-  });
-
-  it('while it is recorded can be taken again, and ends with every wafer once', async () => {
-    // 400 wafers of 289 readings are more than one transaction takes.
-    const sites = polarSites(8, 90);
-    const plan = { name: 'many', diameterMm: 200, edgeExclusionMm: 0, orientation: 'notch' as const, sites };
-    const made = await createSitePlan(actor, plan);
-    const large = await newStream({ sitePlanId: made.ok ? made.value : '', screening: 'impossible' });
-    const wafers = Array.from({ length: 400 }, (_, i) =>
-      sites.map(
-        ({ xMm, yMm }) => `${large.slug},W${i},${hour(i).toISOString()},${xMm},${yMm},${10 + (i % 7) / 10}`,
-      ),
-    );
-    const text = ['stream,wafer,measured_at,x_mm,y_mm,resistivity_ohm_cm', ...wafers.flat(), ''].join('\n');
-    const stop = () => {
-      throw new Error('stopped');
-    };
-    await expect(take(text, { onProgress: stop }, 1 << 17)).rejects.toThrow('stopped');
-    const count = async () =>
-      (
-        await getPool().query('SELECT count(*)::integer AS n FROM wafer_measurement WHERE stream_id = $1', [
-          large.id,
-        ])
-      ).rows[0]?.n as number;
-    const first = await count();
-    expect(first).toBeGreaterThan(100);
-    expect(first).toBeLessThan(400);
-    const { rows } = await getPool().query(
-      'SELECT recorded, finished_at FROM intake_batch ORDER BY id DESC LIMIT 1',
-    );
-    expect(rows[0]).toEqual({ recorded: first, finished_at: null });
-    expect(await take(text, {}, 1 << 17)).toMatchObject({
-      recorded: 400 - first,
-      repeated: first,
-      refused: 0,
-    });
-    expect(await count()).toBe(400);
   });
 });
