@@ -1,5 +1,4 @@
 import type { Metadata } from 'next';
-import { Figures } from '@/app/_ui/figures';
 import { PageHead } from '@/app/_ui/page-head';
 
 export const metadata: Metadata = { title: 'Methods' };
@@ -27,7 +26,14 @@ export default function MethodsPage() {
         sub="A figure’s own page names its definition; here is where the methods were published."
         back={{ href: '/', label: 'Board' }}
       />
-      <Figures figures={METHODS.map(([name, source]) => ({ name, value: source }))} />
+      <dl style={{ margin: 0 }}>
+        {METHODS.map(([name, source]) => (
+          <div key={name} style={{ padding: '8px 0', borderBottom: '1px solid var(--rule)' }}>
+            <dt className="quiet small">{name}</dt>
+            <dd style={{ margin: 0 }}>{source}</dd>
+          </div>
+        ))}
+      </dl>
     </>
   );
 }
