@@ -183,7 +183,11 @@ describe('a file with faults', () => {
       const body = text.split('\n').slice(1).join('\n');
       const other = body.replace(/[^,\n]*\n$/, '11\n');
       const rows = order === 'same first' ? body + other : other + body;
-      expect(await take(text + rows, { sound: true })).toMatchObject({ recorded: 1, repeated: 2, refused: 3 });
+      expect(await take(text + rows, { sound: true })).toMatchObject({
+        recorded: 1,
+        repeated: 2,
+        refused: 3,
+      });
     }
   });
 
