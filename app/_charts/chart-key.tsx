@@ -12,6 +12,8 @@ const marks: readonly { shape: MarkShape; words: string }[] = [
 /** What the marks, lines and bands of the charts mean; `shown` are the mark shapes in sight. */
 export function ChartKey(props: {
   shown: ReadonlySet<MarkShape>;
+  /** False where a filtered view draws none. */
+  limits: boolean;
   expected: boolean;
   provisional: boolean;
   young: boolean;
@@ -28,10 +30,12 @@ export function ChartKey(props: {
             {words}
           </li>
         ))}
-      <li>
-        <Line dash={null} />
-        limits and centre line
-      </li>
+      {props.limits && (
+        <li>
+          <Line dash={null} />
+          limits and centre line
+        </li>
+      )}
       {props.provisional && (
         <li>
           <Line dash="5 4" />

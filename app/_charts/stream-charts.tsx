@@ -140,6 +140,7 @@ export function StreamCharts(props: StreamChartsProps) {
         />
         <ChartKey
           shown={new Set(points.flatMap((one) => panels.map(({ chart }) => chartMarkShape(one, chart))))}
+          limits={seenLimits.length > 0}
           expected={expected.length > 0}
           provisional={seenLimits.some(({ state }) => state === 'provisional')}
           young={seenLimits.some(({ state }) => state === 'young')}
