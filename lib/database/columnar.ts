@@ -16,28 +16,36 @@ export function rowsAsQuery<Row>(
   rows: readonly Row[],
   parameters: unknown[],
 ): string {
-  const sources: string[] = [];
-  const selected: string[] = [];
-  for (const { name, type, value } of columns) {
-    parameters.push(columnLiteral(rows.map(value), type));
-    const isArray = type.endsWith('[]');
-    sources.push(`$${parameters.length}::${isArray ? 'text' : type}[]`);
-    selected.push(isArray ? `${name}::${type}` : name);
-  }
-  const names = columns.map((column) => column.name).join(', ');
-  return `(SELECT ${selected.join(', ')} FROM unnest(${sources.join(', ')}) AS given (${names}))`;
+  const query = columnsAsQuery(columns, parameters.length + 1);
+  parameters.push(...columnLiterals(columns, rows));
+  return query;
 }
 
-/** The values of one column as an array literal. Only free text needs escaping. */
-function columnLiteral(values: readonly unknown[], type: string): string {
-  const isText = type === 'text';
-  const isArray = type.endsWith('[]');
-  const elements = values.map((value) => {
-    if (value === null || value === undefined) return 'NULL';
-    if (isText) return `"${String(value).replace(/[\\"]/g, '\\$&')}"`;
-    return isArray ? `"${String(value).replaceAll('"', '\\"')}"` : String(value);
+/** The same subquery alone: its text, with parameters numbered from `first` on. */
+export function columnsAsQuery<Row>(columns: readonly Column<Row>[], first: number): string {
+  const sources = columns.map(({ type }, i) => `$${first + i}::${type.endsWith('[]') ? 'text' : type}[]`);
+  const selected = columns.map(({ name, type }) => (type.endsWith('[]') ? `${name}::${type}` : name));
+  return `(SELECT ${selected.join(', ')} FROM unnest(${sources.join(', ')}) AS given (${columnNames(columns)}))`;
+}
+
+/** The parameters of that subquery: for each column its values as one array literal. */
+export function columnLiterals<Row>(columns: readonly Column<Row>[], rows: readonly Row[]): string[] {
+  return columns.map(({ type, value }) => {
+    let literal = '{';
+    for (let i = 0; i < rows.length; i += 1) {
+      if (i > 0) literal += ',';
+      literal += element(value(rows[i] as Row), type);
+    }
+    return literal + '}';
   });
-  return `{${elements.join(',')}}`;
+}
+
+/** Only free text needs escaping; an element that is an array itself travels as text. */
+function element(value: unknown, type: string): string {
+  if (value === null || value === undefined) return 'NULL';
+  const text = String(value);
+  if (type === 'text') return `"${text.replace(/[\\"]/g, '\\$&')}"`;
+  return type.endsWith('[]') ? `"${text.replaceAll('"', '\\"')}"` : text;
 }
 
 /** A PostgreSQL array literal of numbers, ids or words without quotes or backslashes; null elements stay null. */

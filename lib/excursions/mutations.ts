@@ -5,7 +5,7 @@ import { inTransaction } from '@/lib/database/transaction';
 import { loadLines } from './data';
 import { judgedLine } from './judged-line';
 import type { Line, LinePoint } from './line';
-import { pointsStatement, withIds, writeFindings } from './write-judgement';
+import { pointLiterals, pointsStatement, withIds, writeFindings } from './write-judgement';
 
 /**
  * Holds a stream until the transaction ends, so that nothing else is judged meanwhile, and moves its version on: what
@@ -35,8 +35,7 @@ export async function judgeAgain(
   const change = judgedLine(line, touched, start, why);
   const judged = [{ line, change }];
   await withIds(getPool(), judged, client);
-  const parameters: unknown[] = [];
-  if (change.points.length > 0) await client.query(pointsStatement(judged, parameters), parameters);
+  if (change.points.length > 0) await client.query(pointsStatement(1), pointLiterals(judged));
   await writeFindings(client, judged, actor.name, new Date());
 }
 

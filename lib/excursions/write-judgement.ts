@@ -1,7 +1,7 @@
 import type { ClientBase, Pool } from 'pg';
-import { columnNames, rowsAsQuery } from '@/lib/database/columnar';
+import { columnLiterals, columnNames, columnsAsQuery, rowsAsQuery } from '@/lib/database/columnar';
 import { takeIds } from '@/lib/database/take-ids';
-import type { Line, LineChange, LineExcursion, LinePoint, LineSignal } from './line';
+import type { Line, LineChange, LineExcursion, LineSignal } from './line';
 import { POINT_COLUMNS } from './line-rows';
 import { ENTRY_COLUMNS, EXCURSION_COLUMNS, LIMIT_COLUMNS, SIGNAL_COLUMNS } from './judgement-rows';
 
@@ -28,16 +28,21 @@ export async function withIds(pool: Pool, judged: readonly JudgedLine[], client:
   await assign(pool, client, 'limit_revision', limits);
 }
 
-/** Text of a statement that writes points, new or changed; `guard` may join it to a condition on the stream. */
-export function pointsStatement(judged: readonly JudgedLine[], parameters: unknown[], guard = ''): string {
-  const rows = judged.flatMap(({ line, change }) =>
-    change.points.map((point) => ({ streamId: line.streamId, point })),
-  );
+/** Text of a statement that writes points, new or changed, from parameters numbered from `first` on (`pointLiterals`). */
+export function pointsStatement(first: number, guard = ''): string {
   return `INSERT INTO subgroup (${columnNames(POINT_COLUMNS)})
-    SELECT given.* FROM ${rowsAsQuery<{ streamId: string; point: LinePoint }>(POINT_COLUMNS, rows, parameters)} given ${guard}
+    SELECT given.* FROM ${columnsAsQuery(POINT_COLUMNS, first)} given ${guard}
     ON CONFLICT (stream_id, id) DO UPDATE SET ${POINT_COLUMNS.slice(3)
       .map(({ name }) => `${name} = excluded.${name}`)
       .join(', ')}`;
+}
+
+/** The parameters of `pointsStatement`. */
+export function pointLiterals(judged: readonly JudgedLine[]): string[] {
+  const rows = judged.flatMap(({ line, change }) =>
+    change.points.map((point) => ({ streamId: line.streamId, point })),
+  );
+  return columnLiterals(POINT_COLUMNS, rows);
 }
 
 /**

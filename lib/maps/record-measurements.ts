@@ -59,8 +59,7 @@ async function recordedAlone(
   const work = worked(desk, actor, batch, [{ measurement, id }], () => subgroupId);
   if (work === null || !isPlain(work.judged)) return null;
   try {
-    const { text, values } = recordStatement([work.judged], work.rows, batch);
-    const { rows } = await pool.query<{ streams: number }>({ name: 'record', text, values });
+    const { rows } = await pool.query<{ streams: number }>(recordStatement([work.judged], work.rows, batch));
     if (rows[0]?.streams !== 1) return null;
   } catch (error) {
     if (isUniqueViolation(error)) return null;
@@ -126,8 +125,7 @@ async function written(
   }
   if (rows.length > 0) {
     await withIds(pool, judged, client);
-    const { text, values } = recordStatement(judged, rows, batch);
-    const { rows: answer } = await client.query<{ streams: number }>({ name: 'record', text, values });
+    const { rows: answer } = await client.query<{ streams: number }>(recordStatement(judged, rows, batch));
     if (answer[0]?.streams !== judged.length)
       throw new Error('A stream that was held moved on all the same.');
     await writeFindings(client, judged, actor.name, batch.at ?? new Date());

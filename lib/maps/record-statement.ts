@@ -1,5 +1,6 @@
-import { columnNames, rowsAsQuery } from '@/lib/database/columnar';
-import { pointsStatement, type JudgedLine } from '@/lib/excursions/write-judgement';
+import { columnLiterals, columnNames, columnsAsQuery } from '@/lib/database/columnar';
+import { POINT_COLUMNS } from '@/lib/excursions/line-rows';
+import { pointLiterals, pointsStatement, type JudgedLine } from '@/lib/excursions/write-judgement';
 import type { Origin } from './types';
 import { READING_COLUMNS, WAFER_COLUMNS, type WaferRow } from './wafer-rows';
 
@@ -16,17 +17,41 @@ export interface Batch {
   at?: Date;
 }
 
+/** The parameters before those of points, wafers and readings: the streams as judged, and the batch. */
+const OWN_PARAMETERS = 9;
+
+const GUARD = 'JOIN moved ON moved.id = given.stream_id';
+const FIRST_WAFER = OWN_PARAMETERS + POINT_COLUMNS.length + 1;
+const FIRST_READING = FIRST_WAFER + WAFER_COLUMNS.length;
+
+const TEXT = `WITH moved AS (
+    UPDATE stream SET version = stream.version + 1
+    FROM unnest($1::bigint[], $2::bigint[]) AS judged (id, version)
+    WHERE stream.id = judged.id AND stream.version = judged.version RETURNING stream.id
+  ), filed AS (
+    INSERT INTO intake_batch (id, source, origin, history, actor, recorded, finished_at)
+    SELECT $3::bigint, $4::text, $5::text, $6::boolean, $7::text, $8::integer,
+      CASE WHEN $9::boolean THEN NULL ELSE now() END WHERE EXISTS (SELECT FROM moved)
+    ON CONFLICT (id) DO UPDATE SET recorded = intake_batch.recorded + excluded.recorded
+  ), placed AS (${pointsStatement(OWN_PARAMETERS + 1, GUARD)}), measured AS (
+    INSERT INTO wafer_measurement (${columnNames(WAFER_COLUMNS)})
+    SELECT given.* FROM ${columnsAsQuery(WAFER_COLUMNS, FIRST_WAFER)} given ${GUARD}
+  ), kept AS (
+    INSERT INTO wafer_reading (${columnNames(READING_COLUMNS)})
+    SELECT given.* FROM ${columnsAsQuery(READING_COLUMNS, FIRST_READING)} given ${GUARD}
+  ) SELECT count(*)::integer AS streams FROM moved`;
+
 /**
  * One statement that writes measurements, their readings, their subgroups and their batch, if every stream still has
  * the version that was judged; where one has moved on nothing of that stream is written. Answers with the number of
- * streams written.
+ * streams written. Its text is always the same, so that the server plans it once.
  */
 export function recordStatement(
   judged: readonly JudgedLine[],
   rows: readonly WaferRow[],
   batch: Batch,
-): { text: string; values: unknown[] } {
-  const values: unknown[] = [
+): { name: string; text: string; values: unknown[] } {
+  const values = [
     judged.map(({ line }) => line.streamId),
     judged.map(({ line }) => line.version),
     batch.id,
@@ -36,23 +61,9 @@ export function recordStatement(
     batch.actor,
     rows.length,
     batch.goesOn === true,
+    ...pointLiterals(judged),
+    ...columnLiterals(WAFER_COLUMNS, rows),
+    ...columnLiterals(READING_COLUMNS, rows),
   ];
-  const guard = 'JOIN moved ON moved.id = given.stream_id';
-  const points = pointsStatement(judged, values, guard);
-  const text = `WITH moved AS (
-      UPDATE stream SET version = stream.version + 1
-      FROM unnest($1::bigint[], $2::bigint[]) AS judged (id, version)
-      WHERE stream.id = judged.id AND stream.version = judged.version RETURNING stream.id
-    ), filed AS (
-      INSERT INTO intake_batch (id, source, origin, history, actor, recorded, finished_at)
-      SELECT $3::bigint, $4::text, $5::text, $6::boolean, $7::text, $8::integer, CASE WHEN $9::boolean THEN NULL ELSE now() END WHERE EXISTS (SELECT FROM moved)
-      ON CONFLICT (id) DO UPDATE SET recorded = intake_batch.recorded + excluded.recorded
-    ), placed AS (${points}), measured AS (
-      INSERT INTO wafer_measurement (${columnNames(WAFER_COLUMNS)})
-      SELECT given.* FROM ${rowsAsQuery(WAFER_COLUMNS, rows, values)} given ${guard}
-    ), kept AS (
-      INSERT INTO wafer_reading (${columnNames(READING_COLUMNS)})
-      SELECT given.* FROM ${rowsAsQuery(READING_COLUMNS, rows, values)} given ${guard}
-    ) SELECT count(*)::integer AS streams FROM moved`;
-  return { text, values };
+  return { name: 'record', text: TEXT, values };
 }
