@@ -9,6 +9,9 @@ export type SubgroupWord = 'wafer' | 'run' | 'lot' | 'ingot';
  */
 export function subgroupLabel(kind: SubgroupWord, key: string): string {
   if (kind !== 'wafer') return `${kind} ${key}`;
-  const name = key.slice(0, Math.max(0, key.lastIndexOf('/'))).replace(/^\//, '');
+  const name = key
+    .slice(0, Math.max(0, key.lastIndexOf('/')))
+    .replace(/^\/(?!\/)/, '')
+    .replaceAll('//', '/');
   return `wafer ${name === '' ? key : name}`;
 }

@@ -28,24 +28,14 @@ export async function listBaselinePoints(
   streamId: string,
   span: { from: Date; to: Date },
 ): Promise<BaselinePoint[]> {
-  const rows = await getPrisma().subgroup.findMany({
-    where: { streamId: BigInt(streamId), state: 'judged', positionAt: { gte: span.from, lte: span.to } },
-    orderBy: [{ positionAt: 'asc' }, { key: 'asc' }],
-    select: {
-      id: true,
-      key: true,
-      positionAt: true,
-      level: true,
-      within: true,
-      between: true,
-      waferLevels: true,
-    },
-  });
-  return rows.flatMap(({ id, key, positionAt, level, within, between, waferLevels }) =>
-    level === null
-      ? []
-      : { id: id.toString(), key, at: positionAt, level, within, between, wafers: waferLevels.length },
+  const { rows } = await getPool().query<BaselinePoint>(
+    `SELECT id, key, position_at AS at, level, within, between,
+       cardinality(array_remove(wafer_levels, NULL)) AS wafers
+     FROM subgroup WHERE stream_id = $1 AND state = 'judged' AND position_at BETWEEN $2 AND $3
+     ORDER BY position_at, key`,
+    [streamId, span.from, span.to],
   );
+  return rows;
 }
 
 /** What judges a stream now, in brief. */

@@ -24,7 +24,10 @@ export function runOrLot(facts: MeasurementFacts): string {
 
 /** The subgroup a wafer belongs to, by the stream's kind of subgroup. */
 export function subgroupKey(kind: 'wafer' | 'run' | 'lot' | 'ingot', facts: MeasurementFacts): string {
-  if (kind === 'wafer') return `${runOrLot(facts)}/${facts.wafer}/${facts.measuredAt.toISOString()}`;
+  if (kind === 'wafer') {
+    const part = (name: string) => name.replaceAll('/', '//');
+    return `${part(runOrLot(facts))}/${part(facts.wafer)}/${facts.measuredAt.toISOString()}`;
+  }
   return (kind === 'run' ? facts.run : facts.lot) ?? '';
 }
 
