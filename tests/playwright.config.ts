@@ -34,7 +34,8 @@ export default defineConfig({
   },
   projects: [
     { name: 'desktop', use: { viewport: { width: 1440, height: 900 } } },
-    { name: 'phone', use: { viewport: { width: 390, height: 844 }, hasTouch: true } },
+    // Tests marked @phone: elsewhere a narrow window adds nothing.
+    { name: 'phone', grep: /@phone/, use: { viewport: { width: 390, height: 844 }, hasTouch: true } },
   ],
   webServer: {
     command: 'exec node lib/command/evenohm.js serve',

@@ -1,0 +1,139 @@
+import AxeBuilder from '@axe-core/playwright';
+import { expect, type APIRequestContext, type Page } from '@playwright/test';
+import { csvFile } from './csv-file';
+import { openPage } from './open-page';
+import { test } from './watched-test';
+
+/** The pages of each place; `*` stands for an id that there is. */
+const PLACES = {
+  'the board and streams': [
+    '/',
+    '/?find=nowhere',
+    '/streams',
+    '/streams/phosphorus-furnace-c',
+    '/streams/boron-crystal?gauge=Gauge+1',
+    '/methods',
+  ],
+  'wafers and excursions': [
+    '/wafers/*',
+    '/wafers/*?map=usual&site=out-3',
+    '/excursions?state=all',
+    '/excursions?state=acknowledged&stream=boron-crystal',
+    '/excursions/*',
+  ],
+  'intake and setup': ['/intake', '/intake/batches/*', '/setup', '/setup/plans/new', '/setup/streams/new'],
+  'the setup of a stream': [
+    '/setup/streams/boron-implant-1',
+    '/setup/streams/boron-crystal/specification',
+    '/setup/streams/boron-crystal/limits',
+    '/setup/streams/boron-implant-1/events',
+    '/setup/streams/boron-implant-1/use',
+  ],
+};
+const NOT_THERE = [
+  '/no-such-page',
+  '/streams/no-such',
+  '/wafers/0',
+  '/excursions/0',
+  '/intake/no-such',
+  '/intake/batches/0',
+  '/setup/streams/no-such',
+];
+
+test.describe.configure({ mode: 'parallel', timeout: 180_000 });
+test.use({ trace: 'off' });
+
+test.describe('every page', { tag: '@phone' }, () => {
+  for (const [place, addresses] of Object.entries(PLACES)) {
+    test(`of ${place} is as wide as its window and free of serious axe violations in light and dark`, async ({
+      page,
+      request,
+    }) => {
+      const ids = await someIds(request);
+      for (const address of addresses.map((one) =>
+        one.replace(/(\w+)\/\*/, (_, kind) => `${kind}/${ids[kind]}`),
+      )) {
+        await page.emulateMedia({ colorScheme: 'light' });
+        const response = await openPage(page, address);
+        expect.soft(response?.status(), address).toBe(200);
+        await expectSound(page, address);
+      }
+    });
+  }
+
+  test.describe('that is not there', () => {
+    test.use({ statuses: [404] });
+
+    test('answers 404, says so in words and offers a way on', async ({ page }) => {
+      for (const address of NOT_THERE) {
+        await page.emulateMedia({ colorScheme: 'light' });
+        const response = await openPage(page, address);
+        expect.soft(response?.status(), address).toBe(404);
+        expect.soft(await page.getByRole('main').getByRole('link').count(), address).toBeGreaterThan(0);
+        await expectSound(page, address);
+      }
+    });
+  });
+});
+
+test('the focus is seen wherever the key Tab leads', async ({ page }) => {
+  for (const address of ['/', '/streams/phosphorus-furnace-c', '/setup/streams/boron-implant-1/events']) {
+    await openPage(page, address);
+    const unseen: string[] = [];
+    for (let press = 0; press < 40; press += 1) {
+      await page.keyboard.press('Tab');
+      unseen.push(...(await page.evaluate(focusUnseen)));
+    }
+    expect.soft(unseen, address).toEqual([]);
+  }
+});
+
+/** The focused element, by its words, if nothing about it shows that it has the focus. Runs in the page. */
+function focusUnseen(): string[] {
+  const element = document.activeElement;
+  if (element === null || element === document.body) return [];
+  const { outlineStyle, outlineWidth } = getComputedStyle(element);
+  const { width, height } = element.getBoundingClientRect();
+  const isSeen = outlineStyle !== 'none' && Number.parseFloat(outlineWidth) >= 1 && width > 1 && height > 1;
+  return isSeen ? [] : [`${element.tagName} ${element.textContent?.slice(0, 40)}`];
+}
+
+/** A wafer, a case and a batch that are on record, by the word before their id in an address. */
+async function someIds(request: APIRequestContext): Promise<Record<string, string | undefined>> {
+  const board = await (await request.get('/?find=n-epi-on-p')).text();
+  const { rows: cases } = await csvFile(request, '/api/excursions/csv?state=all');
+  const { rows: batches } = await csvFile(request, '/api/intake/batches');
+  return {
+    wafers: /href="\/wafers\/(\d+)"/.exec(board)?.[1],
+    excursions: cases.at(-1)?.['excursion'],
+    batches: batches.at(-1)?.['batch'],
+  };
+}
+
+/**
+ * Axe with everything that folds away unfolded: all its rules in the light, and in the dark those of contrast, which
+ * alone depend on the theme. And nothing is wider than the window.
+ */
+async function expectSound(page: Page, address: string) {
+  await page.locator('main details').evaluateAll((all) => all.forEach((one) => one.setAttribute('open', '')));
+  const overflow = await page.evaluate(
+    () => document.documentElement.scrollWidth - document.documentElement.clientWidth,
+  );
+  expect.soft(overflow, `${address} scrolls sideways`).toBeLessThanOrEqual(0);
+  expect.soft(await seriousViolations(axe(page)), `${address}, light`).toEqual([]);
+  await page.emulateMedia({ colorScheme: 'dark' });
+  const contrast = axe(page).withRules(['color-contrast']);
+  expect.soft(await seriousViolations(contrast), `${address}, dark`).toEqual([]);
+}
+
+/** Legacy mode leaves out frames of other origins, of which there are none, and is several times as fast. */
+function axe(page: Page): AxeBuilder {
+  return new AxeBuilder({ page }).setLegacyMode().options({ resultTypes: ['violations'] });
+}
+
+async function seriousViolations(builder: AxeBuilder): Promise<string[]> {
+  const { violations } = await builder.analyze();
+  return violations
+    .filter(({ impact }) => impact === 'serious' || impact === 'critical')
+    .flatMap(({ id, nodes }) => nodes.map(({ target }) => `${id}: ${target.join(' ')}`));
+}
