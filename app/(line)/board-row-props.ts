@@ -2,7 +2,7 @@ import type { BoardRowProps } from '@/app/_charts/board-row';
 import type { BoardRow } from '@/lib/excursions/board-rows';
 import { toMeasureWords } from '@/lib/excursions/board-state';
 import { whoWords } from '@/lib/excursions/excursion-words';
-import { formatAge, formatPercent, formatSignedPercent } from '@/lib/format';
+import { formatAge, formatNumber, formatPercent, formatSignedPercent } from '@/lib/format';
 
 type Drawn = Omit<BoardRowProps, 'cases'> & {
   cases: { id: string; words: string } | null;
@@ -62,7 +62,7 @@ function expectedProps({ expected, stream, calls }: BoardRow, reachPercent: numb
     text: formatSignedPercent(dopantPercent),
     unit: 'dopant',
     under: `${difference} ${symbol}`,
-    label: `Level ${difference} against expected, known to ${formatPercent(expected.uncertaintyPercent, 1)}; as dopant ${formatSignedPercent(dopantPercent)}${
+    label: `Level ${difference} against expected, known to ${formatNumber(expected.uncertaintyPercent, 2)}\u00a0%; as dopant ${formatSignedPercent(dopantPercent)}${
       tolerancePercent === null ? '' : `, tolerance ± ${formatPercent(tolerancePercent, 0)}`
     }`,
   };

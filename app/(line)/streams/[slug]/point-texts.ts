@@ -66,7 +66,7 @@ export function dopantText(ratio: number, { model, uncertaintyPercent }: PointEx
 }
 
 function expectedText({ value, uncertaintyPercent }: PointExpected, unit: ChartUnit, isRelative: boolean) {
-  if (isRelative) return `0 ± ${formatPercent(uncertaintyPercent, 1)}`;
+  if (isRelative) return `0 ± ${formatNumber(uncertaintyPercent, 2)}\u00a0%`;
   if (value === null) return 'differs by wafer';
   const inUnit = value * unit.factor;
   return formatWithUncertainty(inUnit, (inUnit * uncertaintyPercent) / 100, unit.unit);

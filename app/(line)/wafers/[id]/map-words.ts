@@ -1,5 +1,5 @@
 import type { WaferShown } from './wafer-shown';
-import { formatPercent } from '@/lib/format';
+import { formatNumber, formatPercent } from '@/lib/format';
 import type { MapGap, MapView } from '@/lib/maps/wafer-map-view';
 import { figureDefinition } from '@/lib/wafer/figure-definition';
 
@@ -35,7 +35,7 @@ export function viewNote(shown: WaferShown): string {
     return `Percent from the ${statistic}, ${shown.reading(study.statistic)}. ${smoothing}`;
   if (view === 'expected' && study.against !== null) {
     const { value, uncertaintyPercent } = study.against.expected;
-    return `Percent from expected, ${shown.reading(value)} ± ${formatPercent(uncertaintyPercent, 1)} (k = 1), which moves the whole map and not its pattern. ${smoothing}`;
+    return `Percent from expected, ${shown.reading(value)} ± ${formatNumber(uncertaintyPercent, 2)}\u00a0% (k = 1), which moves the whole map and not its pattern. ${smoothing}`;
   }
   if (view === 'usual') return `${usualNote(shown)} Level is taken out. ${smoothing}`;
   return `Readings at 23 °C. ${smoothing}`;

@@ -1,6 +1,6 @@
 import { RadialPlot } from '@/app/_charts/radial-plot';
 import { SectionHead } from '@/app/_ui/section-head';
-import { formatPercent } from '@/lib/format';
+import { formatNumber } from '@/lib/format';
 import { mapViewValues } from '@/lib/maps/wafer-map-view';
 import { waferTitle } from '@/lib/maps/wafer-title';
 import type { WaferShown } from './wafer-shown';
@@ -29,8 +29,8 @@ export function RadiusPart({ shown }: { shown: WaferShown }) {
       />
       {band !== null && study.against !== null && (
         <p className={styles.note}>
-          Expected is known to ± {formatPercent(study.against.expected.uncertaintyPercent, 1)}, one standard
-          uncertainty (k = 1), hatched where it lies in the plot. It raises no signal.
+          Expected is known to ± {formatNumber(study.against.expected.uncertaintyPercent, 2)}&nbsp;%, one
+          standard uncertainty (k = 1), hatched where it lies in the plot. It raises no signal.
         </p>
       )}
     </section>
