@@ -1,6 +1,6 @@
 import { expectedValue } from '@/lib/physics/expected-value';
 import { missingForExpected } from '@/lib/physics/missing-for-expected';
-import type { Target } from '@/lib/physics/target';
+import type { ExpectedWafer, Target } from '@/lib/physics/target';
 import { mean } from '@/lib/stats/mean';
 import { sampleStandardDeviation } from '@/lib/stats/sample-standard-deviation';
 import type { StreamKind } from '@/lib/streams/types';
@@ -33,8 +33,9 @@ export function calibrationFactor(
   const ofSubgroup = new Map<string, number[]>();
   for (const { subgroupId, measured, ingotFraction, thicknessUm } of wafers) {
     const wafer = { ingotFraction, layerThicknessUm: kind === 'epi' ? thicknessUm : null };
-    if (missingForExpected(physics, wafer) !== null) continue;
-    const ratio = measured / expectedValue(physics, wafer).value;
+    const model = expectedOrNull(physics, wafer);
+    if (model === null) continue;
+    const ratio = measured / model;
     ofSubgroup.set(subgroupId, [...(ofSubgroup.get(subgroupId) ?? []), ratio]);
   }
   const ratios = [...ofSubgroup.values()].map((of) => mean(of));
@@ -48,4 +49,15 @@ export function calibrationFactor(
     subgroups: ratios.length,
     wafers: [...ofSubgroup.values()].reduce((sum, of) => sum + of.length, 0),
   };
+}
+
+/** What physics expects of a wafer; null where something it needs is missing, or the conversion ends before it. */
+function expectedOrNull(target: Target, wafer: ExpectedWafer): number | null {
+  if (missingForExpected(target, wafer) !== null) return null;
+  try {
+    return expectedValue(target, wafer).value;
+  } catch (error) {
+    if (error instanceof RangeError) return null;
+    throw error;
+  }
 }

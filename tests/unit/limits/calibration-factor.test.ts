@@ -54,6 +54,24 @@ describe('calibrationFactor', () => {
     expect(calibrationFactor(crystal, 'implant', [wafer('1', 1), wafer('2', 2)])).toBeNull();
   });
 
+  it('leaves out wafers beyond the conversion, as at the very end of a crystal', () => {
+    const crystal: Target = {
+      ...target,
+      quantity: 'resistivity',
+      dopant: 'phosphorus',
+      densityPerCm3: 1e20,
+      alongCrystal: true,
+      profile: 'uniform',
+      lengthUm: null,
+      backgroundDopant: null,
+      backgroundDensityPerCm3: null,
+    };
+    const at = (subgroupId: string, ingotFraction: number) => ({ ...wafer(subgroupId, 1), ingotFraction });
+    expect(() => expectedValue(crystal, { ingotFraction: 0.9999 })).toThrow(RangeError);
+    const found = calibrationFactor(crystal, 'crystal', [at('1', 0.1), at('2', 0.1), at('3', 0.9999)]);
+    expect(found).toMatchObject({ subgroups: 2, wafers: 2 });
+  });
+
   it('grows with the readings and keeps its relative uncertainty', () => {
     fc.assert(
       fc.property(fc.double({ min: 0.1, max: 10, noNaN: true }), (times) => {
