@@ -25,7 +25,7 @@ export interface MeasuredWafer {
   level: number | null;
   within: number | null;
   notJudgedReason: string | null;
-  /** `rule:side` for each way out of specification. */
+  /** `rule:side` for each way out of specification, which is looked at even where nothing is expected of the wafer. */
   specification: string[];
 }
 
@@ -59,9 +59,11 @@ export function measuredWafer(
   });
   const expected = expectedOf(by, target, facts);
   const statistic = measure.figures[stream.controlStatistic];
-  const notJudgedReason =
+  const unfit =
     measure.notJudgeableReason ??
-    (statistic === null || statistic <= 0 ? 'the wafer has no value to chart' : null) ??
+    (statistic === null || statistic <= 0 ? 'the wafer has no value to chart' : null);
+  const notJudgedReason =
+    unfit ??
     (stream.chartedValue === 'relative' && expected === null ? missingWords(target, stream, facts) : null);
   const judged = notJudgedReason === null && statistic !== null;
   const specification = inForce(specifications, facts.processedAt)?.specification ?? null;
@@ -72,7 +74,10 @@ export function measuredWafer(
     level: !judged ? null : stream.chartedValue === 'statistic' ? statistic : relative(statistic, expected),
     within: judged ? measure.figures.relativeStandardDeviationPercent : null,
     notJudgedReason,
-    specification: judged && specification !== null ? faults(specification, statistic, measure) : [],
+    specification:
+      unfit === null && statistic !== null && specification !== null
+        ? faults(specification, statistic, measure)
+        : [],
   };
 }
 

@@ -31,7 +31,10 @@ const MOST_USUAL_NAMED = 2;
  */
 export function waferAnswer(facts: WaferAnswerFacts): string {
   const { name, notJudgedReason, outOfSpecification, signal } = facts;
-  if (notJudgedReason !== null) return `${name}: not judged, ${notJudgedReason}`;
+  if (notJudgedReason !== null) {
+    const outside = outOfSpecification[0];
+    return `${name}: ${outside === undefined ? '' : `${outside}, `}not judged, ${notJudgedReason}`;
+  }
   const parts = [outOfSpecification[0] ?? signal, levelWords(facts), shapeWords(facts)];
   return `${name}: ${parts.filter((part) => part !== null).join(', ')}`;
 }

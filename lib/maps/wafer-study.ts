@@ -22,6 +22,8 @@ export interface WaferStudy {
   statistic: number | null;
   target: TargetRevision | null;
   specification: SpecificationRevision | null;
+  /** Whether the wafer is fit to be held against it: one of which nothing is expected is, one to measure again is not. */
+  isSpecified: boolean;
   against: AgainstExpected | null;
   /** The same without the calibration factor; null where the target has none. */
   fromPhysics: AgainstExpected | null;
@@ -84,6 +86,7 @@ export function waferStudy({ wafer, settings, decisions, usual: past }: WaferOnR
     target,
     specification:
       inForce(known, wafer.facts.processedAt) ?? inForce(settings.specifications, wafer.facts.processedAt),
+    isSpecified: screened.judgeable && statistic !== null && statistic > 0,
     against: hold(true),
     fromPhysics: (target?.target.calibrationFactor ?? null) === null ? null : hold(false),
     usual,

@@ -83,6 +83,13 @@ describe('measuredWafer', () => {
       ['wafer-mean:below'],
     );
   });
+
+  it('holds a wafer against specification even where nothing is expected of it', () => {
+    const specification = { meanLower: 14, meanUpper: 15 };
+    const crystal = settings({ chartedValue: 'relative' }, { target: { alongCrystal: true }, specification });
+    expect(measured(crystal)).toMatchObject({ level: null, specification: ['wafer-mean:below'] });
+    expect(measured(crystal, [null, null, ...even.slice(2)]).specification).toEqual([]);
+  });
 });
 
 describe('what was sent', () => {

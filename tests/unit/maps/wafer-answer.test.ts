@@ -64,10 +64,13 @@ describe('the answer of a wafer', () => {
     expect(waferAnswer({ ...facts, differencePercent: null, habits: [] })).toBe('W-2207: 5.514 Ω·cm');
   });
 
-  it('puts not judged before all else, then out of specification', () => {
+  it('puts out of specification before all else, then not judged', () => {
     const out = ['wafer mean above its specification', 'a site above its specification'];
-    expect(waferAnswer({ ...facts, outOfSpecification: out, notJudgedReason: 'measure again' })).toBe(
+    expect(waferAnswer({ ...facts, notJudgedReason: 'measure again' })).toBe(
       'W-2207: not judged, measure again',
+    );
+    expect(waferAnswer({ ...facts, outOfSpecification: out, notJudgedReason: 'nothing is expected' })).toBe(
+      'W-2207: wafer mean above its specification, not judged, nothing is expected',
     );
     const signal = 'beyond the upper limit';
     expect(waferAnswer({ ...facts, signal, habits: [] })).toBe(

@@ -94,7 +94,9 @@ export function WaferTable({ view }: { view: StreamView }) {
 }
 
 function stateWords(wafer: SpanWafer): string {
-  if (wafer.notJudgedReason !== null) return `not judged: ${wafer.notJudgedReason}`;
+  if (wafer.notJudgedReason !== null) {
+    return `${wafer.outOfSpecification ? 'out of specification; ' : ''}not judged: ${wafer.notJudgedReason}`;
+  }
   if (wafer.outOfSpecification) return 'out of specification';
   return wafer.isMeasuredAgain ? 'measured again' : 'judged';
 }

@@ -46,7 +46,7 @@ export function VerdictPart({ shown }: { shown: WaferShown }) {
             study.specification.specification,
             study.measure.figures,
             stream.controlStatistic,
-            wafer.notJudgedReason === null ? wafer.specification : null,
+            study.isSpecified ? wafer.specification : null,
           ).map((verdict) => ({
             name: `${verdict.name}, specified ${limitWords(verdict, shown)}`,
             value: verdictWords(verdict, shown),
