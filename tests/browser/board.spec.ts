@@ -17,6 +17,7 @@ test.describe('the board', () => {
     );
 
     await openPage(page, '/');
+    await expect(page.getByRole('img', { name: /known to 0\.0\s%/ })).toHaveCount(0);
     const answer = (await page.getByRole('heading', { level: 1 }).innerText()).toLowerCase();
     for (const [group, verb] of [
       ['Needs someone', /(\w+) streams? needs? someone/],
