@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { add, emptyLine } from './line-store';
+import { add, emptyLine, LineStore } from './line-store';
 import { quiet, revision, wafers } from './streams';
 
 const setting = { subgroupSize: 1, limits: [revision(1, 0)], restarts: [] };
@@ -20,6 +20,15 @@ describe('the first limits', () => {
       completions: ['level:beyond-3-sigma:above'],
     });
     expect(add(line, wafers(quiet(30), 26)).limits).toBeNull();
+  });
+
+  it('are proposed as well where a long stretch of wafers that could not be judged came before', () => {
+    const store = new LineStore({ ...setting, limits: [] });
+    const wafersSent = wafers([...Array.from({ length: 100 }, () => null), ...quiet(26)]);
+    for (const one of wafersSent) store.record(store.load(one.at), [one]);
+    const { limits, points } = store.load(-Infinity);
+    expect(limits).toMatchObject([{ revision: 1, baselineIds: points.slice(100, 125).map(({ id }) => id) }]);
+    expect(points.at(-1)?.limits).toBe(limits[0]);
   });
 
   it('are not proposed by subgroups that do not vary, nor beside others', () => {
