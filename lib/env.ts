@@ -6,6 +6,9 @@ const blankIsAbsent = (value: unknown) => (value === '' ? undefined : value);
 
 const timeZone = z.string().refine(isTimeZone, 'is no IANA time zone such as Europe/Berlin or UTC');
 
+const portWords = 'must be a port, a whole number from 0 to 65535';
+const port = z.coerce.number(portWords).int(portWords).min(0, portWords).max(65535, portWords);
+
 const variables = z.object({
   DATABASE_URL: z.preprocess(
     blankIsAbsent,
@@ -15,7 +18,7 @@ const variables = z.object({
       .optional(),
   ),
   EVENOHM_DATA: z.preprocess(blankIsAbsent, z.string().default('.evenohm')),
-  PORT: z.preprocess(blankIsAbsent, z.coerce.number().int().min(0).max(65535).default(3000)),
+  PORT: z.preprocess(blankIsAbsent, port.default(3000)),
   EVENOHM_HOST: z.preprocess(blankIsAbsent, z.string().default('127.0.0.1')),
   EVENOHM_URL: z.preprocess(blankIsAbsent, z.url({ protocol: /^https?$/ }).optional()),
   EVENOHM_SECRET: z.preprocess(blankIsAbsent, z.string().min(32).optional()),

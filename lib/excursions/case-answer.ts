@@ -1,5 +1,6 @@
 import { signalSentence } from './signal-sentence';
 import { subgroupLabel } from './subgroup-label';
+import { toldWhen } from './told-when';
 import type { CaseSignal, ExcursionCase } from './types';
 
 /**
@@ -28,7 +29,7 @@ type Told = Pick<ExcursionCase, 'stream' | 'signals' | 'points'>;
 export function caseAnswer(found: Told): string {
   const lead = leadSignal(found.signals);
   if (lead === null) return `${found.stream.name}: the signals of this case no longer hold`;
-  return `${found.stream.name}: ${signalSentence(lead)}, ${when(lead, found)}`;
+  return `${found.stream.name}: ${toldWhen(signalSentence(lead), when(lead, found))}`;
 }
 
 function when({ participants, first, last }: CaseSignal, { stream, points }: Told): string {

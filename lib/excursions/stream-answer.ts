@@ -3,6 +3,7 @@ import { FIRST_BASELINE } from './line';
 import { signalSentence } from './signal-sentence';
 import { SINCE_MOST, type StandingCase, type StandingLimits } from './stream-standing';
 import { type SubgroupWord, subgroupLabel } from './subgroup-label';
+import { toldWhen } from './told-when';
 
 /** What the answer of a stream's page is made of. */
 export interface StreamFigures {
@@ -37,7 +38,7 @@ function state({ cases, judged, limits, subgroup, toMeasureAgain }: StreamFigure
   const [worst] = cases;
   if (worst !== undefined) {
     if (worst.signal === null) return 'its signals no longer hold, the case is not closed';
-    return `${signalSentence(worst.signal)}, ${when(worst.signal, subgroup)}`;
+    return toldWhen(signalSentence(worst.signal), when(worst.signal, subgroup));
   }
   if (toMeasureAgain > 0) {
     return toMeasureAgain === 1 ? 'one wafer to measure again' : `${toMeasureAgain} wafers to measure again`;

@@ -71,7 +71,7 @@ export async function intakeFile(
     }
     if (options.checkOnly) {
       const fresh = check.measurements - check.faulty.size - check.repeated;
-      result.notices.push(`${fresh} measurements could be recorded`);
+      result.notices.push(`${measurementsWord(fresh)} could be recorded`);
       return { ...result, repeated: check.repeated };
     }
     if (check.faulty.size === 0 || options.sound)
@@ -79,7 +79,7 @@ export async function intakeFile(
     else if (check.measurements > check.faulty.size) {
       const left = check.measurements - check.faulty.size;
       result.notices.push(
-        `${left} sound measurements were not recorded: the file has faults and only the whole was asked for`,
+        `${measurementsWord(left, 'sound ')} ${left === 1 ? 'was' : 'were'} not recorded: the file has faults and only the whole was asked for`,
       );
     }
   } catch (error) {
@@ -147,6 +147,10 @@ async function recordSound(
     }
   }
   await record();
+}
+
+function measurementsWord(count: number, kind = ''): string {
+  return `${count} ${kind}${count === 1 ? 'measurement' : 'measurements'}`;
 }
 
 /** Writes down what became of the file, its refusals with it. */

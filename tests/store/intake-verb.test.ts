@@ -84,7 +84,7 @@ describe('intake', () => {
     expect(await run({ 'd.csv': text }, '--check')).toEqual({
       exit: 0,
       out: ['0 recorded, 0 repeated, 0 refused. Nothing was recorded: this was a check.'],
-      said: ['1 measurements could be recorded.'],
+      said: ['1 measurement could be recorded.'],
     });
     expect((await run({ 'd.csv': text })).out[0]).toContain('1 recorded');
   });

@@ -28,6 +28,6 @@ describe('readEnvironment', () => {
     const read = () =>
       readEnvironment({ PORT: 'x', DATABASE_URL: 'mysql://a', EVENOHM_SITE_TIME_ZONE: 'Mars/Base' });
     expect(read).toThrow(EnvironmentError);
-    expect(read).toThrow(/DATABASE_URL: .*; PORT: .*; EVENOHM_SITE_TIME_ZONE: /);
+    expect(read).toThrow(/DATABASE_URL: .*; PORT: must be a port.*; EVENOHM_SITE_TIME_ZONE: /);
   });
 });

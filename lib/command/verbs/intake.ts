@@ -18,7 +18,7 @@ const WORDS = Object.fromEntries(
 export const intake: Verb = {
   name: 'intake',
   summary: 'record wafer-map files',
-  usage: `npx evenohm intake PATH… [--check] [--sound] [--history] [--json]
+  usage: `evenohm intake PATH… [--check] [--sound] [--history] [--json]
 
   --check     read and check, record nothing
   --sound     record the sound measurements of a file that has faults

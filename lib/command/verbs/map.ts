@@ -88,7 +88,9 @@ export const map: Verb = {
     try {
       bytes = await readFile(file);
     } catch (error) {
-      output.say(`cannot read ${file}: ${error instanceof Error ? error.message : String(error)}`);
+      const missing = error instanceof Error && 'code' in error && error.code === 'ENOENT';
+      const why = missing ? 'there is no such file' : error instanceof Error ? error.message : String(error);
+      output.say(`cannot read ${file}: ${why}`);
       return 1;
     }
     const { wafers, refusals } = await readMapFile(file, [bytes]);

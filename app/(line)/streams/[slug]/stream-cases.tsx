@@ -4,6 +4,7 @@ import { StateMark } from '@/app/_ui/state-mark';
 import { signalSentence } from '@/lib/excursions/signal-sentence';
 import { when } from '@/lib/excursions/stream-answer';
 import type { StandingCase } from '@/lib/excursions/stream-standing';
+import { toldWhen } from '@/lib/excursions/told-when';
 import { formatAge } from '@/lib/format';
 import type { StreamView } from './stream-view';
 
@@ -23,7 +24,7 @@ export function StreamCases({ view }: { view: StreamView }) {
             <Link href={`/excursions/${one.id}`} prefetch={false}>
               <StateMark needsPerson>Case {one.id}</StateMark>
             </Link>
-            {one.signal !== null && `: ${signalSentence(one.signal)}, ${when(one.signal, subgroup)}`}
+            {one.signal !== null && `: ${toldWhen(signalSentence(one.signal), when(one.signal, subgroup))}`}
             <br />
             <span className="quiet small">{stateWords(one, now)}</span>
           </li>
