@@ -32,6 +32,8 @@ test.describe.serial('intake', () => {
   });
 
   test('draws what a sound file holds, records it, and shows it on its stream', async ({ page }) => {
+    await openPage(page, `/streams/${SLUG}`);
+    await expect(answer(page)).toHaveText(`${NAME}: no wafer yet`);
     const text = waferMapFile(SLUG, steadyWafers(3));
     await sendFile(page, 'three wafers.csv', text);
     await expect(answer(page)).toHaveText('3 wafer maps in three wafers.csv can be recorded');
