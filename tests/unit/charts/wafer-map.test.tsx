@@ -124,7 +124,9 @@ describe('the drawings', () => {
     expect(map).not.toMatch(/NaN|Infinity/);
     const plot = renderToStaticMarkup(<RadialPlot {...empty} radiusMm={null} mean={null} expected={null} />);
     expect(plot).toContain('No good reading to plot');
-    expect(renderToStaticMarkup(<ShapeBars terms={[]} residualPercent={null} />)).toContain('Too few readings');
+    expect(renderToStaticMarkup(<ShapeBars terms={[]} residualPercent={null} />)).toContain(
+      'Too few readings',
+    );
   });
 
   it('show each shape with sign and standard error, but not the level', () => {
