@@ -22,8 +22,13 @@ export function polarSites(rings: number, outerRadiusMm: number): Site[] {
     const count = 8 * ring;
     for (let index = 0; index < count; index++) {
       const angle = (2 * Math.PI * index) / count;
-      sites.push({ xMm: radiusMm * Math.cos(angle), yMm: radiusMm * Math.sin(angle) });
+      sites.push({ xMm: radiusMm * exactly(Math.cos(angle)), yMm: radiusMm * exactly(Math.sin(angle)) });
     }
   }
   return sites;
+}
+
+/** 0 where it should be: the cosine of a right angle is not quite that in a double, and a site on an axis is. */
+function exactly(share: number): number {
+  return Math.abs(share) < 1e-12 ? 0 : share;
 }

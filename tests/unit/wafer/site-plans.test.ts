@@ -14,6 +14,16 @@ describe('site plans', () => {
     expect([0, 1, 2, 3].map((k) => onRings.filter((ring) => ring === k).length)).toEqual([1, 8, 16, 24]);
   });
 
+  it('a polar plan has its sites on the axes exactly there', () => {
+    for (const sites of [polarSites(1, 93), polarSites(5, 147)]) {
+      const smallest = Math.min(
+        ...sites.flatMap(({ xMm, yMm }) => [xMm, yMm].filter((v) => v !== 0).map(Math.abs)),
+      );
+      expect(smallest).toBeGreaterThan(1);
+      expect(sites.filter(({ xMm }) => xMm === 0)).toHaveLength(sites.filter(({ yMm }) => yMm === 0).length);
+    }
+  });
+
   it('a cross of nine sites is a cross of five and four sites at the full radius', () => {
     expect(crossSites(5, 90).map(radius)).toEqual([0, 45, 45, 45, 45]);
     expect(crossSites(9, 90).slice(0, 5)).toEqual(crossSites(5, 90));
