@@ -18,5 +18,6 @@ export function quantile(sample: ArrayLike<number>, p: number): number {
   const low = sorted[Math.floor(place)] ?? 0;
   const high = sorted[Math.ceil(place)] ?? low;
   const part = place - Math.floor(place);
-  return low === high ? low : low * (1 - part) + high * part;
+  // Adding 0 makes a plain zero of −0, which sorts and prints otherwise.
+  return (low === high ? low : low * (1 - part) + high * part) + 0;
 }

@@ -86,6 +86,7 @@ describe('summaries of a sample', () => {
         expect(quantile(values, 1)).toBe(Math.max(...values) + 0);
         expect(quantile(values, 0.5)).toBeCloseTo(median(values), 6);
       }),
+      { examples: [[[-0, 1]], [[-1, -0]], [[-0, -0]]] },
     );
   });
 });
