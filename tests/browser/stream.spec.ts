@@ -1,4 +1,4 @@
-import { expect, type Page } from '@playwright/test';
+import { expect, type Locator, type Page } from '@playwright/test';
 import { csvFile } from './csv-file';
 import { openPage } from './open-page';
 import { test } from './watched-test';
@@ -22,8 +22,7 @@ test.describe('the page of a stream', () => {
   }) => {
     await openPage(page, STREAM);
     const cursor = cursorOf(page);
-    const box = await cursor.boundingBox();
-    if (box === null) throw new Error('The charts are not drawn');
+    const box = await boxOf(cursor);
     await page.mouse.move(box.x + box.width * 0.3, box.y + box.height * 0.2);
     const count = Number(await cursor.getAttribute('aria-valuemax'));
     await expect.poll(async () => Number(await cursor.getAttribute('aria-valuenow'))).toBeLessThan(count / 2);
@@ -60,11 +59,11 @@ test.describe('the page of a stream', () => {
     const closer = await count();
     await page.reload();
     await expect.poll(count).toBe(closer);
+    const late = page.url();
     await page.getByRole('button', { name: 'Earlier' }).click();
-    await expect(page.getByRole('button', { name: 'Latest' })).toBeEnabled();
+    await page.waitForURL((url) => url.href !== late);
 
-    const box = await cursor.boundingBox();
-    if (box === null) throw new Error('The charts are not drawn');
+    const box = await boxOf(cursor);
     const before = page.url();
     await page.mouse.move(box.x + box.width * 0.4, box.y + 40);
     await page.mouse.down();
@@ -139,13 +138,23 @@ test.describe('the page of a stream', () => {
     await openPage(page, STREAM);
     const cursor = cursorOf(page);
     const before = await expectSaid(page);
-    const box = await cursor.boundingBox();
-    if (box === null) throw new Error('The charts are not drawn');
+    const box = await boxOf(cursor);
     const spot = { position: { x: box.width * 0.5, y: 30 } };
     await (hasTouch ? cursor.tap(spot) : cursor.click(spot));
     await expect.poll(async () => (await expectSaid(page)).place).not.toBe(before.place);
   });
 });
+
+/** Where the charts lie; asked again while a new stretch takes the place of the one before. */
+async function boxOf(cursor: Locator) {
+  const found: { box: Awaited<ReturnType<Locator['boundingBox']>> } = { box: null };
+  await expect(async () => {
+    found.box = await cursor.boundingBox();
+    expect(found.box).not.toBeNull();
+  }).toPass();
+  if (found.box === null) throw new Error('The charts are not drawn');
+  return found.box;
+}
 
 /** What the cursor says, held against the panel beside the charts. */
 async function expectSaid(page: Page) {
