@@ -24,6 +24,7 @@ export function CaseChart(props: CaseChartProps) {
       <Drawing {...props} width={356} height={230} className={styles.narrow} />
       <Key
         tookPart={props.points.some((point) => point.tookPart)}
+        interval={hasInterval(props)}
         specification={props.specification !== null}
       />
     </figure>
@@ -148,7 +149,14 @@ function Drawing(props: CaseChartProps & { width: number; height: number; classN
   );
 }
 
-function Key({ tookPart, specification }: { tookPart: boolean; specification: boolean }) {
+/** Whether the case's chart, and not only another one of its stream, has limits that are drawn with their interval. */
+function hasInterval({ limits, chart }: CaseChartProps): boolean {
+  if (chart !== 'level' && chart !== 'within') return false;
+  return limits.some((span) => span.state === 'young' && span[chart]?.upperInterval !== undefined);
+}
+
+function Key(props: { tookPart: boolean; interval: boolean; specification: boolean }) {
+  const { tookPart, interval, specification } = props;
   return (
     <ul className={`${styles.key} quiet small`} aria-label="Key to the chart">
       <li>
@@ -172,6 +180,14 @@ function Key({ tookPart, specification }: { tookPart: boolean; specification: bo
         </svg>
         reach of the case
       </li>
+      {interval && (
+        <li>
+          <svg width="22" height="14" aria-hidden="true">
+            <rect width="22" height="14" style={{ fill: 'var(--stat)', fillOpacity: 0.25 }} />
+          </svg>
+          90 % interval of a young limit
+        </li>
+      )}
       {specification && (
         <li>
           <svg width="26" height="14" aria-hidden="true">

@@ -41,8 +41,10 @@ function parts(span: LimitSpan, chart: ChartName): Piece[] {
     y,
     interval: span.state === 'young' ? (interval ?? null) : null,
   });
-  if (chart === 'level') {
-    const { centre, lower, upper, lowerInterval, upperInterval } = span.level;
+  if (chart === 'level' || chart === 'within') {
+    const limits = span[chart];
+    if (limits === null) return [];
+    const { centre, lower, upper, lowerInterval, upperInterval } = limits;
     return [
       piece('centre', centre),
       piece('limit', lower, lowerInterval),
@@ -51,12 +53,6 @@ function parts(span: LimitSpan, chart: ChartName): Piece[] {
   }
   if (chart === 'moving-range') {
     return [piece('centre', span.movingRange.centre), piece('limit', span.movingRange.upper)];
-  }
-  if (chart === 'within') {
-    const within = span.within;
-    return within === null
-      ? []
-      : [piece('centre', within.centre), piece('limit', within.lower), piece('limit', within.upper)];
   }
   const between = span.between;
   return between === null ? [] : [piece('centre', between.centre), piece('limit', between.upper)];

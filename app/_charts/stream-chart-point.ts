@@ -43,22 +43,24 @@ export interface StreamPointTexts {
   notes: readonly string[];
 }
 
+/** A centre line between two limits, with the 90 % interval of each limit itself, drawn while the limits are young. */
+export interface TwoSidedLimits {
+  centre: number;
+  lower: number;
+  upper: number;
+  lowerInterval?: readonly [number, number];
+  upperInterval?: readonly [number, number];
+}
+
 /** Limits as they were in force from one index to another, both included. */
 export interface LimitSpan {
   fromIndex: number;
   toIndex: number;
   revision: number;
   state: 'provisional' | 'young' | 'established';
-  level: {
-    centre: number;
-    lower: number;
-    upper: number;
-    /** 90 % interval of the limit itself, drawn while the limits are young. */
-    lowerInterval?: readonly [number, number];
-    upperInterval?: readonly [number, number];
-  };
+  level: TwoSidedLimits;
   movingRange: { centre: number; upper: number };
-  within: { lower: number; centre: number; upper: number } | null;
+  within: TwoSidedLimits | null;
   between: { centre: number; upper: number } | null;
 }
 

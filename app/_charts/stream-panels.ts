@@ -51,22 +51,19 @@ export function streamPanels(args: {
     const lines = segments.map((piece) => piece.y);
     const core = [...withoutStrays(values, lines), ...lines];
     const isLevel = chart === 'level';
-    const wishes = isLevel
-      ? [
-          expected.flatMap((span) => [span.lower, span.upper]),
-          segments.flatMap((piece) => piece.interval ?? []),
-          expected
-            .flatMap((span) => [span.toleranceLower, span.toleranceUpper])
-            .filter((edge) => edge !== null),
-        ].filter((wish) => wish.length > 0)
-      : [];
+    const seen = isLevel ? expected : [];
+    const wishes = [
+      seen.flatMap((span) => [span.lower, span.upper]),
+      segments.flatMap((piece) => piece.interval ?? []),
+      seen.flatMap((span) => [span.toleranceLower, span.toleranceUpper]).filter((edge) => edge !== null),
+    ].filter((wish) => wish.length > 0);
     return {
       chart,
       ...titles[chart],
       unit: args.units[chart],
       domain: chartDomain(core, wishes, isLevel ? {} : { from: 0 }),
       segments,
-      expected: isLevel ? expected : [],
+      expected: seen,
     };
   });
 }

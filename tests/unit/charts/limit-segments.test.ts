@@ -9,7 +9,7 @@ const span: LimitSpan = {
   state: 'provisional',
   level: { centre: 5, lower: 4, upper: 6, lowerInterval: [3.8, 4.2], upperInterval: [5.8, 6.2] },
   movingRange: { centre: 0.3, upper: 1.1 },
-  within: { lower: 0.4, centre: 0.7, upper: 1.2 },
+  within: { lower: 0.4, centre: 0.7, upper: 1.2, lowerInterval: [0.3, 0.5], upperInterval: [1, 1.5] },
   between: null,
 };
 const later: LimitSpan = { ...span, fromIndex: 25, toIndex: 60, revision: 2, state: 'young' };
@@ -30,6 +30,8 @@ describe('limitSegments', () => {
     const level = limitSegments([span, later], 'level', all);
     expect(level.map((one) => one.dashed)).toEqual([true, true, true, false, false, false]);
     expect(level.map((one) => one.interval)).toEqual([null, null, null, null, [3.8, 4.2], [5.8, 6.2]]);
+    const within = limitSegments([span, later], 'within', all);
+    expect(within.map((one) => one.interval)).toEqual([null, null, null, null, [0.3, 0.5], [1, 1.5]]);
     const old = limitSegments([{ ...later, state: 'established' }], 'level', all);
     expect(old.map((one) => one.interval)).toEqual([null, null, null]);
   });

@@ -42,6 +42,10 @@ describe('limits of a stretch', () => {
     const [span] = limitSpans(judged('1'), [standingLimits('1')], 1000);
     expect(span?.level.centre).toBe(10_000);
     expect(span?.within?.upper).toBe(1.4);
+    const young = limitSpans(judged('1'), [standingLimits('1', {}, 61)], 1000)[0]?.within;
+    expect(young?.upperInterval?.[0]).toBeLessThan(1.4);
+    expect(young?.upperInterval?.[1]).toBeGreaterThan(1.4);
+    expect(young?.upperInterval?.[1]).toBeLessThan(3);
   });
 });
 

@@ -5,7 +5,7 @@ import type { LimitSpan } from '@/app/_charts/stream-chart-point';
 import { thinned } from '@/app/_charts/thinned';
 import type { ChartName } from '@/lib/control/completions-at';
 import { limitAge } from '@/lib/control/limit-age';
-import { limitInterval } from '@/lib/control/limit-interval';
+import { type Interval, limitInterval } from '@/lib/control/limit-interval';
 import { leadSignal } from '@/lib/excursions/case-answer';
 import { signalSentence } from '@/lib/excursions/signal-sentence';
 import type { CaseLimits, CasePoint, ExcursionCase } from '@/lib/excursions/types';
@@ -94,21 +94,22 @@ export function limitSpans(
 
 function spanOf({ revision, state: approval, limits }: CaseLimits, index: number): LimitSpan {
   const state = approval === 'provisional' ? 'provisional' : limitAge(limits.n);
-  const interval = state === 'young' ? limitInterval(limits).level : null;
+  const interval = state === 'young' ? limitInterval(limits) : null;
   return {
     fromIndex: index,
     toIndex: index,
     revision,
     state,
-    level: {
-      ...limits.level,
-      ...(interval && {
-        lowerInterval: [interval.lower.low, interval.lower.high] as const,
-        upperInterval: [interval.upper.low, interval.upper.high] as const,
-      }),
-    },
+    level: { ...limits.level, ...(interval && intervalsOf(interval.level)) },
     movingRange: limits.movingRange,
-    within: limits.within,
+    within: limits.within && { ...limits.within, ...(interval?.within && intervalsOf(interval.within)) },
     between: limits.between,
+  };
+}
+
+function intervalsOf({ lower, upper }: { lower: Interval; upper: Interval }) {
+  return {
+    lowerInterval: [lower.low, lower.high] as const,
+    upperInterval: [upper.low, upper.high] as const,
   };
 }

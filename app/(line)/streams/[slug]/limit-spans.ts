@@ -1,5 +1,5 @@
-import type { LimitSpan } from '@/app/_charts/stream-chart-point';
-import { limitInterval } from '@/lib/control/limit-interval';
+import type { LimitSpan, TwoSidedLimits } from '@/app/_charts/stream-chart-point';
+import { type Interval, limitInterval } from '@/lib/control/limit-interval';
 import type { SpanPoint } from '@/lib/excursions/span-points';
 import { limitsState } from '@/lib/excursions/stream-answer';
 import type { StandingLimits } from '@/lib/excursions/stream-standing';
@@ -34,11 +34,7 @@ export function limitSpans(
 function limitsOf(revision: StandingLimits, factor: number): Omit<LimitSpan, 'fromIndex' | 'toIndex'> {
   const { level, movingRange, within, between } = revision.limits;
   const state = limitsState(revision);
-  const interval = state === 'young' ? limitInterval(revision.limits).level : null;
-  const scaled = ({ low, high }: { low: number; high: number }): [number, number] => [
-    low * factor,
-    high * factor,
-  ];
+  const interval = state === 'young' ? limitInterval(revision.limits) : null;
   return {
     revision: revision.revision,
     state,
@@ -46,10 +42,25 @@ function limitsOf(revision: StandingLimits, factor: number): Omit<LimitSpan, 'fr
       centre: level.centre * factor,
       lower: level.lower * factor,
       upper: level.upper * factor,
-      ...(interval && { lowerInterval: scaled(interval.lower), upperInterval: scaled(interval.upper) }),
+      ...(interval && intervalsOf(interval.level, factor)),
     },
     movingRange: { centre: movingRange.centre * factor, upper: movingRange.upper * factor },
-    within: within && { lower: within.lower, centre: within.centre, upper: within.upper },
+    within: within && {
+      lower: within.lower,
+      centre: within.centre,
+      upper: within.upper,
+      ...(interval?.within && intervalsOf(interval.within, 1)),
+    },
     between: between && { centre: between.centre * factor, upper: between.upper * factor },
+  };
+}
+
+function intervalsOf(
+  { lower, upper }: { lower: Interval; upper: Interval },
+  factor: number,
+): Pick<TwoSidedLimits, 'lowerInterval' | 'upperInterval'> {
+  return {
+    lowerInterval: [lower.low * factor, lower.high * factor],
+    upperInterval: [upper.low * factor, upper.high * factor],
   };
 }
