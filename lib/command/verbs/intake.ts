@@ -7,6 +7,7 @@ import { openDatabase } from '@/lib/database/connection';
 import { intakeFile } from '@/lib/maps/intake-file';
 import { WAFER_COLUMNS } from '@/lib/maps/map-columns';
 import type { IntakeResult, MapProblem } from '@/lib/maps/types';
+import { withSmallMemory } from '../small-memory';
 import { UsageError, type ExitStatus, type Verb, type VerbOutput } from '../verb';
 
 /** Flags that say of a wafer what its file does not: `--measured-at` for the column measured_at, and so on. */
@@ -64,21 +65,23 @@ async function recordFiles(args: string[], output: VerbOutput): Promise<ExitStat
   try {
     for (const path of positionals) {
       let toldAt = Date.now();
-      const result = await intakeFile(
-        commandActor(),
-        { name: basename(path), open: () => createReadStream(path, { highWaterMark: 1 << 17 }) },
-        {
-          origin: 'command',
-          history: values.history === true,
-          sound: values.sound === true,
-          checkOnly: values.check === true,
-          defaults,
-          onProgress: (count) => {
-            if (Date.now() - toldAt < 1000) return;
-            toldAt = Date.now();
-            output.say(`${basename(path)}: ${count} measurements so far.`);
+      const result = await withSmallMemory(() =>
+        intakeFile(
+          commandActor(),
+          { name: basename(path), open: () => createReadStream(path, { highWaterMark: 1 << 17 }) },
+          {
+            origin: 'command',
+            history: values.history === true,
+            sound: values.sound === true,
+            checkOnly: values.check === true,
+            defaults,
+            onProgress: (count) => {
+              if (Date.now() - toldAt < 1000) return;
+              toldAt = Date.now();
+              output.say(`${basename(path)}: ${count} measurements so far.`);
+            },
           },
-        },
+        ),
       );
       total.recorded += result.recorded;
       total.repeated += result.repeated;
