@@ -13,7 +13,8 @@ export const test = plain.extend<{ statuses: readonly number[]; watched: undefin
       page.on('console', (message) => {
         const status = /^Failed to load resource: .* status of (\d+)/.exec(message.text())?.[1];
         const isAsked = status !== undefined && statuses.includes(Number(status));
-        if (message.type() === 'error' && !isAsked) faults.push(`console: ${message.text()}`);
+        if (message.type() === 'error' && !isAsked)
+          faults.push(`console: ${message.text()} (${message.location().url})`);
       });
       page.on('pageerror', (error) => faults.push(`uncaught: ${error.message}`));
       page.on('request', (request) => {
