@@ -22,8 +22,8 @@ export default function MethodsPage() {
   return (
     <>
       <PageHead
-        answer="Every figure comes from a published method."
-        sub="A figure’s own page names its definition; here is where the methods were published."
+        answer="The published methods behind the figures"
+        sub="Each figure’s definition stands beside it. The screening of readings and the joining of signals to cases are our own."
         back={{ href: '/', label: 'Board' }}
       />
       <dl style={{ margin: 0 }}>
