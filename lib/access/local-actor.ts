@@ -6,20 +6,25 @@ import { provenActor, type Actor } from './actor';
  * sits at the machine and has all rights.
  */
 export function localActor(): Actor {
-  return provenActor('local person');
+  return provenActor({ kind: 'command', id: null, name: 'local person', grants: [] });
 }
 
 /** Whoever runs the command line on this machine: the operating system's user. */
 export function commandActor(): Actor {
-  return provenActor(`${userInfo().username} (command line)`);
+  return provenActor({
+    kind: 'command',
+    id: null,
+    name: `${userInfo().username} (command line)`,
+    grants: [],
+  });
 }
 
 /** The program itself, for what it does without being asked: a first baseline, the demonstration line. */
 export function programActor(): Actor {
-  return provenActor('Evenohm');
+  return provenActor({ kind: 'program', id: null, name: 'Evenohm', grants: [] });
 }
 
 /** Someone in a role on the demonstration line: nobody in particular. */
 export function demonstrationActor(role: 'shift lead' | 'process owner'): Actor {
-  return provenActor(`${role} (demonstration)`);
+  return provenActor({ kind: 'program', id: null, name: `${role} (demonstration)`, grants: [] });
 }
