@@ -152,7 +152,7 @@ function Drawing(props: CaseChartProps & { width: number; height: number; classN
 /** Whether the case's chart, and not only another one of its stream, has limits that are drawn with their interval. */
 function hasInterval({ limits, chart }: CaseChartProps): boolean {
   if (chart !== 'level' && chart !== 'within') return false;
-  return limits.some((span) => span.state === 'young' && span[chart]?.upperInterval !== undefined);
+  return limits.some((span) => span[chart]?.upperInterval !== undefined);
 }
 
 function Key(props: { tookPart: boolean; interval: boolean; specification: boolean }) {
@@ -185,7 +185,7 @@ function Key(props: { tookPart: boolean; interval: boolean; specification: boole
           <svg width="22" height="14" aria-hidden="true">
             <rect width="22" height="14" style={{ fill: 'var(--stat)', fillOpacity: 0.25 }} />
           </svg>
-          90 % interval of a young limit
+          90 % interval of a limit not yet established
         </li>
       )}
       {specification && (

@@ -50,7 +50,7 @@ export function casePlot(input: CasePlotInput, size: { width: number; height: nu
     [intervals, edges].filter((wish) => wish.length > 0),
     chart === 'level' ? {} : { from: 0 },
   );
-  const y = linearScale(domain, [size.height - BOTTOM, TOP]);
+  const y = linearScale(domain, [size.height - BOTTOM, TOP], { clamp: true });
   const inside = (value: number) => value > domain[0] && value < domain[1];
   return {
     ticks: axisTicks(domain, 5).map(({ value, text }) => ({ y: round(y(value)), text })),

@@ -16,7 +16,7 @@ export function ChartKey(props: {
   limits: boolean;
   expected: boolean;
   provisional: boolean;
-  young: boolean;
+  interval: boolean;
 }) {
   return (
     <ul className={styles.key} aria-label="Key to the charts">
@@ -42,10 +42,10 @@ export function ChartKey(props: {
           provisional limits
         </li>
       )}
-      {props.young && (
+      {props.interval && (
         <li>
           <Swatch fill="var(--stat)" opacity={0.3} />
-          90 % interval of a young limit
+          90 % interval of a limit not yet established
         </li>
       )}
       {props.expected && (

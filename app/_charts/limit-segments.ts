@@ -9,7 +9,7 @@ export interface LimitSegment {
   part: 'centre' | 'limit';
   /** The limits are provisional. */
   dashed: boolean;
-  /** The limit's own 90 % interval, while the limits are young; else null. */
+  /** The limit's own 90 % interval, until the limits are established; else null. */
   interval: readonly [number, number] | null;
 }
 
@@ -25,21 +25,29 @@ export function limitSegments(
   view: { from: number; to: number },
 ): LimitSegment[] {
   return spans.flatMap((span) => {
-    const fromX = Math.max(span.fromIndex, view.from) - 0.5;
-    const toX = Math.min(span.toIndex, view.to) + 0.5;
-    if (toX <= fromX) return [];
     const dashed = span.state === 'provisional';
-    return parts(span, chart).map((piece) => ({ fromX, toX, dashed, ...piece }));
+    return parts(span, chart).flatMap(({ from, to, ...piece }) => {
+      const fromX = Math.max(from, view.from) - 0.5;
+      const toX = Math.min(to, view.to) + 0.5;
+      return toX <= fromX ? [] : [{ fromX, toX, dashed, ...piece }];
+    });
   });
 }
 
-type Piece = Pick<LimitSegment, 'y' | 'part' | 'interval'>;
+type Piece = Pick<LimitSegment, 'y' | 'part' | 'interval'> & { from: number; to: number };
 
 function parts(span: LimitSpan, chart: ChartName): Piece[] {
-  const piece = (part: Piece['part'], y: number, interval?: readonly [number, number]): Piece => ({
+  const [from, to] = [span.fromIndex, span.toIndex];
+  const piece = (
+    part: Piece['part'],
+    y: number,
+    interval: readonly [number, number] | null = null,
+  ): Piece => ({
+    from,
+    to,
     part,
     y,
-    interval: span.state === 'young' ? (interval ?? null) : null,
+    interval,
   });
   if (chart === 'level' || chart === 'within') {
     const limits = span[chart];
@@ -54,6 +62,14 @@ function parts(span: LimitSpan, chart: ChartName): Piece[] {
   if (chart === 'moving-range') {
     return [piece('centre', span.movingRange.centre), piece('limit', span.movingRange.upper)];
   }
-  const between = span.between;
-  return between === null ? [] : [piece('centre', between.centre), piece('limit', between.upper)];
+  return span.between.flatMap(({ centre, upper }, at) => {
+    const own = {
+      from: at === 0 ? from : (span.between[at]?.fromIndex ?? from),
+      to: (span.between[at + 1]?.fromIndex ?? to + 1) - 1,
+    };
+    return [
+      { ...piece('centre', centre), ...own },
+      { ...piece('limit', upper), ...own },
+    ];
+  });
 }

@@ -43,7 +43,7 @@ export interface StreamPointTexts {
   notes: readonly string[];
 }
 
-/** A centre line between two limits, with the 90 % interval of each limit itself, drawn while the limits are young. */
+/** A centre line between two limits, with the 90 % interval of each limit itself until the limits are established. */
 export interface TwoSidedLimits {
   centre: number;
   lower: number;
@@ -61,7 +61,8 @@ export interface LimitSpan {
   level: TwoSidedLimits;
   movingRange: { centre: number; upper: number };
   within: TwoSidedLimits | null;
-  between: { centre: number; upper: number } | null;
+  /** The spread between wafers has a limit for each number of wafers: from where on which. */
+  between: { fromIndex: number; centre: number; upper: number }[];
 }
 
 /** What physics expects from one index to another: value, its uncertainty, and the target's tolerance apart. */

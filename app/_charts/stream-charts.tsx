@@ -143,7 +143,7 @@ export function StreamCharts(props: StreamChartsProps) {
           limits={seenLimits.length > 0}
           expected={expected.length > 0}
           provisional={seenLimits.some(({ state }) => state === 'provisional')}
-          young={seenLimits.some(({ state }) => state === 'young')}
+          interval={panels.some(({ segments }) => segments.some(({ interval }) => interval !== null))}
         />
         {props.pointsInSpan > points.length && (
           <p className="quiet small">

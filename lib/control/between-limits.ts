@@ -28,29 +28,35 @@ export function betweenLimits(baseline: readonly SubgroupPoint[]): LimitSet['bet
   const [wafers] = [...sizes].sort(([a, m], [b, n]) => n - m || a - b)[0] ?? [];
   if (wafers === undefined) return null;
   const sigma = Math.sqrt(squares / freedom);
-  return { centre: c4(wafers) * sigma, upper: betweenFactor(wafers) * sigma, wafers };
+  const { centre, upper } = factorsOf(wafers);
+  return { centre: centre * sigma, upper: upper * sigma, wafers };
 }
 
-const factors = new Map<number, number>();
+const known = new Map<number, { centre: number; upper: number }>();
 
-function betweenFactor(wafers: number): number {
-  const found = factors.get(wafers);
+/** Centre line and upper limit of the spread between so many wafers, for σ = 1. */
+function factorsOf(wafers: number): { centre: number; upper: number } {
+  const found = known.get(wafers);
   if (found !== undefined) return found;
-  const factor = Math.sqrt(chiSquareQuantile(INSIDE, wafers - 1) / (wafers - 1));
-  factors.set(wafers, factor);
-  return factor;
+  const upper = Math.sqrt(chiSquareQuantile(INSIDE, wafers - 1) / (wafers - 1));
+  const factors = { centre: c4(wafers), upper };
+  known.set(wafers, factors);
+  return factors;
 }
 
 /**
- * The upper limit of the spread between the wafers of a subgroup of the given size, from limits that were set for
- * the usual size: the same σ, the chi-square point of this many wafers.
+ * Centre line and upper limit of the spread between the wafers of a subgroup of the given size, from limits that were
+ * set for the usual size: the same σ, c4 and the chi-square point of this many wafers.
  *
  * Throws `RangeError` unless `wafers` is a whole number of at least 2.
  */
-export function betweenUpper(limits: NonNullable<LimitSet['between']>, wafers: number): number {
+export function betweenLimitsFor(
+  limits: NonNullable<LimitSet['between']>,
+  wafers: number,
+): { centre: number; upper: number } {
   if (!Number.isInteger(wafers) || wafers < 2) throw new RangeError(`no spread between ${wafers} wafers`);
-  const { upper, wafers: usual } = limits;
-  return usual === undefined || usual === wafers
-    ? upper
-    : (upper / betweenFactor(usual)) * betweenFactor(wafers);
+  const { centre, upper, wafers: usual } = limits;
+  if (usual === undefined || usual === wafers) return { centre, upper };
+  const [from, to] = [factorsOf(usual), factorsOf(wafers)];
+  return { centre: (centre / from.centre) * to.centre, upper: (upper / from.upper) * to.upper };
 }

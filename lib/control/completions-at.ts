@@ -1,4 +1,4 @@
-import { betweenUpper } from './between-limits';
+import { betweenLimitsFor } from './between-limits';
 import type { LimitSet, SubgroupPoint } from './limit-set';
 import { isBeyond } from './is-beyond';
 import { patternAt, type Pattern } from './pattern-at';
@@ -69,7 +69,7 @@ export function completionsAt(
   if (start < index) judge('moving-range', point.movingRange, null, limits.movingRange.upper);
   if (limits.within) judge('within', point.within, limits.within.lower, limits.within.upper);
   if (limits.between && point.between !== null && point.wafers >= 2) {
-    judge('between', point.between, null, betweenUpper(limits.between, point.wafers));
+    judge('between', point.between, null, betweenLimitsFor(limits.between, point.wafers).upper);
   }
   return found;
 }

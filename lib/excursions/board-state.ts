@@ -1,4 +1,4 @@
-import { limitAge } from '@/lib/control/limit-age';
+import { limitsState } from '@/lib/control/limits-state';
 import { limitsInForce } from './board-strip';
 import { FIRST_BASELINE } from './line';
 import { signalSentence } from './signal-sentence';
@@ -43,9 +43,8 @@ export function limitWords(stream: Pick<BoardStream, 'limits'>): string | null {
   const inForce = limitsInForce(stream);
   if (inForce === null) return null;
   if (inForce.inherited) return 'limits inherited';
-  const { n } = inForce.limits;
-  const age = inForce.state === 'provisional' ? 'provisional' : limitAge(n);
-  return age === 'established' ? null : `limits ${age} (${n})`;
+  const state = limitsState(inForce);
+  return state === 'established' ? null : `limits ${state} (${inForce.limits.n})`;
 }
 
 /** "2 wafers to measure again"; null when there are none. */

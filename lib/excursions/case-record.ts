@@ -36,7 +36,7 @@ FROM subgroup p WHERE p.stream_id = $1 AND p.id = ANY($2::bigint[]) ORDER BY p.p
 
 const POINT = `id, key, position_at AS at, state, level, moving_range AS "movingRange", within, between,
   limit_revision_id AS "limitsId", completions, specification <> '{}' AS "outOfSpecification",
-  wafer_ids[1] AS "firstWaferId"`;
+  cardinality(array_remove(wafer_levels, NULL)) AS wafers, wafer_ids[1] AS "firstWaferId"`;
 
 /** $2, $3 and $4, $5 are the places of the first and last subgroup that the case names. */
 const POINTS = `

@@ -26,6 +26,8 @@ export interface SpanPoint extends ChartedFigures {
   limitsId: string | null;
   completions: readonly string[];
   outOfSpecification: boolean;
+  /** How many of its wafers count. */
+  wafers: number;
 }
 
 export interface StreamSpan {
@@ -51,6 +53,7 @@ type PointJson = [
   limitsId: string | null,
   completions: string[] | null,
   outOfSpecification: boolean,
+  wafers: number,
   matches: boolean,
 ];
 
@@ -61,7 +64,7 @@ type PointJson = [
 const statement = (source: string, matches: string) => `
 SELECT json_agg(json_build_array(p.id::text, p.key, (extract(epoch FROM p.position_at) * 1000)::float8, p.state, p.level,
   p.moving_range, p.within, p.between, p.limit_revision_id::text, CASE WHEN p.completions <> '{}' THEN p.completions END,
-  p.specification <> '{}', ${matches}) ORDER BY p.position_at, p.key) AS points,
+  p.specification <> '{}', cardinality(array_remove(p.wafer_levels, NULL)), ${matches}) ORDER BY p.position_at, p.key) AS points,
   (SELECT position_at FROM subgroup WHERE stream_id = $1 ORDER BY position_at, key LIMIT 1) AS first_at,
   (SELECT position_at FROM subgroup WHERE stream_id = $1 ORDER BY position_at DESC, key DESC LIMIT 1) AS last_at
 FROM (${source}) p`;
@@ -126,7 +129,7 @@ async function read(
   const kept = isCut ? found.slice(1) : found;
   const [first, last] = [row?.first_at ?? null, row?.last_at ?? null];
   return {
-    points: kept.filter((point) => point[11]).map(pointOf),
+    points: kept.filter((point) => point[12]).map(pointOf),
     inSpan: kept.length,
     isCut,
     whole: first === null || last === null ? null : { from: first, to: last },
@@ -134,7 +137,8 @@ async function read(
 }
 
 function pointOf(json: PointJson): SpanPoint {
-  const [id, key, at, state, level, movingRange, within, between, limitsId, completions, faulty] = json;
+  const [id, key, at, state, level, movingRange, within, between, limitsId, completions, faulty, wafers] =
+    json;
   return {
     id,
     key,
@@ -147,5 +151,6 @@ function pointOf(json: PointJson): SpanPoint {
     limitsId,
     completions: completions ?? [],
     outOfSpecification: faulty,
+    wafers,
   };
 }

@@ -1,4 +1,4 @@
-import { limitAge } from '@/lib/control/limit-age';
+import { limitsState } from '@/lib/control/limits-state';
 import { FIRST_BASELINE } from './line';
 import { signalSentence } from './signal-sentence';
 import { SINCE_MOST, type StandingCase, type StandingLimits } from './stream-standing';
@@ -89,9 +89,4 @@ export function streamRemarks(figures: StreamFigures): string[] {
 export function limitsWords(limits: StandingLimits): string {
   if (limits.origin === 'inherited') return 'inherited';
   return `${limitsState(limits)} (${limits.limits.n} subgroups)`;
-}
-
-/** How far a revision can be trusted: provisional until someone approves it, then by the size of its baseline. */
-export function limitsState({ state: approval, limits }: Pick<StandingLimits, 'state' | 'limits'>) {
-  return approval === 'provisional' ? 'provisional' : limitAge(limits.n);
 }

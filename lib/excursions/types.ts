@@ -168,6 +168,8 @@ export interface CasePoint extends ChartedFigures {
   limitsId: string | null;
   completions: string[];
   outOfSpecification: boolean;
+  /** How many of its wafers count. */
+  wafers: number;
   firstWaferId: string | null;
 }
 

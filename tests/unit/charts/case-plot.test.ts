@@ -21,7 +21,7 @@ function input(values: readonly (number | null)[], change: Partial<CasePlotInput
     },
     movingRange: { centre: 1, upper: 4 },
     within: null,
-    between: null,
+    between: [],
   };
   return {
     chart: 'level',
@@ -69,6 +69,15 @@ describe('the chart of a case', () => {
     expect(near.specification).toHaveLength(1);
     const far = casePlot(input([8, 12], { specification: { lower: null, upper: 1000 } }), size);
     expect(far.specification).toHaveLength(0);
+  });
+
+  it('keeps the interval of a limit inside the frame, however wide it is', () => {
+    const [span] = input([9, 11]).limits;
+    if (span === undefined) throw new Error('no limits');
+    const wide = { ...span, level: { ...span.level, upperInterval: [-1e6, 1e6] as const } };
+    const { limits, frame } = casePlot(input([9, 11], { limits: [wide] }), size);
+    const interval = limits.find((one) => one.part === 'limit' && one.interval?.top === frame.top)?.interval;
+    expect(interval).toEqual({ top: frame.top, bottom: frame.bottom });
   });
 
   it('holds for one point and for none', () => {

@@ -43,7 +43,7 @@ const limits: LimitSpan = {
   level: { centre: 5, lower: 4.5, upper: 5.5 },
   movingRange: { centre: 0.1, upper: 0.4 },
   within: { lower: 0.4, centre: 0.7, upper: 1.2 },
-  between: null,
+  between: [],
 };
 
 const expected = (half: number, tolerance: number): ExpectedSpan => ({

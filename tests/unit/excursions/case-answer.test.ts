@@ -53,6 +53,7 @@ const points = (count: number): CasePoint[] =>
     limitsId: '1',
     completions: [],
     outOfSpecification: false,
+    wafers: 1,
     firstWaferId: null,
   }));
 

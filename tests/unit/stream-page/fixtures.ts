@@ -18,6 +18,7 @@ export function spanPoint(nth: number, over: Partial<SpanPoint> = {}): SpanPoint
     limitsId: null,
     completions: [],
     outOfSpecification: false,
+    wafers: 1,
     ...over,
   };
 }

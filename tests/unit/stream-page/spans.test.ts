@@ -2,52 +2,9 @@ import { describe, expect, it } from 'vitest';
 import { dopingScale } from '@/app/(line)/streams/[slug]/doping-scale';
 import { eventMarks } from '@/app/(line)/streams/[slug]/event-marks';
 import { expectedSpans } from '@/app/(line)/streams/[slug]/expected-spans';
-import { limitSpans } from '@/app/(line)/streams/[slug]/limit-spans';
 import { targetModel } from '@/lib/excursions/target-model';
 import { expectedValue } from '@/lib/physics/expected-value';
-import { BORON, MINUTE, spanPoint, standingLimits } from './fixtures';
-
-describe('limits of a stretch', () => {
-  const judged = (...ids: (string | null)[]) =>
-    ids.map((limitsId) => ({ state: 'judged' as const, limitsId }));
-
-  it('are one span for each run of subgroups judged by one revision', () => {
-    const spans = limitSpans(judged(null, '1', '1', '2'), [standingLimits('2'), standingLimits('1')], 1);
-    expect(spans.map(({ revision, fromIndex, toIndex }) => [revision, fromIndex, toIndex])).toEqual([
-      [1, 1, 2],
-      [2, 3, 3],
-    ]);
-  });
-
-  it('go on over subgroups that are not judged', () => {
-    const points = [...judged('1'), { state: 'not-judged' as const, limitsId: null }, ...judged('1')];
-    expect(limitSpans(points, [standingLimits('1')], 1)).toMatchObject([{ fromIndex: 0, toIndex: 2 }]);
-    const open = [...judged('1'), { state: 'open' as const, limitsId: null }];
-    expect(limitSpans(open, [standingLimits('1')], 1)).toMatchObject([{ fromIndex: 0, toIndex: 1 }]);
-  });
-
-  it('are provisional until approved, then young with their interval, then established', () => {
-    const state = (revision: ReturnType<typeof standingLimits>) => limitSpans(judged('1'), [revision], 1)[0];
-    expect(state(standingLimits('1', { state: 'provisional' }, 200))?.state).toBe('provisional');
-    const young = state(standingLimits('1', {}, 61));
-    expect(young?.state).toBe('young');
-    expect(young?.level.upperInterval?.[0]).toBeLessThan(10.3);
-    expect(young?.level.upperInterval?.[1]).toBeGreaterThan(10.3);
-    expect(state(standingLimits('1', {}, 101))).toMatchObject({ state: 'established' });
-    expect(state(standingLimits('1', {}, 101))?.level.upperInterval).toBeUndefined();
-    expect(state(standingLimits('1', { origin: 'inherited' }, 0))?.state).toBe('provisional');
-  });
-
-  it('are in the unit of the chart, but the spread within stays percent', () => {
-    const [span] = limitSpans(judged('1'), [standingLimits('1')], 1000);
-    expect(span?.level.centre).toBe(10_000);
-    expect(span?.within?.upper).toBe(1.4);
-    const young = limitSpans(judged('1'), [standingLimits('1', {}, 61)], 1000)[0]?.within;
-    expect(young?.upperInterval?.[0]).toBeLessThan(1.4);
-    expect(young?.upperInterval?.[1]).toBeGreaterThan(1.4);
-    expect(young?.upperInterval?.[1]).toBeLessThan(3);
-  });
-});
+import { BORON, MINUTE, spanPoint } from './fixtures';
 
 describe('what physics expects along a stretch', () => {
   const model = targetModel(BORON, null);

@@ -1,14 +1,12 @@
 import type { CaseChartProps } from '@/app/_charts/case-chart';
 import { chartMarkShape } from '@/app/_charts/chart-mark-shape';
 import { chartValue } from '@/app/_charts/chart-value';
-import type { LimitSpan } from '@/app/_charts/stream-chart-point';
+import { limitSpans } from '@/app/_charts/limit-spans';
 import { thinned } from '@/app/_charts/thinned';
 import type { ChartName } from '@/lib/control/completions-at';
-import { limitAge } from '@/lib/control/limit-age';
-import { type Interval, limitInterval } from '@/lib/control/limit-interval';
 import { leadSignal } from '@/lib/excursions/case-answer';
 import { signalSentence } from '@/lib/excursions/signal-sentence';
-import type { CaseLimits, CasePoint, ExcursionCase } from '@/lib/excursions/types';
+import type { CasePoint, ExcursionCase } from '@/lib/excursions/types';
 import { formatShortDay } from './short-day';
 
 const MOST_POINTS = 240;
@@ -33,6 +31,7 @@ export function caseChartProps(found: ExcursionCase, timeZone: string): Omit<Cas
   const reach = { from: place(found.first.id, 0), to: place(found.last.id, found.points.length - 1) };
   const lead = leadSignal(found.signals);
   const shown = thinned(numbered, MOST_POINTS);
+  const drawn = new Set(shown.map((point) => point.index));
   const call = lead && { index: place(lead.first.id, -1), words: signalSentence(lead) };
   return {
     chart,
@@ -43,7 +42,7 @@ export function caseChartProps(found: ExcursionCase, timeZone: string): Omit<Cas
       shape: shapeOf(point, chart, isFault),
       tookPart: tookPart.has(point.id),
     })),
-    limits: limitSpans(found.points, found.limits),
+    limits: limitSpans(found.points, found.limits, { isDrawn: (index) => drawn.has(index) }),
     specification: isFault && chart === 'level' ? found.specification : null,
     events: found.events.map(({ at, text }) => ({
       index: numbered.findIndex((point) => point.at >= at) - 0.5,
@@ -68,48 +67,4 @@ function shapeOf(point: CasePoint, chart: ChartName, isFault: boolean) {
     },
     chart,
   );
-}
-
-/** Stretches of subgroups judged by the same revision. */
-export function limitSpans(
-  points: readonly Pick<CasePoint, 'limitsId'>[],
-  limits: readonly CaseLimits[],
-): LimitSpan[] {
-  const byId = new Map(limits.map((revision) => [revision.id, revision]));
-  const spans: LimitSpan[] = [];
-  let current: { id: string; span: LimitSpan } | null = null;
-  points.forEach(({ limitsId }, index) => {
-    const revision = limitsId === null ? undefined : byId.get(limitsId);
-    if (revision === undefined) {
-      current = null;
-    } else if (current?.id === revision.id) {
-      current.span.toIndex = index;
-    } else {
-      current = { id: revision.id, span: spanOf(revision, index) };
-      spans.push(current.span);
-    }
-  });
-  return spans;
-}
-
-function spanOf({ revision, state: approval, limits }: CaseLimits, index: number): LimitSpan {
-  const state = approval === 'provisional' ? 'provisional' : limitAge(limits.n);
-  const interval = state === 'young' ? limitInterval(limits) : null;
-  return {
-    fromIndex: index,
-    toIndex: index,
-    revision,
-    state,
-    level: { ...limits.level, ...(interval && intervalsOf(interval.level)) },
-    movingRange: limits.movingRange,
-    within: limits.within && { ...limits.within, ...(interval?.within && intervalsOf(interval.within)) },
-    between: limits.between,
-  };
-}
-
-function intervalsOf({ lower, upper }: { lower: Interval; upper: Interval }) {
-  return {
-    lowerInterval: [lower.low, lower.high] as const,
-    upperInterval: [upper.low, upper.high] as const,
-  };
 }

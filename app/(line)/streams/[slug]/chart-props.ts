@@ -1,4 +1,5 @@
 import type { ComponentProps } from 'react';
+import { limitSpans } from '@/app/_charts/limit-spans';
 import { packedPoints } from '@/app/_charts/packed-points';
 import type { PackedStreamCharts } from '@/app/_charts/packed-stream-charts';
 import { streamPanels } from '@/app/_charts/stream-panels';
@@ -7,7 +8,6 @@ import type { ChartRow } from './chart-points';
 import { dopingScale } from './doping-scale';
 import { eventMarks } from './event-marks';
 import { expectedSpans } from './expected-spans';
-import { limitSpans } from './limit-spans';
 import { streamHref } from './span-wish';
 import type { StreamView } from './stream-view';
 
@@ -21,7 +21,11 @@ export function chartProps(
   const { stream } = settings;
   if (shown === null || span.whole === null || rows.length === 0) return null;
   const isRelative = stream.chartedValue === 'relative';
-  const limits = page.isFiltered ? [] : limitSpans(span.points, standing.limits, unit.factor);
+  const drawn = new Set(rows.map((row) => row.index));
+  const isDrawn = (index: number) => drawn.has(index);
+  const limits = page.isFiltered
+    ? []
+    : limitSpans(span.points, standing.limits, { factor: unit.factor, isDrawn });
   const expected = expectedSpans(rows, { isRelative, factor: unit.factor });
   const newest = rows.findLast((row) => row.expected !== null)?.expected ?? null;
   const target = settings.targets.find((revision) => revision.id === newest?.targetId)?.target;

@@ -1,7 +1,7 @@
 import Link from 'next/link';
 import { Figures } from '@/app/_ui/figures';
 import { SectionHead } from '@/app/_ui/section-head';
-import { limitsState } from '@/lib/excursions/stream-answer';
+import { limitsState } from '@/lib/control/limits-state';
 import { SINCE_MOST } from '@/lib/excursions/stream-standing';
 import { targetModel } from '@/lib/excursions/target-model';
 import {
