@@ -25,7 +25,7 @@ export function CaseChart(props: CaseChartProps) {
       <Key
         tookPart={props.points.some((point) => point.tookPart)}
         interval={hasInterval(props)}
-        specification={props.specification !== null}
+        specification={props.specification.length > 0}
       />
     </figure>
   );
@@ -83,11 +83,11 @@ function Drawing(props: CaseChartProps & { width: number; height: number; classN
           />
         </g>
       ))}
-      {plot.specification.map((y) => (
+      {plot.specification.map(({ x1, x2, y }) => (
         <line
-          key={y}
-          x1={left}
-          x2={right}
+          key={`${x1} ${y}`}
+          x1={x1}
+          x2={x2}
           y1={y}
           y2={y}
           style={{ stroke: 'var(--ink)' }}

@@ -18,13 +18,21 @@ export interface CasePlotPoint {
   tookPart: boolean;
 }
 
+/** What was specified from one index to another, both included. */
+export interface SpecificationSpan {
+  fromIndex: number;
+  toIndex: number;
+  lower: number | null;
+  upper: number | null;
+}
+
 export interface CasePlotInput {
   chart: ChartName;
   /** In order of `index`. */
   points: readonly CasePlotPoint[];
   limits: readonly LimitSpan[];
-  /** Of the wafer mean; drawn where it does not squeeze the points. */
-  specification: { lower: number | null; upper: number | null } | null;
+  /** Of the charted figure; drawn where it does not squeeze the points. */
+  specification: readonly SpecificationSpan[];
   events: readonly { index: number; text: string }[];
   /** From the first subgroup of the case to the last, by index. */
   reach: { from: number; to: number };
@@ -38,16 +46,18 @@ const DAY_WIDTH = 84;
 
 /** Where everything on the chart of a case stands, in a drawing of a given size. */
 export function casePlot(input: CasePlotInput, size: { width: number; height: number }) {
-  const { points, chart, reach, specification } = input;
+  const { points, chart, reach } = input;
   const [from, to] = [points[0]?.index ?? 0, points.at(-1)?.index ?? 0];
   const x = linearScale([from - 0.5, to + 0.5], [LEFT, size.width - RIGHT]);
   const segments = limitSegments(input.limits, chart, { from, to });
-  const edges = [specification?.lower ?? null, specification?.upper ?? null].filter((edge) => edge !== null);
+  const edges = input.specification.flatMap((span) =>
+    [span.lower, span.upper].flatMap((edge) => (edge === null ? [] : { ...span, edge })),
+  );
   const values = points.flatMap((point) => point.value ?? []);
   const intervals = segments.flatMap((segment) => segment.interval ?? []);
   const domain = chartDomain(
     [...values, ...segments.map((segment) => segment.y)],
-    [intervals, edges].filter((wish) => wish.length > 0),
+    [intervals, edges.map(({ edge }) => edge)].filter((wish) => wish.length > 0),
     chart === 'level' ? {} : { from: 0 },
   );
   const y = linearScale(domain, [size.height - BOTTOM, TOP], { clamp: true });
@@ -68,7 +78,13 @@ export function casePlot(input: CasePlotInput, size: { width: number; height: nu
           ? null
           : { top: round(y(segment.interval[1])), bottom: round(y(segment.interval[0])) },
     })),
-    specification: edges.filter(inside).map((edge) => round(y(edge))),
+    specification: edges
+      .filter(({ edge }) => inside(edge))
+      .map(({ fromIndex, toIndex, edge }) => ({
+        x1: round(x(fromIndex - 0.5)),
+        x2: round(x(toIndex + 0.5)),
+        y: round(y(edge)),
+      })),
     events: input.events.map(({ index, text }) => ({ x: round(x(index)), text })),
     wash: { x: round(x(reach.from - 0.5)), width: round(x(reach.to + 0.5) - x(reach.from - 0.5)) },
     lines: lines(points, x, y),

@@ -1,7 +1,7 @@
 import type { Pool } from 'pg';
 import { type LimitRow, LIMIT_SELECTION, limitSetOf } from './line-rows';
 import { caseSignals, namedSubgroupIds, type SignalRecord, type SubgroupRecord } from './case-signals';
-import type { CaseEntry, CaseLimits, CasePoint, CaseStream, ExcursionCase } from './types';
+import type { CaseEntry, CaseLimits, CasePoint, CaseSpecification, CaseStream, ExcursionCase } from './types';
 
 /** How many subgroups before the first and after the last of a case are shown with it, and how many at most. */
 const BEFORE = 20;
@@ -55,9 +55,10 @@ const LIMITS = `SELECT ${LIMIT_SELECTION}, state FROM limit_revision WHERE strea
 const EVENTS = `
 SELECT at, kind, text FROM stream_event WHERE stream_id = $1 AND at >= $2 AND at <= $3 ORDER BY at, id`;
 
-const SPECIFICATION = `
-SELECT mean_lower AS lower, mean_upper AS upper FROM specification_revision
-WHERE stream_id = $1 AND effective_from <= $2 ORDER BY effective_from DESC, revision DESC LIMIT 1`;
+const SPECIFICATIONS = `
+SELECT revision, effective_from AS "effectiveFrom", mean_lower AS "meanLower", mean_upper AS "meanUpper",
+  nonuniformity_metric AS "nonuniformityMetric", nonuniformity_upper AS "nonuniformityUpper"
+FROM specification_revision WHERE stream_id = $1 ORDER BY revision`;
 
 /** One excursion with its signals, its log, and the subgroups about it; null when there is none. */
 export async function excursionCase(pool: Pool, id: string): Promise<ExcursionCase | null> {
@@ -77,13 +78,13 @@ export async function excursionCase(pool: Pool, id: string): Promise<ExcursionCa
   const around = [streamId, earliest.at, earliest.key, latest.at, latest.key];
   const points = (await pool.query<CasePoint>(POINTS, around)).rows;
   const [from, to] = [points[0]?.at ?? earliest.at, points.at(-1)?.at ?? latest.at];
-  const [limits, events, specification] = await Promise.all([
+  const [limits, events, specifications] = await Promise.all([
     pool.query<LimitRow & Pick<CaseLimits, 'state'>>(LIMITS, [
       streamId,
       [...new Set(points.flatMap((point) => point.limitsId ?? []))],
     ]),
     pool.query<ExcursionCase['events'][number]>(EVENTS, [streamId, from, to]),
-    pool.query<{ lower: number | null; upper: number | null }>(SPECIFICATION, [streamId, first.at]),
+    pool.query<CaseSpecification>(SPECIFICATIONS, [streamId]),
   ]);
   return {
     ...rest,
@@ -100,6 +101,6 @@ export async function excursionCase(pool: Pool, id: string): Promise<ExcursionCa
       limits: limitSetOf(row),
     })),
     events: events.rows,
-    specification: chartedValue === 'statistic' ? (specification.rows[0] ?? null) : null,
+    specifications: specifications.rows,
   };
 }

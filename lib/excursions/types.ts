@@ -173,6 +173,16 @@ export interface CasePoint extends ChartedFigures {
   firstWaferId: string | null;
 }
 
+/** A revision of the specification, as far as charts draw it. */
+export interface CaseSpecification {
+  revision: number;
+  effectiveFrom: Date;
+  meanLower: number | null;
+  meanUpper: number | null;
+  nonuniformityMetric: string | null;
+  nonuniformityUpper: number | null;
+}
+
 export interface CaseLimits {
   id: string;
   revision: number;
@@ -198,6 +208,6 @@ export interface ExcursionCase extends Omit<
   /** Those that judged the points. */
   limits: CaseLimits[];
   events: { at: Date; kind: string; text: string }[];
-  /** Of the wafer mean, in force when the case began; null where it is not charted. */
-  specification: { lower: number | null; upper: number | null } | null;
+  /** Every revision of the stream's. */
+  specifications: CaseSpecification[];
 }

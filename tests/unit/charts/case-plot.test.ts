@@ -27,7 +27,7 @@ function input(values: readonly (number | null)[], change: Partial<CasePlotInput
     chart: 'level',
     points,
     limits: [limits],
-    specification: null,
+    specification: [],
     events: [],
     reach: { from: 1, to: 2 },
     ...change,
@@ -65,10 +65,22 @@ describe('the chart of a case', () => {
   });
 
   it('draws the specification only where it does not squeeze the points', () => {
-    const near = casePlot(input([8, 12], { specification: { lower: 6, upper: null } }), size);
-    expect(near.specification).toHaveLength(1);
-    const far = casePlot(input([8, 12], { specification: { lower: null, upper: 1000 } }), size);
-    expect(far.specification).toHaveLength(0);
+    const of = (lower: number | null, upper: number | null) => ({ fromIndex: 0, toIndex: 1, lower, upper });
+    expect(casePlot(input([8, 12], { specification: [of(6, null)] }), size).specification).toHaveLength(1);
+    expect(casePlot(input([8, 12], { specification: [of(null, 1000)] }), size).specification).toEqual([]);
+  });
+
+  it('draws each specification over the subgroups it held for, half a step to either side', () => {
+    const specification = [
+      { fromIndex: 0, toIndex: 1, lower: 7, upper: null },
+      { fromIndex: 2, toIndex: 3, lower: 8, upper: null },
+    ];
+    const plot = casePlot(input([9, 9, 10, 11], { specification }), size);
+    const [first, second] = plot.specification;
+    expect(first?.x1).toBe(plot.frame.left);
+    expect(first?.x2).toBe(second?.x1);
+    expect(second?.x2).toBe(plot.frame.right);
+    expect(second?.y).toBeLessThan(first?.y ?? 0);
   });
 
   it('keeps the interval of a limit inside the frame, however wide it is', () => {

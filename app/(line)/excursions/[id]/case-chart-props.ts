@@ -8,6 +8,7 @@ import { leadSignal } from '@/lib/excursions/case-answer';
 import { signalSentence } from '@/lib/excursions/signal-sentence';
 import type { CasePoint, ExcursionCase } from '@/lib/excursions/types';
 import { formatShortDay } from './short-day';
+import { specificationSpans } from './specification-spans';
 
 const MOST_POINTS = 240;
 
@@ -43,7 +44,7 @@ export function caseChartProps(found: ExcursionCase, timeZone: string): Omit<Cas
       tookPart: tookPart.has(point.id),
     })),
     limits: limitSpans(found.points, found.limits, { isDrawn: (index) => drawn.has(index) }),
-    specification: isFault && chart === 'level' ? found.specification : null,
+    specification: isFault ? specificationSpans(found, chart) : [],
     events: found.events.map(({ at, text }) => ({
       index: numbered.findIndex((point) => point.at >= at) - 0.5,
       text,
