@@ -13,6 +13,8 @@ export interface CheckContext {
   defaults: RawMap['words'];
   /** The stream by the name in the file; undefined for one that does not exist. */
   settingsOf: (slug: string) => StreamSettings | undefined;
+  /** Whether whoever sent the file may record wafers of a stream. */
+  mayRecord: (streamId: string) => boolean;
   now: Date;
 }
 
@@ -50,6 +52,10 @@ export function checkedMeasurement(map: RawMap, context: CheckContext): Checked 
     return { problems, name, identity };
   }
   const { stream } = settings;
+  if (!context.mayRecord(stream.id)) {
+    problem(map.firstLine, 'stream', `you may not record wafers of the stream "${stream.slug}"`);
+    return { problems, name, identity };
+  }
   const quantity = VALUE_COLUMNS[context.valueColumn];
   if (quantity !== stream.quantity) {
     const wanted = stream.quantity === 'resistivity' ? 'resistivity_ohm_cm' : 'sheet_resistance_ohm_sq';

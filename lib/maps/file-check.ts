@@ -1,4 +1,4 @@
-import type { Actor } from '@/lib/access/actor';
+import { may, type Actor } from '@/lib/access/actor';
 import { getPool } from '@/lib/database/client';
 import { listSettingsInUse } from '@/lib/streams/data';
 import type { StreamSettings } from '@/lib/streams/types';
@@ -70,6 +70,7 @@ export async function settingsBySlug(actor: Actor): Promise<Map<string, StreamSe
  * where the file as a whole cannot be read.
  */
 export async function* fileMeasurements(
+  actor: Actor,
   file: FileSource,
   settings: ReadonlyMap<string, StreamSettings>,
   defaults: RawMap['words'],
@@ -92,6 +93,7 @@ export async function* fileMeasurements(
           valueColumn: (header as MapHeader).valueColumn,
           defaults,
           settingsOf: (slug) => settings.get(slug),
+          mayRecord: (streamId) => may(actor, 'record-maps', streamId),
           now,
         });
         some.push({
@@ -144,7 +146,7 @@ export async function checkFile(
     if (header.unread.length > 0)
       check.notices.push(`columns that are not read: ${header.unread.join(', ')}`);
   };
-  for await (const some of fileMeasurements(file, settings, defaults, onHeader)) {
+  for await (const some of fileMeasurements(actor, file, settings, defaults, onHeader)) {
     check.measurements += some.length;
     const sound: { place: number; line: number; name: string; measurement: Measurement }[] = [];
     if (readings < MOST_KEPT_READINGS) {

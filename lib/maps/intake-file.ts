@@ -142,7 +142,7 @@ async function recordSound(
   }
   if (check.measurements > check.keptTo) {
     const settings = await settingsBySlug(actor);
-    for await (const some of fileMeasurements(file, settings, options.defaults)) {
+    for await (const some of fileMeasurements(actor, file, settings, options.defaults)) {
       for (const one of some) if (one.place >= check.keptTo) await take(one);
     }
   }

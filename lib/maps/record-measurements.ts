@@ -1,8 +1,10 @@
 import type { Pool, PoolClient } from 'pg';
-import type { Actor } from '@/lib/access/actor';
+import { may, type Actor } from '@/lib/access/actor';
+import { refusalOf } from '@/lib/access/refusal';
 import { getPool } from '@/lib/database/client';
 import { takeIds } from '@/lib/database/take-ids';
 import { inTransaction } from '@/lib/database/transaction';
+import { AppError } from '@/lib/errors';
 import { judgedLine, LineTooShort } from '@/lib/excursions/judged-line';
 import { joinedMembers } from '@/lib/excursions/joined-members';
 import { isPlain, withIds, writeFindings, type JudgedLine } from '@/lib/excursions/write-judgement';
@@ -21,13 +23,17 @@ const LATE = 'a wafer recorded later changed the order or the values of its poin
  * recorded, repeated (the same was there already) or refused (another content was there already).
  *
  * One wafer in order goes by a single statement that carries the version of the stream it was judged by; whatever is
- * out of the ordinary goes by a transaction that holds its streams.
+ * out of the ordinary goes by a transaction that holds its streams. Throws where the actor may not record wafers of one
+ * of the streams: a file that names such a stream was refused before.
  */
 export async function recordMeasurements(
   actor: Actor,
   batch: Batch,
   measurements: readonly Measurement[],
 ): Promise<Outcome[]> {
+  if (!measurements.every(({ streamId }) => may(actor, 'record-maps', streamId))) {
+    throw new AppError('forbidden', refusalOf('record-maps'));
+  }
   const pool = getPool();
   const only = measurements.length === 1 ? measurements[0] : undefined;
   if (only !== undefined) {

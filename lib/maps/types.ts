@@ -47,7 +47,7 @@ export function measurementName(facts: { wafer: string; run: string | null; lot:
   return carrier === null ? facts.wafer : `${facts.wafer} (${carrier})`;
 }
 
-export type Origin = 'page' | 'command' | 'demonstration';
+export type Origin = 'page' | 'command' | 'network' | 'demonstration';
 
 /** What became of one measurement. */
 export type Outcome =

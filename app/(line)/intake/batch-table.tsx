@@ -3,7 +3,12 @@ import { DataTable, type DataColumn } from '@/app/_ui/data-table';
 import { formatDateTime } from '@/lib/format';
 import type { IntakeBatch } from '@/lib/maps/data';
 
-const ORIGIN_WORDS = { page: 'this page', command: 'command line', demonstration: 'demonstration line' };
+const ORIGIN_WORDS = {
+  page: 'this page',
+  command: 'command line',
+  network: 'the network',
+  demonstration: 'demonstration line',
+};
 
 /** The batches of the intake, newest first. */
 export function BatchTable({ batches, timeZone }: { batches: readonly IntakeBatch[]; timeZone: string }) {

@@ -10,6 +10,7 @@ function check(map: RawMap, own: StreamSettings = settings(), context: Partial<C
     valueColumn: 'resistivity_ohm_cm',
     defaults: {},
     settingsOf: (slug) => (slug === own.stream.slug ? own : undefined),
+    mayRecord: () => true,
     now: new Date('2031-04-06T00:00:00Z'),
     ...context,
   });
@@ -42,6 +43,13 @@ describe('a measurement checked against its stream', () => {
       readings: [...map.values.slice(0, -1), null],
     });
     expect(found.name).toBe('W1');
+  });
+
+  it('is refused where whoever sent it may not record wafers of its stream', () => {
+    const others = { mayRecord: (streamId: string) => streamId !== '7' };
+    expect(problems(rawMap(), settings(), others)).toEqual([
+      { line: 2, column: 'stream', reason: expect.stringContaining('you may not record wafers') },
+    ]);
   });
 
   it('allows a place a tenth of a millimetre', () => {

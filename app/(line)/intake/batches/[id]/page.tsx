@@ -12,7 +12,12 @@ import { StreamTable } from './stream-table';
 
 export const metadata: Metadata = { title: 'Batch' };
 
-const ORIGIN_WORDS = { page: 'the intake page', command: 'the command line', demonstration: 'the program' };
+const ORIGIN_WORDS = {
+  page: 'the intake page',
+  command: 'the command line',
+  network: 'the network',
+  demonstration: 'the program',
+};
 
 export default async function BatchPage(props: { params: Promise<{ id: string }> }) {
   const actor = localActor();
