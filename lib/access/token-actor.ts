@@ -1,5 +1,5 @@
 import { getPool } from '@/lib/database/client';
-import type { Identity } from './actor';
+import { provenActor, type Actor } from './actor';
 import { tokenHash } from './token-text';
 
 interface TokenRow {
@@ -17,11 +17,11 @@ const USE_KEPT_FOR = '1 minute';
  * Whom a token stands for; null where it is unknown, expired or revoked. One prepared look-up, and a write where its
  * last use on record is older than a minute.
  */
-export async function findToken(text: string): Promise<Identity | null> {
+export async function findTokenActor(text: string): Promise<Actor | null> {
   const hash = tokenHash(text);
   if (hash === null) return null;
   const { rows } = await getPool().query<TokenRow>({
-    name: 'find-token',
+    name: 'token-actor',
     text: `SELECT id, name, scope, stream_ids AS "streamIds",
         (last_used_at IS NULL OR last_used_at < now() - interval '${USE_KEPT_FOR}') AS "isStale"
       FROM access_token WHERE hash = $1 AND revoked_at IS NULL AND expires_at > now()`,
@@ -37,5 +37,5 @@ export async function findToken(text: string): Promise<Identity | null> {
     );
   }
   const { id, name, scope, streamIds } = found;
-  return { kind: 'token', id, name: `${name} (token)`, grants: [], token: { scope, streamIds } };
+  return provenActor({ kind: 'token', id, name: `${name} (token)`, grants: [], token: { scope, streamIds } });
 }
