@@ -2,7 +2,10 @@ import type { Target } from '@/lib/physics/target';
 import { type LimitRow, limitSetOf } from './line-rows';
 import type { BoardCase, BoardLimits, BoardPoint, BoardStream, ChartedFigures } from './types';
 
-type LimitsJson = Omit<LimitRow, 'streamId' | 'revision' | 'effectiveFrom' | 'baselineIds'> & {
+type LimitsJson = Omit<
+  LimitRow,
+  'streamId' | 'revision' | 'effectiveFrom' | 'supersededFrom' | 'baselineIds'
+> & {
   state: BoardLimits['state'];
   origin: string;
 };

@@ -72,9 +72,10 @@ LEFT JOIN LATERAL (
   LEFT JOIN subgroup p ON p.stream_id = g.stream_id AND p.id = g.last_subgroup_id
   WHERE e.stream_id = s.id AND e.id = cases.rank[3]) worst ON true
 CROSS JOIN LATERAL (
-  SELECT json_agg(${limitsAsJson('l')} ORDER BY l.effective_from, l.revision) AS limits
+  SELECT json_agg(${limitsAsJson('l')} ORDER BY from_last = 1, l.effective_from, l.revision) AS limits
   FROM (SELECT *, row_number() OVER (ORDER BY effective_from, revision) AS from_first,
-      row_number() OVER (ORDER BY effective_from DESC, revision DESC) AS from_last
+      row_number() OVER (ORDER BY coalesce(superseded_from <= strip.now, false), effective_from DESC,
+        revision DESC) AS from_last
     FROM limit_revision
     WHERE stream_id = s.id AND state IN ('provisional', 'approved') AND effective_from <= strip.now) l
   WHERE from_first = 1 OR from_last = 1 OR l.id = worst.point_limit_id OR l.id = ANY(strip.limit_ids)) limits

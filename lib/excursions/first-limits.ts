@@ -22,6 +22,7 @@ export function firstLimits(line: Line, charted: readonly LinePoint[]): LineLimi
     id: null,
     revision: 1,
     effectiveFrom: (baseline.at(-1) as LinePoint).at,
+    supersededFrom: null,
     baselineIds: baseline.map((point) => point.id),
     limits,
   };

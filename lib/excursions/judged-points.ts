@@ -12,19 +12,28 @@ export function isOpen(line: Line, index: number): boolean {
   return index === line.points.length - 1 && point !== undefined && point.members.length < line.subgroupSize;
 }
 
-/** The limit revision in force at a position: the latest that took effect before it. */
-export function limitsInForce(limits: readonly LineLimits[], at: number): LineLimits | null {
-  let found: LineLimits | null = null;
+/**
+ * The limit revision in force at a position: the latest that took effect before it. A provisional one judges until
+ * another is approved, and nothing from the instant on at which that one takes force, though its own lies later.
+ */
+export function limitsInForce<
+  Revision extends Pick<LineLimits, 'revision'> &
+    Record<'effectiveFrom', Instant> &
+    Record<'supersededFrom', Instant | null>,
+>(limits: readonly Revision[], at: number): Revision | null {
+  let found: Revision | null = null;
   for (const revision of limits) {
-    if (revision.effectiveFrom >= at) continue;
-    const later =
-      found === null ||
-      revision.effectiveFrom > found.effectiveFrom ||
-      (revision.effectiveFrom === found.effectiveFrom && revision.revision > found.revision);
-    if (later) found = revision;
+    const from = Number(revision.effectiveFrom);
+    if (from >= at || (revision.supersededFrom !== null && Number(revision.supersededFrom) < at)) continue;
+    const before = Number(found?.effectiveFrom ?? -Infinity);
+    if (found === null || from > before || (from === before && revision.revision > found.revision))
+      found = revision;
   }
   return found;
 }
+
+/** Milliseconds since 1970, or a date. */
+type Instant = number | Date;
 
 /** The wafers of a subgroup that its figures rest on: a wafer that is not judged is there, but does not count. */
 export function judgedWafers(point: Pick<LinePoint, 'members'>): number {

@@ -46,6 +46,7 @@ export interface LimitRow {
   id: string;
   revision: number;
   effectiveFrom: Date;
+  supersededFrom: Date | null;
   baselineIds: string[];
   subgroups: number;
   centre: number;
@@ -65,14 +66,18 @@ export interface LimitRow {
 }
 
 export const LIMIT_SELECTION = `stream_id AS "streamId", id, revision, effective_from AS "effectiveFrom",
-  baseline_ids AS "baselineIds", subgroups, centre, sigma, lower, upper, moving_range_centre AS "movingRangeCentre",
+  superseded_from AS "supersededFrom", baseline_ids AS "baselineIds", subgroups, centre, sigma, lower, upper, moving_range_centre AS "movingRangeCentre",
   moving_range_upper AS "movingRangeUpper", within_log_mean AS "withinLogMean", within_log_sigma AS "withinLogSigma",
   within_lower AS "withinLower", within_centre AS "withinCentre", within_upper AS "withinUpper",
   between_centre AS "betweenCentre", between_upper AS "betweenUpper", between_wafers AS "betweenWafers"`;
 
+/** A row of `limit_revision` that judges what is processed just after an instant, as `limitsInForce` has it. */
+export const judgesAfter = (at: string) => `state IN ('provisional', 'approved') AND effective_from <= ${at}
+  AND (superseded_from IS NULL OR superseded_from > ${at})`;
+
 /** The limits of one revision, as the charts know them. */
 export function limitSetOf(
-  row: Omit<LimitRow, 'streamId' | 'id' | 'revision' | 'effectiveFrom' | 'baselineIds'>,
+  row: Omit<LimitRow, 'streamId' | 'id' | 'revision' | 'effectiveFrom' | 'supersededFrom' | 'baselineIds'>,
 ): LimitSet {
   const {
     withinLower,
@@ -113,6 +118,7 @@ export function lineLimits(row: LimitRow): LineLimits {
     id: row.id,
     revision: row.revision,
     effectiveFrom: row.effectiveFrom.getTime(),
+    supersededFrom: row.supersededFrom?.getTime() ?? null,
     baselineIds: row.baselineIds,
     limits: limitSetOf(row),
   };

@@ -12,6 +12,8 @@ export interface LineLimits {
   id: string | null;
   revision: number;
   effectiveFrom: number;
+  /** Of a provisional revision, from when on another that was approved since judges; null of every other. */
+  supersededFrom: number | null;
   baselineIds: string[];
   limits: LimitSet;
 }

@@ -1,6 +1,7 @@
 import type { Pool } from 'pg';
 import type { LimitSet } from '@/lib/control/limit-set';
 import type { ExcursionFamily } from './line';
+import { limitsInForce } from './judged-points';
 import { LIMIT_SELECTION, type LimitRow, limitSetOf } from './line-rows';
 import type { ExcursionState, SignalWords } from './types';
 
@@ -11,6 +12,7 @@ export interface StandingLimits {
   state: 'provisional' | 'approved';
   origin: string;
   effectiveFrom: Date;
+  supersededFrom: Date | null;
   limits: LimitSet;
   author: string;
   draftedAt: Date;
@@ -59,7 +61,8 @@ export const SINCE_MOST = 500;
 const CASES_READ = 6;
 const BASELINE_READ = 500;
 
-type LimitsRow = LimitRow & Omit<StandingLimits, 'id' | 'revision' | 'effectiveFrom' | 'limits'>;
+type LimitsRow = LimitRow &
+  Omit<StandingLimits, 'id' | 'revision' | 'effectiveFrom' | 'supersededFrom' | 'limits'>;
 
 const LIMITS = `SELECT ${LIMIT_SELECTION}, state, origin, author, drafted_at AS "draftedAt", approved_by AS "approvedBy",
   approved_at AS "approvedAt" FROM limit_revision WHERE stream_id = $1 AND state IN ('provisional', 'approved')
@@ -100,7 +103,7 @@ export async function streamStanding(pool: Pool, streamId: string, now: Date): P
     pool.query<LimitsRow>({ name: 'standing-limits', text: LIMITS, values: [streamId] }),
     pool.query<StandingCase & { total: number }>({ name: 'standing-cases', text: CASES, values: [streamId] }),
   ]);
-  const row = found.rows.find((one) => one.effectiveFrom <= now);
+  const row = limitsInForce(found.rows, now.getTime());
   const sinceAt = row?.effectiveFrom.toISOString() ?? '-infinity';
   const [since, baseline] = await Promise.all([
     pool.query<StreamStanding['since']>({ name: 'standing-since', text: SINCE, values: [streamId, sinceAt] }),
@@ -112,7 +115,7 @@ export async function streamStanding(pool: Pool, streamId: string, now: Date): P
   ]);
   return {
     limits: found.rows.map(limitsOf),
-    inForce: row === undefined ? null : limitsOf(row),
+    inForce: row && limitsOf(row),
     cases: cases.rows.map(({ total: _total, ...one }) => one),
     openCases: cases.rows[0]?.total ?? 0,
     since: since.rows[0] ?? { subgroups: 0, withSignal: 0 },
@@ -121,13 +124,15 @@ export async function streamStanding(pool: Pool, streamId: string, now: Date): P
 }
 
 function limitsOf(row: LimitsRow): StandingLimits {
-  const { id, revision, state, origin, effectiveFrom, author, draftedAt, approvedBy, approvedAt } = row;
+  const { id, revision, state, origin, effectiveFrom, supersededFrom } = row;
+  const { author, draftedAt, approvedBy, approvedAt } = row;
   return {
     id,
     revision,
     state,
     origin,
     effectiveFrom,
+    supersededFrom,
     limits: limitSetOf(row),
     author,
     draftedAt,

@@ -2,7 +2,7 @@ import type { Actor } from '@/lib/access/actor';
 import type { SubgroupPoint } from '@/lib/control/limit-set';
 import { getPool, getPrisma } from '@/lib/database/client';
 import type { Prisma } from '@/lib/database/generated/client';
-import { limitSetOf } from '@/lib/excursions/line-rows';
+import { judgesAfter, limitSetOf } from '@/lib/excursions/line-rows';
 import type { ControlStatistic } from '@/lib/streams/types';
 import type { LimitRevision, LimitState } from './types';
 
@@ -50,7 +50,7 @@ export interface LimitsInForce {
 export async function listLimitsInForce(_actor: Actor): Promise<LimitsInForce[]> {
   const { rows } = await getPool().query<LimitsInForce>(
     `SELECT DISTINCT ON (stream_id) stream_id AS "streamId", revision, state, subgroups FROM limit_revision
-     WHERE state IN ('provisional', 'approved') AND effective_from <= now()
+     WHERE ${judgesAfter('now()')}
      ORDER BY stream_id, effective_from DESC, revision DESC`,
   );
   return rows;
@@ -112,6 +112,7 @@ function limitRevisionOf(row: Prisma.LimitRevisionGetPayload<object>): LimitRevi
     state: row.state as LimitRevision['state'],
     origin: row.origin as LimitRevision['origin'],
     effectiveFrom: row.effectiveFrom,
+    supersededFrom: row.supersededFrom,
     limits: limitSetOf(row),
     baselineIds: row.baselineIds.map(String),
     author: row.author,

@@ -61,8 +61,9 @@ export async function enterInheritedLimits(
 }
 
 /**
- * Approves a draft or the provisional first limits. A draft takes force at `effectiveFrom` and what lies later is
- * judged again; the provisional ones go on as they were. Approved limits are never edited.
+ * Approves a draft or provisional limits. A draft takes force at `effectiveFrom`, provisional ones go on as they were;
+ * from then on no other provisional revision judges, and what lies later is judged again. Approved limits are never
+ * edited.
  */
 export async function approveLimits(
   actor: Actor,
@@ -70,8 +71,15 @@ export async function approveLimits(
   approval: { reason: string; effectiveFrom: Date; at?: Date },
 ): Promise<Result> {
   return inTransaction(async (client) => {
-    const { rows } = await client.query<{ stream_id: string; state: LimitState; revision: number }>(
-      'SELECT stream_id, state, revision FROM limit_revision WHERE id = $1 FOR UPDATE',
+    const { rows } = await client.query<{
+      stream_id: string;
+      state: LimitState;
+      revision: number;
+      effective_from: Date;
+      is_superseded: boolean;
+    }>(
+      `SELECT stream_id, state, revision, effective_from, superseded_from IS NOT NULL AS is_superseded
+       FROM limit_revision WHERE id = $1 FOR UPDATE`,
       [revisionId],
     );
     const found = rows[0];
@@ -79,15 +87,27 @@ export async function approveLimits(
     if (found.state !== 'draft' && found.state !== 'provisional') {
       return { ok: false, reason: `Revision ${found.revision} is ${found.state} already.` };
     }
+    if (found.is_superseded) {
+      return {
+        ok: false,
+        reason: `Another revision was approved since: revision ${found.revision} gave way to it.`,
+      };
+    }
     await holdStream(client, found.stream_id);
+    const effectiveFrom = found.state === 'draft' ? approval.effectiveFrom : found.effective_from;
     await client.query(
       `UPDATE limit_revision SET state = 'approved', approved_by = $2, approved_at = $5, approval_reason = $3,
-         effective_from = CASE WHEN state = 'draft' THEN $4 ELSE effective_from END WHERE id = $1`,
-      [revisionId, actor.name, approval.reason, approval.effectiveFrom, approval.at ?? new Date()],
+         effective_from = $4 WHERE id = $1`,
+      [revisionId, actor.name, approval.reason, effectiveFrom, approval.at ?? new Date()],
     );
-    if (found.state === 'draft') {
+    const { rowCount: superseded } = await client.query(
+      `UPDATE limit_revision SET superseded_from = least(superseded_from, $2)
+       WHERE stream_id = $1 AND state = 'provisional'`,
+      [found.stream_id, effectiveFrom],
+    );
+    if (found.state === 'draft' || superseded !== 0) {
       const why = `limit revision ${found.revision} took force`;
-      await judgeAgain(actor, client, found.stream_id, approval.effectiveFrom.getTime(), why);
+      await judgeAgain(actor, client, found.stream_id, effectiveFrom.getTime(), why);
     }
     return { ok: true };
   });
@@ -164,6 +184,7 @@ async function insertLimits(
     id: null,
     revision: rows[0]?.next ?? 1,
     effectiveFrom: meta.at.getTime(),
+    supersededFrom: null,
     baselineIds: meta.baselineIds,
     limits,
   };

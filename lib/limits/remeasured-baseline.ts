@@ -3,6 +3,7 @@ import type { Actor } from '@/lib/access/actor';
 import type { SubgroupPoint } from '@/lib/control/limit-set';
 import { judgedWafers } from '@/lib/excursions/judged-points';
 import { summarise } from '@/lib/excursions/joined-members';
+import { judgesAfter } from '@/lib/excursions/line-rows';
 import { measuredWafer, measuringStream } from '@/lib/maps/measured-wafer';
 import { loadStoredWafers } from '@/lib/maps/stored-wafers';
 import { listStreamSettings } from '@/lib/streams/data';
@@ -19,7 +20,7 @@ export async function remeasuredBaseline(
   screen: Screen,
 ): Promise<(SubgroupPoint & { id: string })[] | null> {
   const { rows: inForce } = await client.query<{ baseline_ids: string[] }>(
-    `SELECT baseline_ids FROM limit_revision WHERE stream_id = $1 AND state IN ('provisional', 'approved')
+    `SELECT baseline_ids FROM limit_revision WHERE stream_id = $1 AND ${judgesAfter('now()')}
      ORDER BY effective_from DESC, revision DESC LIMIT 1`,
     [streamId],
   );

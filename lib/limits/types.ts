@@ -11,6 +11,8 @@ export interface LimitRevision {
   origin: LimitOrigin;
   /** In force for subgroups later than this instant, until the next revision that judges. */
   effectiveFrom: Date;
+  /** Of a provisional revision, from when on another that was approved since judges. */
+  supersededFrom: Date | null;
   limits: LimitSet;
   baselineIds: string[];
   author: string;

@@ -181,6 +181,7 @@ describe('limits on record', () => {
       'UPDATE limit_revision SET upper = upper + 1',
       "UPDATE limit_revision SET state = 'discarded', approved_at = NULL, approved_by = NULL",
       'UPDATE limit_revision SET effective_from = now()',
+      'UPDATE limit_revision SET superseded_from = now()',
       'DELETE FROM limit_revision',
     ])
       await expect(getPool().query(`${statement} WHERE stream_id = ${id}`)).rejects.toThrow('never edited');

@@ -8,6 +8,7 @@ const limits: StandingLimits = {
   state: 'approved',
   origin: 'chosen-span',
   effectiveFrom: new Date(0),
+  supersededFrom: null,
   limits: {
     n: 61,
     level: { centre: 10, sigma: 0.1, lower: 9.7, upper: 10.3 },

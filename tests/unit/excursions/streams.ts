@@ -20,6 +20,7 @@ export function revision(number: number, effectiveFrom: number, centre = 0): Lin
     id: `L${number}`,
     revision: number,
     effectiveFrom,
+    supersededFrom: null,
     baselineIds: [],
     limits: limitsAround(centre),
   };
@@ -78,9 +79,10 @@ export function streams(shape: StreamShape): fc.Arbitrary<Stream> {
       subgroupSize: fc.constantFrom(1, 3),
       restarts: fc.array(fc.nat(2 * shape.maxLength), { maxLength: 3 }),
       revisions: fc.constantFrom(...shape.revisions),
+      supersededFrom: fc.option(fc.nat(2 * shape.maxLength)),
       effective: fc.tuple(fc.nat(shape.maxLength), fc.nat(shape.maxLength), fc.constantFrom(0, 1)),
     })
-    .map(({ list, bases, outSince, subgroupSize, restarts, revisions, effective }) => {
+    .map(({ list, bases, outSince, subgroupSize, restarts, revisions, effective, supersededFrom }) => {
       const additions: LineAddition[] = [];
       let [at, run, left] = [0, 0, 0];
       list.forEach((one, i) => {
@@ -105,6 +107,7 @@ export function streams(shape: StreamShape): fc.Arbitrary<Stream> {
       additions.sort((a, b) => a.at - b.at || (a.key < b.key ? -1 : a.key > b.key ? 1 : 0));
       const [first, second, centre] = effective;
       const limits = [revision(1, first - 1), revision(2, first + second, centre)].slice(0, revisions);
+      if (limits.length > 1 && supersededFrom !== null) limits[1]!.supersededFrom = supersededFrom;
       return { additions, subgroupSize, restarts, limits };
     });
 }

@@ -71,6 +71,7 @@ export function standingLimits(id: string, over: Partial<StandingLimits> = {}, n
     state: 'approved',
     origin: 'chosen-span',
     effectiveFrom: new Date('2031-04-01T00:00:00Z'),
+    supersededFrom: null,
     limits: {
       n,
       level: { centre: 10, sigma: 0.1, lower: 9.7, upper: 10.3 },

@@ -62,10 +62,7 @@ export function LimitTable(props: {
         {
           key: 'from',
           head: 'in force from',
-          cell: (row) =>
-            row.state === 'draft' || row.state === 'discarded'
-              ? '—'
-              : formatDateTime(row.effectiveFrom, timeZone),
+          cell: (row) => forceWords(row, timeZone),
         },
         level('lower', 'level, lower'),
         level('centre', 'centre'),
@@ -94,4 +91,14 @@ export function LimitTable(props: {
       ]}
     />
   );
+}
+
+/** From when to when a revision judges; its end is told where no later revision tells it. */
+function forceWords({ state, effectiveFrom, supersededFrom }: LimitRevision, timeZone: string): string {
+  if (state === 'draft' || state === 'discarded') return '—';
+  const from = formatDateTime(effectiveFrom, timeZone);
+  if (supersededFrom === null) return from;
+  return supersededFrom <= effectiveFrom
+    ? 'never: another was approved for all it would judge'
+    : `${from}, until another was approved from ${formatDateTime(supersededFrom, timeZone)}`;
 }

@@ -1,19 +1,11 @@
 import { limitAge } from '@/lib/control/limit-age';
+import { limitsInForce } from '@/lib/excursions/judged-points';
 import type { LimitRevision } from '@/lib/limits/types';
 
-/** The revision that judges a subgroup processed now: the latest in force that is provisional or approved. */
+/** The revision that judges a subgroup processed now. */
 export function revisionInForce(revisions: readonly LimitRevision[], now: Date): LimitRevision | null {
-  let found: LimitRevision | null = null;
-  for (const one of revisions) {
-    if (one.state !== 'provisional' && one.state !== 'approved') continue;
-    if (one.effectiveFrom > now) continue;
-    const later =
-      found === null ||
-      one.effectiveFrom > found.effectiveFrom ||
-      (one.effectiveFrom.getTime() === found.effectiveFrom.getTime() && one.revision > found.revision);
-    if (later) found = one;
-  }
-  return found;
+  const judging = revisions.filter(({ state }) => state === 'provisional' || state === 'approved');
+  return limitsInForce(judging, now.getTime());
 }
 
 /** How far a revision can be trusted, in a word: until it is approved it is provisional whatever its baseline. */

@@ -24,6 +24,7 @@ const COLUMNS = [
   'approved_by',
   'approved_at',
   'approval_reason',
+  'superseded_from',
 ];
 
 /** The revisions of a stream's limits as a file. */
@@ -52,5 +53,6 @@ export const GET = streamCsv('limits', COLUMNS, async (actor, { stream }) => {
     one.approvedBy,
     one.approvedAt,
     one.approvalReason,
+    one.supersededFrom,
   ]);
 });
