@@ -1,5 +1,6 @@
 /** The unexpected, sorted by what the caller can do about it. Expected outcomes are values, not errors. */
-export type ErrorCode = 'invalid' | 'forbidden' | 'not-found' | 'conflict' | 'unavailable' | 'internal';
+export type ErrorCode =
+  'invalid' | 'forbidden' | 'not-found' | 'conflict' | 'too-many' | 'unavailable' | 'internal';
 
 /** Where in the caller's input a fault lies. Lines and columns count from 1. */
 export interface FieldFault {
@@ -31,12 +32,13 @@ export interface Problem {
   faults?: readonly FieldFault[];
 }
 
-/** The one mapping to HTTP (status codes: RFC 9110 §15.5 and §15.6). A new code does not compile until it is here. */
+/** The one mapping to HTTP (status codes: RFC 9110 §15.5 and §15.6, 429: RFC 6585 §4). A new code does not compile until it is here. */
 const httpMeaning = {
   invalid: { status: 422, title: 'Unprocessable Content' },
   forbidden: { status: 403, title: 'Forbidden' },
   'not-found': { status: 404, title: 'Not Found' },
   conflict: { status: 409, title: 'Conflict' },
+  'too-many': { status: 429, title: 'Too Many Requests' },
   unavailable: { status: 503, title: 'Service Unavailable' },
   internal: { status: 500, title: 'Internal Server Error' },
 } as const satisfies Record<ErrorCode, { status: number; title: string }>;
@@ -57,10 +59,10 @@ export function problemOf(thrown: unknown): Problem {
 }
 
 /** The same as a response of media type `application/problem+json` (RFC 9457 §6.1). */
-export function problemResponse(thrown: unknown): Response {
+export function problemResponse(thrown: unknown, headers: Record<string, string> = {}): Response {
   const problem = problemOf(thrown);
   return new Response(JSON.stringify(problem), {
     status: problem.status,
-    headers: { 'content-type': 'application/problem+json' },
+    headers: { 'content-type': 'application/problem+json', ...headers },
   });
 }

@@ -45,6 +45,11 @@ export const WAFER_COLUMNS = [
 
 export type WaferColumn = (typeof WAFER_COLUMNS)[number];
 
+/** What a column is called as a flag of the command and in an address: `measured-at` for measured_at. */
+export function columnFlag(column: WaferColumn): string {
+  return column.replaceAll('_', '-');
+}
+
 /** What the header of a wafer-map file says: where each column stands. */
 export interface MapHeader {
   x: number;

@@ -1,6 +1,6 @@
 import { z } from 'zod';
 import { siteInstant } from '@/lib/site-time';
-import { WAFER_COLUMNS, type WaferColumn } from './map-columns';
+import { columnFlag, WAFER_COLUMNS, type WaferColumn } from './map-columns';
 import type { RawMap } from './raw-maps';
 import { readFacts } from './read-facts';
 
@@ -45,6 +45,47 @@ export function givenWords(source: Record<string, unknown>, timeZone: string): G
 /** The same words as an address carries them. */
 export function wordsQuery(typed: GivenWords['typed']): string {
   return new URLSearchParams(typed as Record<string, string>).toString();
+}
+
+const sentFlag = z.enum(['', 'on']).optional();
+const sentQuery = z.strictObject({
+  check: sentFlag,
+  sound: sentFlag,
+  history: sentFlag,
+  ...Object.fromEntries(WAFER_COLUMNS.map((column) => [columnFlag(column), z.string().max(2000).optional()])),
+});
+
+/** How a file that is sent over the network is to be taken: the flags of the command, in the address. */
+export interface SentOptions {
+  checkOnly: boolean;
+  sound: boolean;
+  history: boolean;
+  defaults: RawMap['words'];
+}
+
+/**
+ * Reads the address that a file is sent to: `check`, `sound` and `history` stand there without a value, and what the
+ * file does not say of its wafers as `stream=…&measured-at=…`. Returns what is wrong with it otherwise, an unknown word
+ * among it: a misspelt `history` must not record as new.
+ */
+export function sentOptions(query: URLSearchParams): SentOptions | { faults: string[] } {
+  const parsed = sentQuery.safeParse(Object.fromEntries(query));
+  if (!parsed.success) {
+    const faults = parsed.error.issues.map((issue) =>
+      issue.code === 'unrecognized_keys'
+        ? `the address holds what is not understood: ${issue.keys.join(', ').slice(0, 100)}`
+        : `“${issue.path.join('.')}” in the address is not understood`,
+    );
+    return { faults };
+  }
+  const given: Partial<Record<string, string>> = parsed.data;
+  const defaults: RawMap['words'] = {};
+  for (const column of WAFER_COLUMNS) {
+    const word = given[columnFlag(column)];
+    if (word !== undefined) defaults[column] = word;
+  }
+  const is = (flag: 'check' | 'sound' | 'history') => given[flag] !== undefined;
+  return { checkOnly: is('check'), sound: is('sound'), history: is('history'), defaults };
 }
 
 /** A person's word on one reading: `out-12` takes the reading of site index 12 out, `in-12` puts it back; and why. */
