@@ -44,7 +44,7 @@ export function columnLiterals<Row>(columns: readonly Column<Row>[], rows: reado
 function element(value: unknown, type: string): string {
   if (value === null || value === undefined) return 'NULL';
   const text = String(value);
-  if (type === 'text') return `"${text.replace(/[\\"]/g, '\\$&')}"`;
+  if (type === 'text' || type === 'json') return `"${text.replace(/[\\"]/g, '\\$&')}"`;
   return type.endsWith('[]') ? `"${text.replaceAll('"', '\\"')}"` : text;
 }
 

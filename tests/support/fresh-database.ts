@@ -1,4 +1,7 @@
 import { randomBytes } from 'node:crypto';
+import { mkdtempSync, rmSync } from 'node:fs';
+import { tmpdir } from 'node:os';
+import path from 'node:path';
 import { inject } from 'vitest';
 import { closeClients, openClients } from '@/lib/database/client';
 import { databaseUrl, runSql } from './store-server';
@@ -9,15 +12,21 @@ export interface FreshDatabase {
   drop(): Promise<void>;
 }
 
-/** A clone of the migrated template, with `getPool` and `getPrisma` pointed at it until `drop`. */
+/**
+ * A clone of the migrated template, with `getPool` and `getPrisma` pointed at it, and a data folder of its own, until
+ * `drop`.
+ */
 export async function freshDatabase(): Promise<FreshDatabase> {
   const database = await clonedDatabase(inject('storeTemplate'));
+  const dataFolder = mkdtempSync(path.join(tmpdir(), 'evenohm-data-'));
+  process.env['EVENOHM_DATA'] = dataFolder;
   openClients(database.url);
   return {
     url: database.url,
     drop: async () => {
       await closeClients();
       await database.drop();
+      rmSync(dataFolder, { recursive: true });
     },
   };
 }

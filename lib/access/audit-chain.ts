@@ -1,0 +1,73 @@
+import type { ClientBase, Pool } from 'pg';
+import { columnNames, rowsAsQuery } from '@/lib/database/columnar';
+import type { Actor } from './actor';
+import {
+  ENTRY_COLUMNS,
+  linkedEntries,
+  MAC_BEFORE_FIRST,
+  type ChainEnd,
+  type LinkedEntry,
+  type Telling,
+} from './audit-entry';
+import { plantKey } from './secret';
+
+/** What this process knows of a database's chain: its end, which others may have moved on meanwhile. */
+interface KnownChain {
+  end: ChainEnd | null;
+  /** Settles when nobody in this process is writing at the end it knows. */
+  turn: Promise<unknown>;
+}
+
+const chains = new WeakMap<Pool, KnownChain>();
+
+export function knownChain(pool: Pool): KnownChain {
+  const chain = chains.get(pool) ?? { end: null, turn: Promise.resolve() };
+  chains.set(pool, chain);
+  return chain;
+}
+
+/** Remembers where the chain ends now, unless it is known to have gone further. */
+export function learnEnd(pool: Pool, end: ChainEnd): void {
+  const chain = knownChain(pool);
+  if (chain.end === null || chain.end.name !== end.name || chain.end.id < end.id) chain.end = end;
+}
+
+interface EndRow {
+  name: string;
+  id: string | null;
+  mac: Buffer | null;
+}
+
+export function endOf({ name, id, mac }: EndRow): ChainEnd {
+  return { name, id: Number(id ?? 0), mac: mac ?? MAC_BEFORE_FIRST };
+}
+
+/** Where the chain ends, held there until the transaction does. Nothing else may be done in it but to append and commit. */
+export async function holdChain(client: ClientBase): Promise<ChainEnd> {
+  const { rows } = await client.query<EndRow>({
+    name: 'hold-audit-chain',
+    text: 'SELECT name, id, mac FROM hold_audit_chain()',
+  });
+  return endOf(rows[0] as EndRow);
+}
+
+/** Appends what an actor did to the chain, as the last thing before a commit. Returns its new end. */
+export async function appendEntries(
+  client: ClientBase,
+  actor: Pick<Actor, 'kind' | 'id' | 'name'>,
+  tellings: readonly Telling[],
+): Promise<ChainEnd> {
+  const end = await holdChain(client);
+  const entries = linkedEntries(plantKey('audit'), end, actor, tellings, new Date());
+  const parameters: unknown[] = [];
+  const given = rowsAsQuery(ENTRY_COLUMNS, entries, parameters);
+  const text = `INSERT INTO audit_entry (${columnNames(ENTRY_COLUMNS)}) SELECT given.* FROM ${given} given`;
+  await client.query({ name: 'append-audit-entries', text, values: parameters });
+  return endAfter(end, entries);
+}
+
+/** Where a chain ends after entries that were linked to it. */
+export function endAfter(end: ChainEnd, entries: readonly LinkedEntry[]): ChainEnd {
+  const last = entries.at(-1);
+  return last === undefined ? end : { name: end.name, id: last.id, mac: last.mac };
+}

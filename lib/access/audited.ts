@@ -1,0 +1,36 @@
+import type { PoolClient } from 'pg';
+import { getPool } from '@/lib/database/client';
+import { inTransaction } from '@/lib/database/transaction';
+import type { Actor } from './actor';
+import { appendEntries, learnEnd } from './audit-chain';
+import type { ChainEnd, Telling } from './audit-entry';
+import { keepHead } from './audit-head';
+import { plantKey } from './secret';
+
+/** Tells of one thing that was done; it is written at the end of the transaction. */
+export type Tell = (telling: Telling) => void;
+
+/**
+ * Runs `work` in one transaction with what it tells of in the audit trail: both are committed or neither. Every write
+ * of a service room goes this way. The chain is held last, just before the commit, so that transactions wait for each
+ * other there for no longer than a commit takes.
+ */
+export async function audited<Result>(
+  actor: Actor,
+  work: (client: PoolClient, tell: Tell) => Promise<Result>,
+): Promise<Result> {
+  plantKey('audit');
+  const tellings: Telling[] = [];
+  const told: { end: ChainEnd | null } = { end: null };
+  const result = await inTransaction(async (client) => {
+    await client.query("SELECT set_config('evenohm.audited', 'on', true)");
+    const answer = await work(client, (telling) => tellings.push(telling));
+    if (tellings.length > 0) told.end = await appendEntries(client, actor, tellings);
+    return answer;
+  });
+  if (told.end !== null) {
+    learnEnd(getPool(), told.end);
+    await keepHead(told.end);
+  }
+  return result;
+}
