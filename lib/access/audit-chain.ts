@@ -1,13 +1,12 @@
 import type { ClientBase, Pool } from 'pg';
 import { columnNames, rowsAsQuery } from '@/lib/database/columnar';
-import type { Actor } from './actor';
 import {
   ENTRY_COLUMNS,
   linkedEntries,
   MAC_BEFORE_FIRST,
   type ChainEnd,
   type LinkedEntry,
-  type Telling,
+  type Told,
 } from './audit-entry';
 import { plantKey } from './secret';
 
@@ -51,14 +50,10 @@ export async function holdChain(client: ClientBase): Promise<ChainEnd> {
   return endOf(rows[0] as EndRow);
 }
 
-/** Appends what an actor did to the chain, as the last thing before a commit. Returns its new end. */
-export async function appendEntries(
-  client: ClientBase,
-  actor: Pick<Actor, 'kind' | 'id' | 'name'>,
-  tellings: readonly Telling[],
-): Promise<ChainEnd> {
+/** Appends what was done to the chain, as the last thing before a commit. Returns its new end. */
+export async function appendEntries(client: ClientBase, told: readonly Told[]): Promise<ChainEnd> {
   const end = await holdChain(client);
-  const entries = linkedEntries(plantKey('audit'), end, actor, tellings, new Date());
+  const entries = linkedEntries(plantKey('audit'), end, told, new Date());
   const parameters: unknown[] = [];
   const given = rowsAsQuery(ENTRY_COLUMNS, entries, parameters);
   const text = `INSERT INTO audit_entry (${columnNames(ENTRY_COLUMNS)}) SELECT given.* FROM ${given} given`;

@@ -18,6 +18,11 @@ export interface Telling {
   at?: Date;
 }
 
+/** Who did it, and what. */
+export interface Told extends Telling {
+  actor: Pick<Actor, 'kind' | 'id' | 'name'>;
+}
+
 /** One link of the audit chain, without its mac; `before` and `after` are JSON as it was written. */
 export interface AuditEntry {
   id: number;
@@ -59,16 +64,10 @@ export function entryMac(key: Buffer, chain: string, previousMac: Buffer, entry:
   return createHmac('sha256', key).update(previousMac).update(text).digest();
 }
 
-/** What an actor did, as the entries that go on from the end of a chain. */
-export function linkedEntries(
-  key: Buffer,
-  end: ChainEnd,
-  actor: Pick<Actor, 'kind' | 'id' | 'name'>,
-  tellings: readonly Telling[],
-  now: Date,
-): LinkedEntry[] {
+/** What was done, as the entries that go on from the end of a chain. */
+export function linkedEntries(key: Buffer, end: ChainEnd, told: readonly Told[], now: Date): LinkedEntry[] {
   let previousMac = end.mac;
-  return tellings.map((telling, i) => {
+  return told.map(({ actor, ...telling }, i) => {
     const entry: AuditEntry = {
       id: end.id + 1 + i,
       at: telling.at ?? now,

@@ -3,7 +3,7 @@ import { getPool } from '@/lib/database/client';
 import { inTransaction } from '@/lib/database/transaction';
 import type { Actor } from './actor';
 import { appendEntries, learnEnd } from './audit-chain';
-import type { ChainEnd, Telling } from './audit-entry';
+import type { ChainEnd, Telling, Told } from './audit-entry';
 import { keepHead } from './audit-head';
 import { plantKey } from './secret';
 
@@ -20,17 +20,21 @@ export async function audited<Result>(
   work: (client: PoolClient, tell: Tell) => Promise<Result>,
 ): Promise<Result> {
   plantKey('audit');
-  const tellings: Telling[] = [];
-  const told: { end: ChainEnd | null } = { end: null };
+  const told: Told[] = [];
+  let end: ChainEnd | null = null;
   const result = await inTransaction(async (client) => {
     await client.query("SELECT set_config('evenohm.audited', 'on', true)");
-    const answer = await work(client, (telling) => tellings.push(telling));
-    if (tellings.length > 0) told.end = await appendEntries(client, actor, tellings);
+    const answer = await work(client, (telling) => told.push({ ...telling, actor }));
+    if (told.length > 0) end = await appendEntries(client, told);
     return answer;
   });
-  if (told.end !== null) {
-    learnEnd(getPool(), told.end);
-    await keepHead(told.end);
-  }
+  await committed(end);
   return result;
+}
+
+/** What is left to do once entries are committed: to know the new end, and to keep it outside the database. */
+export async function committed(end: ChainEnd | null): Promise<void> {
+  if (end === null) return;
+  learnEnd(getPool(), end);
+  await keepHead(end);
 }
