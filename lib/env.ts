@@ -25,7 +25,23 @@ const variables = z.object({
   EVENOHM_TRUSTED_PROXY: z.preprocess(blankIsAbsent, z.string().optional()),
   EVENOHM_SITE_TIME_ZONE: z.preprocess(blankIsAbsent, timeZone.default('UTC')),
   EVENOHM_DEMO: z.preprocess(blankIsAbsent, z.enum(['on', 'off']).optional()),
+  EVENOHM_OIDC_ISSUER: z.preprocess(blankIsAbsent, z.url({ protocol: /^https?$/ }).optional()),
+  EVENOHM_OIDC_CLIENT_ID: z.preprocess(blankIsAbsent, z.string().optional()),
+  EVENOHM_OIDC_CLIENT_SECRET: z.preprocess(blankIsAbsent, z.string().optional()),
+  EVENOHM_OIDC_NAME: z.preprocess(blankIsAbsent, z.string().default('plant account')),
+  EVENOHM_OIDC_CREATE: z.preprocess(blankIsAbsent, z.enum(['on', 'off']).default('off')),
 });
+
+/** The plant's own identity provider. */
+export interface OidcEnvironment {
+  issuer: string;
+  clientId: string;
+  clientSecret: string;
+  /** What the button says after "Sign in with". */
+  name: string;
+  /** Whether someone whom it knows and this program does not becomes a person here, without any role. */
+  creates: boolean;
+}
 
 /** What the program takes from its environment, named and checked. */
 export interface Environment {
@@ -41,6 +57,7 @@ export interface Environment {
   siteTimeZone: string;
   /** Whether an empty database is filled with the demonstration line: by default only an embedded one. */
   demo: boolean;
+  oidc: OidcEnvironment | null;
 }
 
 /** An environment variable that cannot be used; the message names it. */
@@ -67,7 +84,21 @@ export function readEnvironment(source: Record<string, string | undefined> = pro
     trustedProxy: found.EVENOHM_TRUSTED_PROXY ?? null,
     siteTimeZone: found.EVENOHM_SITE_TIME_ZONE,
     demo: (found.EVENOHM_DEMO ?? (found.DATABASE_URL === undefined ? 'on' : 'off')) === 'on',
+    oidc: oidcOf(found),
   };
+}
+
+function oidcOf(found: z.infer<typeof variables>): OidcEnvironment | null {
+  const { EVENOHM_OIDC_ISSUER: issuer, EVENOHM_OIDC_CLIENT_ID: clientId } = found;
+  const clientSecret = found.EVENOHM_OIDC_CLIENT_SECRET;
+  if (issuer === undefined && clientId === undefined && clientSecret === undefined) return null;
+  if (issuer === undefined || clientId === undefined || clientSecret === undefined) {
+    throw new EnvironmentError(
+      'EVENOHM_OIDC_ISSUER, EVENOHM_OIDC_CLIENT_ID and EVENOHM_OIDC_CLIENT_SECRET go together: set all three, or none.',
+    );
+  }
+  const creates = found.EVENOHM_OIDC_CREATE === 'on';
+  return { issuer, clientId, clientSecret, name: found.EVENOHM_OIDC_NAME, creates };
 }
 
 function isTimeZone(name: string): boolean {

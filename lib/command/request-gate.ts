@@ -1,4 +1,4 @@
-import { isIP } from 'node:net';
+import { isLoopbackName, nameOfHost } from '@/lib/access/is-loopback-name';
 
 /** What the gate looks at. */
 export interface GateRequest {
@@ -21,7 +21,7 @@ export interface GateRefusal {
 export function requestGate(request: GateRequest, publicUrl: string | null): GateRefusal | null {
   const host = request.host?.toLowerCase() ?? '';
   const publicHost = publicUrl === null ? null : new URL(publicUrl).host;
-  if (host !== publicHost && !isLoopbackName(nameOf(host))) {
+  if (host !== publicHost && !isLoopbackName(nameOfHost(host))) {
     return {
       status: 421,
       reason: 'This server does not answer to that name; EVENOHM_URL sets its public one.',
@@ -32,15 +32,6 @@ export function requestGate(request: GateRequest, publicUrl: string | null): Gat
     return { status: 403, reason: 'Changes are taken from pages of this server only.' };
   }
   return null;
-}
-
-/** Whether a name or address is this machine alone: localhost, 127.0.0.0/8 (RFC 1122 §3.2.1.3), ::1 (RFC 4291 §2.5.3). */
-export function isLoopbackName(name: string): boolean {
-  return name === 'localhost' || name === '::1' || (isIP(name) === 4 && name.startsWith('127.'));
-}
-
-function nameOf(host: string): string {
-  return host.replace(/:\d+$/, '').replace(/^\[(.*)\]$/, '$1');
 }
 
 function hostOf(origin: string): string | null {

@@ -2,6 +2,7 @@ import { randomBytes } from 'node:crypto';
 import { type IncomingMessage, type Server, type ServerResponse, createServer } from 'node:http';
 import type { AddressInfo } from 'node:net';
 import { AppError } from '@/lib/errors';
+import { ADDRESS_HEADER } from '@/lib/access/requested-address';
 import { projectRoot } from './project-root';
 import { requestGate } from './request-gate';
 import { securityHeaders } from './security-headers';
@@ -64,6 +65,7 @@ export async function startWebServer(options: WebServerOptions): Promise<WebServ
 function prepare(request: IncomingMessage, response: ServerResponse, options: WebServerOptions): boolean {
   forgetForwarding(request, options.trustedProxy);
   const { headers } = request;
+  headers[ADDRESS_HEADER] = request.url ?? '/';
   const gate = { method: request.method ?? 'GET', host: headers.host, origin: headers.origin };
   const refusal = requestGate(gate, options.publicUrl);
   if (refusal !== null) {

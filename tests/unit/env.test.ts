@@ -14,6 +14,7 @@ describe('readEnvironment', () => {
       trustedProxy: null,
       siteTimeZone: 'UTC',
       demo: true,
+      oidc: null,
     };
     expect(readEnvironment({})).toEqual(defaults);
     expect(readEnvironment({ PORT: '', DATABASE_URL: '', EVENOHM_DEMO: '' })).toEqual(defaults);
@@ -23,6 +24,21 @@ describe('readEnvironment', () => {
     expect(readEnvironment({ DATABASE_URL: url }).demo).toBe(false);
     expect(readEnvironment({ DATABASE_URL: url, EVENOHM_DEMO: 'on' }).demo).toBe(true);
     expect(readEnvironment({ EVENOHM_DEMO: 'off' }).demo).toBe(false);
+  });
+  it('takes an identity provider whole or not at all', () => {
+    const given = {
+      EVENOHM_OIDC_ISSUER: 'https://login.plant.example',
+      EVENOHM_OIDC_CLIENT_ID: 'evenohm',
+      EVENOHM_OIDC_CLIENT_SECRET: 's',
+    };
+    expect(readEnvironment(given).oidc).toEqual({
+      issuer: 'https://login.plant.example',
+      clientId: 'evenohm',
+      clientSecret: 's',
+      name: 'plant account',
+      creates: false,
+    });
+    expect(() => readEnvironment({ ...given, EVENOHM_OIDC_CLIENT_SECRET: '' })).toThrow(/go together/);
   });
   it('names every variable at fault in one line', () => {
     const read = () =>

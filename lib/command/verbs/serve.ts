@@ -1,8 +1,7 @@
+import { plantKey } from '@/lib/access/secret';
 import { type Environment, readEnvironment } from '@/lib/env';
-import { AppError } from '@/lib/errors';
 import { buildApp, isBuilt } from '../build-app';
 import { withProgress } from '../progress';
-import { isLoopbackName } from '../request-gate';
 import { alreadyRunning, removeServingNote, writeServingNote } from '../serving-note';
 import { stopSignal } from '../stop-signal';
 import { type ExitStatus, UsageError, type Verb, type VerbOutput } from '../verb';
@@ -17,7 +16,8 @@ export const serve: Verb = {
     '  --dev   development: no build, pages follow the sources',
     '',
     'Ctrl-C or SIGTERM stops both. Settings come from the environment: DATABASE_URL, EVENOHM_DATA, PORT,',
-    'EVENOHM_HOST, EVENOHM_URL, EVENOHM_TRUSTED_PROXY, EVENOHM_SITE_TIME_ZONE, EVENOHM_DEMO.',
+    'EVENOHM_HOST, EVENOHM_URL, EVENOHM_SECRET, EVENOHM_TRUSTED_PROXY, EVENOHM_SITE_TIME_ZONE, EVENOHM_DEMO,',
+    'EVENOHM_OIDC_ISSUER and what goes with it: the README tells of each.',
   ].join('\n'),
   async run(args, output) {
     const strange = args.find((word) => word !== '--dev');
@@ -31,7 +31,7 @@ async function serveUntilStopped(
   environment: Environment,
   output: VerbOutput,
 ): Promise<ExitStatus> {
-  refuseOpenDoor(environment.host);
+  plantKey('sessions');
   Object.assign(process.env, {
     NODE_ENV: dev ? 'development' : 'production',
     NEXT_TELEMETRY_DISABLED: '1',
@@ -59,6 +59,7 @@ async function serveUntilStopped(
       writeServingNote(environment.dataFolder, { pid: process.pid, address: web.address });
       closers.push(() => removeServingNote(environment.dataFolder));
     }
+    await preparePeople(web.address, say);
     if (environment.demo) await seedFirstStart(say);
     stop.throwIfAborted();
     if (!dev && !isBuilt()) await withProgress(say, 'Building the app', () => buildApp(stop));
@@ -84,11 +85,14 @@ async function seedFirstStart(say: (text: string) => void): Promise<void> {
   await withProgress(say, 'Filling in the demonstration line', () => seedDemo(say, endAt));
 }
 
-/** Until there are accounts, whoever reaches the server may do everything: so nobody else may reach it. */
-function refuseOpenDoor(host: string): void {
-  if (isLoopbackName(host)) return;
-  throw new AppError(
-    'forbidden',
-    `EVENOHM_HOST is ${host}, but without accounts the server listens on this machine only (127.0.0.1).`,
+/** Puts in the people of the demonstration line, and says how the first administrator gets in. */
+async function preparePeople(address: string, say: (text: string) => void): Promise<void> {
+  const { ensureDemonstrationPeople, isDemonstrationOffered } = await import('@/lib/access/demonstration');
+  const { firstAdministratorCode, isFirstAdministratorDue } =
+    await import('@/lib/access/first-administrator');
+  if (isDemonstrationOffered()) await ensureDemonstrationPeople();
+  if (!(await isFirstAdministratorDue())) return;
+  say(
+    `There is no administrator yet: enter one at ${address}/first-administrator, from elsewhere with the code ${firstAdministratorCode()}.`,
   );
 }

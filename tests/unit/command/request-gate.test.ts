@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
-import { isLoopbackName, requestGate } from '@/lib/command/request-gate';
+import { isLoopbackName } from '@/lib/access/is-loopback-name';
+import { requestGate } from '@/lib/command/request-gate';
 
 const get = (host: string | undefined) => ({ method: 'GET', host, origin: undefined });
 const post = (host: string, origin: string | undefined) => ({ method: 'POST', host, origin });
