@@ -88,9 +88,14 @@ function foundations({ publicUrl, trustedProxy }: Environment) {
       useSecureCookies: hasSecureCookies(publicUrl),
       ipAddress: { trustedProxies: trustedProxy === null ? [] : [trustedProxy] },
     },
-    // What it would add to a line may hold an address that somebody typed.
-    logger: { level: 'error', log: (level, message) => console.warn(`Accounts (${level}): ${message}`) },
+    // A refusal is an answer, not an incident. What the library would add to a line may hold what somebody typed.
+    onAPIError: { onError: (error) => sayUnexpected(error) },
+    logger: { level: 'error', log: (_level, message) => console.warn(`Accounts: ${message}`) },
   } satisfies BetterAuthOptions;
+}
+
+function sayUnexpected(error: unknown): void {
+  if (!(error instanceof APIError)) console.error(error);
 }
 
 /** The plant's own identity provider (OpenID Connect Discovery 1.0, PKCE of RFC 7636), where one is named. */

@@ -2,6 +2,7 @@ import { AppError, problemResponse } from '@/lib/errors';
 import { accounts } from './accounts';
 import { AUTH_PATHS } from './auth-paths';
 import { requestOrigin } from './request-origin';
+import { isSameOrigin } from './same-origin';
 
 const ROOT = '/api/auth';
 /** No form of ours comes near it. */
@@ -13,6 +14,9 @@ export async function answerAuth(request: Request): Promise<Response> {
   const path = asked.pathname.slice(ROOT.length);
   if (!AUTH_PATHS.some((known) => known === `${request.method} ${path}`)) {
     return problemResponse(new AppError('not-found', 'There is nothing at this address.'));
+  }
+  if (request.method === 'POST' && !isSameOrigin(request.headers)) {
+    return problemResponse(new AppError('forbidden', 'Sign-in is taken from pages of this server only.'));
   }
   if (
     Number(request.headers.get('content-length') ?? Infinity) > MOST_BODY_BYTES &&
