@@ -59,6 +59,7 @@ export const PERMISSIONS = {
   'read-audit': plant('Read the audit trail', ['manager', 'administrator']),
   'manage-people': plant('Add people, give roles, end sessions', ['administrator']),
   'manage-tokens': plant('Make and revoke tokens', ['administrator']),
+  'change-settings': plant('Change what holds for the whole plant, such as four eyes', ['administrator']),
   'manage-gauges': plant('Keep gauges and check standards', ['administrator']),
 } as const satisfies Record<string, Rule>;
 
