@@ -3,6 +3,7 @@ import Link from 'next/link';
 import type { ReactNode } from 'react';
 import '@fontsource-variable/atkinson-hyperlegible-next/wght.css';
 import './globals.css';
+import { findActor } from '@/lib/access/request-actor';
 import { Hatches } from './_charts/hatches';
 import { Finder } from './_ui/finder';
 import { Keys } from './_ui/keys';
@@ -44,7 +45,9 @@ const keys = [
   { key: '?', does: 'show these keys' },
 ];
 
-export default function RootLayout({ children }: { children: ReactNode }) {
+export default async function RootLayout({ children }: { children: ReactNode }) {
+  // Without the database the page says what is wrong: the frame around it must not fail too.
+  const actor = await findActor().catch(() => null);
   return (
     <html lang="en">
       <body>
@@ -52,8 +55,18 @@ export default function RootLayout({ children }: { children: ReactNode }) {
           Skip to the content
         </a>
         <Hatches />
-        <SiteHeader name="evenohm" home="/" places={places}>
-          <Finder action="/" name="find" label="Find a stream" />
+        <SiteHeader name="evenohm" home="/" places={actor === null ? [] : places}>
+          {actor === null ? (
+            <Link href="/sign-in">Sign in</Link>
+          ) : (
+            <>
+              <Finder action="/" name="find" label="Find a stream" />
+              <Link href="/account" className="who">
+                <span className="unseen">Your account: </span>
+                {actor.name}
+              </Link>
+            </>
+          )}
         </SiteHeader>
         <main id="content" tabIndex={-1}>
           {children}

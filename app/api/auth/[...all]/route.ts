@@ -1,0 +1,3 @@
+import { answerAuth } from '@/lib/access/auth-answer';
+
+export { answerAuth as GET, answerAuth as POST };
