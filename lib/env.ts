@@ -25,6 +25,7 @@ const variables = z.object({
   EVENOHM_TRUSTED_PROXY: z.preprocess(blankIsAbsent, z.string().optional()),
   EVENOHM_SITE_TIME_ZONE: z.preprocess(blankIsAbsent, timeZone.default('UTC')),
   EVENOHM_DEMO: z.preprocess(blankIsAbsent, z.enum(['on', 'off']).optional()),
+  EVENOHM_TOKEN: z.preprocess(blankIsAbsent, z.string().optional()),
   EVENOHM_OIDC_ISSUER: z.preprocess(blankIsAbsent, z.url({ protocol: /^https?$/ }).optional()),
   EVENOHM_OIDC_CLIENT_ID: z.preprocess(blankIsAbsent, z.string().optional()),
   EVENOHM_OIDC_CLIENT_SECRET: z.preprocess(blankIsAbsent, z.string().optional()),
@@ -58,6 +59,8 @@ export interface Environment {
   /** Whether an empty database is filled with the demonstration line: by default only an embedded one. */
   demo: boolean;
   oidc: OidcEnvironment | null;
+  /** What the command line shows to the server of others. */
+  token: string | null;
 }
 
 /** An environment variable that cannot be used; the message names it. */
@@ -85,6 +88,7 @@ export function readEnvironment(source: Record<string, string | undefined> = pro
     siteTimeZone: found.EVENOHM_SITE_TIME_ZONE,
     demo: (found.EVENOHM_DEMO ?? (found.DATABASE_URL === undefined ? 'on' : 'off')) === 'on',
     oidc: oidcOf(found),
+    token: found.EVENOHM_TOKEN ?? null,
   };
 }
 

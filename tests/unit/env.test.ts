@@ -15,6 +15,7 @@ describe('readEnvironment', () => {
       siteTimeZone: 'UTC',
       demo: true,
       oidc: null,
+      token: null,
     };
     expect(readEnvironment({})).toEqual(defaults);
     expect(readEnvironment({ PORT: '', DATABASE_URL: '', EVENOHM_DEMO: '' })).toEqual(defaults);

@@ -1,19 +1,16 @@
-import { createReadStream } from 'node:fs';
 import { access, constants, stat } from 'node:fs/promises';
-import { basename } from 'node:path';
 import { parseArgs } from 'node:util';
-import { commandActor } from '@/lib/access/local-actor';
 import { openDatabase } from '@/lib/database/connection';
-import { intakeFile } from '@/lib/maps/intake-file';
-import { WAFER_COLUMNS } from '@/lib/maps/map-columns';
-import type { IntakeResult, MapProblem } from '@/lib/maps/types';
-import { withSmallMemory } from '../small-memory';
+import { columnFlag, WAFER_COLUMNS } from '@/lib/maps/map-columns';
+import { sentOptions } from '@/lib/maps/schema';
+import type { MapProblem } from '@/lib/maps/types';
 import { UsageError, type ExitStatus, type Verb, type VerbOutput } from '../verb';
+import { intakeAtServer, type Taken } from './intake-at-server';
+import { intakeHere } from './intake-here';
 
-/** Flags that say of a wafer what its file does not: `--measured-at` for the column measured_at, and so on. */
-const flagOf = (column: string) => column.replaceAll('_', '-');
+/** Flags that say of a wafer what its file does not. */
 const WORDS = Object.fromEntries(
-  WAFER_COLUMNS.map((column) => [flagOf(column), { type: 'string' as const }]),
+  WAFER_COLUMNS.map((column) => [columnFlag(column), { type: 'string' as const }]),
 );
 
 export const intake: Verb = {
@@ -25,9 +22,10 @@ export const intake: Verb = {
   --sound     record the sound measurements of a file that has faults
   --history   old wafers: recorded, shown and studied, but they open no cases
   --json      one JSON object on standard output
+  --server    the address of another server to record there, with its token in EVENOHM_TOKEN
 
 What a file's columns do not say may be given for all its wafers:
-  ${WAFER_COLUMNS.map((column) => `--${flagOf(column)}`).join(' ')}`,
+  ${WAFER_COLUMNS.map((column) => `--${columnFlag(column)}`).join(' ')}`,
   run: recordFiles,
 };
 
@@ -48,49 +46,28 @@ async function recordFiles(args: string[], output: VerbOutput): Promise<ExitStat
       return 1;
     }
   }
-  const defaults = Object.fromEntries(
-    WAFER_COLUMNS.flatMap((column) => {
-      const word = (values as Record<string, string | boolean | undefined>)[flagOf(column)];
-      return typeof word === 'string' ? [[column, word]] : [];
-    }),
-  );
-  const database = await openDatabase({ say: output.say });
-  const total: Omit<IntakeResult, 'batchId'> = {
-    recorded: 0,
-    repeated: 0,
-    refused: 0,
-    refusals: [],
-    notices: [],
-  };
-  try {
+  const total: Taken = { recorded: 0, repeated: 0, refused: 0, refusals: [], notices: [] };
+  const recordAll = async (record: (path: string) => Promise<Taken>) => {
     for (const path of positionals) {
-      let toldAt = Date.now();
-      const result = await withSmallMemory(() =>
-        intakeFile(
-          commandActor(),
-          { name: basename(path), open: () => createReadStream(path, { highWaterMark: 1 << 17 }) },
-          {
-            origin: 'command',
-            history: values.history === true,
-            sound: values.sound === true,
-            checkOnly: values.check === true,
-            defaults,
-            onProgress: (count) => {
-              if (Date.now() - toldAt < 1000) return;
-              toldAt = Date.now();
-              output.say(`${basename(path)}: ${count} measurements so far.`);
-            },
-          },
-        ),
-      );
+      const result = await record(path);
       total.recorded += result.recorded;
       total.repeated += result.repeated;
       total.refused += result.refused;
       total.refusals.push(...result.refusals.map((refusal) => ({ ...refusal, file: path })));
       total.notices.push(...result.notices);
     }
-  } finally {
-    await database.close();
+  };
+  const query = flagsQuery(values);
+  if (typeof values.server === 'string') await recordAll(intakeAtServer(values.server, query, output.say));
+  else {
+    const options = sentOptions(query);
+    if ('faults' in options) throw new UsageError(options.faults.join('; '));
+    const database = await openDatabase({ say: output.say });
+    try {
+      await recordAll(intakeHere(options, output.say));
+    } finally {
+      await database.close();
+    }
   }
   for (const notice of total.notices) output.say(`${notice}.`);
   if (values.json === true)
@@ -114,12 +91,24 @@ function parsed(args: string[]) {
         history: { type: 'boolean' },
         follow: { type: 'boolean' },
         json: { type: 'boolean' },
+        server: { type: 'string' },
         ...WORDS,
       },
     });
   } catch (error) {
     throw new UsageError(error instanceof Error ? error.message : String(error));
   }
+}
+
+/** The flags as the address of a server carries them: both ways they are read alike. */
+function flagsQuery(values: ReturnType<typeof parsed>['values']): URLSearchParams {
+  const query = new URLSearchParams();
+  for (const flag of ['check', 'sound', 'history'] as const) if (values[flag] === true) query.set(flag, '');
+  for (const flag of Object.keys(WORDS)) {
+    const word = (values as Record<string, string | boolean | undefined>)[flag];
+    if (typeof word === 'string') query.set(flag, word);
+  }
+  return query;
 }
 
 function refusalWords({ file, line, column, measurement, reason }: MapProblem) {
