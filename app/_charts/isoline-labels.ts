@@ -22,7 +22,7 @@ export function isolineLabels(
     if (!levels.includes(level)) continue;
     for (const ring of rings) {
       const seen = ring.filter(([x, y], i) => i % 2 === 0 && isInside(inner, x, y));
-      if (seen.length < 12) continue;
+      if (seen.length < 7) continue;
       const best = seen
         .map((place) => ({
           place,
@@ -43,5 +43,5 @@ export function isolineLabels(
 }
 
 function nearest([x, y]: Place, others: readonly Place[]): number {
-  return others.reduce((least, [ox, oy]) => Math.min(least, Math.hypot(x - ox, y - oy)), 1e9);
+  return Math.sqrt(others.reduce((least, [ox, oy]) => Math.min(least, (x - ox) ** 2 + (y - oy) ** 2), 1e18));
 }

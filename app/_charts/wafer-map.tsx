@@ -50,7 +50,8 @@ export function WaferMap(props: WaferMapProps) {
   const share = props.toScaleOfMm === undefined ? 1 : (2 * radiusMm) / props.toScaleOfMm;
   /** A small wafer's words and marks are drawn as large as a big one's. */
   const magnify = props.small === true ? 1 : 1 / share;
-  const place = ([x, y]: Place) => `${((R * x) / radiusMm).toFixed(1)} ${((-R * y) / radiusMm).toFixed(1)}`;
+  const tenths = (10 * R) / radiusMm;
+  const place = ([x, y]: Place) => `${Math.round(tenths * x) / 10} ${Math.round(-tenths * y) / 10}`;
   const path = (ring: readonly Place[]) => `M${ring.map(place).join('L')}Z`;
   const levels =
     good.length === 0

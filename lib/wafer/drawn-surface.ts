@@ -2,6 +2,7 @@ import { contours } from 'd3-contour';
 import { Delaunay } from 'd3-delaunay';
 import type { Site } from './site';
 import { smoothSurface, type SmoothSurface } from './smooth-surface';
+import { surfaceGrid } from './surface-grid';
 
 /** A place on the drawing, [x, y] in mm from the wafer centre. */
 export type Place = readonly [number, number];
@@ -16,9 +17,8 @@ export interface DrawnSurface {
   valueAt(xMm: number, yMm: number): number | null;
 }
 
-const CELLS = 72;
-/** Grid cells kept around the hull, so that no ring is cut inside it. */
-const MARGIN = 2;
+/** Straight between their nodes, so many cells are some hundredths of a gauge's repeatability off the surface. */
+const CELLS = 40;
 
 /** Whether a place lies in a convex polygon, its border included. */
 export function isInside(hull: readonly Place[], x: number, y: number): boolean {
@@ -58,33 +58,14 @@ export function drawnSurface(
   const hull = Array.from(corners, (i): Place => [sites[i]!.xMm, sites[i]!.yMm]);
   return {
     hull,
-    regions: regionsAbove(surface, hull, options.levels, options.cells ?? CELLS),
+    regions: regionsAbove(surface, options.levels, options.cells ?? CELLS),
     valueAt: (xMm, yMm) => (isInside(hull, xMm, yMm) ? surface(xMm, yMm) : null),
   };
 }
 
-function regionsAbove(
-  surface: SmoothSurface,
-  hull: readonly Place[],
-  levels: readonly number[],
-  cells: number,
-) {
-  const xs = hull.map(([x]) => x);
-  const ys = hull.map(([, y]) => y);
-  const [left, bottom] = [Math.min(...xs), Math.min(...ys)];
-  const step = Math.max(Math.max(...xs) - left, Math.max(...ys) - bottom) / cells;
-  const columns = Math.ceil((Math.max(...xs) - left) / step) + 2 * MARGIN + 1;
-  const rows = Math.ceil((Math.max(...ys) - bottom) / step) + 2 * MARGIN + 1;
-  const place = (column: number, row: number): Place => [
-    left + (column - MARGIN) * step,
-    bottom + (row - MARGIN) * step,
-  ];
-  const grid = new Array<number>(columns * rows);
-  for (let row = 0; row < rows; row++) {
-    for (let column = 0; column < columns; column++) {
-      grid[row * columns + column] = surface(...place(column, row));
-    }
-  }
+function regionsAbove(surface: SmoothSurface, levels: readonly number[], cells: number) {
+  const { columns, rows, values, place } = surfaceGrid(surface, cells);
+  const grid = Array.from(values);
   const trace = contours().size([columns, rows]);
   return [...levels]
     .sort((a, b) => a - b)

@@ -1,19 +1,22 @@
-import { positiveSolve } from './positive-solve';
+import { turned } from './mirror';
 import type { Site } from './site';
+import { bending, type SplineBasis, splineBasis } from './spline-basis';
+import { tridiagonalSolve } from './tridiagonal-solve';
 
 /** A smooth surface through the readings of one wafer: its value at any place, in mm from the centre. */
-export type SmoothSurface = (xMm: number, yMm: number) => number;
+export interface SmoothSurface {
+  (xMm: number, yMm: number): number;
+  /** The surface's own numbers: `plane` over 1, x, y and a weight for the bending about each site, places over `scaleMm`. */
+  plane: Float64Array;
+  weights: Float64Array;
+  basis: SplineBasis;
+}
 
 /** Natural logarithms of the least and most smoothing tried: through every reading, and all but a plane. */
 const LEAST_SMOOTHING = Math.log(1e-12);
 const MOST_SMOOTHING = Math.log(1e6);
 /** Half a percent short of the gauge's scatter is close enough for a drawing; beyond it is not. */
 const CLOSE_ENOUGH = -0.005;
-
-/** r²·ln r of the squared distance: the bending of a thin plate held at one point. */
-function bending(squared: number): number {
-  return squared > 0 ? 0.5 * squared * Math.log(squared) : 0;
-}
 
 /**
  * The thin-plate smoothing spline of the readings (Duchon 1977; Wahba, Spline Models for
@@ -34,93 +37,50 @@ export function smoothSurface(
   if (readings.length !== n) throw new RangeError(`${readings.length} readings for ${n} sites`);
   if (!readings.every(Number.isFinite)) throw new RangeError('a surface needs finite readings');
   if (!(repeatability >= 0)) throw new RangeError(`repeatability must be 0 or more: ${repeatability}`);
-  if (n < 3) return null;
-  const scaleMm = Math.max(...sites.map((s) => Math.hypot(s.xMm, s.yMm))) || 1;
-  const x = Float64Array.from(sites, (s) => s.xMm / scaleMm);
-  const y = Float64Array.from(sites, (s) => s.yMm / scaleMm);
-  const plane = [new Float64Array(n).fill(1), x.slice(), y.slice()];
-  const mirrors = triangularised(plane);
-  if (mirrors === null) return null;
-
-  const turned = Float64Array.from(readings);
-  turn(mirrors, turned);
-  const kernel = turnedKernel(mirrors, x, y);
-  const bent = bendingWeights(kernel, turned.subarray(3), repeatability, n);
-  const offset = [0, 1, 2].map((k) => {
-    let value = turned[k]!;
-    for (let j = 0; j < n - 3; j++) value -= kernel[k]![j + 3]! * bent[j]!;
-    return value;
-  });
-  for (let k = 2; k >= 0; k--) {
-    for (let j = k + 1; j < 3; j++) offset[k]! -= plane[j]![k]! * offset[j]!;
-    offset[k]! /= plane[k]![k]!;
-  }
+  const basis = splineBasis(sites);
+  if (basis === null) return null;
+  const seen = Float64Array.from(readings);
+  turned(basis.mirrors, seen);
+  const bent = bendingWeights(basis, seen.subarray(3), repeatability);
+  const plane = planeUnder(basis, seen, bent);
   const weights = new Float64Array(n);
   weights.set(bent, 3);
-  turn([...mirrors].reverse(), weights);
-  return (xMm, yMm) => {
+  turned(basis.mirrors.toReversed(), weights);
+  const { scaleMm, x, y } = basis;
+  const valueAt = (xMm: number, yMm: number) => {
     const u = xMm / scaleMm;
     const v = yMm / scaleMm;
-    let value = offset[0]! + offset[1]! * u + offset[2]! * v;
+    let value = plane[0]! + plane[1]! * u + plane[2]! * v;
     for (let i = 0; i < n; i++) value += weights[i]! * bending((u - x[i]!) ** 2 + (v - y[i]!) ** 2);
     return value;
   };
+  return Object.assign(valueAt, { plane, weights, basis });
 }
 
-/** Mirrors a column in each of the given unit vectors (Householder): v - 2·m·(m·v). */
-function turn(mirrors: readonly Float64Array[], column: Float64Array): void {
-  for (const mirror of mirrors) {
-    let along = 0;
-    for (let i = 0; i < column.length; i++) along += mirror[i]! * column[i]!;
-    for (let i = 0; i < column.length; i++) column[i]! -= 2 * along * mirror[i]!;
-  }
-}
-
-/** Turns three columns into an upper triangle, in place; the mirrors that do it, or null where they are not independent. */
-function triangularised(columns: readonly Float64Array[]): Float64Array[] | null {
-  const mirrors: Float64Array[] = [];
-  for (let k = 0; k < columns.length; k++) {
-    const column = columns[k]!;
-    const mirror = column.map((value, i) => (i < k ? 0 : value));
-    const length = Math.hypot(...mirror);
-    if (length < 1e-6) return null;
-    mirror[k]! += mirror[k]! < 0 ? -length : length;
-    const scale = Math.hypot(...mirror);
-    for (let i = 0; i < mirror.length; i++) mirror[i]! /= scale;
-    for (const other of columns.slice(k)) turn([mirror], other);
-    mirrors.push(mirror);
-  }
-  return mirrors;
-}
-
-/** The bending between every two sites, seen along the turned axes: the first three are the plane. */
-function turnedKernel(mirrors: readonly Float64Array[], x: Float64Array, y: Float64Array): Float64Array[] {
-  const n = x.length;
-  const columns = Array.from({ length: n }, (_, j) =>
-    Float64Array.from({ length: n }, (_, i) => bending((x[i]! - x[j]!) ** 2 + (y[i]! - y[j]!) ** 2)),
+/** The plane that the readings leave once they are bent. */
+function planeUnder({ plane, across }: SplineBasis, seen: Float64Array, bent: Float64Array): Float64Array {
+  const found = Float64Array.from(across, (row, k) =>
+    row.reduce((value, bend, j) => value - bend * bent[j]!, seen[k]!),
   );
-  for (const column of columns) turn(mirrors, column);
-  const rows = Array.from({ length: n }, (_, i) => Float64Array.from(columns, (column) => column[i]!));
-  for (const row of rows) turn(mirrors, row);
-  return rows;
+  for (let k = 2; k >= 0; k--) {
+    for (let j = k + 1; j < 3; j++) found[k]! -= plane[j]![k]! * found[j]!;
+    found[k]! /= plane[k]![k]!;
+  }
+  return found;
 }
 
 /** The weights off the plane at the smoothing that leaves the gauge's scatter; all zero for a plane. */
 function bendingWeights(
-  kernel: readonly Float64Array[],
+  { diagonal, beside, x }: SplineBasis,
   readings: Float64Array,
   repeatability: number,
-  sites: number,
 ): Float64Array {
-  const size = readings.length;
-  const flat = new Float64Array(size * size);
-  for (let i = 0; i < size; i++) flat.set(kernel[i + 3]!.subarray(3), i * size);
   const left = (column: Float64Array, factor: number) =>
-    factor * Math.sqrt(column.reduce((sum, value) => sum + value * value, 0) / sites);
+    factor * Math.sqrt(column.reduce((sum, value) => sum + value * value, 0) / x.length);
   const flatLeft = left(readings, 1);
-  const none = new Float64Array(size);
+  const none = new Float64Array(readings.length);
   if (flatLeft <= repeatability || flatLeft === 0) return none;
-  const solved = (lambda: number) => positiveSolve(flat, lambda, readings) ?? none;
+  const solved = (lambda: number) => tridiagonalSolve(diagonal, beside, lambda, readings) ?? none;
   let low = LEAST_SMOOTHING;
   let best = solved(Math.exp(low));
   if (left(best, Math.exp(low)) >= repeatability) return best;

@@ -5,6 +5,7 @@ import { flatOffsetMm } from '@/lib/wafer/flat-offset-mm';
 import { polarSites } from '@/lib/wafer/polar-sites';
 import { scanSites } from '@/lib/wafer/scan-sites';
 import { smoothSurface } from '@/lib/wafer/smooth-surface';
+import { surfaceGrid } from '@/lib/wafer/surface-grid';
 
 const sites = polarSites(3, 97);
 const wavy = sites.map(({ xMm, yMm }, i) => 10 + 0.002 * xMm + 1e-5 * yMm * yMm + 0.03 * Math.sin(7 * i * i));
@@ -39,6 +40,13 @@ describe('smoothSurface', () => {
     for (const some of [sites, sites.slice(0, 3)]) {
       expect(smoothSurface(some, some.map(plane), 0)!(12, 34)).toBeCloseTo(plane({ xMm: 12, yMm: 34 }), 8);
     }
+  });
+
+  it('does not depend on the wafers that were drawn before', () => {
+    const places = [0, 10, 45].map((xMm) => smoothSurface(sites, wavy, 0.01)!(xMm, 2 * xMm));
+    smoothSurface(sites, wavy.toReversed(), 0.02);
+    smoothSurface(sites.slice(0, 30), wavy.slice(0, 30), 0.02);
+    expect([0, 10, 45].map((xMm) => smoothSurface(sites, wavy, 0.01)!(xMm, 2 * xMm))).toEqual(places);
   });
 
   it('is undefined on one or two sites or on a line, and refuses readings that are none', () => {
@@ -79,6 +87,20 @@ describe('drawnSurface', () => {
     expect(valueAt(96.9, 0)).toBeGreaterThan(9);
     expect(valueAt(97.1, 0)).toBeNull();
     expect(valueAt(-80, 80)).toBeNull();
+  });
+});
+
+describe('surfaceGrid', () => {
+  it('is the surface at its nodes, all round the sites, for one wafer after another', () => {
+    for (const readings of [wavy, wavy.toReversed()]) {
+      const surface = smoothSurface(sites, readings, 0.01)!;
+      const { columns, rows, values, place } = surfaceGrid(surface, 12);
+      expect(place(2, 2)[0]).toBeCloseTo(-97, 9);
+      expect(place(columns - 1, rows - 1)[1]).toBeGreaterThan(97);
+      values.forEach((value, node) => {
+        expect(value).toBeCloseTo(surface(...place(node % columns, Math.floor(node / columns))), 5);
+      });
+    }
   });
 });
 
