@@ -1,5 +1,5 @@
 import type { Actor } from '@/lib/access/actor';
-import { calibrationFactor } from '@/lib/limits/calibration-factor';
+import { calibrationStudy } from '@/lib/limits/calibration-study';
 import { listCalibrationWafers, listLimitRevisions } from '@/lib/limits/data';
 import { approveLimits, draftLimits } from '@/lib/limits/mutations';
 import { findStreamSettings } from '@/lib/streams/data';
@@ -24,7 +24,7 @@ export async function settleBaseline(actor: Actor, slug: string, from: Date, eve
   const target = inForce(targets, evening)?.target;
   if (target !== undefined && (stream.kind === 'implant' || stream.kind === 'diffusion')) {
     const wafers = await listCalibrationWafers(actor, stream.id, stream.controlStatistic, span);
-    const found = calibrationFactor(target, stream.kind, wafers);
+    const { found } = calibrationStudy(target, stream.kind, wafers);
     if (found !== null) {
       const calibrated = { ...target, calibrationFactor: found.factor, calibrationPercent: found.percent };
       const reason = `calibrated on the ${found.subgroups} subgroups of the first five weeks`;

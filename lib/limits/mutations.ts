@@ -5,6 +5,7 @@ import { columnNames, rowsAsQuery } from '@/lib/database/columnar';
 import { inTransaction } from '@/lib/database/transaction';
 import { LIMIT_COLUMNS } from '@/lib/excursions/judgement-rows';
 import { holdStream, judgeAgain } from '@/lib/excursions/mutations';
+import { newestProcessedAt } from '@/lib/streams/newest-processed-at';
 import type { Screen } from '@/lib/wafer/measure-wafer';
 import { listBaselinePoints } from './data';
 import { remeasuredBaseline } from './remeasured-baseline';
@@ -125,8 +126,9 @@ export async function discardLimits(_actor: Actor, revisionId: string): Promise<
 }
 
 /**
- * Changes how a stream's readings are screened, from now on. Limits drawn from readings screened otherwise no longer
- * fit, so the baseline of those in force is measured again and a new provisional revision begins.
+ * Changes how a stream's readings are screened: of wafers processed from now on, and after those on record. Limits
+ * drawn from readings screened otherwise no longer fit, so the baseline of those in force is measured again and a new
+ * provisional revision begins at the same instant.
  */
 export async function changeScreening(
   actor: Actor,
@@ -148,13 +150,19 @@ export async function changeScreening(
     const limits = points === null ? null : limitSet(points);
     if (limits?.level.sigma === 0)
       return { ok: false, reason: 'Under that screening all levels of the baseline are equal.' };
+    const newest = await newestProcessedAt(client, streamId);
+    const at = new Date(Math.max(Date.now(), newest?.getTime() ?? 0));
     await client.query('UPDATE stream SET screening = $2 WHERE id = $1', [streamId, screening]);
+    await client.query(
+      'INSERT INTO screening_change (stream_id, at, former, screening, author, reason) VALUES ($1, $2, $3, $4, $5, $6)',
+      [streamId, at, before, screening, actor.name, reason],
+    );
     if (points === null || limits === null) return { ok: true };
     await insertLimits(actor, client, streamId, limits, {
       state: 'provisional',
       origin: 'screening',
       baselineIds: points.map((point) => point.id),
-      at: new Date(),
+      at,
       reason: `screening changed from ${before} to ${screening}: ${reason}`,
     });
     return { ok: true };

@@ -1,6 +1,9 @@
 import type { Actor } from '@/lib/access/actor';
 import { getPool, getPrisma } from '@/lib/database/client';
 import type { Prisma } from '@/lib/database/generated/client';
+import type { ExpectedWafer } from '@/lib/physics/target';
+import type { Stream } from '@/lib/streams/types';
+import { expectedWafer } from './measured-wafer';
 import type { Origin } from './types';
 import { waferOnRecord, type WaferOnRecord } from './wafer-on-record';
 
@@ -85,6 +88,22 @@ export async function listBatchStreams(_actor: Actor, batchId: string): Promise<
     [batchId],
   );
   return rows;
+}
+
+const LATEST_WAFERS = 25;
+
+/** What each of the latest judged wafers of a stream brings to its expected value. */
+export async function listLatestWafers(_actor: Actor, stream: Stream): Promise<ExpectedWafer[]> {
+  const { rows } = await getPool().query<{ ingotFraction: number | null; thicknessUm: number | null }>(
+    `SELECT w.ingot_fraction AS "ingotFraction", w.thickness_um AS "thicknessUm"
+     FROM (SELECT unnest(wafer_ids) AS id FROM
+       (SELECT wafer_ids FROM subgroup WHERE stream_id = $1 AND state = 'judged'
+        ORDER BY position_at DESC, key DESC LIMIT ${LATEST_WAFERS}) latest) member
+     JOIN wafer_measurement w ON w.stream_id = $1 AND w.id = member.id
+     WHERE w.level IS NOT NULL ORDER BY w.processed_at DESC, w.id DESC LIMIT ${LATEST_WAFERS}`,
+    [stream.id],
+  );
+  return rows.map((facts) => expectedWafer(stream, facts));
 }
 
 /** One measured wafer with its surroundings: its page. Null where there is none by this id, or it is no id. */

@@ -1,7 +1,9 @@
-import { expectedValue, type Expected } from '@/lib/physics/expected-value';
+import { expectedOrNull } from '@/lib/physics/expected-or-null';
+import type { Expected } from '@/lib/physics/expected-value';
 import { missingForExpected } from '@/lib/physics/missing-for-expected';
 import type { ExpectedWafer } from '@/lib/physics/target';
 import { inForce } from '@/lib/streams/in-force';
+import { screeningAt } from '@/lib/streams/screening-at';
 import type { Specification, Stream, StreamSettings, TargetRevision } from '@/lib/streams/types';
 import { measureWafer, type Screen, type WaferMeasure } from '@/lib/wafer/measure-wafer';
 import { planGeometry, type PlanGeometry } from '@/lib/wafer/plan-geometry';
@@ -19,6 +21,7 @@ export interface MeasuringStream {
 /** A wafer measured: its figures, what physics expects of it, and what is charted and held against specification. */
 export interface MeasuredWafer {
   measure: WaferMeasure;
+  screening: Screen;
   target: TargetRevision | null;
   expected: Expected | null;
   /** The charted value and the relative s of the wafer in percent; null where it is not judged. */
@@ -52,8 +55,9 @@ export function measuredWafer(
   const { stream, targets, specifications } = by.settings;
   const target = inForce(targets, facts.processedAt);
   const values = valuesAt23C(readings, facts, target?.target ?? null);
+  const screening = options.screen ?? screeningAt(by.settings, facts.processedAt);
   const measure = measureWafer(values, by.geometry, {
-    screen: options.screen ?? stream.screening,
+    screen: screening,
     shape: options.shape ?? false,
     ...(options.overrides === undefined ? {} : { overrides: options.overrides }),
   });
@@ -69,6 +73,7 @@ export function measuredWafer(
   const specification = inForce(specifications, facts.processedAt)?.specification ?? null;
   return {
     measure,
+    screening,
     target,
     expected,
     level: !judged ? null : stream.chartedValue === 'statistic' ? statistic : relative(statistic, expected),
@@ -92,7 +97,7 @@ export function expectedOf(
   const isSame = !target.target.alongCrystal && (wafer.layerThicknessUm ?? null) === null;
   const known = isSame ? by.expectedOf.get(target.id) : undefined;
   if (known !== undefined) return known;
-  const found = missingForExpected(target.target, wafer) === null ? inRange(target, wafer) : null;
+  const found = expectedOrNull(target.target, wafer);
   if (isSame) by.expectedOf.set(target.id, found);
   return found;
 }
@@ -104,15 +109,6 @@ export function expectedWafer(
 ): ExpectedWafer {
   const isLayer = stream.kind === 'epi' && stream.quantity === 'sheet_resistance';
   return { ingotFraction: facts.ingotFraction, layerThicknessUm: isLayer ? facts.thicknessUm : null };
-}
-
-function inRange(target: TargetRevision, wafer: ExpectedWafer): Expected | null {
-  try {
-    return expectedValue(target.target, wafer);
-  } catch (error) {
-    if (error instanceof RangeError) return null;
-    throw error;
-  }
 }
 
 function relative(statistic: number, expected: Expected | null): number | null {

@@ -43,7 +43,7 @@ export async function decideReading(
       overrides: before.overrides,
     });
     const parameters: unknown[] = [streamId, waferId];
-    const given = rowsAsQuery(MEASURED_COLUMNS, [{ screening: before.screening, measured }], parameters);
+    const given = rowsAsQuery(MEASURED_COLUMNS, [{ measured }], parameters);
     await client.query(
       `UPDATE wafer_measurement SET (${columnNames(MEASURED_COLUMNS)}) = (SELECT given.* FROM ${given} given)
        WHERE stream_id = $1 AND id = $2`,

@@ -13,7 +13,6 @@ export interface WaferRow {
   history: boolean;
   recordedAt: Date;
   recordedBy: string;
-  screening: string;
   measured: MeasuredWafer;
 }
 
@@ -31,8 +30,8 @@ export function subgroupKey(kind: 'wafer' | 'run' | 'lot' | 'ingot', facts: Meas
   return (kind === 'run' ? facts.run : facts.lot) ?? '';
 }
 
-/** What measuring a wafer decides, under a certain screening. */
-type MeasuredRow = Pick<WaferRow, 'screening' | 'measured'>;
+/** What measuring a wafer decides. */
+type MeasuredRow = Pick<WaferRow, 'measured'>;
 
 const figure = (name: keyof MeasuredWafer['measure']['figures'], column: string): Column<MeasuredRow> => ({
   name: column,
@@ -57,7 +56,7 @@ const time = (name: 'measuredAt' | 'processedAt', column: string): Column<WaferR
 
 /** What measuring decides, written at first and again when a person takes a reading out or puts one back. */
 export const MEASURED_COLUMNS: readonly Column<MeasuredRow>[] = [
-  { name: 'screening', type: 'text', value: (row) => row.screening },
+  { name: 'screening', type: 'text', value: (row) => row.measured.screening },
   { name: 'not_judged_reason', type: 'text', value: (row) => row.measured.notJudgedReason },
   { name: 'bad_sites', type: 'integer', value: (row) => row.measured.measure.badSites },
   { name: 'excluded_sites', type: 'integer', value: (row) => row.measured.measure.excludedSites },

@@ -4,6 +4,7 @@ import { getPrisma } from '@/lib/database/client';
 import { inTransaction } from '@/lib/database/transaction';
 import { holdStream, judgeAgain } from '@/lib/excursions/mutations';
 import type { Target } from '@/lib/physics/target';
+import { newestProcessedAt } from './newest-processed-at';
 import type { SitePlan, Specification, Stream, StreamEvent } from './types';
 
 export type Result<Value = undefined> = { ok: true; value: Value } | { ok: false; reason: string };
@@ -13,22 +14,21 @@ const BEGINNING = new Date(0);
 
 /** Creates a site plan. */
 export async function createSitePlan(actor: Actor, plan: Omit<SitePlan, 'id'>): Promise<Result<string>> {
-  const prisma = getPrisma();
-  if (await prisma.sitePlan.findUnique({ where: { name: plan.name } })) {
-    return { ok: false, reason: `There is a site plan "${plan.name}" already.` };
-  }
   const { name, diameterMm, edgeExclusionMm, orientation, sites } = plan;
-  const row = await prisma.sitePlan.create({
-    data: {
-      name,
-      diameterMm,
-      edgeExclusionMm,
-      orientation,
-      xMm: sites.map((site) => site.xMm),
-      yMm: sites.map((site) => site.yMm),
-      createdBy: actor.name,
-    },
-  });
+  const row = await createdUnlessTaken(
+    getPrisma().sitePlan.create({
+      data: {
+        name,
+        diameterMm,
+        edgeExclusionMm,
+        orientation,
+        xMm: sites.map((site) => site.xMm),
+        yMm: sites.map((site) => site.yMm),
+        createdBy: actor.name,
+      },
+    }),
+  );
+  if (row === null) return { ok: false, reason: `There is a site plan "${name}" already.` };
   return { ok: true, value: row.id.toString() };
 }
 
@@ -42,38 +42,53 @@ export async function createStream(
   specification: Specification | null,
 ): Promise<Result<string>> {
   const { sitePlanId, ...fields } = stream;
-  const prisma = getPrisma();
-  if (await prisma.stream.findUnique({ where: { slug: stream.slug } })) {
-    return { ok: false, reason: `There is a stream "${stream.slug}" already.` };
-  }
   const first = { revision: 1, effectiveFrom: BEGINNING, author: actor.name, reason: 'first of the stream' };
-  const row = await prisma.stream.create({
-    data: {
-      ...fields,
-      sitePlanId: BigInt(sitePlanId),
-      createdBy: actor.name,
-      ...(target === null ? {} : { targets: { create: [{ ...first, ...targetFields(target) }] } }),
-      ...(specification === null ? {} : { specifications: { create: [{ ...first, ...specification }] } }),
-    },
-  });
+  const row = await createdUnlessTaken(
+    getPrisma().stream.create({
+      data: {
+        ...fields,
+        sitePlanId: BigInt(sitePlanId),
+        createdBy: actor.name,
+        ...(target === null ? {} : { targets: { create: [{ ...first, ...targetFields(target) }] } }),
+        ...(specification === null ? {} : { specifications: { create: [{ ...first, ...specification }] } }),
+      },
+    }),
+  );
+  if (row === null) return { ok: false, reason: `There is a stream "${stream.slug}" already.` };
   return { ok: true, value: row.id.toString() };
 }
 
-/** A new revision of the target, in force for wafers processed from `effectiveFrom` on. Wafers on record stay as judged. */
+/** What was created; null where its name was taken already, by another at the same time perhaps. */
+async function createdUnlessTaken<Row>(creation: Promise<Row>): Promise<Row | null> {
+  try {
+    return await creation;
+  } catch (error) {
+    // Prisma's word for a broken unique constraint.
+    if (error instanceof Error && 'code' in error && error.code === 'P2002') return null;
+    throw error;
+  }
+}
+
+/**
+ * A new revision of the target, in force for wafers processed from `effectiveFrom` on, which lies after those on
+ * record. With `restart` the rules begin afresh there. Returns the revision's number.
+ */
 export async function reviseTarget(
   actor: Actor,
   streamId: string,
   target: Target,
-  meta: { effectiveFrom: Date; reason: string; calibrationWafers?: number | null },
-): Promise<void> {
-  await inTransaction(async (client) => {
+  meta: { effectiveFrom: Date; reason: string; calibrationWafers?: number | null; restart?: boolean },
+): Promise<Result<number>> {
+  return inTransaction(async (client) => {
     await holdStream(client, streamId);
+    if (await isBeforeRecorded(client, streamId, meta.effectiveFrom)) return BEFORE_RECORDED;
     const t = targetFields(target);
-    await client.query(
+    const { rows } = await client.query<{ revision: number }>(
       `INSERT INTO target_revision (stream_id, revision, effective_from, dopant, density_per_cm3, tolerance_percent,
          along_crystal, profile, length_um, background_dopant, background_density_per_cm3, calibration_factor,
          calibration_percent, calibration_wafers, author, reason)
-       VALUES ($1, ${nextRevision('target_revision')}, $2, $3, $4, $5, $6, $7, $8, $9, $10, $11, $12, $13, $14, $15)`,
+       VALUES ($1, ${nextRevision('target_revision')}, $2, $3, $4, $5, $6, $7, $8, $9, $10, $11, $12, $13, $14, $15)
+       RETURNING revision`,
       [
         streamId,
         meta.effectiveFrom,
@@ -92,22 +107,41 @@ export async function reviseTarget(
         meta.reason,
       ],
     );
+    const revision = rows[0]?.revision ?? 1;
+    if (meta.restart === true) {
+      const text = `target revision ${revision}: ${meta.reason}`;
+      const event = { kind: 'adjustment', at: meta.effectiveFrom, restart: true, text } as const;
+      await recordStreamEventIn(actor, client, streamId, event);
+    }
+    return { ok: true, value: revision };
   });
 }
 
-/** A new revision of the specification, in force for wafers processed from `effectiveFrom` on. */
+const BEFORE_RECORDED = {
+  ok: false,
+  reason: 'Wafers processed later are on record, and stay as they were judged: choose a time after them.',
+} as const;
+
+async function isBeforeRecorded(client: ClientBase, streamId: string, at: Date): Promise<boolean> {
+  const newest = await newestProcessedAt(client, streamId);
+  return newest !== null && newest >= at;
+}
+
+/** A new revision of the specification, in force for wafers processed from `effectiveFrom` on, after those on record. */
 export async function reviseSpecification(
   actor: Actor,
   streamId: string,
   s: Specification,
   meta: { effectiveFrom: Date; reason: string },
-): Promise<void> {
-  await inTransaction(async (client) => {
+): Promise<Result<number>> {
+  return inTransaction(async (client) => {
     await holdStream(client, streamId);
-    await client.query(
+    if (await isBeforeRecorded(client, streamId, meta.effectiveFrom)) return BEFORE_RECORDED;
+    const { rows } = await client.query<{ revision: number }>(
       `INSERT INTO specification_revision (stream_id, revision, effective_from, mean_lower, mean_upper, site_lower,
          site_upper, nonuniformity_metric, nonuniformity_upper, author, reason)
-       VALUES ($1, ${nextRevision('specification_revision')}, $2, $3, $4, $5, $6, $7, $8, $9, $10)`,
+       VALUES ($1, ${nextRevision('specification_revision')}, $2, $3, $4, $5, $6, $7, $8, $9, $10)
+       RETURNING revision`,
       [
         streamId,
         meta.effectiveFrom,
@@ -121,6 +155,7 @@ export async function reviseSpecification(
         meta.reason,
       ],
     );
+    return { ok: true, value: rows[0]?.revision ?? 1 };
   });
 }
 

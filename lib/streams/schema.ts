@@ -157,6 +157,9 @@ export const revisionMeta = (timeZone: string) =>
     reason: typedText({ most: 500, ask: 'Say why: it stays with the revision.' }),
   });
 
+/** What a revision of a target carries besides: whether the rules begin afresh where it takes force. */
+export const targetMeta = (timeZone: string) => revisionMeta(timeZone).extend({ restart: typedBox });
+
 export const newStreamEvent = (timeZone: string) =>
   z.object({
     kind: typedChoice(['adjustment', 'maintenance'], 'Choose what was done.'),

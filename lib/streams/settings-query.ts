@@ -14,6 +14,8 @@ const SELECTION: Record<keyof typeof SETTINGS_INCLUDE | 'stream', string> = {
     FROM target_revision t WHERE t.stream_id = s.id)`,
   specifications: `(SELECT coalesce(jsonb_agg(to_jsonb(c) ORDER BY c.revision), '[]')
     FROM specification_revision c WHERE c.stream_id = s.id)`,
+  screenings: `(SELECT coalesce(jsonb_agg(to_jsonb(h) ORDER BY h.id), '[]')
+    FROM screening_change h WHERE h.stream_id = s.id)`,
 };
 
 const STATEMENT = `SELECT ${Object.entries(SELECTION)
@@ -31,13 +33,15 @@ export async function settingsWhere(
     sitePlan: Json;
     targets: Json[];
     specifications: Json[];
+    screenings: Json[];
   }>(`${STATEMENT} WHERE ${condition} ORDER BY s.name`, parameters);
-  return rows.map(({ stream, sitePlan, targets, specifications }) =>
+  return rows.map(({ stream, sitePlan, targets, specifications, screenings }) =>
     streamSettingsOf({
       ...named(stream),
       sitePlan: named(sitePlan),
       targets: targets.map(named),
       specifications: specifications.map(named),
+      screenings: screenings.map(named),
     } as unknown as SettingsRow),
   );
 }
@@ -47,7 +51,7 @@ function named(json: Json): Json {
   return Object.fromEntries(
     Object.entries(json).map(([column, value]) => [
       column.replace(/_([a-z])/g, (_, letter: string) => letter.toUpperCase()),
-      /(_at|_from)$/.test(column) && typeof value === 'string' ? new Date(value) : value,
+      /(^|_)(at|from)$/.test(column) && typeof value === 'string' ? new Date(value) : value,
     ]),
   );
 }

@@ -107,6 +107,7 @@ export const SETTINGS_INCLUDE = {
   sitePlan: true,
   targets: { orderBy: { revision: 'asc' } },
   specifications: { orderBy: { revision: 'asc' } },
+  screenings: { orderBy: { id: 'asc' } },
 } as const;
 
 export function streamSettingsOf(
@@ -117,5 +118,12 @@ export function streamSettingsOf(
     stream,
     targets: row.targets.map((target) => targetRevisionOf(target, stream.quantity)),
     specifications: row.specifications.map(specificationRevisionOf),
+    screenings: row.screenings.map(({ at, former, screening, author, reason }) => ({
+      at,
+      former: former as Stream['screening'],
+      screening: screening as Stream['screening'],
+      author,
+      reason,
+    })),
   };
 }

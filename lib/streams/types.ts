@@ -89,11 +89,22 @@ export interface StreamEvent {
   recordedAt: Date;
 }
 
+/** A change of how readings are screened: wafers processed until `at` are screened the former way. */
+export interface ScreeningChange {
+  at: Date;
+  former: Screen;
+  screening: Screen;
+  author: string;
+  reason: string;
+}
+
 /** A stream with everything that decides how its wafers are measured. */
 export interface StreamSettings {
   stream: Stream;
   targets: TargetRevision[];
   specifications: SpecificationRevision[];
+  /** In the order in which they were made. */
+  screenings: ScreeningChange[];
 }
 
 /** The unit a stream's readings are in. */

@@ -74,6 +74,7 @@ export function settings(
         ? []
         : [{ ...meta, target: { ...target, ...more.target }, calibrationWafers: null }],
     specifications: more.specification === undefined ? [] : [{ ...meta, specification }],
+    screenings: [],
   };
 }
 

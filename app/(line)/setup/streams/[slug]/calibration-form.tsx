@@ -2,16 +2,19 @@
 
 import { ActionForm } from '@/app/_ui/action-form';
 import { Beside } from '@/app/_ui/beside';
-import type { CalibrationFactor } from '@/lib/limits/calibration-factor';
-import type { Target } from '@/lib/physics/target';
+import type { CalibrationFactor } from '@/lib/limits/calibration-study';
+import type { ExpectedWafer, Target } from '@/lib/physics/target';
 import { ExpectedFigures } from '../../expected-note';
 import { RevisionFields } from '../../revision-fields';
+import { ShiftNote } from '../../shift-note';
 import { reviseTargetAction } from './target-actions';
 import styles from '../../expected-note.module.css';
 
 /** Makes the factor that a baseline gave part of the target: a new revision, otherwise as the one in force. */
 export function CalibrationForm(props: {
   slug: string;
+  /** The latest wafers, where these are charted against what is expected of them. */
+  wafers: readonly ExpectedWafer[] | null;
   target: Target;
   found: CalibrationFactor;
   now: string;
@@ -42,7 +45,22 @@ export function CalibrationForm(props: {
             <div className={styles.note}>
               <ExpectedFigures target={calibrated} />
             </div>
-            <RevisionFields id="calibration" now={props.now} timeZone={props.timeZone} errors={errors} />
+            <RevisionFields
+              id="calibration"
+              now={props.now}
+              timeZone={props.timeZone}
+              errors={errors}
+              hint="For wafers processed from then on, and after those on record: these keep what was expected of them."
+            />
+            {props.wafers !== null && (
+              <ShiftNote
+                id="calibration-restart"
+                before={target}
+                after={calibrated}
+                wafers={props.wafers}
+                toolFollows={false}
+              />
+            )}
           </>
         )}
       </ActionForm>

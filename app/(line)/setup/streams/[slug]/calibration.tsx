@@ -2,9 +2,9 @@ import { Figures } from '@/app/_ui/figures';
 import { SectionHead } from '@/app/_ui/section-head';
 import type { Actor } from '@/lib/access/actor';
 import { formatNumber, formatPercent } from '@/lib/format';
-import { calibrationFactor } from '@/lib/limits/calibration-factor';
+import { calibrationStudy, type CalibrationStudy } from '@/lib/limits/calibration-study';
 import { findLatestSpan, listCalibrationWafers } from '@/lib/limits/data';
-import type { Target } from '@/lib/physics/target';
+import type { ExpectedWafer, Target } from '@/lib/physics/target';
 import { siteTimeField } from '@/lib/site-time';
 import type { Stream } from '@/lib/streams/types';
 import { askedSpan } from './asked-span';
@@ -16,6 +16,7 @@ export async function Calibration(props: {
   actor: Actor;
   stream: Stream;
   target: Target;
+  latestWafers: readonly ExpectedWafer[] | null;
   asked: Record<string, string | string[]>;
   timeZone: string;
 }) {
@@ -24,7 +25,8 @@ export async function Calibration(props: {
   const { span, typed, errors } = askedSpan(props.asked, latest, timeZone);
   const wafers =
     span === null ? [] : await listCalibrationWafers(actor, stream.id, stream.controlStatistic, span);
-  const found = calibrationFactor(target, stream.kind, wafers);
+  const study = calibrationStudy(target, stream.kind, wafers);
+  const { found } = study;
   return (
     <>
       <SectionHead id="calibration">Calibration from a baseline</SectionHead>
@@ -33,8 +35,11 @@ export async function Calibration(props: {
         takes that up; its uncertainty then is that of the expected value.
       </p>
       <SpanForm typed={typed} errors={errors} timeZone={timeZone} submit="Work it out" anchor="calibration" />
+      {leftOutWords(study).map((words) => (
+        <p key={words}>{words}</p>
+      ))}
       {found === null ? (
-        <p>Fewer than two judged subgroups lie in this span: no factor comes of it.</p>
+        <p>Fewer than two subgroups of this span can serve: no factor comes of it.</p>
       ) : (
         <>
           <div style={{ maxWidth: 480 }}>
@@ -58,6 +63,7 @@ export async function Calibration(props: {
           <CalibrationForm
             slug={stream.slug}
             target={target}
+            wafers={props.latestWafers}
             found={found}
             now={siteTimeField(new Date(), timeZone)}
             timeZone={timeZone}
@@ -66,4 +72,15 @@ export async function Calibration(props: {
       )}
     </>
   );
+}
+
+/** Which wafers of the span could not serve, and why. */
+function leftOutWords({ beyond, lacking }: CalibrationStudy): string[] {
+  const wafers = (count: number) => (count === 1 ? 'One wafer' : `${count} wafers`);
+  return [
+    beyond > 0 &&
+      `${wafers(beyond)} of this span ${beyond === 1 ? 'lies' : 'lie'} beyond the range of the conversion and ${beyond === 1 ? 'is' : 'are'} left out: nothing is expected there.`,
+    lacking > 0 &&
+      `${wafers(lacking)} of this span came without what physics needs to expect anything, and ${lacking === 1 ? 'is' : 'are'} left out.`,
+  ].filter((words) => words !== false);
 }

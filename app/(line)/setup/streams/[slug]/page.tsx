@@ -2,6 +2,7 @@ import type { Metadata } from 'next';
 import { SectionHead } from '@/app/_ui/section-head';
 import { localActor } from '@/lib/access/local-actor';
 import { readEnvironment } from '@/lib/env';
+import { listLatestWafers } from '@/lib/maps/data';
 import { isImplantedOrDiffused } from '@/lib/physics/is-implanted-or-diffused';
 import { siteTimeField } from '@/lib/site-time';
 import { inForce } from '@/lib/streams/in-force';
@@ -23,6 +24,7 @@ export default async function TargetPage(props: {
   const { siteTimeZone } = readEnvironment();
   const now = new Date();
   const target = inForce(targets, now)?.target ?? null;
+  const latestWafers = stream.chartedValue === 'relative' ? await listLatestWafers(actor, stream) : null;
   return (
     <>
       <StreamHead
@@ -41,6 +43,7 @@ export default async function TargetPage(props: {
           actor={actor}
           stream={stream}
           target={target}
+          latestWafers={latestWafers}
           asked={await props.searchParams}
           timeZone={siteTimeZone}
         />
@@ -49,6 +52,7 @@ export default async function TargetPage(props: {
       <TargetForm
         slug={stream.slug}
         quantity={stream.quantity}
+        wafers={latestWafers}
         target={target}
         now={siteTimeField(now, siteTimeZone)}
         timeZone={siteTimeZone}

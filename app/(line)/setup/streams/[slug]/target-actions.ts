@@ -6,7 +6,7 @@ import { localActor } from '@/lib/access/local-actor';
 import { readEnvironment } from '@/lib/env';
 import { findStreamSettings } from '@/lib/streams/data';
 import { reviseTarget } from '@/lib/streams/mutations';
-import { revisionMeta, typedTarget } from '@/lib/streams/schema';
+import { targetMeta, typedTarget } from '@/lib/streams/schema';
 import { typedNumberOrNone } from '@/lib/typed';
 
 const wafers = typedNumberOrNone({ wish: 'a number of wafers', holds: (v) => Number.isInteger(v) && v > 0 });
@@ -22,14 +22,15 @@ export async function reviseTargetAction(
   const found = await findStreamSettings(actor, String(slug));
   if (found === null) return refusedForm(before, { message: 'There is no such stream.' });
   const target = typedTarget(found.stream.quantity).safeParse(words);
-  const meta = revisionMeta(readEnvironment().siteTimeZone).safeParse(words);
+  const meta = targetMeta(readEnvironment().siteTimeZone).safeParse(words);
   if (!target.success || !meta.success) {
     const errors = [target, meta].flatMap((part) => (part.success ? [] : faultsOf(part.error)));
     return refusedForm(before, { errors });
   }
   const calibrationWafers = wafers.catch(null).parse(words['calibrationWafers']);
-  await reviseTarget(actor, found.stream.id, target.data, { ...meta.data, calibrationWafers });
+  const made = await reviseTarget(actor, found.stream.id, target.data, { ...meta.data, calibrationWafers });
+  if (!made.ok) return refusedForm(before, { errors: [{ field: 'effectiveFrom', reason: made.reason }] });
   revalidatePath('/', 'layout');
-  const next = Math.max(0, ...found.targets.map(({ revision }) => revision)) + 1;
-  return doneForm(before, `Target revision ${next} is recorded.`);
+  const restart = meta.data.restart ? ' The rules begin afresh where it takes force.' : '';
+  return doneForm(before, `Target revision ${made.value} is recorded.${restart}`);
 }

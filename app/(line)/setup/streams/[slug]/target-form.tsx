@@ -3,9 +3,11 @@
 import { useState } from 'react';
 import { ActionForm } from '@/app/_ui/action-form';
 import { formWords } from '@/app/_ui/form-state';
-import type { Target } from '@/lib/physics/target';
+import type { ExpectedWafer, Target } from '@/lib/physics/target';
 import { ExpectedNote } from '../../expected-note';
+import { typedTarget } from '@/lib/streams/schema';
 import { RevisionFields } from '../../revision-fields';
+import { ShiftNote } from '../../shift-note';
 import { TargetFields } from '../../target-fields';
 import { reviseTargetAction } from './target-actions';
 
@@ -13,12 +15,15 @@ import { reviseTargetAction } from './target-actions';
 export function TargetForm(props: {
   slug: string;
   quantity: Target['quantity'];
+  /** The latest wafers, where these are charted against what is expected of them. */
+  wafers: readonly ExpectedWafer[] | null;
   target: Target | null;
   now: string;
   timeZone: string;
 }) {
-  const { slug, quantity, target, now, timeZone } = props;
+  const { slug, quantity, wafers, target, now, timeZone } = props;
   const [typed, setTyped] = useState<Record<string, string> | null>(null);
+  const parsed = typedTarget(quantity).safeParse(typed ?? wordsOf(target));
   return (
     <ActionForm
       action={reviseTargetAction.bind(null, slug)}
@@ -39,8 +44,17 @@ export function TargetForm(props: {
             now={now}
             timeZone={timeZone}
             errors={errors}
-            hint="For wafers processed from then on; those on record stay as they were judged."
+            hint="For wafers processed from then on, and after those on record: these keep what was expected of them."
           />
+          {wafers !== null && target !== null && (
+            <ShiftNote
+              id="target-restart"
+              before={target}
+              after={parsed.success ? parsed.data : null}
+              wafers={wafers}
+              toolFollows
+            />
+          )}
         </>
       )}
     </ActionForm>

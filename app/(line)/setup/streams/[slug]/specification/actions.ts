@@ -34,8 +34,8 @@ export async function reviseSpecificationAction(
     const errors = [specification, meta].flatMap((part) => (part.success ? [] : faultsOf(part.error)));
     return refusedForm(before, { errors });
   }
-  await reviseSpecification(actor, found.stream.id, specification.data ?? NOTHING, meta.data);
+  const made = await reviseSpecification(actor, found.stream.id, specification.data ?? NOTHING, meta.data);
+  if (!made.ok) return refusedForm(before, { errors: [{ field: 'effectiveFrom', reason: made.reason }] });
   revalidatePath('/', 'layout');
-  const next = Math.max(0, ...found.specifications.map(({ revision }) => revision)) + 1;
-  return doneForm(before, `Specification revision ${next} is recorded.`);
+  return doneForm(before, `Specification revision ${made.value} is recorded.`);
 }

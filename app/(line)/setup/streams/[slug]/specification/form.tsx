@@ -32,7 +32,7 @@ export function SpecificationForm(props: {
             now={props.now}
             timeZone={props.timeZone}
             errors={errors}
-            hint="For wafers processed from then on; those on record stay as they were judged."
+            hint="For wafers processed from then on, and after those on record: these stay as they were judged."
           />
         </>
       )}

@@ -2,6 +2,7 @@ import type { Metadata } from 'next';
 import { Figures } from '@/app/_ui/figures';
 import { SectionHead } from '@/app/_ui/section-head';
 import { localActor } from '@/lib/access/local-actor';
+import { readEnvironment } from '@/lib/env';
 import { formatNumber } from '@/lib/format';
 import { foundStream } from '../../../found-stream';
 import { StreamHead } from '../../../stream-head';
@@ -15,11 +16,12 @@ import {
 } from '../../../words';
 import { RetireForm } from './retire-form';
 import { ScreeningForm } from './screening-form';
+import { ScreeningTable } from './screening-table';
 
 export const metadata: Metadata = { title: 'Use' };
 
 export default async function UsePage(props: { params: Promise<{ slug: string }> }) {
-  const { stream } = await foundStream(localActor(), props.params);
+  const { stream, screenings } = await foundStream(localActor(), props.params);
   const { plan, subgroupSize } = stream;
   const wafers = subgroupSize === 1 ? '' : `, ${subgroupSize} wafers each`;
   return (
@@ -56,6 +58,9 @@ export default async function UsePage(props: { params: Promise<{ slug: string }>
       </div>
       <p className="quiet small">These stay as they are: other settings are another stream.</p>
       <SectionHead id="change-screening">Screening</SectionHead>
+      {screenings.length > 0 && (
+        <ScreeningTable changes={screenings} timeZone={readEnvironment().siteTimeZone} />
+      )}
       <ScreeningForm slug={stream.slug} screening={stream.screening} />
       <SectionHead id="retire">
         {stream.retiredAt === null ? 'Take out of use' : 'Take back into use'}

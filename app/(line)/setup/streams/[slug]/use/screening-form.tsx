@@ -21,8 +21,9 @@ export function ScreeningForm({ slug, screening }: { slug: string; screening: St
       {({ errors }) => (
         <>
           <p className="quiet">
-            Wafers on record stay as they were screened. The baseline of the limits in force is measured again
-            and a provisional revision begins.
+            It holds for wafers processed from now on; those on record, and those processed before but
+            recorded later, are screened as until now. The baseline of the limits in force is measured again
+            and a provisional revision begins at the same instant.
           </p>
           <div className="columns">
             <SelectField
@@ -36,7 +37,7 @@ export function ScreeningForm({ slug, screening }: { slug: string; screening: St
             <Field
               name="reason"
               label="Why"
-              hint="Stays with the new limits"
+              hint="Stays with the change and the new limits"
               autoComplete="off"
               error={errors['reason'] ?? null}
             />

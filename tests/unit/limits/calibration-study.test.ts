@@ -1,6 +1,6 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { calibrationFactor } from '@/lib/limits/calibration-factor';
+import { calibrationStudy } from '@/lib/limits/calibration-study';
 import { expectedValue } from '@/lib/physics/expected-value';
 import type { Target } from '@/lib/physics/target';
 
@@ -25,7 +25,9 @@ const wafer = (subgroupId: string, ratio: number) => ({
   thicknessUm: 725,
 });
 
-describe('calibrationFactor', () => {
+const calibrationFactor = (...given: Parameters<typeof calibrationStudy>) => calibrationStudy(...given).found;
+
+describe('a calibration', () => {
   it('is the mean of the subgroups’ ratios, with the standard uncertainty of that mean', () => {
     const found = calibrationFactor(target, 'implant', [wafer('1', 1.1), wafer('2', 1.2), wafer('3', 1.3)]);
     expect(found?.factor).toBeCloseTo(1.2, 12);
@@ -54,7 +56,7 @@ describe('calibrationFactor', () => {
     expect(calibrationFactor(crystal, 'implant', [wafer('1', 1), wafer('2', 2)])).toBeNull();
   });
 
-  it('leaves out wafers beyond the conversion, as at the very end of a crystal', () => {
+  it('leaves out and counts wafers beyond the conversion, as at the very end of a crystal', () => {
     const crystal: Target = {
       ...target,
       quantity: 'resistivity',
@@ -68,8 +70,17 @@ describe('calibrationFactor', () => {
     };
     const at = (subgroupId: string, ingotFraction: number) => ({ ...wafer(subgroupId, 1), ingotFraction });
     expect(() => expectedValue(crystal, { ingotFraction: 0.9999 })).toThrow(RangeError);
-    const found = calibrationFactor(crystal, 'crystal', [at('1', 0.1), at('2', 0.1), at('3', 0.9999)]);
-    expect(found).toMatchObject({ subgroups: 2, wafers: 2 });
+    const wafers = [at('1', 0.1), at('2', 0.1), at('3', 0.9999), wafer('4', 1)];
+    expect(calibrationStudy(crystal, 'crystal', wafers)).toMatchObject({
+      found: { subgroups: 2, wafers: 2 },
+      beyond: 1,
+      lacking: 1,
+    });
+    expect(calibrationStudy(crystal, 'crystal', wafers.slice(1))).toEqual({
+      found: null,
+      beyond: 1,
+      lacking: 1,
+    });
   });
 
   it('grows with the readings and keeps its relative uncertainty', () => {
