@@ -31,7 +31,7 @@ export function learnEnd(pool: Pool, end: ChainEnd): void {
   if (chain.end === null || chain.end.name !== end.name || chain.end.id < end.id) chain.end = end;
 }
 
-interface EndRow {
+export interface EndRow {
   name: string;
   id: string | null;
   mac: Buffer | null;

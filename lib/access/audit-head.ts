@@ -17,7 +17,12 @@ interface Keeping {
   wanted: ChainEnd;
   /** Runs until what is wanted is on file. */
   running: Promise<void> | null;
+  /** Set while a write is put off. */
+  due: NodeJS.Timeout | null;
 }
+
+/** So long a head may be put off where entries follow each other fast. */
+const SOON_MS = 100;
 
 const keepings = new Map<string, Keeping>();
 
@@ -33,10 +38,33 @@ export function headFile(chain: string): string {
  */
 export function keepHead(end: ChainEnd): Promise<void> {
   const file = headFile(end.name);
-  const keeping = keepings.get(file) ?? { wanted: end, running: null };
+  return written(file, wanting(file, end));
+}
+
+/** The same within a tenth of a second, for entries that may follow each other fast. */
+export function keepHeadSoon(end: ChainEnd): void {
+  const file = headFile(end.name);
+  const keeping = wanting(file, end);
+  keeping.due ??= setTimeout(() => void written(file, keeping), SOON_MS);
+}
+
+/** Resolves when no head waits to be kept. */
+export async function headsKept(): Promise<void> {
+  const waiting = [...keepings].filter(([, { due, running }]) => due !== null || running !== null);
+  await Promise.all(waiting.map(([file, keeping]) => written(file, keeping)));
+}
+
+function wanting(file: string, end: ChainEnd): Keeping {
+  const keeping = keepings.get(file) ?? { wanted: end, running: null, due: null };
   keepings.set(file, keeping);
   if (end.id >= keeping.wanted.id) keeping.wanted = end;
-  keeping.running ??= writeWanted(file, keeping).finally(() => (keeping.running = null));
+  return keeping;
+}
+
+function written(file: string, keeping: Keeping): Promise<void> {
+  if (keeping.due !== null) clearTimeout(keeping.due);
+  keeping.due = null;
+  keeping.running ??= writeWanted(file, keeping);
   return keeping.running;
 }
 
@@ -50,6 +78,8 @@ async function writeWanted(file: string, keeping: Keeping): Promise<void> {
   } catch (error) {
     const reason = error instanceof Error ? error.message : String(error);
     console.warn(`The head of the audit trail could not be kept: ${reason}`);
+  } finally {
+    keeping.running = null;
   }
 }
 

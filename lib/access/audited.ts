@@ -4,7 +4,7 @@ import { inTransaction } from '@/lib/database/transaction';
 import type { Actor } from './actor';
 import { appendEntries, learnEnd } from './audit-chain';
 import type { ChainEnd, Telling, Told } from './audit-entry';
-import { keepHead } from './audit-head';
+import { headsKept, keepHead } from './audit-head';
 import { plantKey } from './secret';
 
 /** Tells of one thing that was done; it is written at the end of the transaction. */
@@ -32,9 +32,9 @@ export async function audited<Result>(
   return result;
 }
 
-/** What is left to do once entries are committed: to know the new end, and to keep it outside the database. */
+/** What is left to do after a commit: to know the new end of the chain, if there is one, and to keep it outside. */
 export async function committed(end: ChainEnd | null): Promise<void> {
-  if (end === null) return;
+  if (end === null) return headsKept();
   learnEnd(getPool(), end);
   await keepHead(end);
 }

@@ -1,8 +1,8 @@
 import type { Actor } from '@/lib/access/actor';
+import { audited } from '@/lib/access/audited';
 import { getPool } from '@/lib/database/client';
 import { columnNames, rowsAsQuery, type Column } from '@/lib/database/columnar';
 import { takeIds } from '@/lib/database/take-ids';
-import { inTransaction } from '@/lib/database/transaction';
 import {
   checkFile,
   fileMeasurements,
@@ -15,7 +15,7 @@ import {
 } from './file-check';
 import type { RawMap } from './raw-maps';
 import { recordMeasurements } from './record-measurements';
-import type { Batch } from './record-statement';
+import { batchTelling, type Batch } from './record-statement';
 import type { IntakeResult, MapProblem, Measurement, Origin } from './types';
 
 export interface IntakeOptions {
@@ -158,13 +158,15 @@ async function fileBatch(actor: Actor, batch: Batch, result: IntakeResult): Prom
   const listed = result.refusals
     .slice(0, MOST_PROBLEMS)
     .map((refusal) => ({ batchId: batch.id, ...refusal }));
-  await inTransaction(async (client) => {
-    await client.query(
+  await audited(actor, async (client, tell) => {
+    const { rows } = await client.query<{ appeared: boolean }>(
       `INSERT INTO intake_batch (id, source, origin, history, actor, repeated, refused, finished_at)
        VALUES ($1, $2, $3, $4, $5, $6, $7, now())
-       ON CONFLICT (id) DO UPDATE SET repeated = excluded.repeated, refused = excluded.refused, finished_at = now()`,
+       ON CONFLICT (id) DO UPDATE SET repeated = excluded.repeated, refused = excluded.refused, finished_at = now()
+       RETURNING xmax = 0 AS appeared`,
       [batch.id, batch.source, batch.origin, batch.history, actor.name, result.repeated, result.refused],
     );
+    if (rows[0]?.appeared) tell(batchTelling(batch, null));
     const parameters: unknown[] = [];
     const given = rowsAsQuery(REFUSAL_COLUMNS, listed, parameters);
     const columns = columnNames(REFUSAL_COLUMNS);

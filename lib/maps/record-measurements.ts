@@ -1,9 +1,10 @@
 import type { Pool, PoolClient } from 'pg';
 import { may, type Actor } from '@/lib/access/actor';
 import { refusalOf } from '@/lib/access/refusal';
+import { appendWithin } from '@/lib/access/append-within';
+import { audited, type Tell } from '@/lib/access/audited';
 import { getPool } from '@/lib/database/client';
 import { takeIds } from '@/lib/database/take-ids';
-import { inTransaction } from '@/lib/database/transaction';
 import { AppError } from '@/lib/errors';
 import { judgedLine, LineTooShort } from '@/lib/excursions/judged-line';
 import { joinedMembers } from '@/lib/excursions/joined-members';
@@ -11,7 +12,7 @@ import { isPlain, withIds, writeFindings, type JudgedLine } from '@/lib/excursio
 import { loadDesks, putDeskBack, reachesBackTo, takeDesk, type Desk } from './desk';
 import { earlierOutcomes } from './earlier-outcomes';
 import { measuredWafer } from './measured-wafer';
-import { recordStatement, type Batch } from './record-statement';
+import { batchTelling, recordStatement, type Batch, type Written } from './record-statement';
 import type { Measurement, Outcome } from './types';
 import { subgroupKey, type WaferRow } from './wafer-rows';
 
@@ -65,8 +66,12 @@ async function recordedAlone(
   const work = worked(desk, actor, batch, [{ measurement, id }], () => subgroupId);
   if (work === null || !isPlain(work.judged)) return null;
   try {
-    const { rows } = await pool.query<{ streams: number }>(recordStatement([work.judged], work.rows, batch));
-    if (rows[0]?.streams !== 1) return null;
+    const told = { actor, ...batchTelling(batch, batch.goesOn === true ? null : streamId) };
+    const answer = await appendWithin(told, async (client, entries) => {
+      const { rows } = await client.query<Written>(recordStatement([work.judged], work.rows, batch, entries));
+      return rows[0] as Written;
+    });
+    if (answer?.streams !== 1) return null;
   } catch (error) {
     if (isUniqueViolation(error)) return null;
     throw error;
@@ -84,8 +89,8 @@ async function recordedTogether(
   wholeLines = false,
 ): Promise<Outcome[]> {
   try {
-    const { outcomes, desks } = await inTransaction((client) =>
-      written(pool, client, actor, batch, measurements, wholeLines),
+    const { outcomes, desks } = await audited(actor, (client, tell) =>
+      written(pool, client, tell, actor, batch, measurements, wholeLines),
     );
     for (const desk of desks) putDeskBack(pool, desk);
     return outcomes;
@@ -98,6 +103,7 @@ async function recordedTogether(
 async function written(
   pool: Pool,
   client: PoolClient,
+  tell: Tell,
   actor: Actor,
   batch: Batch,
   measurements: readonly Measurement[],
@@ -131,9 +137,11 @@ async function written(
   }
   if (rows.length > 0) {
     await withIds(pool, judged, client);
-    const { rows: answer } = await client.query<{ streams: number }>(recordStatement(judged, rows, batch));
-    if (answer[0]?.streams !== judged.length)
-      throw new Error('A stream that was held moved on all the same.');
+    const { rows: answers } = await client.query<Written>(recordStatement(judged, rows, batch, []));
+    const [answer] = answers;
+    if (answer?.streams !== judged.length) throw new Error('A stream that was held moved on all the same.');
+    const [streamId] = deskOf.size === 1 && batch.goesOn !== true ? deskOf.keys() : [];
+    if (answer.appeared) tell(batchTelling(batch, streamId ?? null));
     await writeFindings(client, judged, actor.name, batch.at ?? new Date());
   }
   return { outcomes: outcomes as Outcome[], desks: [...deskOf.values()] };

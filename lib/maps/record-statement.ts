@@ -1,3 +1,4 @@
+import { ENTRY_COLUMNS, type LinkedEntry, type Telling } from '@/lib/access/audit-entry';
 import { columnLiterals, columnNames, columnsAsQuery } from '@/lib/database/columnar';
 import { POINT_COLUMNS } from '@/lib/excursions/line-rows';
 import { pointLiterals, pointsStatement, type JudgedLine } from '@/lib/excursions/write-judgement';
@@ -17,39 +18,54 @@ export interface Batch {
   at?: Date;
 }
 
+/** What the statement answers. */
+export interface Written {
+  streams: number;
+  /** Whether the batch was not there before; then the entries for the audit trail were written too. */
+  appeared: boolean;
+}
+
 /** The parameters before those of points, wafers and readings: the streams as judged, and the batch. */
 const OWN_PARAMETERS = 9;
 
 const GUARD = 'JOIN moved ON moved.id = given.stream_id';
 const FIRST_WAFER = OWN_PARAMETERS + POINT_COLUMNS.length + 1;
 const FIRST_READING = FIRST_WAFER + WAFER_COLUMNS.length;
+const FIRST_ENTRY = FIRST_READING + READING_COLUMNS.length;
 
-const TEXT = `WITH moved AS (
-    UPDATE stream SET version = stream.version + 1
-    FROM unnest($1::bigint[], $2::bigint[]) AS judged (id, version)
-    WHERE stream.id = judged.id AND stream.version = judged.version RETURNING stream.id
+/** A stream that someone else holds is passed over, not waited for: xmax is 0 in a row that was new. */
+const TEXT = `WITH free AS (
+    SELECT stream.id FROM unnest($1::bigint[], $2::bigint[]) AS judged (id, version)
+    JOIN stream ON stream.id = judged.id AND stream.version = judged.version FOR NO KEY UPDATE OF stream SKIP LOCKED
+  ), moved AS (
+    UPDATE stream SET version = stream.version + 1 FROM free WHERE stream.id = free.id RETURNING stream.id
   ), filed AS (
     INSERT INTO intake_batch (id, source, origin, history, actor, recorded, finished_at)
     SELECT $3::bigint, $4::text, $5::text, $6::boolean, $7::text, $8::integer,
       CASE WHEN $9::boolean THEN NULL ELSE now() END WHERE EXISTS (SELECT FROM moved)
     ON CONFLICT (id) DO UPDATE SET recorded = intake_batch.recorded + excluded.recorded
+    RETURNING xmax = 0 AS appeared
   ), placed AS (${pointsStatement(OWN_PARAMETERS + 1, GUARD)}), measured AS (
     INSERT INTO wafer_measurement (${columnNames(WAFER_COLUMNS)})
     SELECT given.* FROM ${columnsAsQuery(WAFER_COLUMNS, FIRST_WAFER)} given ${GUARD}
   ), kept AS (
     INSERT INTO wafer_reading (${columnNames(READING_COLUMNS)})
     SELECT given.* FROM ${columnsAsQuery(READING_COLUMNS, FIRST_READING)} given ${GUARD}
-  ) SELECT count(*)::integer AS streams FROM moved`;
+  ), told AS (
+    INSERT INTO audit_entry (${columnNames(ENTRY_COLUMNS)})
+    SELECT given.* FROM ${columnsAsQuery(ENTRY_COLUMNS, FIRST_ENTRY)} given WHERE (SELECT appeared FROM filed)
+  ) SELECT count(*)::integer AS streams, coalesce((SELECT appeared FROM filed), false) AS appeared FROM moved`;
 
 /**
  * One statement that writes measurements, their readings, their subgroups and their batch, if every stream still has
- * the version that was judged; where one has moved on nothing of that stream is written. Answers with the number of
- * streams written. Its text is always the same, so that the server plans it once.
+ * the version that was judged and nobody holds it; nothing of another stream is written. Its text is always the same,
+ * so that the server plans it once.
  */
 export function recordStatement(
   judged: readonly JudgedLine[],
   rows: readonly WaferRow[],
   batch: Batch,
+  entries: readonly LinkedEntry[],
 ): { name: string; text: string; values: unknown[] } {
   const values = [
     judged.map(({ line }) => line.streamId),
@@ -64,6 +80,18 @@ export function recordStatement(
     ...pointLiterals(judged),
     ...columnLiterals(WAFER_COLUMNS, rows),
     ...columnLiterals(READING_COLUMNS, rows),
+    ...columnLiterals(ENTRY_COLUMNS, entries),
   ];
   return { name: 'record', text: TEXT, values };
+}
+
+/** What is told of a batch when it appears; of one stream, where it holds no other. */
+export function batchTelling(batch: Batch, streamId: string | null): Telling {
+  const { id, source, origin, history } = batch;
+  return {
+    action: 'recorded maps',
+    subject: { kind: 'batch', id },
+    streamId,
+    after: { source, origin, history },
+  };
 }

@@ -16,6 +16,8 @@ export interface ScratchServer {
 
 export async function scratchServer(): Promise<ScratchServer> {
   const folder = mkdtempSync(path.join(tmpdir(), 'evenohm-bench-'));
+  process.env['EVENOHM_DATA'] = folder;
+  process.env['EVENOHM_SECRET'] = randomBytes(24).toString('hex');
   const server = await startEmbeddedServer(folder, () => undefined);
   return {
     use: async () => {
