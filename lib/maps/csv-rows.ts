@@ -1,3 +1,4 @@
+import { isUtf8 } from 'node:buffer';
 import { unreadable } from './unreadable-file';
 
 const LONGEST_RECORD = 1 << 20;
@@ -10,52 +11,55 @@ const LONGEST_RECORD = 1 << 20;
 export async function* csvPieces(
   bytes: Iterable<Uint8Array> | AsyncIterable<Uint8Array>,
 ): AsyncGenerator<string> {
-  const decoder = new TextDecoder('utf-8', { fatal: true });
   let line = 1;
-  let rest = '';
-  const spoilt = (reason: string, before: string) =>
-    unreadable(reason, line + lineEnds(rest) + lineEnds(before));
-  const decoded = (chunk?: Uint8Array) => {
-    try {
-      return chunk === undefined ? decoder.decode() : decoder.decode(chunk, { stream: true });
-    } catch {
-      const readable = new TextDecoder().decode(chunk);
-      throw spoilt('this is not text in UTF-8', readable.slice(0, Math.max(0, readable.indexOf('\uFFFD'))));
+  let rest: Uint8Array = new Uint8Array(0);
+  let isFirst = true;
+  const textOf = (piece: Uint8Array): string => {
+    const text = Buffer.from(piece.buffer, piece.byteOffset, piece.byteLength).toString();
+    if (!isUtf8(piece)) {
+      const before = text.slice(0, text.indexOf('\uFFFD'));
+      throw unreadable('this is not text in UTF-8', line + before.split('\n').length - 1);
     }
+    const hasMark = isFirst && text.startsWith('\uFEFF');
+    isFirst = false;
+    return hasMark ? text.slice(1) : text;
   };
   for await (const chunk of bytes) {
     const zero = chunk.indexOf(0);
     if (zero !== -1)
-      throw spoilt('this is a binary file, not text', new TextDecoder().decode(chunk.subarray(0, zero)));
-    rest += decoded(chunk);
+      throw unreadable(
+        'this is a binary file, not text',
+        line + lineEnds(rest) + lineEnds(chunk.subarray(0, zero)),
+      );
+    rest = rest.length === 0 ? chunk : Buffer.concat([rest, chunk]);
     const end = lastRecordEnd(rest);
     if (end === 0 && rest.length > LONGEST_RECORD) {
-      yield rest;
+      yield Buffer.from(rest).toString();
       throw unreadable('a row is longer than a megabyte', line);
     }
     if (end === 0) continue;
-    const piece = rest.slice(0, end);
-    yield piece;
+    const piece = rest.subarray(0, end);
+    yield textOf(piece);
     line += lineEnds(piece);
-    rest = rest.slice(end);
+    rest = rest.subarray(end);
   }
-  rest += decoded();
-  if (rest !== '') yield rest;
+  const last = textOf(rest);
+  if (last !== '') yield last;
 }
 
-function lineEnds(text: string): number {
+function lineEnds(bytes: Uint8Array): number {
   let count = 0;
-  for (let at = text.indexOf('\n'); at !== -1; at = text.indexOf('\n', at + 1)) count += 1;
+  for (let at = bytes.indexOf(10); at !== -1; at = bytes.indexOf(10, at + 1)) count += 1;
   return count;
 }
 
-/** Where the last whole record of the text ends: behind the last line end outside quotes. */
-function lastRecordEnd(text: string): number {
-  if (!text.includes('"')) return text.lastIndexOf('\n') + 1;
+/** Where the last whole record of the bytes ends: behind the last line end outside quotes. */
+function lastRecordEnd(bytes: Uint8Array): number {
+  if (!bytes.includes(34)) return bytes.lastIndexOf(10) + 1;
   let quoted = false;
   let end = 0;
-  for (let i = 0; i < text.length; i += 1) {
-    const code = text.charCodeAt(i);
+  for (let i = 0; i < bytes.length; i += 1) {
+    const code = bytes[i];
     if (code === 34) quoted = !quoted;
     else if (code === 10 && !quoted) end = i + 1;
   }
@@ -105,7 +109,7 @@ function quotedRow(
       if (close === -1) throw unreadable('a quote is opened here and never closed', line + newlines);
       const cell = text.slice(position + 1, close).replaceAll('""', '"');
       cells.push(cell);
-      newlines += lineEnds(cell);
+      newlines += cell.split('\n').length - 1;
       end = close + 1;
       if (text.startsWith('\r\n', end) || (text.charCodeAt(end) === 13 && end + 1 === text.length)) end += 1;
       if (end < text.length && text[end] !== ',' && text[end] !== '\n')

@@ -1,3 +1,4 @@
+import { detached } from './detached';
 import type { RawMap } from './raw-maps';
 import { CORRECTIONS, type MeasurementFacts } from './types';
 import type { WaferColumn } from './map-columns';
@@ -24,7 +25,7 @@ export function readFacts(
 ): { facts: MeasurementFacts; diameterMm: number | null; faults: WordFault[] } {
   const faults: WordFault[] = [];
   const word = (column: WaferColumn): string | null => {
-    const text = detached(words[column] || defaults[column]);
+    const text = detached(words[column] || defaults[column] || '');
     const most = column === 'note' ? LONGEST_NOTE : LONGEST_NAME;
     if (text.length > most) faults.push({ column, reason: `this is longer than ${most} characters` });
     return text.slice(0, most) || null;
@@ -95,13 +96,9 @@ export function readFacts(
 
 /** Whether the day of a time is one of its month: a `Date` takes 30 February for 2 March. */
 function isDay(text: string): boolean {
+  if (Number(text.slice(8, 10)) <= 28) return true;
   const [year = 0, month = 0, day = 0] = text.slice(0, 10).split('-').map(Number);
   return day <= new Date(Date.UTC(year, month, 0)).getUTCDate();
-}
-
-/** A copy of its own: a piece of a larger text would keep the whole of that text in memory. */
-function detached(text: string | undefined): string {
-  return text === undefined ? '' : Buffer.from(text).toString();
 }
 
 /** Without a word of its own a resistivity or sheet resistance has had every correction. */

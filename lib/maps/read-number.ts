@@ -1,7 +1,6 @@
-const NUMBER = /^[+-]?(\d+\.?\d*|\.\d+)([eE][+-]?\d+)?$/;
+import { plainNumber } from './plain-number';
 
-/** Beyond this size the square of a number is infinite, and no figure can be worked out of it. */
-const LARGEST = 1e150;
+const read = new Float64Array(1);
 
 /**
  * A cell as a number; null when it is empty, NaN when it is no finite number in decimal notation.
@@ -9,12 +8,8 @@ const LARGEST = 1e150;
  * @example readNumber(' 1.5e3') // 1500
  */
 export function readNumber(cell: string): number | null {
-  if (NUMBER.test(cell)) return finite(Number(cell));
+  if (plainNumber(cell, 0, read, 0) === cell.length) return read[0] as number;
   const trimmed = cell.trim();
   if (trimmed === '') return null;
-  return NUMBER.test(trimmed) ? finite(Number(trimmed)) : NaN;
-}
-
-function finite(value: number): number {
-  return Math.abs(value) <= LARGEST ? value : NaN;
+  return plainNumber(trimmed, 0, read, 0) === trimmed.length ? (read[0] as number) : NaN;
 }

@@ -1,6 +1,7 @@
+import { detached } from './detached';
 import type { MapHeader } from './map-columns';
+import { plainNumber } from './plain-number';
 import type { RawMap } from './raw-maps';
-import { readNumber } from './read-number';
 
 /** What the rows of one wafer share to the letter: all before and all behind their place and value. */
 export interface RowFrame {
@@ -8,18 +9,21 @@ export interface RowFrame {
   suffix: string;
 }
 
-/** Where place and value stand within their three neighbouring cells; null where they are not neighbours. */
+/** Where place and value stand within their three neighbouring cells, and what the places of a file look like. */
 export interface RowCore {
   first: number;
   x: number;
   y: number;
   value: number;
+  /** The two cells before the value as the last wafer had them in this row: most files repeat one site plan. */
+  known: { text: string; numbers: readonly [number, number] }[];
 }
 
+/** The core of a file's rows; null where place and value are not neighbours, the value last. */
 export function rowCore({ x, y, value }: MapHeader): RowCore | null {
-  const first = Math.min(x, y, value);
-  return Math.max(x, y, value) - first === 2
-    ? { first, x: x - first, y: y - first, value: value - first }
+  const first = Math.min(x, y);
+  return Math.abs(x - y) === 1 && value === first + 2
+    ? { first, x: x - first, y: y - first, value: 2, known: [] }
     : null;
 }
 
@@ -33,6 +37,8 @@ export function rowFrame(core: RowCore, cells: readonly string[]): RowFrame | nu
     suffix: behind.map((cell) => `,${cell}`).join(''),
   };
 }
+
+const COMMA = 44;
 
 /**
  * Reads rows of text without quotes as long as they repeat the wafer's words to the letter and hold three plain
@@ -48,32 +54,34 @@ export function repeatedRows(
 ): { position: number; rows: number } {
   let position = from;
   let rows = 0;
-  const cells = [NaN, NaN, NaN];
+  const cells = new Float64Array(3);
   while (position < text.length && text.startsWith(frame.prefix, position)) {
-    const lineEnd = text.indexOf('\n', position);
-    const next = lineEnd === -1 ? text.length : lineEnd + 1;
-    let end = lineEnd === -1 ? text.length : lineEnd;
-    if (text.charCodeAt(end - 1) === 13) end -= 1;
-    const coreEnd = end - frame.suffix.length;
-    let start = position + frame.prefix.length;
-    if (coreEnd < start || (frame.suffix !== '' && !text.startsWith(frame.suffix, coreEnd))) break;
-    for (let i = 0; i < 3; i += 1) {
-      const comma = i === 2 ? coreEnd : text.indexOf(',', start);
-      const isInside = comma !== -1 && comma <= coreEnd;
-      const value = isInside ? readNumber(text.slice(start, comma)) : NaN;
-      cells[i] = value ?? NaN;
-      start = comma + 1;
+    const start = position + frame.prefix.length;
+    const known = core.known[map.values.length];
+    let end: number;
+    if (known !== undefined && text.startsWith(known.text, start)) {
+      [cells[0], cells[1]] = known.numbers;
+      end = start + known.text.length;
+    } else {
+      end = plainNumber(text, start, cells, 0);
+      if (end === -1 || text.charCodeAt(end) !== COMMA) break;
+      end = plainNumber(text, end + 1, cells, 1);
+      if (end === -1 || text.charCodeAt(end) !== COMMA) break;
+      end += 1;
+      const numbers = [cells[0] as number, cells[1] as number] as const;
+      core.known[map.values.length] = { text: detached(text.slice(start, end)), numbers };
     }
-    const x = cells[core.x] as number;
-    const y = cells[core.y] as number;
-    const value = cells[core.value] as number;
-    if (Number.isNaN(x) || Number.isNaN(y) || Number.isNaN(value)) break;
-    map.xMm.push(x);
-    map.yMm.push(y);
-    map.values.push(value);
+    end = plainNumber(text, end, cells, 2);
+    if (end === -1 || !text.startsWith(frame.suffix, end)) break;
+    end += frame.suffix.length;
+    if (text.charCodeAt(end) === 13) end += 1;
+    if (end < text.length && text.charCodeAt(end) !== 10) break;
+    map.xMm.push(cells[core.x] as number);
+    map.yMm.push(cells[core.y] as number);
+    map.values.push(cells[core.value] as number);
     map.lines.push(line + rows);
     rows += 1;
-    position = next;
+    position = end + 1;
   }
-  return { position, rows };
+  return { position: Math.min(position, text.length), rows };
 }

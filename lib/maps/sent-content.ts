@@ -1,5 +1,5 @@
-import { createHash } from 'node:crypto';
-import { arrayLiteral } from '@/lib/database/columnar';
+import { hash } from 'node:crypto';
+import { readingsLiteral } from './readings-literal';
 import type { Measurement } from './types';
 
 /** What was sent, as it is written and as it is told apart. */
@@ -41,9 +41,9 @@ export function sentContent(measurement: Measurement): SentContent {
     correctionsApplied.join(' '),
     note,
   ];
-  const readings = arrayLiteral(measurement.readings);
+  const readings = readingsLiteral(measurement.readings);
   const text = JSON.stringify([words, more]) + readings;
-  const content = { readings, hash: createHash('sha256').update(text).digest('hex').slice(0, 32) };
+  const content = { readings, hash: hash('sha256', text).slice(0, 32) };
   known.set(measurement, content);
   return content;
 }
