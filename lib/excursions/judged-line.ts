@@ -1,9 +1,9 @@
 import { LOOK_BACK } from '@/lib/control/completions-at';
 import { signalEpisodes } from '@/lib/control/signal-episodes';
-import { firstLimits } from './first-limits';
+import { firstLimits, mayPropose } from './first-limits';
 import { joinedCases } from './joined-cases';
 import { chartedPoints, isOpen, judgedPoints } from './judged-points';
-import { FIRST_BASELINE, JOIN_WITHIN_SUBGROUPS, type Line, type LineChange, type LinePoint } from './line';
+import { JOIN_WITHIN_SUBGROUPS, type Line, type LineChange, type LinePoint } from './line';
 import { reconciledSignals } from './reconciled-signals';
 import { signalsOnRecord } from './signals-on-record';
 import { specificationEpisodes } from './specification-episodes';
@@ -35,7 +35,7 @@ export function judgedLine(
 
   const charted = chartedPoints(line);
   // First limits are drawn from the beginning of a stream: long after it where its first wafers could not be judged.
-  if (!line.whole && line.limits.length === 0 && charted.length >= FIRST_BASELINE) throw new LineTooShort();
+  if (!line.whole && mayPropose(line, charted)) throw new LineTooShort();
   const onRecord = signalsOnRecord(line, charted, chartStart, start);
   const judged = line.points.slice(start);
   const before = judged.map(fingerprint);

@@ -2,6 +2,7 @@ import type { Actor } from '@/lib/access/actor';
 import type { SubgroupPoint } from '@/lib/control/limit-set';
 import { getPool, getPrisma } from '@/lib/database/client';
 import type { Prisma } from '@/lib/database/generated/client';
+import { FIRST_BASELINE } from '@/lib/excursions/line';
 import { judgesAfter, limitSetOf } from '@/lib/excursions/line-rows';
 import type { ControlStatistic } from '@/lib/streams/types';
 import type { LimitRevision, LimitState } from './types';
@@ -54,6 +55,24 @@ export async function listLimitsInForce(_actor: Actor): Promise<LimitsInForce[]>
      ORDER BY stream_id, effective_from DESC, revision DESC`,
   );
   return rows;
+}
+
+/** How far a stream is on its way to its first limits. */
+export interface FirstLevels {
+  /** Judged subgroups, counted up to the 25 that make first limits. */
+  judged: number;
+  /** Their levels are all equal: then no limits come of them. */
+  alike: boolean;
+}
+
+export async function findFirstLevels(_actor: Actor, streamId: string): Promise<FirstLevels> {
+  const { rows } = await getPool().query<FirstLevels>(
+    `SELECT count(*)::integer AS judged, coalesce(max(level) - min(level) <= 1e-12 * abs(min(level)), false) AS alike
+     FROM (SELECT level FROM subgroup WHERE stream_id = $1 AND state = 'judged'
+       ORDER BY position_at, key LIMIT ${FIRST_BASELINE}) begun`,
+    [streamId],
+  );
+  return rows[0] ?? { judged: 0, alike: false };
 }
 
 /** The span of a stream's latest judged subgroups, at most so many; null while there are fewer than two. */

@@ -1,5 +1,6 @@
 import type { ClientBase } from 'pg';
 import type { Actor } from '@/lib/access/actor';
+import { hasRoom } from '@/lib/control/has-room';
 import { limitSet, type LimitSet } from '@/lib/control/limit-set';
 import { columnNames, rowsAsQuery } from '@/lib/database/columnar';
 import { inTransaction } from '@/lib/database/transaction';
@@ -25,7 +26,7 @@ export async function draftLimits(
   if (points.length < 2)
     return { ok: false, reason: `That span holds ${points.length} judged subgroups; limits need two.` };
   const limits = limitSet(points);
-  if (limits.level.sigma === 0)
+  if (!hasRoom(limits))
     return { ok: false, reason: 'All levels of that span are equal: no limits come of it.' };
   const baselineIds = points.map((point) => point.id);
   await inTransaction((client) =>
@@ -148,7 +149,7 @@ export async function changeScreening(
     if (points !== null && points.length < 2)
       return { ok: false, reason: 'The baseline in force leaves too few wafers under that screening.' };
     const limits = points === null ? null : limitSet(points);
-    if (limits?.level.sigma === 0)
+    if (limits !== null && !hasRoom(limits))
       return { ok: false, reason: 'Under that screening all levels of the baseline are equal.' };
     const newest = await newestProcessedAt(client, streamId);
     const at = new Date(Math.max(Date.now(), newest?.getTime() ?? 0));

@@ -1,5 +1,6 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { getPool } from '@/lib/database/client';
+import { findFirstLevels } from '@/lib/limits/data';
 import { approveLimits, changeScreening, discardLimits, draftLimits } from '@/lib/limits/mutations';
 import { freshDatabase, type FreshDatabase } from '../support/fresh-database';
 import {
@@ -86,6 +87,11 @@ describe('the first limits', () => {
       Array.from({ length: 26 }, (_, i) => ({ ...wafer(id, i), readings: wafer(id, 0, 10).readings })),
     );
     expect(await revisionsOf(id)).toEqual([]);
+    expect(await findFirstLevels(actor, id)).toEqual({ judged: 25, alike: true });
+    await record(Array.from({ length: 24 }, (_, i) => wafer(id, 26 + i)));
+    expect(await revisionsOf(id)).toMatchObject([
+      { state: 'provisional', subgroups: 25, effective_from: hour(49) },
+    ]);
   });
 });
 

@@ -1,8 +1,11 @@
 import { describe, expect, it } from 'vitest';
-import { add, emptyLine, LineStore } from './line-store';
+import { add, emptyLine, LineStore, outcome, trim } from './line-store';
 import { quiet, revision, wafers } from './streams';
 
 const setting = { subgroupSize: 1, limits: [revision(1, 0)], restarts: [] };
+
+/** Levels of a gauge that is stuck. */
+const alike = (count: number): number[] => Array.from({ length: count }, () => 1);
 
 describe('the first limits', () => {
   it('are proposed by the first 25 subgroups and judge what comes after them', () => {
@@ -31,9 +34,44 @@ describe('the first limits', () => {
     expect(points.at(-1)?.limits).toBe(limits[0]);
   });
 
-  it('are not proposed by subgroups that do not vary, nor beside others', () => {
+  it('are not proposed by subgroups that do not vary, or in their last bits only, nor beside others', () => {
     const line = emptyLine({ ...setting, limits: [] });
-    expect(add(line, wafers(Array.from({ length: 30 }, () => 1))).limits).toBeNull();
+    expect(
+      add(line, wafers(Array.from({ length: 30 }, (_, i) => 10 * (1 + (i % 2) * 2e-16)))).limits,
+    ).toBeNull();
     expect(add(emptyLine(setting), wafers(quiet(30))).limits).toBeNull();
+  });
+
+  it('come of the first 25 as ever where only some of these are equal', () => {
+    const line = emptyLine({ ...setting, limits: [] });
+    const { limits } = add(line, wafers([...alike(24), ...quiet(40)]));
+    expect(limits).toMatchObject({ effectiveFrom: 250, limits: { n: 25 } });
+  });
+
+  it('come, where the first 25 are all equal, of the 25 that begin with the last of the equal ones', () => {
+    const levels = [...alike(100), ...quiet(40)];
+    const atOnce = emptyLine({ ...setting, limits: [] });
+    const { limits } = add(atOnce, wafers(levels));
+    expect(limits?.baselineIds).toEqual(atOnce.points.slice(99, 124).map(({ id }) => id));
+    expect(limits?.effectiveFrom).toBe(1240);
+    const store = new LineStore({ ...setting, limits: [] });
+    let line = emptyLine(store.setting);
+    for (const one of wafers(levels)) {
+      line = store.record(line, [one]);
+      trim(line);
+    }
+    expect(outcome(store.load(-Infinity))).toEqual(outcome(atOnce));
+  });
+
+  it('are waited for without ever loading the whole stream while its levels stay equal', () => {
+    const store = new LineStore({ ...setting, limits: [] });
+    const record = (levels: readonly number[], since: number) => {
+      for (const one of wafers(levels, since)) store.record(store.load(one.at), [one]);
+    };
+    record(alike(300), 0);
+    expect(store.wholeLoads).toBe(0);
+    record(quiet(60), 300);
+    expect(store.setting.limits).toHaveLength(1);
+    expect(store.wholeLoads).toBeLessThanOrEqual(25);
   });
 });

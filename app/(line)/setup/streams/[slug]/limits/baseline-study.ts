@@ -1,3 +1,4 @@
+import { hasRoom } from '@/lib/control/has-room';
 import { limitSet, type LimitSet } from '@/lib/control/limit-set';
 import type { BaselinePoint } from '@/lib/limits/data';
 
@@ -17,7 +18,7 @@ export function baselineStudy(
     return { limits: null, reason: `${found} in this span; limits need two at least, and 25 to be of use.` };
   }
   const limits = limitSet(points);
-  if (limits.level.sigma === 0) {
+  if (!hasRoom(limits)) {
     return { limits: null, reason: 'All levels of this span are equal: no limits come of it.' };
   }
   const beyond = points.flatMap((point, i): BeyondPoint[] => {

@@ -1,8 +1,8 @@
 import type { Metadata } from 'next';
 import { SectionHead } from '@/app/_ui/section-head';
-import { localActor } from '@/lib/access/local-actor';
+import { signedIn } from '@/app/page-actor';
 import { readEnvironment } from '@/lib/env';
-import { listLimitRevisions } from '@/lib/limits/data';
+import { findFirstLevels, listLimitRevisions } from '@/lib/limits/data';
 import { siteTimeField } from '@/lib/site-time';
 import { foundStream } from '../../../found-stream';
 import { StreamHead } from '../../../stream-head';
@@ -10,7 +10,7 @@ import { chartedText } from './charted-text';
 import { DraftFromSpan } from './draft-from-span';
 import { InheritedForm } from './inherited-form';
 import { LimitTable } from './limit-table';
-import { limitsAnswer, revisionInForce } from './limits-answer';
+import { isStuck, limitsAnswer, revisionInForce } from './limits-answer';
 import { PendingLimits } from './pending-limits';
 
 export const metadata: Metadata = { title: 'Limits' };
@@ -19,17 +19,25 @@ export default async function LimitsPage(props: {
   params: Promise<{ slug: string }>;
   searchParams: Promise<Record<string, string | string[]>>;
 }) {
-  const actor = localActor();
+  const actor = await signedIn('see-line');
   const { stream } = await foundStream(actor, props.params);
   const revisions = await listLimitRevisions(actor, stream.id);
   const { siteTimeZone: timeZone } = readEnvironment();
   const now = new Date();
   const current = revisionInForce(revisions, now);
+  const begun = current === null ? await findFirstLevels(actor, stream.id) : null;
   const text = chartedText(stream);
   const nowField = siteTimeField(now, timeZone);
   return (
     <>
-      <StreamHead stream={stream} place="Limits" answer={limitsAnswer(stream.name, current)} />
+      <StreamHead stream={stream} place="Limits" answer={limitsAnswer(stream.name, current, begun)} />
+      {begun !== null && isStuck(begun) && (
+        <p>
+          Levels that never vary mean a stuck gauge or copied readings: look there first. Limits come by
+          themselves of the 25 subgroups that begin with the last of the equal ones; until then nothing but
+          the specification judges.
+        </p>
+      )}
       <PendingLimits
         slug={stream.slug}
         revisions={revisions}
