@@ -1,6 +1,7 @@
 import { getPool } from '@/lib/database/client';
 import { AppError } from '@/lib/errors';
 import { may, type Actor } from './actor';
+import { isFourEyes } from './four-eyes';
 import type { Permission } from './permission';
 import { refusalOf } from './refusal';
 import type { Person, TokenOnRecord } from './types';
@@ -37,6 +38,11 @@ export async function listTokens(actor: Actor): Promise<TokenOnRecord[]> {
      FROM access_token ORDER BY created_at DESC, id DESC`,
   );
   return rows;
+}
+
+/** Whether limits may be approved only by someone other than who drew them up. */
+export function findFourEyes(actor: Actor): Promise<boolean> {
+  return isFourEyes(actor, getPool());
 }
 
 function insist(actor: Actor, permission: Permission): void {

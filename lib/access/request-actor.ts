@@ -5,6 +5,7 @@ import { readEnvironment } from '@/lib/env';
 import { provenActor, type Actor, type Grant } from './actor';
 import { isDemonstrationOffered } from './demonstration';
 import { isFromThisMachine } from './first-administrator';
+import { requestOrigin } from './request-origin';
 import { ADDRESS_HEADER, siteAddress } from './requested-address';
 import { provenSessionToken } from './session-cookie';
 import { findTokenActor } from './token-actor';
@@ -52,6 +53,11 @@ async function findSessionActor(token: string, withDemonstration: boolean): Prom
 /** The address that the page being made was asked for by, to come back to after sign-in. */
 export async function requestedAddress(): Promise<string> {
   return siteAddress((await headers()).get(ADDRESS_HEADER));
+}
+
+/** The origin by which this server was asked, for links that are handed on. */
+export async function requestedOrigin(): Promise<string> {
+  return requestOrigin(await headers());
 }
 
 /** Whether the page being made was asked for at the machine itself. */
