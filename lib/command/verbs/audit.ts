@@ -1,0 +1,76 @@
+import { parseArgs } from 'node:util';
+import { verifyAudit, type AuditVerdict, type BrokenPlace } from '@/lib/access/verify-audit';
+import { openDatabase } from '@/lib/database/connection';
+import { UsageError, type ExitStatus, type Verb, type VerbOutput } from '../verb';
+
+export const audit: Verb = {
+  name: 'audit',
+  summary: 'verify the audit trail',
+  usage: `evenohm audit --verify [--head FILE]… [--json]
+
+  --verify     follow the chain of entries and name each place where it does not hold
+  --head FILE  hold it against the head that another instance kept (audit-head-… in its data folder) as well
+  --json       one JSON object on standard output: entries, heads, broken
+
+Needs the secret that the entries were written with: EVENOHM_SECRET, or the file in the data folder. Ends with 3 where
+the chain is broken.`,
+  run: verify,
+};
+
+async function verify(args: string[], output: VerbOutput): Promise<ExitStatus> {
+  const { verify: asked, head = [], json } = parsed(args);
+  if (asked !== true) throw new UsageError('say --verify');
+  const database = await openDatabase({ say: output.say });
+  try {
+    const verdict = await verifyAudit(head);
+    if (json === true) output.out(JSON.stringify(verdict));
+    else for (const line of verdictLines(verdict)) output.out(line);
+    return verdict.broken.length > 0 ? 3 : 0;
+  } finally {
+    await database.close();
+  }
+}
+
+function parsed(args: string[]) {
+  try {
+    const { values } = parseArgs({
+      args,
+      options: {
+        verify: { type: 'boolean' },
+        head: { type: 'string', multiple: true },
+        json: { type: 'boolean' },
+      },
+    });
+    return values;
+  } catch (error) {
+    throw new UsageError(error instanceof Error ? error.message : String(error));
+  }
+}
+
+/** What a verdict says, a line for each broken place. */
+export function verdictLines({ entries, heads, broken }: AuditVerdict): string[] {
+  const kept = heads === 0 ? ' No head of it is kept here, so that a cut end would not show.' : '';
+  if (broken.length === 0) return [`${counted(entries)}, and the chain holds.${kept}`];
+  const [first] = broken;
+  if (first?.fault === 'altered' && first.from === 1 && first.to === entries && entries > 1)
+    return [`${counted(entries)}, and none bears this key: the secret is another, or so is the chain.`];
+  return [
+    `${counted(entries)}, and the chain is broken:${kept}`,
+    ...broken.map((place) => `  ${placeLine(place)}`),
+  ];
+}
+
+function counted(entries: number): string {
+  return `${entries} ${entries === 1 ? 'entry' : 'entries'}`;
+}
+
+const FAULTS: Record<BrokenPlace['fault'], string> = {
+  altered: 'not as written: edited, moved, or written with another key',
+  missing: 'missing',
+  cut: 'missing: cut off the end after they were kept as written',
+  replaced: 'not the one that was kept outside the database',
+};
+
+function placeLine({ from, to, fault }: BrokenPlace): string {
+  return `${from === to ? `entry ${from}` : `entries ${from} to ${to}`}: ${FAULTS[fault]}`;
+}
