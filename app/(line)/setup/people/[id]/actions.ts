@@ -24,6 +24,8 @@ async function changed<Value>(
 }
 
 export async function changeRolesAction(id: string, before: FormState, form: FormData): Promise<FormState> {
+  const asked = await actionActor('manage-people');
+  if (!asked.ok) return refusedForm(before, { message: asked.reason });
   const given = grantsGiven(form);
   if ('reason' in given) return refusedForm(before, { errors: [given] });
   return changed(
