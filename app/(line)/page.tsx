@@ -2,7 +2,7 @@ import Link from 'next/link';
 import { ButtonLink } from '@/app/_ui/button-link';
 import { EmptyState } from '@/app/_ui/empty-state';
 import { PageHead } from '@/app/_ui/page-head';
-import { localActor } from '@/lib/access/local-actor';
+import { signedIn } from '@/app/page-actor';
 import { readEnvironment } from '@/lib/env';
 import { boardAnswer } from '@/lib/excursions/board-answer';
 import { boardRows } from '@/lib/excursions/board-rows';
@@ -15,7 +15,7 @@ import { MeasureAgain } from './measure-again';
 export default async function BoardPage(props: { searchParams: Promise<{ find?: string | string[] }> }) {
   const asked = (await props.searchParams).find;
   const find = (Array.isArray(asked) ? asked[0] : asked)?.trim().slice(0, 100) ?? '';
-  const streams = await listBoardStreams(localActor());
+  const streams = await listBoardStreams(await signedIn('see-line'));
   const rows = boardRows(foundStreams(streams, find));
   const now = new Date();
   const download = `/api/board${find === '' ? '' : `?find=${encodeURIComponent(find)}`}`;

@@ -2,7 +2,7 @@ import type { Metadata } from 'next';
 import { EmptyState } from '@/app/_ui/empty-state';
 import { PageHead } from '@/app/_ui/page-head';
 import { Pager } from '@/app/_ui/pager';
-import { localActor } from '@/lib/access/local-actor';
+import { signedIn } from '@/app/page-actor';
 import { readEnvironment } from '@/lib/env';
 import { listExcursions } from '@/lib/excursions/data';
 import { excursionQuery } from '@/lib/excursions/schema';
@@ -21,7 +21,7 @@ export default async function ExcursionsPage(props: {
   const query = excursionQuery.parse(await props.searchParams);
   const { state, stream, page } = query;
   const skip = (page - 1) * A_PAGE;
-  const found = await listExcursions(localActor(), { state, stream, skip, most: A_PAGE + 1 });
+  const found = await listExcursions(await signedIn('see-line'), { state, stream, skip, most: A_PAGE + 1 });
   const excursions = found.excursions.slice(0, A_PAGE);
   const isMore = found.excursions.length > A_PAGE;
   return (

@@ -3,7 +3,7 @@ import { Beside } from '@/app/_ui/beside';
 import { PageHead } from '@/app/_ui/page-head';
 import { Pager } from '@/app/_ui/pager';
 import { SectionHead } from '@/app/_ui/section-head';
-import { localActor } from '@/lib/access/local-actor';
+import { signedIn } from '@/app/page-actor';
 import { readEnvironment } from '@/lib/env';
 import { formatAge } from '@/lib/format';
 import { listBatches } from '@/lib/maps/data';
@@ -19,7 +19,7 @@ const A_PAGE = 25;
 export default async function IntakePage(props: { searchParams: Promise<{ before?: string }> }) {
   const asked = (await props.searchParams).before ?? '';
   const before = /^\d{1,18}$/.test(asked) ? asked : null;
-  const found = await listBatches(localActor(), { before, most: A_PAGE + 1 });
+  const found = await listBatches(await signedIn('see-line'), { before, most: A_PAGE + 1 });
   const batches = found.slice(0, A_PAGE);
   const [newest] = before === null ? batches : [];
   const last = batches.at(-1);

@@ -1,5 +1,6 @@
 import type { Metadata } from 'next';
 import { PageHead } from '@/app/_ui/page-head';
+import { signedIn } from '@/app/page-actor';
 
 export const metadata: Metadata = { title: 'Methods' };
 
@@ -18,7 +19,8 @@ const METHODS = [
   ['Wafer sizes and thicknesses', 'SEMI M1'],
 ] as const;
 
-export default function MethodsPage() {
+export default async function MethodsPage() {
+  await signedIn('see-line');
   return (
     <>
       <PageHead

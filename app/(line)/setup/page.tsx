@@ -3,7 +3,7 @@ import { ButtonLink } from '@/app/_ui/button-link';
 import { EmptyState } from '@/app/_ui/empty-state';
 import { PageHead } from '@/app/_ui/page-head';
 import { SectionHead } from '@/app/_ui/section-head';
-import { localActor } from '@/lib/access/local-actor';
+import { signedIn } from '@/app/page-actor';
 import { listLimitsInForce } from '@/lib/limits/data';
 import { listSitePlans, listStreams, listStreamSettings } from '@/lib/streams/data';
 import { PlanTable } from './plan-table';
@@ -13,7 +13,7 @@ import { StreamTable } from './stream-table';
 export const metadata: Metadata = { title: 'Setup' };
 
 export default async function SetupPage() {
-  const actor = localActor();
+  const actor = await signedIn('see-line');
   const [streams, plans, limits] = await Promise.all([
     listStreams(actor, { retired: true }),
     listSitePlans(actor),

@@ -4,7 +4,7 @@ import { ButtonLink } from '@/app/_ui/button-link';
 import { DataTable } from '@/app/_ui/data-table';
 import { EmptyState } from '@/app/_ui/empty-state';
 import { PageHead } from '@/app/_ui/page-head';
-import { localActor } from '@/lib/access/local-actor';
+import { signedIn } from '@/app/page-actor';
 import { foundStreams } from '@/lib/excursions/found-streams';
 import { listStreams } from '@/lib/streams/data';
 
@@ -14,7 +14,7 @@ export const metadata: Metadata = { title: 'Streams' };
 export default async function StreamsPage(props: { searchParams: Promise<{ find?: string | string[] }> }) {
   const asked = (await props.searchParams).find;
   const find = (Array.isArray(asked) ? asked[0] : asked)?.trim().slice(0, 100) ?? '';
-  const streams = await listStreams(localActor(), { retired: true });
+  const streams = await listStreams(await signedIn('see-line'), { retired: true });
   const found = foundStreams(streams, find);
   const retired = streams.filter((stream) => stream.retiredAt !== null).length;
   const count = find === '' ? String(found.length) : `${found.length} of ${streams.length}`;

@@ -1,4 +1,4 @@
-import { localActor } from '@/lib/access/local-actor';
+import { routeActor } from '@/app/route-actor';
 import { csvResponse } from '@/lib/csv-response';
 import { type BoardRow, boardRows } from '@/lib/excursions/board-rows';
 import { limitWords } from '@/lib/excursions/board-state';
@@ -33,8 +33,10 @@ const COLUMNS: readonly [string, (row: BoardRow) => string | number | Date | nul
 
 /** The board's rows as a file; `find` filters as on the page. */
 export async function GET(request: Request): Promise<Response> {
+  const actor = await routeActor(request, 'see-line');
+  if (actor instanceof Response) return actor;
   const find = new URL(request.url).searchParams.get('find')?.trim().slice(0, 100) ?? '';
-  const rows = boardRows(foundStreams(await listBoardStreams(localActor()), find));
+  const rows = boardRows(foundStreams(await listBoardStreams(actor), find));
   return csvResponse(
     'board.csv',
     COLUMNS.map(([name]) => name),

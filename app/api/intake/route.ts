@@ -1,15 +1,12 @@
-import { localActor } from '@/lib/access/local-actor';
-import { isSameOrigin } from '@/lib/access/same-origin';
+import { routeActor } from '@/app/route-actor';
 import { AppError, problemResponse } from '@/lib/errors';
 import { keepWaitingFile, MOST_FILE_BYTES, tooLargeWords } from '@/lib/maps/waiting-file';
 
 /** Takes the file that the intake page sends, as the body, and answers with the address of its check. */
 export async function POST(request: Request): Promise<Response> {
   try {
-    if (!isSameOrigin(request.headers)) {
-      throw new AppError('forbidden', 'Files are taken from pages of this server only.');
-    }
-    const actor = localActor();
+    const actor = await routeActor(request, 'record-maps');
+    if (actor instanceof Response) return actor;
     if (Number(request.headers.get('content-length') ?? 0) > MOST_FILE_BYTES) {
       throw new AppError('invalid', tooLargeWords());
     }

@@ -1,5 +1,5 @@
+import { routeActor } from '@/app/route-actor';
 import type { Actor } from '@/lib/access/actor';
-import { localActor } from '@/lib/access/local-actor';
 import { csvResponse, type CsvCell } from '@/lib/csv-response';
 import { AppError, problemResponse } from '@/lib/errors';
 import { findStreamSettings } from '@/lib/streams/data';
@@ -16,7 +16,8 @@ export function streamCsv<const Columns extends readonly string[]>(
   ) => Promise<CsvCell[][]> | CsvCell[][],
 ) {
   return async (request: Request, { params }: { params: Promise<{ slug: string }> }): Promise<Response> => {
-    const actor = localActor();
+    const actor = await routeActor(request, 'see-line');
+    if (actor instanceof Response) return actor;
     const settings = await findStreamSettings(actor, (await params).slug.slice(0, 200));
     if (settings === null) return problemResponse(new AppError('not-found', 'There is no such stream.'));
     try {

@@ -1,12 +1,14 @@
-import { localActor } from '@/lib/access/local-actor';
+import { routeActor } from '@/app/route-actor';
 import { csvResponse } from '@/lib/csv-response';
 import { foundStreams } from '@/lib/excursions/found-streams';
 import { listStreams } from '@/lib/streams/data';
 
 /** Every stream, those out of use too, as a file; `find` filters as on the page. */
 export async function GET(request: Request): Promise<Response> {
+  const actor = await routeActor(request, 'see-line');
+  if (actor instanceof Response) return actor;
   const find = new URL(request.url).searchParams.get('find')?.trim().slice(0, 100) ?? '';
-  const streams = foundStreams(await listStreams(localActor(), { retired: true }), find);
+  const streams = foundStreams(await listStreams(actor, { retired: true }), find);
   return csvResponse(
     'streams.csv',
     [

@@ -2,7 +2,7 @@
 
 import { revalidatePath } from 'next/cache';
 import { doneForm, type FormState, formWords, refusedForm } from '@/app/_ui/form-state';
-import { localActor } from '@/lib/access/local-actor';
+import { actionActor } from '@/app/action-actor';
 import { stepExcursion } from '@/lib/excursions/mutations';
 import { excursionId, excursionStep } from '@/lib/excursions/schema';
 
@@ -15,7 +15,9 @@ const DONE = {
 
 /** Takes an excursion a step further: acknowledge, investigate, note, or close with its cause. */
 export async function takeStep(id: string, before: FormState, form: FormData): Promise<FormState> {
-  const actor = localActor();
+  const asked = await actionActor('comment-case');
+  if (!asked.ok) return refusedForm(before, { message: asked.reason });
+  const { actor } = asked;
   const excursion = excursionId.safeParse(id);
   const step = excursionStep.safeParse(formWords(form));
   if (!excursion.success) return refusedForm(before, { message: 'There is no such excursion.' });

@@ -5,7 +5,7 @@ import { CaseChart } from '@/app/_charts/case-chart';
 import { Notice } from '@/app/_ui/notice';
 import { PageHead } from '@/app/_ui/page-head';
 import { SectionHead } from '@/app/_ui/section-head';
-import { localActor } from '@/lib/access/local-actor';
+import { signedIn } from '@/app/page-actor';
 import { readEnvironment } from '@/lib/env';
 import { caseAnswer, caseExtent, leadSignal } from '@/lib/excursions/case-answer';
 import { findExcursion } from '@/lib/excursions/data';
@@ -28,7 +28,7 @@ export async function generateMetadata({ params }: Props): Promise<Metadata> {
 }
 
 export default async function ExcursionPage({ params }: Props) {
-  const found = await findExcursion(localActor(), (await params).id);
+  const found = await findExcursion(await signedIn('see-line'), (await params).id);
   if (found === null) notFound();
   const timeZone = readEnvironment().siteTimeZone;
   const age = formatAge(Math.max(0, Date.now() - found.openedAt.getTime()));

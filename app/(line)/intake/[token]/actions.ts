@@ -3,7 +3,8 @@
 import { revalidatePath } from 'next/cache';
 import { redirect } from 'next/navigation';
 import { formWords, refusedForm, type FormState } from '@/app/_ui/form-state';
-import { localActor } from '@/lib/access/local-actor';
+import { actionActor } from '@/app/action-actor';
+import { signedIn } from '@/app/page-actor';
 import { readEnvironment } from '@/lib/env';
 import { intakeFile } from '@/lib/maps/mutations';
 import { givenWords } from '@/lib/maps/schema';
@@ -15,7 +16,9 @@ export async function recordFile(
   before: FormState,
   form: FormData,
 ): Promise<FormState> {
-  const actor = localActor();
+  const asked = await actionActor('record-maps');
+  if (!asked.ok) return refusedForm(before, { message: asked.reason });
+  const { actor } = asked;
   const words = formWords(form);
   const sound = words['sound'] !== undefined;
   if (file.faulty > 0 && !sound && words['refusal'] === undefined) {
@@ -44,7 +47,7 @@ export async function recordFile(
 
 /** Throws a waiting file away, unrecorded; one that is being recorded meanwhile is left to that. */
 export async function discardFile(token: string): Promise<void> {
-  const actor = localActor();
+  const actor = await signedIn('record-maps');
   const claimed = await claimWaitingFile(actor, String(token));
   if (claimed !== null) await dropWaitingFile(actor, claimed.token);
   redirect('/intake');

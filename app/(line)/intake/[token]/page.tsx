@@ -3,7 +3,7 @@ import { notFound } from 'next/navigation';
 import { Suspense } from 'react';
 import { PageHead } from '@/app/_ui/page-head';
 import { Waiting } from '@/app/_ui/waiting';
-import { localActor } from '@/lib/access/local-actor';
+import { signedIn } from '@/app/page-actor';
 import { readEnvironment } from '@/lib/env';
 import { findFileHeader } from '@/lib/maps/file-header';
 import { givenWords } from '@/lib/maps/schema';
@@ -19,7 +19,7 @@ interface Props {
 }
 
 export default async function CheckPage(props: Props) {
-  const actor = localActor();
+  const actor = await signedIn('record-maps');
   const file = await findWaitingFile(actor, (await props.params).token);
   if (file === null) notFound();
   const { siteTimeZone } = readEnvironment();

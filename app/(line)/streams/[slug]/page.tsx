@@ -6,7 +6,7 @@ import { ButtonLink } from '@/app/_ui/button-link';
 import { EmptyState } from '@/app/_ui/empty-state';
 import { Notice } from '@/app/_ui/notice';
 import { PageHead } from '@/app/_ui/page-head';
-import { localActor } from '@/lib/access/local-actor';
+import { signedIn } from '@/app/page-actor';
 import { readEnvironment } from '@/lib/env';
 import { findStreamSettings } from '@/lib/streams/data';
 import { chartProps } from './chart-props';
@@ -26,7 +26,7 @@ interface Props {
 
 /** Read once for the title and the page. */
 const settingsOf = cache(async (slug: string) =>
-  /^[a-z0-9][a-z0-9-]*$/.test(slug) ? findStreamSettings(localActor(), slug) : null,
+  /^[a-z0-9][a-z0-9-]*$/.test(slug) ? findStreamSettings(await signedIn('see-line'), slug) : null,
 );
 
 export async function generateMetadata(props: Props): Promise<Metadata> {
@@ -34,11 +34,12 @@ export async function generateMetadata(props: Props): Promise<Metadata> {
 }
 
 export default async function StreamPage(props: Props) {
+  const actor = await signedIn('see-line');
   const settings = await settingsOf((await props.params).slug);
   if (settings === null) notFound();
   const timeZone = readEnvironment().siteTimeZone;
   const { wish, notices } = spanWish(await props.searchParams, timeZone);
-  const view = await readStreamView(localActor(), settings, wish, { timeZone, now: new Date() });
+  const view = await readStreamView(actor, settings, wish, { timeZone, now: new Date() });
   const charts = chartProps(view);
   const beside = (
     <>

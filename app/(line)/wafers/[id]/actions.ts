@@ -2,14 +2,16 @@
 
 import { revalidatePath } from 'next/cache';
 import { doneForm, formWords, refusedForm, type FormState } from '@/app/_ui/form-state';
-import { localActor } from '@/lib/access/local-actor';
+import { actionActor } from '@/app/action-actor';
 import { findWafer } from '@/lib/maps/data';
 import { decideReading } from '@/lib/maps/mutations';
 import { readingDecision } from '@/lib/maps/schema';
 
 /** Takes one reading of a wafer out of its figures, or puts it back. */
 export async function decide(waferId: string, before: FormState, form: FormData): Promise<FormState> {
-  const actor = localActor();
+  const asked = await actionActor('exclude-reading');
+  if (!asked.ok) return refusedForm(before, { message: asked.reason });
+  const { actor } = asked;
   const parsed = readingDecision.safeParse(formWords(form));
   if (!parsed.success) {
     const errors = parsed.error.issues.map(({ path, message }) => ({

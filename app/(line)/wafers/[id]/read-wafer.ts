@@ -1,6 +1,6 @@
 import { cache } from 'react';
-import { localActor } from '@/lib/access/local-actor';
+import { signedIn } from '@/app/page-actor';
 import { findWafer } from '@/lib/maps/data';
 
 /** The wafer of a request, read once for its title and its page. */
-export const readWafer = cache((id: string) => findWafer(localActor(), id));
+export const readWafer = cache(async (id: string) => findWafer(await signedIn('see-line'), id));

@@ -1,4 +1,4 @@
-import { localActor } from '@/lib/access/local-actor';
+import { routeActor } from '@/app/route-actor';
 import { csvResponse } from '@/lib/csv-response';
 import { listExcursions } from '@/lib/excursions/data';
 import { excursionQuery } from '@/lib/excursions/schema';
@@ -8,9 +8,11 @@ const MOST = 100_000;
 
 /** The excursions that the page's filters ask for, all of them, as a file. */
 export async function GET(request: Request): Promise<Response> {
+  const actor = await routeActor(request, 'see-line');
+  if (actor instanceof Response) return actor;
   const asked = Object.fromEntries(new URL(request.url).searchParams);
   const { state, stream } = excursionQuery.parse(asked);
-  const { excursions } = await listExcursions(localActor(), { state, stream, skip: 0, most: MOST });
+  const { excursions } = await listExcursions(actor, { state, stream, skip: 0, most: MOST });
   return csvResponse(
     'excursions.csv',
     [

@@ -1,4 +1,4 @@
-import { localActor } from '@/lib/access/local-actor';
+import { routeActor } from '@/app/route-actor';
 import { csvResponse } from '@/lib/csv-response';
 import { listBatches } from '@/lib/maps/data';
 
@@ -16,8 +16,10 @@ const COLUMNS = [
 ];
 
 /** The latest batches as a file: every one that the pages list, up to ten thousand. */
-export async function GET(): Promise<Response> {
-  const batches = await listBatches(localActor(), { most: 10_000 });
+export async function GET(request: Request): Promise<Response> {
+  const actor = await routeActor(request, 'see-line');
+  if (actor instanceof Response) return actor;
+  const batches = await listBatches(actor, { most: 10_000 });
   const rows = batches.map((batch) => [
     batch.id,
     batch.source,

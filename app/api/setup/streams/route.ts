@@ -1,4 +1,4 @@
-import { localActor } from '@/lib/access/local-actor';
+import { routeActor } from '@/app/route-actor';
 import { csvResponse } from '@/lib/csv-response';
 import { listLimitsInForce } from '@/lib/limits/data';
 import { listStreams, listStreamSettings } from '@/lib/streams/data';
@@ -30,8 +30,9 @@ const COLUMNS = [
 ];
 
 /** Every stream as it stands now, as a file. */
-export async function GET(): Promise<Response> {
-  const actor = localActor();
+export async function GET(request: Request): Promise<Response> {
+  const actor = await routeActor(request, 'see-line');
+  if (actor instanceof Response) return actor;
   const streams = await listStreams(actor, { retired: true });
   const settings = await listStreamSettings(
     actor,

@@ -2,7 +2,7 @@ import type { Metadata } from 'next';
 import { notFound } from 'next/navigation';
 import { Notice } from '@/app/_ui/notice';
 import { PageHead } from '@/app/_ui/page-head';
-import { localActor } from '@/lib/access/local-actor';
+import { signedIn } from '@/app/page-actor';
 import { readEnvironment } from '@/lib/env';
 import { formatDateTime } from '@/lib/format';
 import { findBatch, listBatchStreams, listRefusals } from '@/lib/maps/data';
@@ -20,7 +20,7 @@ const ORIGIN_WORDS = {
 };
 
 export default async function BatchPage(props: { params: Promise<{ id: string }> }) {
-  const actor = localActor();
+  const actor = await signedIn('see-line');
   const batch = await findBatch(actor, (await props.params).id);
   if (batch === null) notFound();
   const [streams, refusals] = await Promise.all([

@@ -1,10 +1,12 @@
 import type { Metadata } from 'next';
 import { PageHead } from '@/app/_ui/page-head';
+import { signedIn } from '@/app/page-actor';
 import { NewPlanForm } from './form';
 
 export const metadata: Metadata = { title: 'New site plan' };
 
-export default function NewPlanPage() {
+export default async function NewPlanPage() {
+  await signedIn('create-stream');
   return (
     <>
       <PageHead

@@ -1,6 +1,6 @@
 import type { Metadata } from 'next';
 import { SectionHead } from '@/app/_ui/section-head';
-import { localActor } from '@/lib/access/local-actor';
+import { signedIn } from '@/app/page-actor';
 import { readEnvironment } from '@/lib/env';
 import { listLatestWafers } from '@/lib/maps/data';
 import { isImplantedOrDiffused } from '@/lib/physics/is-implanted-or-diffused';
@@ -19,7 +19,7 @@ export default async function TargetPage(props: {
   params: Promise<{ slug: string }>;
   searchParams: Promise<Record<string, string | string[]>>;
 }) {
-  const actor = localActor();
+  const actor = await signedIn('see-line');
   const { stream, targets } = await foundStream(actor, props.params);
   const { siteTimeZone } = readEnvironment();
   const now = new Date();

@@ -2,7 +2,7 @@
 
 import { revalidatePath } from 'next/cache';
 import { doneForm, faultsOf, formWords, refusedForm, type FormState } from '@/app/_ui/form-state';
-import { localActor } from '@/lib/access/local-actor';
+import { actionActor } from '@/app/action-actor';
 import { readEnvironment } from '@/lib/env';
 import { findStreamSettings } from '@/lib/streams/data';
 import { reviseTarget } from '@/lib/streams/mutations';
@@ -17,7 +17,9 @@ export async function reviseTargetAction(
   before: FormState,
   form: FormData,
 ): Promise<FormState> {
-  const actor = localActor();
+  const asked = await actionActor('revise-target');
+  if (!asked.ok) return refusedForm(before, { message: asked.reason });
+  const { actor } = asked;
   const words = formWords(form);
   const found = await findStreamSettings(actor, String(slug));
   if (found === null) return refusedForm(before, { message: 'There is no such stream.' });

@@ -3,14 +3,16 @@
 import { revalidatePath } from 'next/cache';
 import { redirect } from 'next/navigation';
 import { faultsOf, formWords, refusedForm, type FormState } from '@/app/_ui/form-state';
-import { localActor } from '@/lib/access/local-actor';
+import { actionActor } from '@/app/action-actor';
 import { createStream } from '@/lib/streams/mutations';
 import { newStream, typedSpecification, typedTarget } from '@/lib/streams/schema';
 import { slugOf } from '@/lib/streams/slug-of';
 
 /** Sets up a stream with its first target and specification, and goes to its page. */
 export async function createStreamAction(before: FormState, form: FormData): Promise<FormState> {
-  const actor = localActor();
+  const asked = await actionActor('create-stream');
+  if (!asked.ok) return refusedForm(before, { message: asked.reason });
+  const { actor } = asked;
   const sent = formWords(form);
   const words: Record<string, string> = { ...sent, slug: sent['slug'] || slugOf(sent['name'] ?? '') };
   const stream = newStream.safeParse(words);

@@ -2,14 +2,14 @@ import type { Metadata } from 'next';
 import { ButtonLink } from '@/app/_ui/button-link';
 import { EmptyState } from '@/app/_ui/empty-state';
 import { PageHead } from '@/app/_ui/page-head';
-import { localActor } from '@/lib/access/local-actor';
+import { signedIn } from '@/app/page-actor';
 import { listSitePlans } from '@/lib/streams/data';
 import { NewStreamForm } from './form';
 
 export const metadata: Metadata = { title: 'New stream' };
 
 export default async function NewStreamPage() {
-  const plans = await listSitePlans(localActor());
+  const plans = await listSitePlans(await signedIn('create-stream'));
   return (
     <>
       <PageHead

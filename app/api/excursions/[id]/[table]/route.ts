@@ -1,4 +1,4 @@
-import { localActor } from '@/lib/access/local-actor';
+import { routeActor } from '@/app/route-actor';
 import { type CsvCell, csvResponse } from '@/lib/csv-response';
 import { AppError, problemResponse } from '@/lib/errors';
 import { findExcursion } from '@/lib/excursions/data';
@@ -55,12 +55,14 @@ const TABLES: Record<string, (found: ExcursionCase) => Table> = {
 
 /** One table of an excursion's page as a file: its signals, its log, or the subgroups about it. */
 export async function GET(
-  _request: Request,
+  request: Request,
   { params }: { params: Promise<{ id: string; table: string }> },
 ): Promise<Response> {
+  const actor = await routeActor(request, 'see-line');
+  if (actor instanceof Response) return actor;
   const { id, table } = await params;
   const make = Object.hasOwn(TABLES, table) ? TABLES[table] : undefined;
-  const found = make === undefined ? null : await findExcursion(localActor(), id);
+  const found = make === undefined ? null : await findExcursion(actor, id);
   if (make === undefined || found === null) {
     return problemResponse(new AppError('not-found', 'There is no such table of an excursion.'));
   }

@@ -1,4 +1,4 @@
-import { localActor } from '@/lib/access/local-actor';
+import { routeActor } from '@/app/route-actor';
 import { csvResponse } from '@/lib/csv-response';
 import { readEnvironment } from '@/lib/env';
 import { AppError, problemResponse } from '@/lib/errors';
@@ -8,7 +8,8 @@ import { findWaitingFile } from '@/lib/maps/waiting-file';
 
 /** The problems of a file that waits to be recorded, as a file. */
 export async function GET(request: Request, { params }: { params: Promise<{ token: string }> }) {
-  const actor = localActor();
+  const actor = await routeActor(request, 'record-maps');
+  if (actor instanceof Response) return actor;
   const file = await findWaitingFile(actor, (await params).token);
   if (file === null) return problemResponse(new AppError('not-found', 'No such file waits here.'));
   const query = Object.fromEntries(new URL(request.url).searchParams);

@@ -1,6 +1,6 @@
+import { routeActor } from '@/app/route-actor';
 import { readCsvSpan } from '@/app/(line)/streams/[slug]/csv-span';
 import { pointsCsv } from '@/app/(line)/streams/[slug]/points-csv';
-import { localActor } from '@/lib/access/local-actor';
 import { csvResponse } from '@/lib/csv-response';
 import { AppError, problemResponse } from '@/lib/errors';
 
@@ -9,8 +9,10 @@ export async function GET(
   request: Request,
   context: { params: Promise<{ slug: string }> },
 ): Promise<Response> {
+  const actor = await routeActor(request, 'see-line');
+  if (actor instanceof Response) return actor;
   const { slug } = await context.params;
-  const span = await readCsvSpan(localActor(), slug, request.url);
+  const span = await readCsvSpan(actor, slug, request.url);
   if (span === null) return problemResponse(new AppError('not-found', 'There is no such stream.'));
   const { columns, rows } = pointsCsv(span);
   return csvResponse(`${slug}-points.csv`, columns, rows);

@@ -1,5 +1,5 @@
+import { routeActor } from '@/app/route-actor';
 import { readCsvSpan } from '@/app/(line)/streams/[slug]/csv-span';
-import { localActor } from '@/lib/access/local-actor';
 import { csvResponse } from '@/lib/csv-response';
 import { AppError, problemResponse } from '@/lib/errors';
 
@@ -8,8 +8,10 @@ export async function GET(
   request: Request,
   context: { params: Promise<{ slug: string }> },
 ): Promise<Response> {
+  const actor = await routeActor(request, 'see-line');
+  if (actor instanceof Response) return actor;
   const { slug } = await context.params;
-  const span = await readCsvSpan(localActor(), slug, request.url);
+  const span = await readCsvSpan(actor, slug, request.url);
   if (span === null) return problemResponse(new AppError('not-found', 'There is no such stream.'));
   const { unit } = span;
   return csvResponse(

@@ -1,4 +1,4 @@
-import { localActor } from '@/lib/access/local-actor';
+import { routeActor } from '@/app/route-actor';
 import { csvResponse } from '@/lib/csv-response';
 import { AppError, problemResponse } from '@/lib/errors';
 import { STATUS_WORDS } from '@/lib/maps/bad-reason-words';
@@ -8,8 +8,10 @@ import { waferStudy } from '@/lib/maps/wafer-study';
 import { waferTitle } from '@/lib/maps/wafer-title';
 
 /** The readings of a wafer as a file: as sent, and at 23 °C. */
-export async function GET(_request: Request, { params }: { params: Promise<{ id: string }> }) {
-  const found = await findWafer(localActor(), (await params).id);
+export async function GET(request: Request, { params }: { params: Promise<{ id: string }> }) {
+  const actor = await routeActor(request, 'see-line');
+  if (actor instanceof Response) return actor;
+  const found = await findWafer(actor, (await params).id);
   if (found === null) return problemResponse(new AppError('not-found', 'There is no such wafer.'));
   const unit =
     found.settings.stream.quantity === 'resistivity' ? 'resistivity_ohm_cm' : 'sheet_resistance_ohm_sq';

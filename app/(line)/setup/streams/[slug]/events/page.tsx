@@ -1,7 +1,7 @@
 import type { Metadata } from 'next';
 import { DataTable } from '@/app/_ui/data-table';
 import { SectionHead } from '@/app/_ui/section-head';
-import { localActor } from '@/lib/access/local-actor';
+import { signedIn } from '@/app/page-actor';
 import { readEnvironment } from '@/lib/env';
 import { formatAge, formatDateTime } from '@/lib/format';
 import { siteTimeField } from '@/lib/site-time';
@@ -13,7 +13,7 @@ import { EventForm } from './form';
 export const metadata: Metadata = { title: 'Events' };
 
 export default async function EventsPage(props: { params: Promise<{ slug: string }> }) {
-  const actor = localActor();
+  const actor = await signedIn('see-line');
   const { stream } = await foundStream(actor, props.params);
   const events = await listStreamEvents(actor, stream.id);
   const { siteTimeZone } = readEnvironment();

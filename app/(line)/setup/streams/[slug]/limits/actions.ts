@@ -2,7 +2,8 @@
 
 import { revalidatePath } from 'next/cache';
 import { doneForm, faultsOf, formWords, refusedForm, type FormState } from '@/app/_ui/form-state';
-import { localActor } from '@/lib/access/local-actor';
+import { actionActor } from '@/app/action-actor';
+import { signedIn } from '@/app/page-actor';
 import { readEnvironment } from '@/lib/env';
 import { approveLimits, discardLimits, draftLimits, enterInheritedLimits } from '@/lib/limits/mutations';
 import { baselineSpan, inheritedLimits, limitApproval, limitDraft } from '@/lib/limits/schema';
@@ -18,7 +19,9 @@ export async function draftLimitsAction(
   before: FormState,
   form: FormData,
 ): Promise<FormState> {
-  const actor = localActor();
+  const asked = await actionActor('draft-limits');
+  if (!asked.ok) return refusedForm(before, { message: asked.reason });
+  const { actor } = asked;
   const found = await findStreamSettings(actor, String(slug));
   if (found === null) return refusedForm(before, NO_STREAM);
   const parsed = baselineSpan(zone()).safeParse(span);
@@ -40,7 +43,9 @@ export async function enterInheritedAction(
   before: FormState,
   form: FormData,
 ): Promise<FormState> {
-  const actor = localActor();
+  const asked = await actionActor('draft-limits');
+  if (!asked.ok) return refusedForm(before, { message: asked.reason });
+  const { actor } = asked;
   const found = await findStreamSettings(actor, String(slug));
   if (found === null) return refusedForm(before, NO_STREAM);
   const { id, subgroupSize } = found.stream;
@@ -59,7 +64,9 @@ export async function approveLimitsAction(
   before: FormState,
   form: FormData,
 ): Promise<FormState> {
-  const actor = localActor();
+  const asked = await actionActor('approve-limits');
+  if (!asked.ok) return refusedForm(before, { message: asked.reason });
+  const { actor } = asked;
   if ((await findStreamSettings(actor, String(slug))) === null) return refusedForm(before, NO_STREAM);
   const approval = limitApproval(zone()).safeParse(formWords(form));
   if (!approval.success) return refusedForm(before, { errors: faultsOf(approval.error) });
@@ -72,7 +79,7 @@ export async function approveLimitsAction(
 
 /** Sets a draft aside; it stays on record. */
 export async function discardLimitsAction(revisionId: string): Promise<void> {
-  const actor = localActor();
+  const actor = await signedIn('draft-limits');
   if (/^\d{1,18}$/.test(String(revisionId))) await discardLimits(actor, revisionId);
   revalidatePath('/setup', 'layout');
 }

@@ -1,7 +1,7 @@
 import type { Metadata } from 'next';
 import { DataTable } from '@/app/_ui/data-table';
 import { SectionHead } from '@/app/_ui/section-head';
-import { localActor } from '@/lib/access/local-actor';
+import { signedIn } from '@/app/page-actor';
 import { readEnvironment } from '@/lib/env';
 import { siteTimeField } from '@/lib/site-time';
 import { inForce } from '@/lib/streams/in-force';
@@ -14,7 +14,7 @@ import { SpecificationForm } from './form';
 export const metadata: Metadata = { title: 'Specification' };
 
 export default async function SpecificationPage(props: { params: Promise<{ slug: string }> }) {
-  const { stream, specifications } = await foundStream(localActor(), props.params);
+  const { stream, specifications } = await foundStream(await signedIn('see-line'), props.params);
   const { siteTimeZone } = readEnvironment();
   const now = new Date();
   const current = inForce(specifications, now)?.specification ?? null;

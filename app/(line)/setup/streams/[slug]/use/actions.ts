@@ -2,7 +2,7 @@
 
 import { revalidatePath } from 'next/cache';
 import { doneForm, faultsOf, formWords, refusedForm, type FormState } from '@/app/_ui/form-state';
-import { localActor } from '@/lib/access/local-actor';
+import { actionActor } from '@/app/action-actor';
 import { changeScreening } from '@/lib/limits/mutations';
 import { findStreamSettings } from '@/lib/streams/data';
 import { retireStream } from '@/lib/streams/mutations';
@@ -14,7 +14,9 @@ export async function changeScreeningAction(
   before: FormState,
   form: FormData,
 ): Promise<FormState> {
-  const actor = localActor();
+  const asked = await actionActor('change-rules');
+  if (!asked.ok) return refusedForm(before, { message: asked.reason });
+  const { actor } = asked;
   const found = await findStreamSettings(actor, String(slug));
   if (found === null) return refusedForm(before, { message: 'There is no such stream.' });
   const change = screeningChange.safeParse(formWords(form));
@@ -32,7 +34,9 @@ export async function retireStreamAction(
   retired: boolean,
   before: FormState,
 ): Promise<FormState> {
-  const actor = localActor();
+  const asked = await actionActor('retire-stream');
+  if (!asked.ok) return refusedForm(before, { message: asked.reason });
+  const { actor } = asked;
   const found = await findStreamSettings(actor, String(slug));
   if (found === null) return refusedForm(before, { message: 'There is no such stream.' });
   await retireStream(actor, found.stream.id, retired === true);

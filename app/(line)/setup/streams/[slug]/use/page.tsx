@@ -1,7 +1,7 @@
 import type { Metadata } from 'next';
 import { Figures } from '@/app/_ui/figures';
 import { SectionHead } from '@/app/_ui/section-head';
-import { localActor } from '@/lib/access/local-actor';
+import { signedIn } from '@/app/page-actor';
 import { readEnvironment } from '@/lib/env';
 import { formatNumber } from '@/lib/format';
 import { foundStream } from '../../../found-stream';
@@ -21,7 +21,7 @@ import { ScreeningTable } from './screening-table';
 export const metadata: Metadata = { title: 'Use' };
 
 export default async function UsePage(props: { params: Promise<{ slug: string }> }) {
-  const { stream, screenings } = await foundStream(localActor(), props.params);
+  const { stream, screenings } = await foundStream(await signedIn('see-line'), props.params);
   const { plan, subgroupSize } = stream;
   const wafers = subgroupSize === 1 ? '' : `, ${subgroupSize} wafers each`;
   return (

@@ -1,11 +1,12 @@
-import { localActor } from '@/lib/access/local-actor';
+import { routeActor } from '@/app/route-actor';
 import { csvResponse } from '@/lib/csv-response';
 import { AppError, problemResponse } from '@/lib/errors';
 import { findBatch, listRefusals } from '@/lib/maps/data';
 
 /** The refusals of a batch as a file. */
-export async function GET(_request: Request, { params }: { params: Promise<{ id: string }> }) {
-  const actor = localActor();
+export async function GET(request: Request, { params }: { params: Promise<{ id: string }> }) {
+  const actor = await routeActor(request, 'see-line');
+  if (actor instanceof Response) return actor;
   const batch = await findBatch(actor, (await params).id);
   if (batch === null) return problemResponse(new AppError('not-found', 'There is no such batch.'));
   const refusals = await listRefusals(actor, batch.id);

@@ -1,4 +1,4 @@
-import { localActor } from '@/lib/access/local-actor';
+import { routeActor } from '@/app/route-actor';
 import { csvResponse } from '@/lib/csv-response';
 import { AppError, problemResponse } from '@/lib/errors';
 import { findBatch, listBatchStreams } from '@/lib/maps/data';
@@ -6,8 +6,9 @@ import { findBatch, listBatchStreams } from '@/lib/maps/data';
 const COLUMNS = ['stream', 'name', 'wafers', 'not_judged', 'first_measured_at', 'last_measured_at'];
 
 /** What a batch brought to each stream, as a file. */
-export async function GET(_request: Request, { params }: { params: Promise<{ id: string }> }) {
-  const actor = localActor();
+export async function GET(request: Request, { params }: { params: Promise<{ id: string }> }) {
+  const actor = await routeActor(request, 'see-line');
+  if (actor instanceof Response) return actor;
   const batch = await findBatch(actor, (await params).id);
   if (batch === null) return problemResponse(new AppError('not-found', 'There is no such batch.'));
   const streams = await listBatchStreams(actor, batch.id);
