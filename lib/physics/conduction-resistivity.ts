@@ -29,9 +29,7 @@ function mobilities(
       hole: aroraMobility('hole', total, temperatureK),
     };
   }
-  if (donor === 'antimony' && donorsPerCm3 > 0) {
-    throw new RangeError(`The ${model} model has no set for antimony; the Arora model serves every donor.`);
-  }
+  // Neither model has a set for antimony: that of phosphorus stands in (`mobilityNotes` says so).
   const known = donor === 'antimony' ? 'phosphorus' : donor;
   if (model === 'klaassen') {
     const scattering = {
@@ -56,7 +54,7 @@ function mobilities(
  * charge neutrality and the mobility taken at the total of both impurities.
  *
  * It is what compensated silicon, and silicon near intrinsic, asks for: the net doping alone is far off there.
- * Every dopant counts as ionized. Temperature in K: Masetti at 300 only, Arora 250…340, Klaassen to 340 (the
+ * Every dopant counts as ionized; for antimony the phosphorus set stands in. Temperature in K: Masetti at 300 only, Arora 250…340, Klaassen to 340 (the
  * intrinsic density ends there). Throws RangeError outside a model's range.
  *
  * @example conductionResistivity('masetti', { donor: 'phosphorus', donorsPerCm3: 9e16, acceptorsPerCm3: 1e17 }, 300) // 2.258

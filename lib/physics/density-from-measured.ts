@@ -1,4 +1,4 @@
-import { isUniform } from './is-uniform';
+import { missingForExpected } from './missing-for-expected';
 import { modelDensityLimits } from './model-density-limits';
 import { modelValue } from './model-value';
 import { monotoneRoot } from './monotone-root';
@@ -23,11 +23,8 @@ export function densityFromMeasured(
 ): number | null {
   const reading = measured / (target.calibrationFactor ?? 1);
   if (!(reading > 0 && Number.isFinite(reading))) return null;
-  if (target.quantity === 'sheet_resistance') {
-    const thick = isUniform(target) ? wafer.layerThicknessUm : null;
-    if ((thick ?? target.lengthUm) === null) return null;
-  }
-  const { lowerPerCm3, upperPerCm3 } = modelDensityLimits(target);
+  if (missingForExpected(target, { ...wafer, ingotFraction: 0 }) !== null) return null;
+  const { lowerPerCm3, upperPerCm3 } = modelDensityLimits(target, wafer);
   const excess = (lnDensity: number): number => {
     const density = Math.min(upperPerCm3, Math.max(lowerPerCm3, Math.exp(lnDensity)));
     return Math.log(modelValue(target, density, wafer) / reading);

@@ -1,4 +1,5 @@
 import { densityFromMeasured } from './density-from-measured';
+import { missingForExpected } from './missing-for-expected';
 import { modelDensityLimits } from './model-density-limits';
 import { modelValue } from './model-value';
 import type { Target } from './target';
@@ -23,10 +24,10 @@ export function dopingTicks(target: Target, lower: number, upper: number, count:
       `Ticks need a rising axis and a count of one or more, not ${lower}…${upper}, ${count}.`,
     );
   }
+  if (missingForExpected(target, { ingotFraction: 0 }) !== null) return [];
   const limits = modelDensityLimits(target);
   const factor = target.calibrationFactor ?? 1;
   const value = (densityPerCm3: number): number => factor * modelValue(target, densityPerCm3);
-  if (target.quantity === 'sheet_resistance' && target.lengthUm === null) return [];
   const [highest, lowest] = [value(limits.lowerPerCm3), value(limits.upperPerCm3)];
   if (upper <= lowest || lower >= highest) return [];
   const from = upper >= highest ? limits.lowerPerCm3 : densityFromMeasured(target, upper);

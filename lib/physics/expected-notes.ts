@@ -1,11 +1,12 @@
-import { depletionWidth } from './depletion-width';
-import { conductionType } from './dopant';
+import { conductingThicknessUm } from './conducting-thickness';
 import { isImplantedOrDiffused } from './is-implanted-or-diffused';
+import { layerExtent } from './layer-extent';
+import { layerOfTarget, targetDriveIn, targetLengthUm } from './layer-of-target';
 import { standardNotes } from './standard-notes';
-import type { Target } from './target';
+import type { ExpectedWafer, Target } from './target';
 
 /** What a person should know about an expected value, in whole sentences; empty where there is nothing to say. */
-export function expectedNotes(target: Target, densityPerCm3: number): string[] {
+export function expectedNotes(target: Target, densityPerCm3: number, wafer: ExpectedWafer = {}): string[] {
   const notes = standardNotes(target.dopant, densityPerCm3);
   if (isImplantedOrDiffused(target) && target.calibrationFactor === null) {
     notes.push(
@@ -15,17 +16,36 @@ export function expectedNotes(target: Target, densityPerCm3: number): string[] {
   if (target.calibrationFactor !== null && target.calibrationPercent === null) {
     notes.push('The calibration factor has no stated uncertainty, so that of the conversion is kept.');
   }
-  const { backgroundDopant, backgroundDensityPerCm3: background } = target;
-  if (target.profile !== 'uniform' || backgroundDopant === null || background === null) return notes;
-  if (conductionType(backgroundDopant) === conductionType(target.dopant)) {
+  const drive = targetDriveIn(target, densityPerCm3);
+  if (drive !== null && !drive.isClassical) {
     notes.push(
-      'Layer and background are of one type: without a junction between them a four-point probe measures the background.',
-    );
-  } else if (target.quantity === 'sheet_resistance' && background >= 1e12) {
-    const width = depletionWidth(densityPerCm3, background).toFixed(2);
-    notes.push(
-      `Sheet resistance is ρ/t of the thickness given. Without bias the junction under the layer depletes ${width} µm of it: give the thickness less that, or set a calibration factor.`,
+      'The dopant exceeds the intrinsic density at the drive-in, where the classical diffusivity fails: from physics an order of magnitude only; the calibration carries the value.',
     );
   }
+  if (target.quantity === 'sheet_resistance' && target.profile === 'uniform') {
+    notes.push(...grownNotes(target, densityPerCm3, wafer));
+  }
+  if (target.profile === 'implant' || target.profile === 'pairs') {
+    const { topUm } = layerExtent(layerOfTarget(target, densityPerCm3, wafer));
+    if (topUm > 0) {
+      notes.push(
+        `The layer lies buried ${topUm.toFixed(3)} µm under silicon of the background's type: pins on the surface do not meet it alone.`,
+      );
+    }
+  }
   return notes;
+}
+
+function grownNotes(target: Target, densityPerCm3: number, wafer: ExpectedWafer): string[] {
+  const thicknessUm = targetLengthUm(target, wafer);
+  if (thicknessUm === null || target.backgroundDopant === null) return [];
+  const depletedUm = thicknessUm - conductingThicknessUm(target, densityPerCm3, thicknessUm);
+  if (depletedUm > 0) {
+    return [
+      `Without bias the junction under the layer depletes ${depletedUm.toFixed(2)} µm of it; the rest conducts.`,
+    ];
+  }
+  return target.method === 'other'
+    ? ['Measured by another method than a four-point probe: the whole thickness counts.']
+    : [];
 }

@@ -1,6 +1,7 @@
 import { densitySensitivity } from './density-sensitivity';
 import { expectedNotes } from './expected-notes';
 import { expectedUncertaintyPercent } from './expected-uncertainty';
+import { targetDriveIn } from './layer-of-target';
 import { modelDensityLimits } from './model-density-limits';
 import { modelValue } from './model-value';
 import type { ExpectedWafer, Target } from './target';
@@ -24,6 +25,16 @@ export interface Expected {
   notes: string[];
 }
 
+/** A drive-in that no classical law describes gives no band, unless a calibration with its own uncertainty does. */
+function refuseOrderOfMagnitude(target: Target, densityPerCm3: number, fromPhysics: number): void {
+  const drive = targetDriveIn(target, densityPerCm3);
+  if (drive === null || drive.isClassical) return;
+  if (target.calibrationFactor !== null && target.calibrationPercent !== null) return;
+  throw new RangeError(
+    `At ${target.driveInC} °C the dopant's peak of ${densityPerCm3.toExponential(1)} per cm³ exceeds the intrinsic density, ${drive.intrinsicPerCm3.toExponential(1)}: the classical diffusivity fails and only an order of magnitude is known, about ${fromPhysics.toPrecision(1)} Ω/□. Give a calibration factor with its uncertainty, or the profile itself.`,
+  );
+}
+
 /**
  * What a wafer should read by its target: the value, its standard uncertainty, and the band the target tolerates.
  *
@@ -31,7 +42,7 @@ export interface Expected {
  * neither is ever added to the other (JCGM 106:2012). The chart draws one as a band, the other as lines.
  *
  * Throws RangeError outside the standard conversion's densities, for a missing thickness or solidified fraction
- * (`missingForExpected` tells beforehand), and for a tolerance or calibration factor that cannot be.
+ * (`missingForExpected` tells beforehand), for a drive-in beyond the classical law without a calibration, and for a tolerance or calibration factor that cannot be.
  *
  * @example expectedValue(boron 1e15, resistivity, uniform).value // 13.306
  */
@@ -46,9 +57,11 @@ export function expectedValue(target: Target, wafer: ExpectedWafer = {}): Expect
   }
   const density = targetDensity(target, wafer);
   const fromPhysics = modelValue(target, density, wafer);
-  const limits = modelDensityLimits(target);
+  refuseOrderOfMagnitude(target, density, fromPhysics);
+  const limits = tolerance === null ? null : modelDensityLimits(target, wafer);
   const at = (share: number): number | null => {
     const shifted = density * share;
+    if (limits === null) return null;
     if (shifted < limits.lowerPerCm3 || shifted > limits.upperPerCm3) return null;
     return factor * modelValue(target, shifted, wafer);
   };
@@ -56,10 +69,10 @@ export function expectedValue(target: Target, wafer: ExpectedWafer = {}): Expect
     value: factor * fromPhysics,
     fromPhysics,
     uncertaintyPercent: expectedUncertaintyPercent(target),
-    toleranceLower: tolerance === null ? null : at(1 + tolerance / 100),
-    toleranceUpper: tolerance === null ? null : at(1 - tolerance / 100),
+    toleranceLower: at(1 + (tolerance ?? 0) / 100),
+    toleranceUpper: at(1 - (tolerance ?? 0) / 100),
     sensitivity: densitySensitivity(target, density, wafer),
     model: 'standard',
-    notes: expectedNotes(target, density),
+    notes: expectedNotes(target, density, wafer),
   };
 }

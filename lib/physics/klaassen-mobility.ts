@@ -1,3 +1,5 @@
+import { monotoneRoot } from './monotone-root';
+
 /** What the carriers meet, all per cm³. */
 export interface Scattering {
   donorsPerCm3: number;
@@ -27,16 +29,19 @@ function minorityFactor(p: number, t: number, mass: number): number {
   );
 }
 
-/** The P at which the minority factor is least: below it the published formula turns up again and is not used. */
-function leastP(t: number, mass: number): number {
-  let [low, high] = [Math.log(1e-3), Math.log(10)];
-  const golden = (Math.sqrt(5) - 1) / 2;
-  for (let step = 0; step < 60; step++) {
-    const [x, y] = [high - golden * (high - low), low + golden * (high - low)];
-    if (minorityFactor(Math.exp(x), t, mass) < minorityFactor(Math.exp(y), t, mass)) high = y;
-    else low = x;
-  }
-  return Math.exp((low + high) / 2);
+/** The slope of `minorityFactor` against ln P: negative below its minimum, positive above. */
+function minorityRise(p: number, t: number, mass: number): number {
+  const pull = p * (t / mass) ** 0.28227;
+  return (
+    (0.89233 * 0.19778 * pull) / (0.41372 + pull) ** 1.19778 -
+    (0.005978 * 1.80618) / (p * (mass / t) ** 0.72169) ** 1.80618
+  );
+}
+
+/** P, or where the minority factor is least if that is more: below it the published formula turns up and is not used. */
+function clampedP(p: number, t: number, mass: number): number {
+  if (minorityRise(p, t, mass) >= 0) return p;
+  return Math.exp(monotoneRoot((ln) => minorityRise(Math.exp(ln), t, mass), Math.log(p), 5, 1e-9) ?? 0);
 }
 
 /**
@@ -85,7 +90,7 @@ export function klaassenMobility(
   const p = 1 / (2.459 / screened + 3.828 / unscreened);
   const p64 = p ** 0.6478;
   const f = (0.7643 * p64 + 2.2999 + 6.5502 * massRatio) / (p64 + 2.367 - 0.8552 * massRatio);
-  const g = minorityFactor(Math.max(p, leastP(t, mass)), t, mass);
+  const g = minorityFactor(clampedP(p, t, mass), t, mass);
   const effective = own + g * other + opposite / f;
   const impurity = (set.max ** 2 / (set.max - set.min)) * t ** (3 * set.alpha - 1.5);
   const carrierTerm = ((set.max * set.min) / (set.max - set.min)) * t ** -0.5;

@@ -12,6 +12,7 @@ export function missingForExpected(
   wafer: ExpectedWafer = {},
 ): 'ingotFraction' | 'layerThicknessUm' | null {
   if (target.alongCrystal && (wafer.ingotFraction ?? null) === null) return 'ingotFraction';
+  if (target.quantity === 'resistivity' || target.profile === 'pairs') return null;
   const thick = target.lengthUm ?? (isUniform(target) ? (wafer.layerThicknessUm ?? null) : null);
-  return target.quantity === 'sheet_resistance' && thick === null ? 'layerThicknessUm' : null;
+  return thick === null ? 'layerThicknessUm' : null;
 }

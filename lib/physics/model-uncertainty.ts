@@ -8,6 +8,11 @@ const SPREAD = {
   klaassen: { p: 7.4, n: 9.5 },
 } as const;
 
+/** How far a mobility model strays from the standard conversion, in percent of resistivity (recomputed in a test). */
+export function modelSpreadPercent(model: MobilityModel, dopant: Dopant): number {
+  return SPREAD[model][conductionType(dopant)];
+}
+
 /**
  * The standard uncertainty (k = 1), in percent, of a resistivity from a mobility model that stands in for the
  * standard conversion: its largest difference over 1e13…1e20 per cm³ from the 300 K fits of NBS Special Publication
@@ -16,5 +21,5 @@ const SPREAD = {
  * @example modelUncertaintyPercent('arora', 'boron') // 5.02
  */
 export function modelUncertaintyPercent(model: MobilityModel, dopant: Dopant): number {
-  return SPREAD[model][conductionType(dopant)] / Math.sqrt(3);
+  return modelSpreadPercent(model, dopant) / Math.sqrt(3);
 }

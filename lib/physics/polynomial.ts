@@ -6,5 +6,7 @@
  * @example polynomial([1, 2, 3], 2) // 17
  */
 export function polynomial(coefficients: readonly number[], x: number): number {
-  return coefficients.reduceRight((sum, coefficient) => sum * x + coefficient, 0);
+  let sum = 0;
+  for (let n = coefficients.length - 1; n >= 0; n--) sum = sum * x + (coefficients[n] ?? 0);
+  return sum;
 }

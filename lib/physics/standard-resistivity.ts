@@ -1,34 +1,21 @@
 import type { Dopant } from './dopant';
-import { polynomial } from './polynomial';
 import { standardDensityLimits } from './standard-density-limits';
+import { FITS_AT_23C, type ResistivityFit } from './standard-fits';
 import { standardRange } from './standard-range';
 
-/** 1/q in 1/C as the published fit of phosphorus writes it. */
-const RECIPROCAL_CHARGE = 6.242e18;
-
-const PHOSPHORUS_NUMERATOR = [-3.0769, 2.2108, -0.62272, 0.057501];
-const PHOSPHORUS_DENOMINATOR = [1, -0.68157, 0.19833, -0.018376];
-
-const ARSENIC = [
-  -6633.667, 768.2531, -25.77373, 0.9658177, -0.05643443, -8.008543e-4, 9.055838e-5, -1.776701e-6,
-  1.953279e-7, -5.754599e-9, -1.31657e-11,
-];
-
-function boronResistivity(density: number): number {
-  return 1.305e16 / density + 1.133e17 / (density * (1 + (2.58e-19 * density) ** -0.737));
+/** The fit that serves a density; throws RangeError where none does, with what a person may do instead. */
+function fitAt(dopant: Dopant, densityPerCm3: number): ResistivityFit {
+  const range = standardRange(dopant, densityPerCm3);
+  if (range !== null) return FITS_AT_23C[range.fit];
+  const { lowerPerCm3, upperPerCm3 } = standardDensityLimits(dopant);
+  const instead =
+    densityPerCm3 > 0 && densityPerCm3 < lowerPerCm3
+      ? ' Lighter silicon asks for a model with both carriers.'
+      : '';
+  throw new RangeError(
+    `The standard conversion takes ${dopant} from ${lowerPerCm3.toExponential()} to ${upperPerCm3.toExponential()} per cm³, not ${densityPerCm3}.${instead}`,
+  );
 }
-
-function phosphorusResistivity(density: number): number {
-  const x = Math.log10(density) - 16;
-  const z = polynomial(PHOSPHORUS_NUMERATOR, x) / polynomial(PHOSPHORUS_DENOMINATOR, x);
-  return (RECIPROCAL_CHARGE * 10 ** z) / density;
-}
-
-function arsenicResistivity(density: number): number {
-  return 10 ** polynomial(ARSENIC, Math.log10(density));
-}
-
-const fits = { boron: boronResistivity, phosphorus: phosphorusResistivity, arsenic: arsenicResistivity };
 
 /**
  * The resistivity, in Ω·cm at 23 °C, of silicon that holds `densityPerCm3` atoms of one dopant per cm³.
@@ -45,12 +32,15 @@ const fits = { boron: boronResistivity, phosphorus: phosphorusResistivity, arsen
  * @example standardResistivity('boron', 1e15) // 13.306
  */
 export function standardResistivity(dopant: Dopant, densityPerCm3: number): number {
-  const range = standardRange(dopant, densityPerCm3);
-  if (range === null) {
-    const { lowerPerCm3, upperPerCm3 } = standardDensityLimits(dopant);
-    throw new RangeError(
-      `The standard conversion takes ${dopant} from ${lowerPerCm3.toExponential()} to ${upperPerCm3.toExponential()} per cm³, not ${densityPerCm3}.`,
-    );
-  }
-  return fits[range.fit](densityPerCm3);
+  return fitAt(dopant, densityPerCm3).resistivity(densityPerCm3);
+}
+
+/**
+ * d ln ρ/d ln N of the standard conversion: the slope of the published fit itself, on the side of a step where the
+ * density lies. Source and range as `standardResistivity`; throws RangeError outside.
+ *
+ * @example standardSensitivity('boron', 1e17) // −0.755
+ */
+export function standardSensitivity(dopant: Dopant, densityPerCm3: number): number {
+  return fitAt(dopant, densityPerCm3).slope(densityPerCm3);
 }

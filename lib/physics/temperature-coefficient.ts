@@ -32,6 +32,11 @@ export function temperatureCoefficientPercentPerC(type: 'n' | 'p', resistivityOh
   return polynomial(type === 'n' ? N_TYPE : P_TYPE, Math.log(resistivityOhmCm));
 }
 
+/** Whether the published coefficients serve at a wafer temperature: 18 to 28 °C. */
+export function isNear23C(temperatureC: number): boolean {
+  return temperatureC >= 18 && temperatureC <= 28;
+}
+
 /**
  * A resistivity measured at a wafer temperature near 23 °C, brought to 23 °C: ρ·(1 − C/100·(T − 23)).
  *
@@ -41,7 +46,7 @@ export function temperatureCoefficientPercentPerC(type: 'n' | 'p', resistivityOh
  * @example resistivityAt23C('p', 10, 25) // 9.835
  */
 export function resistivityAt23C(type: 'n' | 'p', resistivityOhmCm: number, temperatureC: number): number {
-  if (!(temperatureC >= 18 && temperatureC <= 28)) {
+  if (!isNear23C(temperatureC)) {
     throw new RangeError(`The temperature correction holds from 18 to 28 °C, not at ${temperatureC}.`);
   }
   const coefficient = temperatureCoefficientPercentPerC(type, resistivityOhmCm);

@@ -20,6 +20,8 @@ export const PROFILE_WORDS: Record<Target['profile'], string> = {
   box: 'box over its junction',
   gaussian: 'gaussian (drive-in of a fixed dose)',
   erfc: 'erfc (constant source)',
+  implant: 'implant (dose, range and straggle)',
+  pairs: 'profile of depths and densities',
 };
 
 export const SUBGROUP_WORDS: Record<Stream['subgroup'], string> = {

@@ -1,39 +1,41 @@
 import { carriers, type Carriers } from '@/lib/physics/carriers';
+import { codopedPlace, type MeltDopant } from '@/lib/physics/codoped-crystal';
 import { conductionResistivity, type Doping, type MobilityModel } from '@/lib/physics/conduction-resistivity';
-import { conductionType } from '@/lib/physics/dopant';
-import { ionizedFraction } from '@/lib/physics/ionized-fraction';
-import { modelUncertaintyPercent } from '@/lib/physics/model-uncertainty';
+import { ionizedCarriers, type IonizedCarriers } from '@/lib/physics/ionized-carriers';
 import { monotoneRoot } from '@/lib/physics/monotone-root';
 import { resistivityAtTemperature } from '@/lib/physics/resistivity-at-temperature';
-import { scheilDensity } from '@/lib/physics/scheil-density';
+import { standardDensity300K, standardResistivity300K } from '@/lib/physics/standard-conversion-300k';
 import { standardDensity } from '@/lib/physics/standard-density';
-import { standardNotes } from '@/lib/physics/standard-notes';
+import { standardDensityLimits } from '@/lib/physics/standard-density-limits';
 import { standardResistivity } from '@/lib/physics/standard-resistivity';
-import { standardUncertaintyPercent } from '@/lib/physics/standard-uncertainty';
-import { resistivityAt23C } from '@/lib/physics/temperature-coefficient';
-import type { BulkQuestion } from './expect-question';
+import type { Target } from '@/lib/physics/target';
+import { isNear23C, resistivityAt23C } from '@/lib/physics/temperature-coefficient';
+import { conductionType } from '@/lib/physics/dopant';
+import { bulkNotes } from './expect-bulk-notes';
+import type { BulkQuestion } from './expect-bulk-question';
+import { budgetIn, extras, type Extras } from './expect-extras';
+import type { Circumstances } from './expect-question';
 
 /** The answer of `expect`, as `--json` prints it. */
-export interface ExpectAnswer {
+export interface ExpectAnswer extends Extras {
   type: 'n' | 'p' | 'intrinsic';
   densityPerCm3: number;
   resistivityOhmCm: number;
   temperatureC: number;
   model: string;
-  uncertaintyPercent: number;
+  /** Null where only an order of magnitude is known. */
+  uncertaintyPercent: number | null;
+  /** Every dopant ionized; beside it with the share that is, where that is published. */
   carriers: Carriers;
+  ionizedCarriers: IonizedCarriers | null;
   notes: string[];
 }
 
-function doping(question: BulkQuestion, densityPerCm3: number): Doping {
-  const counter = question.counter?.densityPerCm3 ?? 0;
-  const donor = question.dopant === 'boron' ? (question.counter?.dopant ?? 'phosphorus') : question.dopant;
-  const isAcceptor = question.dopant === 'boron';
-  return {
-    donor: donor === 'boron' ? 'phosphorus' : donor,
-    donorsPerCm3: isAcceptor ? counter : densityPerCm3,
-    acceptorsPerCm3: isAcceptor ? densityPerCm3 : counter,
-  };
+/** The melt, or the piece of silicon, that a density of the main dopant makes. */
+function dopants(question: BulkQuestion, densityPerCm3: number): MeltDopant[] {
+  const own = { dopant: question.dopant, seedDensityPerCm3: densityPerCm3 };
+  if (question.counter === null) return [own];
+  return [own, { dopant: question.counter.dopant, seedDensityPerCm3: question.counter.densityPerCm3 }];
 }
 
 function modelResistivity(model: MobilityModel, mixed: Doping, temperatureC: number): number {
@@ -45,99 +47,119 @@ function modelResistivity(model: MobilityModel, mixed: Doping, temperatureC: num
   return conductionResistivity('masetti', mixed, 300) * ratio;
 }
 
-function resistivityOf(question: BulkQuestion, densityPerCm3: number): number {
-  const { model, dopant, temperatureC } = question;
-  if (!(densityPerCm3 > 0))
-    throw new RangeError(`A dopant density is positive, not ${densityPerCm3} per cm³.`);
-  if (model !== 'standard') return modelResistivity(model, doping(question, densityPerCm3), temperatureC);
-  const at23C = standardResistivity(dopant, densityPerCm3);
-  return resistivityAtTemperature(dopant, densityPerCm3, at23C, temperatureC);
+/** The conversion at 300 K of a dopant: where phosphorus data serve at 23 °C they serve here, and nowhere else. */
+function fitAt300K(dopant: BulkQuestion['dopant'], densityPerCm3: number): 'boron' | 'phosphorus' {
+  if (dopant === 'boron' || dopant === 'phosphorus') return dopant;
+  if (densityPerCm3 < 1e19) return 'phosphorus';
+  throw new RangeError(`At 300 K nothing is published for ${dopant} from 1e19 per cm³ on.`);
+}
+
+function resistivityOf(question: BulkQuestion, doping: Doping): number {
+  const { model, dopant, temperatureC, conversion } = question;
+  if (model !== 'standard') return modelResistivity(model, doping, temperatureC);
+  const density = doping.donorsPerCm3 + doping.acceptorsPerCm3;
+  if (conversion === '300k') return standardResistivity300K(fitAt300K(dopant, density), density);
+  return resistivityAtTemperature(dopant, density, standardResistivity(dopant, density), temperatureC);
+}
+
+function standardDensityOf(question: BulkQuestion, resistivityOhmCm: number): number {
+  const { dopant, temperatureC, inverse, conversion } = question;
+  if (conversion === '300k') {
+    const density = standardDensity300K(
+      dopant === 'boron' ? 'boron' : 'phosphorus',
+      resistivityOhmCm,
+      inverse,
+    );
+    fitAt300K(dopant, density);
+    return density;
+  }
+  if (isNear23C(temperatureC)) {
+    const isAt23C = temperatureC === 23;
+    const at23C = isAt23C
+      ? resistivityOhmCm
+      : resistivityAt23C(conductionType(dopant), resistivityOhmCm, temperatureC);
+    return standardDensity(dopant, at23C, inverse);
+  }
+  if (inverse === 'direct') throw new RangeError('The direct fit serves from 18 to 28 °C.');
+  const { lowerPerCm3, upperPerCm3 } = standardDensityLimits(dopant);
+  return rootDensity(question, resistivityOhmCm, lowerPerCm3, upperPerCm3);
+}
+
+function rootDensity(question: BulkQuestion, resistivityOhmCm: number, lower: number, upper: number): number {
+  const within = (ln: number): number => Math.min(upper, Math.max(lower, Math.exp(ln)));
+  const excess = (ln: number): number =>
+    Math.log(resistivityOf(question, codopedPlace(dopants(question, within(ln)), 0)) / resistivityOhmCm);
+  const root = monotoneRoot(excess, Math.log(lower), Math.log(upper), 1e-12);
+  if (root === null) {
+    throw new RangeError(
+      `No ${question.dopant} density of the ${question.model} model gives ${resistivityOhmCm} Ω·cm.`,
+    );
+  }
+  return within(root);
 }
 
 /** The density of the dopant that gives a resistivity at the temperature asked for. */
 function densityOf(question: BulkQuestion, resistivityOhmCm: number): number {
-  const { model, dopant, temperatureC, inverse } = question;
-  if (!(resistivityOhmCm > 0))
+  if (!(resistivityOhmCm > 0)) {
     throw new RangeError(`A resistivity is positive, not ${resistivityOhmCm} Ω·cm.`);
-  if (model === 'standard') {
-    const at23C =
-      temperatureC === 23
-        ? resistivityOhmCm
-        : resistivityAt23C(conductionType(dopant), resistivityOhmCm, temperatureC);
-    return standardDensity(dopant, at23C, inverse);
   }
+  if (question.model === 'standard') return standardDensityOf(question, resistivityOhmCm);
   // With a counter dopant the same resistivity is met on both sides of compensation: ours is the heavier one.
   const from = Math.max(1e10, (question.counter?.densityPerCm3 ?? 0) * 1.000001);
-  const excess = (ln: number): number => Math.log(resistivityOf(question, Math.exp(ln)) / resistivityOhmCm);
-  const root = monotoneRoot(excess, Math.log(from), Math.log(1e21), 1e-12);
-  if (root === null)
-    throw new RangeError(`No ${dopant} density of the ${model} model gives ${resistivityOhmCm} Ω·cm.`);
-  return Math.exp(root);
+  return rootDensity(question, resistivityOhmCm, from, 1e21);
 }
 
-function bulkNotes(question: BulkQuestion, densityPerCm3: number, uncertaintyPercent: number): string[] {
-  const { model, dopant, temperatureC } = question;
-  const notes = model === 'standard' ? standardNotes(dopant, densityPerCm3) : [];
-  if (model !== 'standard') {
-    notes.push(
-      `The ${model} model stands in for the standard conversion; the uncertainty is its spread against it, and every dopant counts as ionized.`,
-    );
-  }
-  if (model === 'masetti' && temperatureC + 273.15 !== 300) {
-    notes.push(
-      'The Masetti model holds at 300 K (26.85 °C) and is moved by the temperature ratio of the Arora model.',
-    );
-  }
-  if (question.counter !== null)
-    notes.push('Compensated: mobility at the total of both dopants, carriers from both.');
-  if (model === 'standard' && (temperatureC < 18 || temperatureC > 28)) {
-    notes.push(
-      'Outside 18 to 28 °C the value at 23 °C is moved by the temperature ratio of the Arora model.',
-    );
-  }
-  const ionized = question.counter === null ? ionizedFraction(dopant, densityPerCm3, 300) : null;
-  if (model === 'standard' && ionized !== null && ionized < 0.99) {
-    notes.push(
-      `Carriers count every dopant as ionized; at 300 K about ${(100 * ionized).toFixed(0)} % are (Altermatt and others, 2006). The conversion holds that already.`,
-    );
-  }
-  if (question.fraction !== null) {
-    notes.push('The doping given is the seed end’s; Scheil’s law leads to the fraction asked for.');
-  }
-  if (question.resistivityOhmCm !== null) {
-    const step = resistivityOf(question, densityPerCm3 * 0.999) / resistivityOf(question, densityPerCm3);
-    const inDoping = (uncertaintyPercent * Math.log(1 / 0.999)) / Math.log(step);
-    notes.push(
-      `${question.inverse === 'direct' ? 'Direct fit' : 'Numeric inverse'}; in doping the uncertainty is ${inDoping.toFixed(1)} %.`,
-    );
-  }
-  return notes;
+function uniformTarget(dopant: BulkQuestion['dopant'], densityPerCm3: number): Target {
+  return {
+    quantity: 'resistivity',
+    dopant,
+    densityPerCm3,
+    tolerancePercent: null,
+    alongCrystal: false,
+    profile: 'uniform',
+    lengthUm: null,
+    backgroundDopant: null,
+    backgroundDensityPerCm3: null,
+    calibrationFactor: null,
+    calibrationPercent: null,
+  };
 }
 
 /**
- * Answers `expect` for silicon of one doping, maybe compensated, at a temperature, maybe along a crystal.
+ * Answers `expect` for silicon of one doping, maybe compensated, at a temperature, maybe along a crystal, where each
+ * dopant follows its own segregation.
  *
  * Throws RangeError where the conversion or model ends.
  */
-export function expectBulk(question: BulkQuestion): ExpectAnswer {
-  const given = question.densityPerCm3 ?? densityOf(question, question.resistivityOhmCm ?? Number.NaN);
-  const densityPerCm3 =
-    question.fraction === null ? given : scheilDensity(question.dopant, given, question.fraction);
-  const uncertaintyPercent =
-    question.model === 'standard'
-      ? standardUncertaintyPercent(question.dopant)
-      : modelUncertaintyPercent(question.model, question.dopant);
-  const mixed = doping(question, densityPerCm3);
-  const net = mixed.donorsPerCm3 - mixed.acceptorsPerCm3;
-  const asGiven = question.fraction === null ? question.resistivityOhmCm : null;
+export function expectBulk(question: BulkQuestion, circumstances: Circumstances): ExpectAnswer {
+  const { model, fraction, temperatureC } = question;
+  const seed = question.densityPerCm3 ?? densityOf(question, question.resistivityOhmCm ?? Number.NaN);
+  const melt = dopants(question, seed);
+  const place = codopedPlace(melt, fraction ?? 0);
+  const densityPerCm3 = question.dopant === 'boron' ? place.acceptorsPerCm3 : place.donorsPerCm3;
+  const asGiven = fraction === null ? question.resistivityOhmCm : null;
+  const resistivityOhmCm = asGiven ?? resistivityOf(question, place);
+  const target = uniformTarget(question.dopant, densityPerCm3);
+  const budget = budgetIn(
+    target,
+    question.conversion === '300k' ? { ...circumstances, temperatureC: 23 } : circumstances,
+    model === 'standard' ? null : model,
+  );
+  const beside: Extras =
+    model === 'standard'
+      ? extras(target, resistivityOhmCm, circumstances, budget)
+      : { sensitivities: null, budget };
+  const temperatureK = temperatureC + 273.15;
   return {
-    type: net === 0 ? 'intrinsic' : net > 0 ? 'n' : 'p',
+    type: place.type,
     densityPerCm3,
-    resistivityOhmCm: asGiven ?? resistivityOf(question, densityPerCm3),
-    temperatureC: question.temperatureC,
-    model: question.model,
-    uncertaintyPercent,
-    carriers: carriers(mixed.donorsPerCm3, mixed.acceptorsPerCm3, question.temperatureC + 273.15),
-    notes: bulkNotes(question, densityPerCm3, uncertaintyPercent),
+    resistivityOhmCm,
+    temperatureC,
+    model,
+    uncertaintyPercent: budget.standardPercent,
+    carriers: carriers(place.donorsPerCm3, place.acceptorsPerCm3, temperatureK),
+    ionizedCarriers: ionizedCarriers(place, temperatureK),
+    notes: bulkNotes(question, { melt, place, uncertaintyPercent: budget.standardPercent }),
+    ...beside,
   };
 }

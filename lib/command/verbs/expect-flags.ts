@@ -3,28 +3,49 @@ import { decimalNumber } from '@/lib/command/decimal-number';
 import { UsageError } from '@/lib/command/verb';
 import { DOPANTS, type Dopant } from '@/lib/physics/dopant';
 
+const text = { type: 'string' } as const;
 const options = {
-  dopant: { type: 'string' },
-  density: { type: 'string' },
-  resistivity: { type: 'string' },
-  inverse: { type: 'string' },
-  'temperature-c': { type: 'string' },
-  model: { type: 'string' },
-  'counter-dopant': { type: 'string' },
-  'counter-density': { type: 'string' },
-  profile: { type: 'string' },
-  'peak-density': { type: 'string' },
-  'length-um': { type: 'string' },
-  'background-dopant': { type: 'string' },
-  'background-density': { type: 'string' },
-  fraction: { type: 'string' },
+  dopant: text,
+  density: text,
+  resistivity: text,
+  inverse: text,
+  conversion: text,
+  'temperature-c': text,
+  'temperature-uncertainty-c': text,
+  model: text,
+  'counter-dopant': text,
+  'counter-density': text,
+  profile: text,
+  'peak-density': text,
+  'dose-per-cm2': text,
+  'length-um': text,
+  'range-um': text,
+  'straggle-um': text,
+  'drive-in-c': text,
+  'drive-in-min': text,
+  'pairs-file': text,
+  'background-dopant': text,
+  'background-density': text,
+  'thickness-um': text,
+  'thickness-uncertainty-percent': text,
+  'substrate-dopant': text,
+  'substrate-density': text,
+  method: text,
+  fraction: text,
+  measured: text,
+  uncertainty: { type: 'boolean' },
   json: { type: 'boolean' },
 } as const;
 
+type Switch = 'json' | 'uncertainty';
+
 /** The flags of `expect` as typed. */
-export type Flags = { [name in Exclude<keyof typeof options, 'json'>]?: string | undefined } & {
-  json?: boolean | undefined;
+export type Flags = { [name in Exclude<keyof typeof options, Switch>]?: string | undefined } & {
+  [name in Switch]?: boolean | undefined;
 };
+
+/** A flag that takes a value. */
+export type Valued = Exclude<keyof Flags, Switch>;
 
 /** Reads the flags; throws `UsageError` for one that does not exist. */
 export function expectFlags(args: string[]): Flags {
@@ -36,7 +57,7 @@ export function expectFlags(args: string[]): Flags {
 }
 
 /** One word of a list, or null when the flag is absent. */
-export function word<W extends string>(flags: Flags, name: keyof Flags, words: readonly W[]): W | null {
+export function word<W extends string>(flags: Flags, name: Valued, words: readonly W[]): W | null {
   const given = flags[name];
   if (given === undefined) return null;
   const found = words.find((w) => w === given);
@@ -45,7 +66,7 @@ export function word<W extends string>(flags: Flags, name: keyof Flags, words: r
 }
 
 /** A number, or null when the flag is absent. */
-export function number(flags: Flags, name: Exclude<keyof Flags, 'json'>): number | null {
+export function number(flags: Flags, name: Valued): number | null {
   const given = flags[name];
   if (given === undefined) return null;
   const value = decimalNumber(given);
@@ -56,7 +77,7 @@ export function number(flags: Flags, name: Exclude<keyof Flags, 'json'>): number
 /** A dopant and its density, which go together, or null when both flags are absent. */
 export function pair(
   flags: Flags,
-  name: 'counter' | 'background',
+  name: 'counter' | 'background' | 'substrate',
 ): { dopant: Dopant; densityPerCm3: number } | null {
   const dopant = word(flags, `${name}-dopant`, DOPANTS);
   const densityPerCm3 = number(flags, `${name}-density`);
@@ -68,7 +89,7 @@ export function pair(
 }
 
 /** Throws `UsageError` for the first of these flags that is there. */
-export function refuse(flags: Flags, names: readonly (keyof Flags)[], why: string): void {
+export function refuse(flags: Flags, names: readonly Valued[], why: string): void {
   const given = names.find((name) => flags[name] !== undefined);
   if (given !== undefined) throw new UsageError(`--${given} ${why}`);
 }

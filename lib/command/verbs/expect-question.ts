@@ -1,101 +1,65 @@
 import { UsageError } from '@/lib/command/verb';
-import type { MobilityModel } from '@/lib/physics/conduction-resistivity';
-import { conductionType, DOPANTS, type Dopant } from '@/lib/physics/dopant';
-import type { Layer } from '@/lib/physics/layer';
-import { expectFlags, number, pair, refuse, word, type Flags } from './expect-flags';
+import { DOPANTS } from '@/lib/physics/dopant';
+import type { Target } from '@/lib/physics/target';
+import { bulkQuestion, type BulkQuestion } from './expect-bulk-question';
+import { expectFlags, number, refuse, word, type Flags } from './expect-flags';
+import { epiTarget, layerTarget } from './expect-layer-target';
 
-/** A question about silicon of one doping, as the flags ask it. */
-export interface BulkQuestion {
-  dopant: Dopant;
-  densityPerCm3: number | null;
-  resistivityOhmCm: number | null;
-  inverse: 'numeric' | 'direct';
+/** What goes with every question: the wafer's temperature, what is known of the measurement, and what it measured. */
+export interface Circumstances {
   temperatureC: number;
-  model: 'standard' | MobilityModel;
-  counter: { dopant: Dopant; densityPerCm3: number } | null;
-  fraction: number | null;
+  temperatureUncertaintyC: number | null;
+  thicknessUncertaintyPercent: number | null;
+  /** What was measured, of which an explanation is asked. */
+  measured: number | null;
 }
 
 /** What the flags of `expect` ask. */
-export type ExpectQuestion = { json: boolean } & ({ bulk: BulkQuestion } | { layer: Layer });
+export type ExpectQuestion = { json: boolean; budget: boolean; circumstances: Circumstances } & (
+  { bulk: BulkQuestion } | { layer: Target }
+);
 
-function layerQuestion(flags: Flags, dopant: Dopant, profile: Layer['profile']): Layer {
+const PROFILES = ['box', 'gaussian', 'erfc', 'implant', 'pairs'] as const;
+
+async function subject(flags: Flags): Promise<{ bulk: BulkQuestion } | { layer: Target }> {
+  const dopant = word(flags, 'dopant', DOPANTS);
+  if (dopant === null) throw new UsageError(`--dopant is needed: ${DOPANTS.join(', ')}`);
+  const named = word(flags, 'profile', PROFILES);
+  const profile = named ?? (flags['range-um'] !== undefined ? 'implant' : null);
+  if (profile !== null) return { layer: await layerTarget(flags, dopant, profile) };
   refuse(
     flags,
-    ['density', 'resistivity', 'inverse', 'temperature-c', 'counter-dopant', 'counter-density', 'fraction'],
-    'does not go with --profile: a layer is given by --peak-density and --length-um, at 23 °C',
+    [
+      'peak-density',
+      'dose-per-cm2',
+      'length-um',
+      'straggle-um',
+      'drive-in-c',
+      'drive-in-min',
+      'pairs-file',
+      'background-dopant',
+      'background-density',
+    ],
+    'goes with --profile box, gaussian, erfc, implant or pairs',
   );
-  if ((word(flags, 'model', ['standard', 'masetti', 'arora', 'klaassen']) ?? 'standard') !== 'standard') {
-    throw new UsageError('a layer is computed with --model standard only');
-  }
-  const peakDensityPerCm3 = number(flags, 'peak-density');
-  const lengthUm = number(flags, 'length-um');
-  if (peakDensityPerCm3 === null || lengthUm === null) {
-    throw new UsageError('a layer needs --peak-density and --length-um');
-  }
-  const background = pair(flags, 'background');
-  if (background === null && profile !== 'box') {
-    throw new UsageError(`a ${profile} layer needs --background-dopant and --background-density`);
-  }
-  return {
-    profile,
-    dopant,
-    peakDensityPerCm3,
-    lengthUm,
-    backgroundDopant: background?.dopant ?? null,
-    backgroundDensityPerCm3: background?.densityPerCm3 ?? null,
-  };
-}
-
-function bulkQuestion(flags: Flags, dopant: Dopant): BulkQuestion {
-  refuse(
-    flags,
-    ['peak-density', 'length-um', 'background-dopant', 'background-density'],
-    'goes with --profile box, gaussian or erfc',
-  );
-  const densityPerCm3 = number(flags, 'density');
-  const resistivityOhmCm = number(flags, 'resistivity');
-  if ((densityPerCm3 === null) === (resistivityOhmCm === null)) {
-    throw new UsageError('give --density or --resistivity, one of the two');
-  }
-  const counter = pair(flags, 'counter');
-  if (counter !== null && conductionType(counter.dopant) === conductionType(dopant)) {
-    throw new UsageError(
-      `--counter-dopant ${counter.dopant} does not counter ${dopant}: both give the same type`,
-    );
-  }
-  const asked = word(flags, 'model', ['standard', 'masetti', 'arora', 'klaassen']);
-  if (asked === 'standard' && counter !== null) {
-    throw new UsageError(
-      '--model standard knows one dopant; with a counter dopant choose masetti, arora or klaassen',
-    );
-  }
-  const model = asked ?? (counter === null ? 'standard' : 'masetti');
-  const inverse = word(flags, 'inverse', ['numeric', 'direct']);
-  if (inverse !== null && resistivityOhmCm === null)
-    throw new UsageError('--inverse goes with --resistivity');
-  if (inverse === 'direct' && model !== 'standard')
-    throw new UsageError('--inverse direct is a fit of the standard');
-  return {
-    dopant,
-    densityPerCm3,
-    resistivityOhmCm,
-    inverse: inverse ?? 'numeric',
-    temperatureC: number(flags, 'temperature-c') ?? 23,
-    model,
-    counter,
-    fraction: number(flags, 'fraction'),
-  };
+  if (flags['thickness-um'] !== undefined) return { layer: epiTarget(flags, dopant) };
+  refuse(flags, ['substrate-dopant', 'substrate-density', 'method'], 'goes with --thickness-um');
+  return { bulk: bulkQuestion(flags, dopant) };
 }
 
 /** Reads the flags of `expect`; throws `UsageError` for what does not go together. */
-export function expectQuestion(args: string[]): ExpectQuestion {
+export async function expectQuestion(args: string[]): Promise<ExpectQuestion> {
   const flags = expectFlags(args);
-  const dopant = word(flags, 'dopant', DOPANTS);
-  if (dopant === null) throw new UsageError(`--dopant is needed: ${DOPANTS.join(', ')}`);
-  const profile = word(flags, 'profile', ['box', 'gaussian', 'erfc']);
-  const json = flags.json === true;
-  return profile === null
-    ? { json, bulk: bulkQuestion(flags, dopant) }
-    : { json, layer: layerQuestion(flags, dopant, profile) };
+  const conversion = word(flags, 'conversion', ['23c', '300k']);
+  return {
+    json: flags.json === true,
+    budget: flags.uncertainty === true,
+    ...(await subject(flags)),
+    circumstances: {
+      temperatureC: number(flags, 'temperature-c') ?? (conversion === '300k' ? 26.85 : 23),
+      temperatureUncertaintyC: number(flags, 'temperature-uncertainty-c'),
+      thicknessUncertaintyPercent: number(flags, 'thickness-uncertainty-percent'),
+      measured: number(flags, 'measured'),
+    },
+  };
 }

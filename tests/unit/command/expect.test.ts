@@ -123,7 +123,6 @@ describe('expect', () => {
     '--dopant boron --resistivity 1e9',
     '--dopant boron --density 1e15 --temperature-c 300',
     '--dopant boron --density 1e15 --fraction 1',
-    '--dopant antimony --density 1e17 --model masetti',
     '--dopant boron --profile box --peak-density 1e19 --length-um 1 --background-dopant boron --background-density 1e15',
   ])('refuses "%s" with a reason and status 3', async (line) => {
     const { status, out, said } = await run(`${line} --json`);

@@ -1,6 +1,7 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { densityFromMeasured } from '@/lib/physics/density-from-measured';
+import { depletionWidth } from '@/lib/physics/depletion-width';
 import { expectedValue } from '@/lib/physics/expected-value';
 import { missingForExpected } from '@/lib/physics/missing-for-expected';
 import { sheetResistance } from '@/lib/physics/sheet-resistance';
@@ -84,18 +85,32 @@ describe('the expected value', () => {
     expect(plain.notes.join(' ')).toMatch(/5 to 20 %/);
   });
 
-  it('says what the junction under an epitaxial layer takes, and where there is none', () => {
-    const epi: Target = {
-      ...boron,
-      quantity: 'sheet_resistance',
-      lengthUm: 10,
-      backgroundDensityPerCm3: 1e19,
-    };
-    // 1e15 on 1e19: 1.04 µm, recomputed from the depletion approximation.
-    expect(expectedValue({ ...epi, backgroundDopant: 'phosphorus' }).notes.join(' ')).toMatch(/1\.04 µm/);
-    expect(expectedValue({ ...epi, backgroundDopant: 'boron' }).notes.join(' ')).toMatch(
-      /measures the background/,
-    );
+  const epi: Target = {
+    ...boron,
+    quantity: 'sheet_resistance',
+    lengthUm: 10,
+    backgroundDensityPerCm3: 1e19,
+  };
+
+  it('lets a grown layer end at the depletion edge of its junction', () => {
+    // 1e15 on 1e19: 1.04 µm, recomputed from the depletion approximation [calc].
+    const expected = expectedValue({ ...epi, backgroundDopant: 'phosphorus' });
+    expect(expected.notes.join(' ')).toMatch(/1\.04 µm/);
+    const conductingCm = (10 - depletionWidth(1e15, 1e19)) * 1e-4;
+    expect(expected.value).toBeCloseTo(standardResistivity('boron', 1e15) / conductingCm, 6);
+  });
+
+  it('refuses a grown layer that is depleted through', () => {
+    const thin = { ...epi, backgroundDopant: 'phosphorus' as const, lengthUm: 1 };
+    expect(() => expectedValue(thin)).toThrow(/nothing of it conducts/);
+  });
+
+  it('refuses a layer on a substrate of its own type unless another method is declared', () => {
+    const onOwnType = { ...epi, backgroundDopant: 'boron' as const };
+    expect(() => expectedValue(onOwnType)).toThrow(/measures the substrate/);
+    const other = expectedValue({ ...onOwnType, method: 'other' });
+    expect(other.value).toBeCloseTo(standardResistivity('boron', 1e15) / 1e-3, 8);
+    expect(other.notes.join(' ')).toMatch(/another method/);
   });
 
   it('says where phosphorus stands in for arsenic', () => {

@@ -6,6 +6,7 @@ import { complementaryErrorFunction } from '@/lib/physics/complementary-error-fu
 import { conductionResistivity } from '@/lib/physics/conduction-resistivity';
 import { klaassenMobility } from '@/lib/physics/klaassen-mobility';
 import { masettiMobility } from '@/lib/physics/masetti-mobility';
+import { mobilityNotes } from '@/lib/physics/mobility-notes';
 import { monotoneRoot } from '@/lib/physics/monotone-root';
 import { resistivityAtTemperature } from '@/lib/physics/resistivity-at-temperature';
 import { scheilDensity } from '@/lib/physics/scheil-density';
@@ -54,10 +55,20 @@ describe('the mobility models', () => {
     }
   });
 
-  it('refuse what they have no set for', () => {
+  it('let phosphorus stand in for antimony, and say so', () => {
     expect(() => masettiMobility('antimony', 1e17)).toThrow(RangeError);
     const doping = { donor: 'antimony' as const, donorsPerCm3: 1e17, acceptorsPerCm3: 0 };
-    expect(() => conductionResistivity('klaassen', doping, 300)).toThrow(/antimony/);
+    for (const model of ['masetti', 'klaassen'] as const) {
+      const phosphorus = conductionResistivity(model, { ...doping, donor: 'phosphorus' }, 300);
+      expect(conductionResistivity(model, doping, 300)).toBe(phosphorus);
+      expect(mobilityNotes(model, doping).join(' ')).toMatch(/phosphorus stands in/);
+      expect(mobilityNotes(model, { ...doping, donor: 'arsenic' }).join(' ')).not.toMatch(/stands in, with/);
+    }
+    expect(mobilityNotes('arora', doping).join(' ')).toMatch(/nothing is published/);
+  });
+
+  it('refuse the temperatures they do not hold at', () => {
+    const doping = { donor: 'antimony' as const, donorsPerCm3: 1e17, acceptorsPerCm3: 0 };
     expect(() => conductionResistivity('masetti', { ...doping, donor: 'arsenic' }, 296.15)).toThrow(/300 K/);
     expect(conductionResistivity('arora', doping, 300)).toBeGreaterThan(0);
   });
