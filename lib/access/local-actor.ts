@@ -1,14 +1,6 @@
 import { userInfo } from 'node:os';
 import { provenActor, type Actor } from './actor';
 
-/**
- * The person at this machine. Until there are accounts the server listens on loopback only, so whoever reaches a page
- * sits at the machine and has all rights.
- */
-export function localActor(): Actor {
-  return provenActor({ kind: 'command', id: null, name: 'local person', grants: [] });
-}
-
 /** Whoever runs the command line on this machine: the operating system's user. */
 export function commandActor(): Actor {
   return provenActor({

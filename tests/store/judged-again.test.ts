@@ -232,8 +232,8 @@ describe('an excursion', () => {
     );
     expect(rows[0]).toEqual({
       state: 'closed',
-      acknowledged_by: 'local person',
-      closed_by: 'local person',
+      acknowledged_by: actor.name,
+      closed_by: actor.name,
       cause: 'A valve stuck',
     });
     await expect(getPool().query('DELETE FROM excursion_entry')).rejects.toThrow('never changed');

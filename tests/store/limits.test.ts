@@ -74,7 +74,7 @@ describe('the first limits', () => {
       'SELECT approved_by, approval_reason FROM limit_revision WHERE id = $1',
       [first!.id],
     );
-    expect(rows[0]).toEqual({ approved_by: 'local person', approval_reason: 'looked at' });
+    expect(rows[0]).toEqual({ approved_by: actor.name, approval_reason: 'looked at' });
     expect(await approveLimits(actor, first!.id, approval(hour(0)))).toEqual({
       ok: false,
       reason: 'Revision 1 is approved already.',

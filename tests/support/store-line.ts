@@ -1,4 +1,4 @@
-import { localActor } from '@/lib/access/local-actor';
+import { commandActor } from '@/lib/access/local-actor';
 import { getPool } from '@/lib/database/client';
 import { takeIds } from '@/lib/database/take-ids';
 import type { LimitSet } from '@/lib/control/limit-set';
@@ -10,7 +10,7 @@ import { createSitePlan, createStream, type NewStream } from '@/lib/streams/muta
 import type { Specification } from '@/lib/streams/types';
 import { polarSites } from '@/lib/wafer/polar-sites';
 
-export const actor = localActor();
+export const actor = commandActor();
 const SITES = polarSites(1, 90);
 const HOUR_MS = 3_600_000;
 export const START = Date.UTC(2021, 3, 1);

@@ -2,7 +2,7 @@ import { mkdtemp, readdir, rm, stat, utimes } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
 import path from 'node:path';
 import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest';
-import { localActor } from '@/lib/access/local-actor';
+import { commandActor } from '@/lib/access/local-actor';
 import {
   claimWaitingFile,
   dropWaitingFile,
@@ -11,7 +11,7 @@ import {
   releaseWaitingFile,
 } from '@/lib/maps/waiting-file';
 
-const actor = localActor();
+const actor = commandActor();
 const stream = (...chunks: string[]) => new Blob(chunks).stream();
 let data = '';
 
