@@ -1,3 +1,5 @@
+import { binaryArray } from './binary-array';
+
 /** One column of a bulk statement: its name, its PostgreSQL type, and where a row keeps it. */
 export interface Column<Row> {
   name: string;
@@ -7,8 +9,8 @@ export interface Column<Row> {
 
 /**
  * Rows as a subquery over `unnest`, one array parameter per column: one statement carries thousands of rows, and its
- * text does not depend on their number. Every column travels as one array literal; a column of arrays as text of such
- * literals (`arrayLiteral`), and is cast.
+ * text does not depend on their number. Every column travels as one array; a column of arrays as text of such literals
+ * (`arrayLiteral`), and is cast.
  * Appends to `parameters` and returns `(SELECT …)`.
  */
 export function rowsAsQuery<Row>(
@@ -28,15 +30,14 @@ export function columnsAsQuery<Row>(columns: readonly Column<Row>[], first: numb
   return `(SELECT ${selected.join(', ')} FROM unnest(${sources.join(', ')}) AS given (${columnNames(columns)}))`;
 }
 
-/** The parameters of that subquery: for each column its values as one array literal. */
-export function columnLiterals<Row>(columns: readonly Column<Row>[], rows: readonly Row[]): string[] {
+/** The parameters of that subquery: for each column its values as one array, in binary form or as a literal. */
+export function columnLiterals<Row>(
+  columns: readonly Column<Row>[],
+  rows: readonly Row[],
+): (string | Buffer)[] {
   return columns.map(({ type, value }) => {
-    let literal = '{';
-    for (let i = 0; i < rows.length; i += 1) {
-      if (i > 0) literal += ',';
-      literal += element(value(rows[i] as Row), type);
-    }
-    return literal + '}';
+    const values = rows.map(value);
+    return binaryArray(type, values) ?? `{${values.map((one) => element(one, type)).join()}}`;
   });
 }
 
@@ -44,7 +45,8 @@ export function columnLiterals<Row>(columns: readonly Column<Row>[], rows: reado
 function element(value: unknown, type: string): string {
   if (value === null || value === undefined) return 'NULL';
   const text = String(value);
-  if (type === 'text' || type === 'json') return `"${text.replace(/[\\"]/g, '\\$&')}"`;
+  if (type === 'text' || type === 'json')
+    return `"${/[\\"]/.test(text) ? text.replace(/[\\"]/g, '\\$&') : text}"`;
   return type.endsWith('[]') ? `"${text.replaceAll('"', '\\"')}"` : text;
 }
 

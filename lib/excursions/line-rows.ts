@@ -151,7 +151,7 @@ export const POINT_COLUMNS: readonly Column<{ streamId: string; point: LinePoint
   { name: 'stream_id', type: 'bigint', value: (row) => row.streamId },
   { name: 'id', type: 'bigint', value: (row) => row.point.id },
   { name: 'key', type: 'text', value: (row) => row.point.key },
-  { name: 'position_at', type: 'timestamptz', value: (row) => new Date(row.point.at).toISOString() },
+  { name: 'position_at', type: 'timestamptz', value: (row) => new Date(row.point.at) },
   { name: 'state', type: 'text', value: (row) => row.point.state },
   { name: 'history', type: 'boolean', value: (row) => row.point.history },
   {

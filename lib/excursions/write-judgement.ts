@@ -38,7 +38,7 @@ export function pointsStatement(first: number, guard = ''): string {
 }
 
 /** The parameters of `pointsStatement`. */
-export function pointLiterals(judged: readonly JudgedLine[]): string[] {
+export function pointLiterals(judged: readonly JudgedLine[]): (string | Buffer)[] {
   const rows = judged.flatMap(({ line, change }) =>
     change.points.map((point) => ({ streamId: line.streamId, point })),
   );

@@ -51,7 +51,7 @@ const fact = (name: keyof MeasurementFacts, column: string, type: string): Colum
 const time = (name: 'measuredAt' | 'processedAt', column: string): Column<WaferRow> => ({
   name: column,
   type: 'timestamptz',
-  value: ({ measurement }) => measurement.facts[name].toISOString(),
+  value: ({ measurement }) => measurement.facts[name],
 });
 
 /** What measuring decides, written at first and again when a person takes a reading out or puts one back. */
@@ -134,7 +134,7 @@ export const WAFER_COLUMNS: readonly Column<WaferRow>[] = [
   fact('note', 'note', 'text'),
   { name: 'content_hash', type: 'text', value: (row) => sentContent(row.measurement).hash },
   { name: 'history', type: 'boolean', value: (row) => row.history },
-  { name: 'recorded_at', type: 'timestamptz', value: (row) => row.recordedAt.toISOString() },
+  { name: 'recorded_at', type: 'timestamptz', value: (row) => row.recordedAt },
   { name: 'recorded_by', type: 'text', value: (row) => row.recordedBy },
   { name: 'sites', type: 'integer', value: (row) => row.measured.measure.sites },
   ...MEASURED_COLUMNS,
