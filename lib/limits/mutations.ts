@@ -1,5 +1,7 @@
 import type { ClientBase } from 'pg';
 import type { Actor } from '@/lib/access/actor';
+import { isFourEyes } from '@/lib/access/four-eyes';
+import { refuse } from '@/lib/access/refusal';
 import { hasRoom } from '@/lib/control/has-room';
 import { limitSet, type LimitSet } from '@/lib/control/limit-set';
 import { columnNames, rowsAsQuery } from '@/lib/database/columnar';
@@ -22,6 +24,8 @@ export async function draftLimits(
   reason: string,
   draftedAt = new Date(),
 ): Promise<Result> {
+  const refusal = refuse(actor, 'draft-limits', streamId);
+  if (refusal) return refusal;
   const points = await listBaselinePoints(actor, streamId, span);
   if (points.length < 2)
     return { ok: false, reason: `That span holds ${points.length} judged subgroups; limits need two.` };
@@ -50,6 +54,8 @@ export async function enterInheritedLimits(
   effectiveFrom: Date,
   reason: string,
 ): Promise<Result> {
+  const refusal = refuse(actor, 'draft-limits', streamId);
+  if (refusal) return refusal;
   await inTransaction((client) =>
     insertLimits(actor, client, streamId, limits, {
       state: 'draft',
@@ -65,7 +71,7 @@ export async function enterInheritedLimits(
 /**
  * Approves a draft or provisional limits. A draft takes force at `effectiveFrom`, provisional ones go on as they were;
  * from then on no other provisional revision judges, and what lies later is judged again. Approved limits are never
- * edited.
+ * edited. Where four eyes are asked for, whoever drew limits up does not approve them.
  */
 export async function approveLimits(
   actor: Actor,
@@ -78,14 +84,20 @@ export async function approveLimits(
       state: LimitState;
       revision: number;
       effective_from: Date;
+      author_id: string | null;
       is_superseded: boolean;
     }>(
-      `SELECT stream_id, state, revision, effective_from, superseded_from IS NOT NULL AS is_superseded
+      `SELECT stream_id, state, revision, effective_from, author_id, superseded_from IS NOT NULL AS is_superseded
        FROM limit_revision WHERE id = $1 FOR UPDATE`,
       [revisionId],
     );
     const found = rows[0];
     if (found === undefined) return { ok: false, reason: 'There is no such revision.' };
+    const refusal = refuse(actor, 'approve-limits', found.stream_id);
+    if (refusal) return refusal;
+    if (found.author_id !== null && found.author_id === actor.id && (await isFourEyes(actor, client))) {
+      return { ok: false, reason: 'You drew these limits up: someone else approves them.' };
+    }
     if (found.state !== 'draft' && found.state !== 'provisional') {
       return { ok: false, reason: `Revision ${found.revision} is ${found.state} already.` };
     }
@@ -116,13 +128,18 @@ export async function approveLimits(
 }
 
 /** Sets a draft aside. It stays on record. */
-export async function discardLimits(_actor: Actor, revisionId: string): Promise<Result> {
+export async function discardLimits(actor: Actor, revisionId: string): Promise<Result> {
   return inTransaction(async (client) => {
-    const { rowCount } = await client.query(
-      "UPDATE limit_revision SET state = 'discarded' WHERE id = $1 AND state = 'draft'",
+    const { rows } = await client.query<{ stream_id: string }>(
+      "SELECT stream_id FROM limit_revision WHERE id = $1 AND state = 'draft' FOR UPDATE",
       [revisionId],
     );
-    return rowCount === 1 ? { ok: true } : { ok: false, reason: 'Only a draft can be set aside.' };
+    const [found] = rows;
+    if (found === undefined) return { ok: false, reason: 'Only a draft can be set aside.' };
+    const refusal = refuse(actor, 'draft-limits', found.stream_id);
+    if (refusal) return refusal;
+    await client.query("UPDATE limit_revision SET state = 'discarded' WHERE id = $1", [revisionId]);
+    return { ok: true };
   });
 }
 
@@ -137,6 +154,8 @@ export async function changeScreening(
   screening: Screen,
   reason: string,
 ): Promise<Result> {
+  const refusal = refuse(actor, 'change-rules', streamId);
+  if (refusal) return refusal;
   return inTransaction(async (client) => {
     await holdStream(client, streamId);
     const { rows } = await client.query<{ screening: Screen }>('SELECT screening FROM stream WHERE id = $1', [
@@ -198,9 +217,12 @@ async function insertLimits(
     limits,
   };
   const own = { id: true, state: meta.state, origin: meta.origin, reason: meta.reason };
-  const columns = LIMIT_COLUMNS.filter((column) => column.name !== 'id').map((column) =>
-    column.name in own ? { ...column, value: () => own[column.name as keyof typeof own] } : column,
-  );
+  const columns = [
+    ...LIMIT_COLUMNS.filter((column) => column.name !== 'id').map((column) =>
+      column.name in own ? { ...column, value: () => own[column.name as keyof typeof own] } : column,
+    ),
+    { name: 'author_id', type: 'text', value: () => (actor.kind === 'person' ? actor.id : null) } as const,
+  ];
   const parameters: unknown[] = [];
   const given = rowsAsQuery(
     columns,
