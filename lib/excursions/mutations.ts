@@ -1,7 +1,10 @@
 import type { ClientBase } from 'pg';
 import type { Actor } from '@/lib/access/actor';
+import type { AuditAction } from '@/lib/access/audit-action';
+import { audited } from '@/lib/access/audited';
+import type { Permission } from '@/lib/access/permission';
+import { refuse } from '@/lib/access/refusal';
 import { getPool } from '@/lib/database/client';
-import { inTransaction } from '@/lib/database/transaction';
 import { loadLines } from './data';
 import { judgedLine } from './judged-line';
 import type { Line, LinePoint } from './line';
@@ -44,19 +47,35 @@ export type ExcursionStep =
   | { to: 'noted'; note: string }
   | { to: 'closed'; note: string; cause: string };
 
-const ENTRY_OF = {
-  acknowledged: 'acknowledged',
-  'under-investigation': 'investigating',
-  noted: 'noted',
-  closed: 'closed',
-} as const;
-
-/** From which states a step may be taken. */
-const ALLOWED_FROM: Record<ExcursionStep['to'], string[]> = {
-  acknowledged: ['open'],
-  'under-investigation': ['open', 'acknowledged'],
-  noted: ['open', 'acknowledged', 'under-investigation', 'closed'],
-  closed: ['open', 'acknowledged', 'under-investigation'],
+/** What each step is called in the log and in the audit trail, what it needs, and from which states it may be taken. */
+const STEPS: Record<
+  ExcursionStep['to'],
+  { entry: string; action: AuditAction; permission: Permission; from: string[] }
+> = {
+  acknowledged: {
+    entry: 'acknowledged',
+    action: 'acknowledged a case',
+    permission: 'acknowledge-case',
+    from: ['open'],
+  },
+  'under-investigation': {
+    entry: 'investigating',
+    action: 'took up a case',
+    permission: 'investigate-case',
+    from: ['open', 'acknowledged'],
+  },
+  noted: {
+    entry: 'noted',
+    action: 'wrote into a case',
+    permission: 'comment-case',
+    from: ['open', 'acknowledged', 'under-investigation', 'closed'],
+  },
+  closed: {
+    entry: 'closed',
+    action: 'closed a case',
+    permission: 'close-case',
+    from: ['open', 'acknowledged', 'under-investigation'],
+  },
 };
 
 /**
@@ -68,23 +87,25 @@ export async function stepExcursion(
   excursionId: string,
   step: ExcursionStep,
 ): Promise<{ ok: true } | { ok: false; reason: string }> {
-  return inTransaction(async (client) => {
-    // The stream before its excursion, as those who record wafers hold them.
-    if (step.to !== 'noted') {
-      const { rows } = await client.query<{ stream_id: string }>(
-        'SELECT stream_id FROM excursion WHERE id = $1',
-        [excursionId],
-      );
-      if (rows[0] !== undefined) await holdStream(client, rows[0].stream_id);
-    }
-    const { rows } = await client.query<{ stream_id: string; state: string }>(
-      'SELECT stream_id, state FROM excursion WHERE id = $1 FOR UPDATE',
+  const { entry, action, permission, from } = STEPS[step.to];
+  return audited(actor, async (client, tell) => {
+    const { rows: ofStream } = await client.query<{ stream_id: string }>(
+      'SELECT stream_id FROM excursion WHERE id = $1',
       [excursionId],
     );
-    const found = rows[0];
-    if (found === undefined) return { ok: false, reason: 'There is no such excursion.' };
-    if (!ALLOWED_FROM[step.to].includes(found.state)) {
-      return { ok: false, reason: `This excursion is ${found.state.replaceAll('-', ' ')} already.` };
+    const streamId = ofStream[0]?.stream_id;
+    if (streamId === undefined) return { ok: false, reason: 'There is no such excursion.' };
+    const refusal = refuse(actor, permission, streamId);
+    if (refusal) return refusal;
+    // The stream before its excursion, as those who record wafers hold them.
+    if (step.to !== 'noted') await holdStream(client, streamId);
+    const { rows } = await client.query<{ state: string }>(
+      'SELECT state FROM excursion WHERE id = $1 FOR UPDATE',
+      [excursionId],
+    );
+    const state = rows[0]?.state ?? '';
+    if (!from.includes(state)) {
+      return { ok: false, reason: `This excursion is ${state.replaceAll('-', ' ')} already.` };
     }
     if (step.to !== 'noted') {
       await client.query(
@@ -100,8 +121,11 @@ export async function stepExcursion(
       step.to === 'closed' ? [step.cause, step.note].filter((text) => text !== '').join('. ') : step.note;
     await client.query(
       'INSERT INTO excursion_entry (stream_id, excursion_id, actor, action, note) VALUES ($1, $2, $3, $4, $5)',
-      [found.stream_id, excursionId, actor.name, ENTRY_OF[step.to], note],
+      [streamId, excursionId, actor.name, entry, note],
     );
+    const subject = { kind: 'excursion', id: excursionId } as const;
+    const states = step.to === 'noted' ? {} : { before: { state }, after: { state: step.to } };
+    tell({ action, subject, streamId, ...states, ...(note === '' ? {} : { why: note }) });
     return { ok: true };
   });
 }

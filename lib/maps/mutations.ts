@@ -1,12 +1,18 @@
 import type { Actor } from '@/lib/access/actor';
-import { columnNames, rowsAsQuery } from '@/lib/database/columnar';
-import { inTransaction } from '@/lib/database/transaction';
-import { summarise } from '@/lib/excursions/joined-members';
+import { audited } from '@/lib/access/audited';
+import { refuse } from '@/lib/access/refusal';
+import { placeMember, summarise } from '@/lib/excursions/joined-members';
 import { holdStream, judgeAgain } from '@/lib/excursions/mutations';
 import { listStreamSettings } from '@/lib/streams/data';
 import { measuredWafer, measuringStream } from './measured-wafer';
+import {
+  changedSiblings,
+  loadSiblings,
+  notCharted,
+  writeChangedSiblings,
+  writeMeasured,
+} from './measured-again';
 import { loadStoredWafers } from './stored-wafers';
-import { MEASURED_COLUMNS } from './wafer-rows';
 
 export { intakeFile } from './intake-file';
 export { recordMeasurements } from './record-measurements';
@@ -22,7 +28,9 @@ export async function decideReading(
   decision: { siteIndex: number; action: 'out' | 'in'; reason: string },
 ): Promise<{ ok: true } | { ok: false; reason: string }> {
   const { siteIndex, action, reason } = decision;
-  return inTransaction(async (client) => {
+  const refusal = refuse(actor, 'exclude-reading', streamId);
+  if (refusal) return refusal;
+  return audited(actor, async (client, tell) => {
     await holdStream(client, streamId);
     const [settings] = await listStreamSettings(actor, [streamId], client);
     if (settings === undefined) return { ok: false, reason: 'There is no such stream.' };
@@ -38,29 +46,35 @@ export async function decideReading(
       [streamId, waferId, siteIndex, action, actor.name, reason],
     );
     before.overrides.set(siteIndex, action);
-    const measured = measuredWafer(measuringStream(settings), before.facts, before.readings, {
+    const by = measuringStream(settings);
+    const measured = measuredWafer(by, before.facts, before.readings, {
       screen: before.screening,
       overrides: before.overrides,
     });
-    const parameters: unknown[] = [streamId, waferId];
-    const given = rowsAsQuery(MEASURED_COLUMNS, [{ measured }], parameters);
-    await client.query(
-      `UPDATE wafer_measurement SET (${columnNames(MEASURED_COLUMNS)}) = (SELECT given.* FROM ${given} given)
-       WHERE stream_id = $1 AND id = $2`,
-      parameters,
+    const siblings =
+      settings.stream.subgroup === 'wafer' ? [] : await loadSiblings(actor, client, streamId, [before]);
+    const changed = changedSiblings(
+      siblings.map((one) => (one.id === waferId ? { ...one, judgeable: measured.level !== null } : one)),
     );
+    const isChanged = changed.some(({ id }) => id === waferId);
+    const wasCharted = siblings.find(({ id }) => id === waferId)?.isCharted ?? true;
+    const charted = wasCharted === isChanged ? null : measured;
+    await writeMeasured(client, streamId, waferId, charted ?? notCharted(measured));
+    const others = changed.filter(({ id }) => id !== waferId);
+    const standing = [{ id: waferId, charted }, ...(await writeChangedSiblings(actor, client, by, others))];
+    tell({
+      action: action === 'out' ? 'took out a reading' : 'put back a reading',
+      subject: { kind: 'wafer', id: waferId },
+      streamId,
+      after: { siteIndex, reading: value, level: measured.level },
+      why: reason,
+    });
     const words = action === 'out' ? 'taken out' : 'put back';
     const why = `a reading of one of its wafers was ${words}: ${reason}`;
     await judgeAgain(actor, client, streamId, Infinity, why, (line) => {
       const point = line.points.find((one) => one.id === before.subgroupId);
-      const member = point?.members.find((one) => one.waferId === waferId);
-      if (point === undefined || member === undefined) return [];
-      member.level = measured.level;
-      member.within = measured.within;
-      point.specification = [
-        ...point.specification.filter((entry) => !entry.startsWith(`${waferId}:`)),
-        ...measured.specification.map((fault) => `${waferId}:${fault}`),
-      ];
+      if (point === undefined) return [];
+      for (const one of standing) placeMember(point, one.id, one.charted);
       summarise(point);
       return [point];
     });
