@@ -5,7 +5,6 @@ import { discPositionFactor } from '@/lib/probe/disc-position-factor';
 import { discTransferResistance } from '@/lib/probe/disc-transfer-resistance';
 import { dualConfiguration } from '@/lib/probe/dual-configuration';
 import { fourPinResistance } from '@/lib/probe/four-pin-resistance';
-import { readingAt23C } from '@/lib/probe/reading-at-23c';
 import { spacingFactor } from '@/lib/probe/spacing-factor';
 import { thicknessFactor } from '@/lib/probe/thickness-factor';
 
@@ -82,14 +81,5 @@ describe('a reading', () => {
     expect(fourPinResistance(both)).toBeCloseTo(2.1, 12);
     expect(fourPinResistance({ ...forward, currentA: 0 })).toBeNull();
     expect(fourPinResistance({ ...both, currentReverseA: 0 })).toBeNull();
-  });
-
-  it('comes to 23 °C by the coefficient of its resistivity, as sheet resistance too', () => {
-    // ASTM F84: 0.8248 % per °C for p-type at 10 Ω·cm.
-    expect(readingAt23C('p', 10, 25, null)).toBeCloseTo(10 * (1 - 0.02 * 0.8248), 4);
-    expect(readingAt23C('p', 10, 23, null)).toBe(10);
-    expect(readingAt23C('p', 1e4, 25, 10)).toBeCloseTo(1e3 * readingAt23C('p', 10, 25, null), 8);
-    expect(() => readingAt23C('p', 10, 30, null)).toThrow(RangeError);
-    expect(() => readingAt23C('p', 10, 25, 0)).toThrow(RangeError);
   });
 });
