@@ -6,6 +6,7 @@ import { SectionHead } from '@/app/_ui/section-head';
 import { signedIn } from '@/app/page-actor';
 import { listLimitsInForce } from '@/lib/limits/data';
 import { listSitePlans, listStreams, listStreamSettings } from '@/lib/streams/data';
+import { AccessLinks } from './access-links';
 import { PlanTable } from './plan-table';
 import { setupRows } from './setup-rows';
 import { StreamTable } from './stream-table';
@@ -61,6 +62,7 @@ export default async function SetupPage() {
       )}
       <SectionHead id="plans">Site plans</SectionHead>
       <PlanTable plans={plans} />
+      <AccessLinks actor={actor} />
     </>
   );
 }

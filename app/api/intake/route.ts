@@ -1,4 +1,6 @@
 import { routeActor } from '@/app/route-actor';
+import { tooManyFiles } from '../too-many-files';
+import { sentName } from '../sent-name';
 import { AppError, problemResponse } from '@/lib/errors';
 import { keepWaitingFile, MOST_FILE_BYTES, tooLargeWords } from '@/lib/maps/waiting-file';
 
@@ -7,6 +9,8 @@ export async function POST(request: Request): Promise<Response> {
   try {
     const actor = await routeActor(request, 'record-maps');
     if (actor instanceof Response) return actor;
+    const tooMany = tooManyFiles(actor);
+    if (tooMany !== null) return tooMany;
     if (Number(request.headers.get('content-length') ?? 0) > MOST_FILE_BYTES) {
       throw new AppError('invalid', tooLargeWords());
     }
@@ -16,15 +20,5 @@ export async function POST(request: Request): Promise<Response> {
     return Response.json({ href: `/intake/${kept.token}` }, { status: 201 });
   } catch (error) {
     return problemResponse(error);
-  }
-}
-
-/** The file's own name, percent-encoded in a header. */
-function sentName(headers: Headers): string {
-  const sent = headers.get('x-file-name') ?? '';
-  try {
-    return decodeURIComponent(sent);
-  } catch {
-    return sent;
   }
 }

@@ -1,10 +1,10 @@
-import { intakeAllowance } from '@/lib/access/allowance';
 import { AppError, problemResponse } from '@/lib/errors';
 import { sentOptions } from '@/lib/maps/schema';
 import { MOST_SENT_BYTES, takeSentFile } from '@/lib/maps/take-sent-file';
 import { tooLargeWords } from '@/lib/maps/waiting-file';
 import { routeActor } from '@/app/route-actor';
 import { sentName } from '../sent-name';
+import { tooManyFiles } from '../too-many-files';
 
 /**
  * Records the wafer maps of a CSV file that is sent as the body, with the command's flags in the address. Answers as
@@ -14,11 +14,8 @@ export async function POST(request: Request): Promise<Response> {
   const actor = await routeActor(request, 'record-maps');
   if (actor instanceof Response) return actor;
   try {
-    const waitS = intakeAllowance.waitS(actor);
-    if (waitS > 0) {
-      const error = new AppError('too-many', `Too many files at once. Wait ${waitS} s, then go on.`);
-      return problemResponse(error, { 'retry-after': String(waitS) });
-    }
+    const tooMany = tooManyFiles(actor);
+    if (tooMany !== null) return tooMany;
     const options = sentOptions(new URL(request.url).searchParams);
     if ('faults' in options) throw new AppError('invalid', `${options.faults.join('; ')}.`);
     if (Number(request.headers.get('content-length') ?? 0) > MOST_SENT_BYTES) {
