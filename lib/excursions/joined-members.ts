@@ -10,6 +10,8 @@ export interface LineAddition {
   within: number | null;
   /** `rule:side` for each way in which the wafer is out of specification. */
   specification: string[];
+  /** Another measurement of the same wafer is charted: this one belongs to the subgroup and is no member of it. */
+  isAgain?: boolean;
 }
 
 /**
@@ -44,8 +46,7 @@ export function joinedMembers(
       line.points.push(point);
     }
     keepEarlier(wasFirst, point);
-    point.members.push({ waferId: addition.waferId, level: addition.level, within: addition.within });
-    for (const reason of addition.specification) point.specification.push(`${addition.waferId}:${reason}`);
+    if (addition.isAgain !== true) placeMember(point, addition.waferId, addition);
     touched.add(point);
     pointOf.push(point);
   }
@@ -54,6 +55,27 @@ export function joinedMembers(
   let from = line.points.length;
   while (from > 0 && linePosition(line.points[from - 1] as LinePoint, wasFirst) >= 0) from -= 1;
   return { touched, pointOf, from };
+}
+
+/**
+ * Puts a measured wafer among the members of a subgroup, in place of what it was there; with null takes it out. Its
+ * figures are to be made again then.
+ */
+export function placeMember(
+  point: Pick<LinePoint, 'members' | 'specification'>,
+  waferId: string,
+  measured: Pick<LineAddition, 'level' | 'within' | 'specification'> | null,
+): void {
+  const place = point.members.findIndex((member) => member.waferId === waferId);
+  if (place !== -1)
+    point.specification = point.specification.filter((entry) => !entry.startsWith(`${waferId}:`));
+  if (measured === null) {
+    if (place !== -1) point.members.splice(place, 1);
+    return;
+  }
+  const { level, within, specification } = measured;
+  point.members[place === -1 ? point.members.length : place] = { waferId, level, within };
+  for (const reason of specification) point.specification.push(`${waferId}:${reason}`);
 }
 
 /** A subgroup's charted figures from its wafers, whatever the order in which these arrived. */

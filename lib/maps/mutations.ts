@@ -1,13 +1,18 @@
 import type { Actor } from '@/lib/access/actor';
 import { audited } from '@/lib/access/audited';
 import { refuse } from '@/lib/access/refusal';
-import { columnNames, rowsAsQuery } from '@/lib/database/columnar';
-import { summarise } from '@/lib/excursions/joined-members';
+import { placeMember, summarise } from '@/lib/excursions/joined-members';
 import { holdStream, judgeAgain } from '@/lib/excursions/mutations';
 import { listStreamSettings } from '@/lib/streams/data';
 import { measuredWafer, measuringStream } from './measured-wafer';
+import {
+  changedSiblings,
+  loadSiblings,
+  notCharted,
+  writeChangedSiblings,
+  writeMeasured,
+} from './measured-again';
 import { loadStoredWafers } from './stored-wafers';
-import { MEASURED_COLUMNS } from './wafer-rows';
 
 export { intakeFile } from './intake-file';
 export { recordMeasurements } from './record-measurements';
@@ -41,17 +46,22 @@ export async function decideReading(
       [streamId, waferId, siteIndex, action, actor.name, reason],
     );
     before.overrides.set(siteIndex, action);
-    const measured = measuredWafer(measuringStream(settings), before.facts, before.readings, {
+    const by = measuringStream(settings);
+    const measured = measuredWafer(by, before.facts, before.readings, {
       screen: before.screening,
       overrides: before.overrides,
     });
-    const parameters: unknown[] = [streamId, waferId];
-    const given = rowsAsQuery(MEASURED_COLUMNS, [{ measured }], parameters);
-    await client.query(
-      `UPDATE wafer_measurement SET (${columnNames(MEASURED_COLUMNS)}) = (SELECT given.* FROM ${given} given)
-       WHERE stream_id = $1 AND id = $2`,
-      parameters,
+    const siblings =
+      settings.stream.subgroup === 'wafer' ? [] : await loadSiblings(actor, client, streamId, [before]);
+    const changed = changedSiblings(
+      siblings.map((one) => (one.id === waferId ? { ...one, judgeable: measured.level !== null } : one)),
     );
+    const isChanged = changed.some(({ id }) => id === waferId);
+    const wasCharted = siblings.find(({ id }) => id === waferId)?.isCharted ?? true;
+    const charted = wasCharted === isChanged ? null : measured;
+    await writeMeasured(client, streamId, waferId, charted ?? notCharted(measured));
+    const others = changed.filter(({ id }) => id !== waferId);
+    const standing = [{ id: waferId, charted }, ...(await writeChangedSiblings(actor, client, by, others))];
     tell({
       action: action === 'out' ? 'took out a reading' : 'put back a reading',
       subject: { kind: 'wafer', id: waferId },
@@ -63,14 +73,8 @@ export async function decideReading(
     const why = `a reading of one of its wafers was ${words}: ${reason}`;
     await judgeAgain(actor, client, streamId, Infinity, why, (line) => {
       const point = line.points.find((one) => one.id === before.subgroupId);
-      const member = point?.members.find((one) => one.waferId === waferId);
-      if (point === undefined || member === undefined) return [];
-      member.level = measured.level;
-      member.within = measured.within;
-      point.specification = [
-        ...point.specification.filter((entry) => !entry.startsWith(`${waferId}:`)),
-        ...measured.specification.map((fault) => `${waferId}:${fault}`),
-      ];
+      if (point === undefined) return [];
+      for (const one of standing) placeMember(point, one.id, one.charted);
       summarise(point);
       return [point];
     });

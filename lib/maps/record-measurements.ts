@@ -7,14 +7,15 @@ import { getPool } from '@/lib/database/client';
 import { takeIds } from '@/lib/database/take-ids';
 import { AppError } from '@/lib/errors';
 import { judgedLine, LineTooShort } from '@/lib/excursions/judged-line';
-import { joinedMembers } from '@/lib/excursions/joined-members';
+import { joinedMembers, placeMember } from '@/lib/excursions/joined-members';
 import { isPlain, withIds, writeFindings, type JudgedLine } from '@/lib/excursions/write-judgement';
 import { loadDesks, putDeskBack, reachesBackTo, takeDesk, type Desk } from './desk';
 import { earlierOutcomes } from './earlier-outcomes';
-import { measuredWafer } from './measured-wafer';
+import { againAmong, notCharted } from './measured-again';
+import { measuredWafer, type MeasuredWafer } from './measured-wafer';
 import { batchTelling, recordStatement, type Batch, type Written } from './record-statement';
 import type { Measurement, Outcome } from './types';
-import { subgroupKey, type WaferRow } from './wafer-rows';
+import { runOrLot, subgroupKey, type WaferRow } from './wafer-rows';
 
 /** Why a signal that no longer holds was withdrawn, when wafers were recorded. */
 const LATE = 'a wafer recorded later changed the order or the values of its points';
@@ -56,14 +57,16 @@ async function recordedAlone(
   const desk = takeDesk(pool, streamId) ?? (await loadDesks(actor, pool, [{ streamId, from: at }]))[0];
   if (desk === undefined || !reachesBackTo(desk.line, at)) return null;
   const { stream } = desk.by.settings;
-  if (stream.subgroup !== 'wafer' && !desk.line.whole) {
+  if (stream.subgroup !== 'wafer') {
     const key = subgroupKey(stream.subgroup, measurement.facts);
-    if (!desk.line.points.some((point) => point.key === key) && (await isKnown(pool, streamId, [key])))
-      return null;
+    const isAtHand = desk.line.points.some((point) => point.key === key);
+    if (isAtHand && (await isMeasured(pool, measurement))) return null;
+    if (!isAtHand && !desk.line.whole && (await isKnown(pool, streamId, [key]))) return null;
   }
   const [id = ''] = await takeIds(pool, 'wafer_measurement', 1);
   const [subgroupId = ''] = await takeIds(pool, 'subgroup', 1);
-  const work = worked(desk, actor, batch, [{ measurement, id }], () => subgroupId);
+  const only = measuredAll(desk, [{ measurement, id }]);
+  const work = worked(desk, actor, batch, only, { again: new Set(), changed: [] }, () => subgroupId);
   if (work === null || !isPlain(work.judged)) return null;
   try {
     const told = { actor, ...batchTelling(batch, batch.goesOn === true ? null : streamId) };
@@ -130,7 +133,9 @@ async function written(
       outcomes[index] = { kind: 'recorded', waferId: id };
       return [{ measurement, id }];
     });
-    const work = worked(desk, actor, batch, own, () => subgroupIds.pop() as string);
+    const measured = measuredAll(desk, own);
+    const among = await againAmong(actor, client, desk.by, measured);
+    const work = worked(desk, actor, batch, measured, among, () => subgroupIds.pop() as string);
     if (work === null) throw new LineTooShort();
     judged.push(work.judged);
     rows.push(...work.rows);
@@ -147,28 +152,52 @@ async function written(
   return { outcomes: outcomes as Outcome[], desks: [...deskOf.values()] };
 }
 
-/** Measures and judges the new wafers of one stream; null where its line does not reach back far enough. */
+interface Fresh {
+  measurement: Measurement;
+  id: string;
+  measured: MeasuredWafer;
+}
+
+function measuredAll(desk: Desk, fresh: readonly Omit<Fresh, 'measured'>[]): Fresh[] {
+  return fresh.map(({ measurement, id }) => {
+    const measured = measuredWafer(desk.by, measurement.facts, measurement.readings);
+    return { measurement, id, measured };
+  });
+}
+
+/** Judges the new wafers of one stream; null where its line does not reach back far enough. */
 function worked(
   desk: Desk,
   actor: Actor,
   batch: Batch,
-  fresh: readonly { measurement: Measurement; id: string }[],
+  fresh: readonly Fresh[],
+  { again, changed }: Awaited<ReturnType<typeof againAmong>>,
   newId: () => string,
 ): { judged: JudgedLine; rows: WaferRow[] } | null {
   const { stream } = desk.by.settings;
-  const measured = fresh.map(({ measurement }) =>
-    measuredWafer(desk.by, measurement.facts, measurement.readings),
-  );
-  const additions = fresh.map(({ measurement, id }, i) => {
-    const { level = null, within = null, specification = [] } = measured[i] ?? {};
+  const additions = fresh.map(({ measurement, id, measured: { level, within, specification } }) => {
     const at = measurement.facts.processedAt.getTime();
     const key = subgroupKey(stream.subgroup, measurement.facts);
-    return { waferId: id, key, at, history: batch.history, level, within, specification };
+    return {
+      waferId: id,
+      key,
+      at,
+      history: batch.history,
+      level,
+      within,
+      specification,
+      isAgain: again.has(id),
+    };
   });
+  for (const { id, key, charted } of changed) {
+    const point = desk.line.points.find((one) => one.key === key);
+    if (point === undefined) return null;
+    placeMember(point, id, charted);
+  }
   try {
     const { touched, pointOf, from } = joinedMembers(desk.line, additions, newId);
     const change = judgedLine(desk.line, touched, from, LATE);
-    const rows = fresh.map(({ measurement, id }, i) => ({
+    const rows = fresh.map(({ measurement, id, measured }, i) => ({
       id,
       subgroupId: pointOf[i]?.id ?? '',
       batchId: batch.id,
@@ -176,8 +205,7 @@ function worked(
       history: batch.history,
       recordedAt: batch.at ?? new Date(),
       recordedBy: actor.name,
-      screening: stream.screening,
-      measured: measured[i] as WaferRow['measured'],
+      measured: again.has(id) ? notCharted(measured) : measured,
     }));
     return { judged: { line: desk.line, change }, rows };
   } catch (error) {
@@ -229,6 +257,16 @@ async function earliestOf(
     [streamId, keys],
   );
   return Math.min(earliest, rows[0]?.at?.getTime() ?? Infinity);
+}
+
+/** Whether the wafer of a measurement is on record by any other. */
+async function isMeasured(pool: Pool, { streamId, facts }: Measurement): Promise<boolean> {
+  const { rowCount } = await pool.query({
+    name: 'is-measured',
+    text: 'SELECT FROM wafer_measurement WHERE stream_id = $1 AND run_or_lot = $2 AND wafer = $3 LIMIT 1',
+    values: [streamId, runOrLot(facts), facts.wafer],
+  });
+  return (rowCount ?? 0) > 0;
 }
 
 async function isKnown(pool: Pool, streamId: string, keys: readonly string[]): Promise<boolean> {

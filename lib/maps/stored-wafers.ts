@@ -5,6 +5,8 @@ import type { Actor } from '@/lib/access/actor';
 export interface StoredWafer {
   id: string;
   subgroupId: string;
+  runOrLot: string;
+  wafer: string;
   facts: {
     processedAt: Date;
     ingotFraction: number | null;
@@ -20,6 +22,8 @@ export interface StoredWafer {
 interface Row {
   id: string;
   subgroup_id: string;
+  run_or_lot: string;
+  wafer: string;
   processed_at: Date;
   ingot_fraction: number | null;
   thickness_um: number | null;
@@ -38,7 +42,7 @@ export async function loadStoredWafers(
   ids: readonly string[],
 ): Promise<Map<string, StoredWafer>> {
   const { rows } = await client.query<Row>(
-    `SELECT w.id, w.subgroup_id, w.processed_at, w.ingot_fraction, w.thickness_um, w.temperature_c,
+    `SELECT w.id, w.subgroup_id, w.run_or_lot, w.wafer, w.processed_at, w.ingot_fraction, w.thickness_um, w.temperature_c,
        w.corrections_applied, w.screening, r.reading,
        (SELECT json_agg(json_build_object('site', e.site_index, 'action', e.action) ORDER BY e.id)
         FROM reading_exclusion e WHERE e.stream_id = w.stream_id AND e.wafer_id = w.id) AS overrides
@@ -52,6 +56,8 @@ export async function loadStoredWafers(
       {
         id: row.id,
         subgroupId: row.subgroup_id,
+        runOrLot: row.run_or_lot,
+        wafer: row.wafer,
         facts: {
           processedAt: row.processed_at,
           ingotFraction: row.ingot_fraction,
