@@ -2,6 +2,7 @@ import Link from 'next/link';
 import { Figures } from '@/app/_ui/figures';
 import { SectionHead } from '@/app/_ui/section-head';
 import { StateMark } from '@/app/_ui/state-mark';
+import { MEASURED_AGAIN } from '@/lib/excursions/charted-measurements';
 import { signalSentence } from '@/lib/excursions/signal-sentence';
 import { formatDateTime, formatNumber, formatPercent } from '@/lib/format';
 import { specificationVerdicts, type SpecificationVerdict } from '@/lib/maps/specification-verdicts';
@@ -19,7 +20,9 @@ export function VerdictPart({ shown }: { shown: WaferShown }) {
       <SectionHead id="judged">Judged</SectionHead>
       {wafer.notJudgedReason !== null && (
         <p>
-          <StateMark needsPerson>Not judged: {wafer.notJudgedReason}.</StateMark>
+          <StateMark needsPerson={wafer.notJudgedReason !== MEASURED_AGAIN}>
+            Not judged: {wafer.notJudgedReason}.
+          </StateMark>
         </p>
       )}
       <p>{subgroupWords(wafer, stream)}</p>
@@ -68,9 +71,10 @@ export function VerdictPart({ shown }: { shown: WaferShown }) {
                   {sibling.id === wafer.id ? <strong>{sibling.wafer}</strong> : sibling.wafer}
                 </Link>{' '}
                 <span className="quiet small">
-                  {sibling.notJudgedReason === null
+                  {sibling.notJudgedReason === null || sibling.notJudgedReason === MEASURED_AGAIN
                     ? `${shown.reading(sibling[stream.controlStatistic])}, s ${formatPercent(sibling.relativeStandardDeviationPercent)}`
                     : 'not judged'}
+                  {sibling.notJudgedReason === MEASURED_AGAIN && ', measured again, not charted'}
                   {sibling.isOutOfSpecification && ', out of specification'}
                 </span>
               </li>
