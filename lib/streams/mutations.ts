@@ -1,5 +1,6 @@
 import type { ClientBase } from 'pg';
 import type { Actor } from '@/lib/access/actor';
+import { refuse } from '@/lib/access/refusal';
 import { getPrisma } from '@/lib/database/client';
 import { inTransaction } from '@/lib/database/transaction';
 import { holdStream, judgeAgain } from '@/lib/excursions/mutations';
@@ -14,6 +15,8 @@ const BEGINNING = new Date(0);
 
 /** Creates a site plan. */
 export async function createSitePlan(actor: Actor, plan: Omit<SitePlan, 'id'>): Promise<Result<string>> {
+  const refusal = refuse(actor, 'create-stream');
+  if (refusal) return refusal;
   const { name, diameterMm, edgeExclusionMm, orientation, sites } = plan;
   const row = await createdUnlessTaken(
     getPrisma().sitePlan.create({
@@ -41,6 +44,8 @@ export async function createStream(
   target: Target | null,
   specification: Specification | null,
 ): Promise<Result<string>> {
+  const refusal = refuse(actor, 'create-stream');
+  if (refusal) return refusal;
   const { sitePlanId, ...fields } = stream;
   const first = { revision: 1, effectiveFrom: BEGINNING, author: actor.name, reason: 'first of the stream' };
   const row = await createdUnlessTaken(
@@ -79,6 +84,8 @@ export async function reviseTarget(
   target: Target,
   meta: { effectiveFrom: Date; reason: string; calibrationWafers?: number | null; restart?: boolean },
 ): Promise<Result<number>> {
+  const refusal = refuse(actor, 'revise-target', streamId);
+  if (refusal) return refusal;
   return inTransaction(async (client) => {
     await holdStream(client, streamId);
     if (await isBeforeRecorded(client, streamId, meta.effectiveFrom)) return BEFORE_RECORDED;
@@ -117,6 +124,8 @@ export async function reviseTarget(
   });
 }
 
+const DONE = { ok: true, value: undefined } as const;
+
 const BEFORE_RECORDED = {
   ok: false,
   reason: 'Wafers processed later are on record, and stay as they were judged: choose a time after them.',
@@ -134,6 +143,8 @@ export async function reviseSpecification(
   s: Specification,
   meta: { effectiveFrom: Date; reason: string },
 ): Promise<Result<number>> {
+  const refusal = refuse(actor, 'revise-specification', streamId);
+  if (refusal) return refusal;
   return inTransaction(async (client) => {
     await holdStream(client, streamId);
     if (await isBeforeRecorded(client, streamId, meta.effectiveFrom)) return BEFORE_RECORDED;
@@ -164,8 +175,11 @@ export async function recordStreamEvent(
   actor: Actor,
   streamId: string,
   event: Pick<StreamEvent, 'kind' | 'at' | 'restart' | 'text'>,
-): Promise<void> {
+): Promise<Result> {
+  const refusal = refuse(actor, 'record-event', streamId);
+  if (refusal) return refusal;
   await inTransaction((client) => recordStreamEventIn(actor, client, streamId, event));
+  return DONE;
 }
 
 async function recordStreamEventIn(
@@ -185,11 +199,14 @@ async function recordStreamEventIn(
 }
 
 /** Takes a stream out of use, or back into use; its wafers and charts stay. */
-export async function retireStream(actor: Actor, streamId: string, retired: boolean): Promise<void> {
+export async function retireStream(actor: Actor, streamId: string, retired: boolean): Promise<Result> {
+  const refusal = refuse(actor, 'retire-stream', streamId);
+  if (refusal) return refusal;
   await getPrisma().stream.update({
     where: { id: BigInt(streamId) },
     data: retired ? { retiredAt: new Date(), retiredBy: actor.name } : { retiredAt: null, retiredBy: null },
   });
+  return DONE;
 }
 
 function nextRevision(table: string): string {

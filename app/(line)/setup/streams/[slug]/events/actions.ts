@@ -17,7 +17,8 @@ export async function recordEventAction(slug: string, before: FormState, form: F
   if (found === null) return refusedForm(before, { message: 'There is no such stream.' });
   const event = newStreamEvent(readEnvironment().siteTimeZone).safeParse(formWords(form));
   if (!event.success) return refusedForm(before, { errors: faultsOf(event.error) });
-  await recordStreamEvent(actor, found.stream.id, event.data);
+  const recorded = await recordStreamEvent(actor, found.stream.id, event.data);
+  if (!recorded.ok) return refusedForm(before, { message: recorded.reason });
   revalidatePath('/', 'layout');
   return doneForm(before, `The ${event.data.kind} is recorded.`);
 }

@@ -39,7 +39,8 @@ export async function retireStreamAction(
   const { actor } = asked;
   const found = await findStreamSettings(actor, String(slug));
   if (found === null) return refusedForm(before, { message: 'There is no such stream.' });
-  await retireStream(actor, found.stream.id, retired === true);
+  const done = await retireStream(actor, found.stream.id, retired === true);
+  if (!done.ok) return refusedForm(before, { message: done.reason });
   revalidatePath('/', 'layout');
   return doneForm(before, retired ? 'It is out of use now.' : 'It is in use again.');
 }
