@@ -92,6 +92,19 @@ describe('a wafer of a lot that is measured again', () => {
     expect(board?.toMeasureAgain).toEqual([]);
   });
 
+  it('is not listed to be measured again, which another wafer of its lot is', async () => {
+    const id = await lotStream();
+    await recordInTurn([
+      measured(id, 'A', 1, 10.1),
+      measured(id, 'A', 2, 10.3),
+      measured(id, 'A', 3, 10.3, false),
+      measured(id, 'B', 4, 10.2, false),
+    ]);
+    const span = await listWafersToMeasure(actor, id, { from: hour(0), to: hour(9), most: 9 });
+    const board = (await listBoardStreams(actor)).find((stream) => stream.id === id);
+    for (const list of [span, board?.toMeasureAgain]) expect(list?.map((one) => one.wafer)).toEqual(['B']);
+  });
+
   it('stands alike in whatever order its measurements arrive, one by one or at once', async () => {
     const all = (id: string) => [
       measured(id, 'A', 1, 10.9, false),
