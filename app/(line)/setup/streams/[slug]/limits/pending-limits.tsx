@@ -16,7 +16,9 @@ export function PendingLimits(props: {
 }) {
   const { current } = props;
   const waiting = props.revisions.filter(
-    (one) => one.state === 'draft' || (one.state === 'provisional' && one.id === current?.id),
+    (one) =>
+      one.state === 'draft' ||
+      (one.state === 'provisional' && one.id === current?.id && one.supersededFrom === null),
   );
   return waiting.map((one) => (
     <section key={one.id} aria-labelledby={`pending-${one.id}`}>
