@@ -1,7 +1,7 @@
 import type { BoardRowProps } from '@/app/_charts/board-row';
 import type { BoardRow } from '@/lib/excursions/board-rows';
-import { toMeasureWords } from '@/lib/excursions/board-state';
 import { whoWords } from '@/lib/excursions/excursion-words';
+import { toMeasureWords } from '@/lib/excursions/stream-state';
 import { formatAge, formatNumber, formatPercent, formatSignedPercent } from '@/lib/format';
 
 type Drawn = Omit<BoardRowProps, 'cases'> & {

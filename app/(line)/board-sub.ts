@@ -1,5 +1,5 @@
 import type { BoardRow } from '@/lib/excursions/board-rows';
-import { toMeasureWords } from '@/lib/excursions/board-state';
+import { toMeasureWords } from '@/lib/excursions/stream-state';
 import { formatAge } from '@/lib/format';
 import { carried } from './board-row-props';
 

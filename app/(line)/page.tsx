@@ -9,8 +9,8 @@ import { boardRows } from '@/lib/excursions/board-rows';
 import { listBoardStreams } from '@/lib/excursions/data';
 import { foundStreams } from '@/lib/excursions/found-streams';
 import { BoardList } from './board-list';
+import { BoardMeasureAgain } from './board-measure-again';
 import { boardSub } from './board-sub';
-import { MeasureAgain } from './measure-again';
 
 export default async function BoardPage(props: { searchParams: Promise<{ find?: string | string[] }> }) {
   const asked = (await props.searchParams).find;
@@ -53,8 +53,10 @@ export default async function BoardPage(props: { searchParams: Promise<{ find?: 
             <a href={download} download>
               Board as CSV
             </a>
+            {' · '}
+            <Link href="/measure-again">Wafers to measure again</Link>
           </p>
-          <MeasureAgain rows={rows} timeZone={readEnvironment().siteTimeZone} />
+          <BoardMeasureAgain rows={rows} timeZone={readEnvironment().siteTimeZone} />
         </>
       )}
     </>

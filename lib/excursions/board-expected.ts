@@ -1,4 +1,4 @@
-import { dopantPercent } from '@/lib/physics/dopant-percent';
+import { expectedBand, levelAgainstExpected } from './level-against-expected';
 import { targetModel } from './target-model';
 import type { BoardStream } from './types';
 
@@ -16,37 +16,25 @@ export interface BoardExpected {
 }
 
 /**
- * The level of a stream's newest charted subgroup against expected. On a relative chart the level says it itself; else
- * it is held against what its wafers were expected to have by the latest target, or what that target expects of any
- * wafer. Null without a target or a level, and outside the conversion.
+ * The level of a stream's newest charted subgroup against what was expected of its wafers, as the stream's page says
+ * it. Null without a level or an expected value, and outside the conversion.
  */
 export function boardExpected(stream: BoardStream): BoardExpected | null {
   const { target, charted, chartedValue } = stream;
+  if (target === null || charted === null) return null;
+  const { expected: value, uncertaintyPercent, ingotFraction } = charted;
+  const model = targetModel(target.target, ingotFraction);
+  const expected = { targetId: target.id, value, uncertaintyPercent, model };
   const level = stream.points.findLast((point) => point.level !== null)?.level ?? null;
-  if (target === null || charted === null || level === null) return null;
-  const model = targetModel(target.target, charted.ingotFraction);
-  if (model === null) return null;
-  const measuredAgainst = charted.targetId === target.id ? charted.expected : null;
-  const value = measuredAgainst ?? model.value;
-  const isRelative = chartedValue === 'relative';
-  if (!isRelative && value === null) return null;
-  const ratio = isRelative ? Math.exp(level / 100) : level / (value as number);
-  const { uncertaintyPercent, sensitivity } = model;
-  const dopant = dopantPercent(ratio, sensitivity);
-  if (dopant === null) return null;
-  const share = uncertaintyPercent / 100;
+  const against = levelAgainstExpected(level, expected, chartedValue);
+  const band = expectedBand(expected, chartedValue);
+  if (against?.dopant == null || band === null) return null;
   return {
-    differencePercent: 100 * (ratio - 1),
-    dopantPercent: dopant,
+    differencePercent: against.differencePercent,
+    dopantPercent: against.dopant.percent,
     uncertaintyPercent,
-    uncertaintyDopantPercent: Math.abs(uncertaintyPercent / sensitivity),
+    uncertaintyDopantPercent: against.dopant.uncertaintyPercent,
     tolerancePercent: target.target.tolerancePercent,
-    charted: isRelative
-      ? { lower: 100 * Math.log1p(-Math.min(share, 0.99)), value: 0, upper: 100 * Math.log1p(share) }
-      : {
-          lower: (value as number) * (1 - share),
-          value: value as number,
-          upper: (value as number) * (1 + share),
-        },
+    charted: band,
   };
 }

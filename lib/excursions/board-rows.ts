@@ -1,13 +1,14 @@
 import { boardExpected, type BoardExpected } from './board-expected';
-import { boardState, type BoardState } from './board-state';
+import { boardState } from './board-state';
 import { boardStrip, limitsInForce, type BoardStrip } from './board-strip';
 import { sizeInSigma } from './size-in-sigma';
+import type { StreamState } from './stream-state';
 import type { BoardStream } from './types';
 
 /** One stream on the board, in numbers and words. */
 export interface BoardRow {
   stream: BoardStream;
-  state: BoardState;
+  state: StreamState;
   strip: BoardStrip & { band: { lowerZ: number; upperZ: number } | null };
   expected: BoardExpected | null;
   evenness: { nowPercent: number | null; usual: { lowerPercent: number; upperPercent: number } | null };

@@ -40,7 +40,7 @@ export interface BoardStreamRow {
   diameter_mm: number;
   points: PointJson[] | null;
   newest: [id: string, wafer: string, runOrLot: string, measuredAt: string] | null;
-  charted: [expected: number | null, targetId: string | null, ingotFraction: number | null] | null;
+  charted: [expected: number | null, uncertaintyPercent: number, ingotFraction: number | null] | null;
   again: [id: string, wafer: string, runOrLot: string, measuredAt: string, reason: string][] | null;
   target: (Omit<Target, 'quantity'> & { id: string }) | null;
   limits: LimitsJson[] | null;
@@ -72,7 +72,7 @@ export function boardStreamOf(row: BoardStreamRow): BoardStream {
       runOrLot: newest[2],
       measuredAt: new Date(newest[3]),
     },
-    charted: charted && { expected: charted[0], targetId: charted[1], ingotFraction: charted[2] },
+    charted: charted && { expected: charted[0], uncertaintyPercent: charted[1], ingotFraction: charted[2] },
     worst: row.worst && caseOf(row.worst, limits),
     openCases: row.open_cases,
     unansweredCases: row.unanswered_cases,

@@ -1,6 +1,7 @@
 import type { Pool } from 'pg';
 import { type BoardStreamRow, boardStreamOf } from './board-stream-rows';
 import { LEAD_SIGNAL } from './lead-signal-statement';
+import { TO_MEASURE } from './to-measure-statement';
 import type { BoardStream } from './types';
 
 /** How many levels a row of the board shows. */
@@ -32,33 +33,32 @@ CROSS JOIN LATERAL (
       ORDER BY position_at, key) AS points,
     (array_agg(id ORDER BY position_at DESC, key DESC))[1] AS newest_id,
     (array_agg(id ORDER BY position_at DESC, key DESC) FILTER (WHERE level IS NOT NULL))[1] AS charted_id,
-    array_agg(id) FILTER (WHERE NOT history AND array_position(wafer_levels, NULL) IS NOT NULL) AS gap_ids
+    array_agg(id) FILTER (WHERE array_position(wafer_levels, NULL) IS NOT NULL) AS gap_ids
   FROM (SELECT * FROM subgroup WHERE stream_id = s.id
     ORDER BY position_at DESC, key DESC LIMIT ${BOARD_POINTS}) recent) strip
 LEFT JOIN LATERAL (
   SELECT json_build_array(w.id::text, w.wafer, w.run_or_lot, w.measured_at) AS wafer FROM wafer_measurement w
   WHERE w.stream_id = s.id AND w.subgroup_id = strip.newest_id
   ORDER BY w.processed_at DESC, w.id DESC LIMIT 1) newest ON true
-CROSS JOIN LATERAL (
-  SELECT json_build_array(avg(w.expected), max(w.target_revision_id)::text, avg(w.ingot_fraction)) AS facts
-  FROM wafer_measurement w
-  WHERE w.stream_id = s.id AND w.subgroup_id = strip.charted_id AND w.level IS NOT NULL) charted
+LEFT JOIN LATERAL (
+  SELECT last.target_revision_id AS target_id, json_build_array(
+    CASE WHEN last.least = last.most THEN last.expected END, last.expected_uncertainty_percent, last.fraction) AS facts
+  FROM (SELECT w.*, min(expected) OVER () AS least, max(expected) OVER () AS most, avg(ingot_fraction) OVER () AS fraction
+    FROM wafer_measurement w WHERE w.stream_id = s.id AND w.subgroup_id = strip.charted_id AND w.level IS NOT NULL
+      AND w.expected IS NOT NULL
+    ORDER BY w.processed_at DESC, w.id DESC LIMIT 1) last
+  WHERE last.expected_uncertainty_percent IS NOT NULL) charted ON true
 CROSS JOIN LATERAL (
   SELECT json_agg(json_build_array(w.id::text, w.wafer, w.run_or_lot, w.measured_at, w.not_judged_reason)
     ORDER BY w.measured_at DESC) AS wafers
   FROM wafer_measurement w
-  WHERE w.stream_id = s.id AND w.subgroup_id = ANY(strip.gap_ids) AND w.not_judged_reason IS NOT NULL
-    AND NOT EXISTS (SELECT FROM wafer_measurement later
-      WHERE later.stream_id = w.stream_id AND later.run_or_lot = w.run_or_lot AND later.wafer = w.wafer
-        AND later.measured_at > w.measured_at AND later.not_judged_reason IS NULL)) again
+  WHERE w.stream_id = s.id AND w.subgroup_id = ANY(strip.gap_ids) AND ${TO_MEASURE}) again
 LEFT JOIN LATERAL (
   SELECT json_build_object('id', t.id::text, 'dopant', dopant, 'densityPerCm3', density_per_cm3,
     'tolerancePercent', tolerance_percent, 'alongCrystal', along_crystal, 'profile', profile, 'lengthUm', length_um,
     'backgroundDopant', background_dopant, 'backgroundDensityPerCm3', background_density_per_cm3,
     'calibrationFactor', calibration_factor, 'calibrationPercent', calibration_percent) AS target
-  FROM target_revision t WHERE t.stream_id = s.id
-  ORDER BY effective_from > strip.now, CASE WHEN effective_from <= strip.now THEN effective_from END DESC,
-    CASE WHEN effective_from <= strip.now THEN -revision ELSE revision END LIMIT 1) target ON true
+  FROM target_revision t WHERE t.stream_id = s.id AND t.id = charted.target_id) target ON true
 LEFT JOIN (
   SELECT stream_id, count(*)::integer AS open_cases, (count(*) FILTER (WHERE state = 'open'))::integer AS unanswered_cases,
     min(opened_at) FILTER (WHERE state = 'open') AS oldest_unanswered_at,

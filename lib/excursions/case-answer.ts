@@ -1,20 +1,23 @@
-import { signalSentence } from './signal-sentence';
+import { linePosition } from './line';
+import { caseSentence } from './stream-state';
 import { subgroupLabel } from './subgroup-label';
 import { toldWhen } from './told-when';
 import type { CaseSignal, ExcursionCase } from './types';
 
 /**
  * The signal that speaks for a case: of those that hold the one that went on longest, by its last subgroup, then by
- * how many subgroups it counts. Null when none holds. The board and the lists choose by the same order.
+ * how many subgroups it counts, then the newest. Null when none holds. The board, the lists and the stream's page
+ * choose by the same order (`LEAD_SIGNAL`).
  */
 export function leadSignal(signals: readonly CaseSignal[]): CaseSignal | null {
+  const place = ({ last }: CaseSignal) => ({ at: last.at.getTime(), key: last.key });
   const size = ({ participantIds, completions }: CaseSignal) => participantIds.length + completions;
   return signals
     .filter((signal) => signal.withdrawnAt === null)
     .reduce<CaseSignal | null>((lead, signal) => {
       if (lead === null) return signal;
-      const later = signal.last.at.getTime() - lead.last.at.getTime();
-      return later > 0 || (later === 0 && size(signal) > size(lead)) ? signal : lead;
+      const later = linePosition(place(signal), place(lead)) || size(signal) - size(lead);
+      return later > 0 || (later === 0 && BigInt(signal.id) > BigInt(lead.id)) ? signal : lead;
     }, null);
 }
 
@@ -28,8 +31,8 @@ type Told = Pick<ExcursionCase, 'stream' | 'signals' | 'points'>;
  */
 export function caseAnswer(found: Told): string {
   const lead = leadSignal(found.signals);
-  if (lead === null) return `${found.stream.name}: the signals of this case no longer hold`;
-  return `${found.stream.name}: ${toldWhen(signalSentence(lead), when(lead, found))}`;
+  const words = caseSentence(lead);
+  return `${found.stream.name}: ${lead === null ? words : toldWhen(words, when(lead, found))}`;
 }
 
 function when({ participants, first, last }: CaseSignal, { stream, points }: Told): string {

@@ -14,10 +14,11 @@ import {
   type PointRow,
   type SignalRow,
 } from './line-rows';
+import { measureAgainList, type MeasureAgainWish } from './measure-again-list';
 import { type SpanWish, spanPoints, type StreamSpan } from './span-points';
 import { type SpanWafer, type SpanWaferToMeasure, spanWafers, wafersToMeasure } from './span-wafers';
 import { streamStanding, type StreamStanding } from './stream-standing';
-import type { BoardStream, ExcursionCase, ExcursionList } from './types';
+import type { BoardStream, ExcursionCase, ExcursionList, MeasureAgainList } from './types';
 
 /** Where to begin: the line holds every point from this instant on (milliseconds), and enough before it to judge. */
 export interface LineWish {
@@ -140,6 +141,11 @@ export async function findStreamStanding(
   now: Date,
 ): Promise<StreamStanding> {
   return streamStanding(getPool(), streamId, now);
+}
+
+/** Wafers that were recorded, not judged, and not measured again since; the newest first, with how many each stream has. */
+export async function listMeasureAgain(_actor: Actor, wish: MeasureAgainWish): Promise<MeasureAgainList> {
+  return measureAgainList(getPool(), wish);
 }
 
 /** Excursions by what is asked for: those nobody has answered first, the newest first. */

@@ -5,4 +5,5 @@
 export const LEAD_SIGNAL = `SELECT held.* FROM signal held
   JOIN subgroup reached ON reached.stream_id = held.stream_id AND reached.id = held.last_subgroup_id
   WHERE held.stream_id = e.stream_id AND held.excursion_id = e.id AND held.withdrawn_at IS NULL
-  ORDER BY reached.position_at DESC, cardinality(held.participant_ids) + held.completions DESC, held.id DESC LIMIT 1`;
+  ORDER BY reached.position_at DESC, reached.key DESC, cardinality(held.participant_ids) + held.completions DESC,
+    held.id DESC LIMIT 1`;

@@ -23,17 +23,22 @@ export const excursionStep = z.discriminatedUnion('to', [
 
 export const excursionId = z.string().regex(/^\d{1,18}$/);
 
-const STATES = ['unclosed', 'open', 'acknowledged', 'under-investigation', 'closed', 'all'] as const;
-
-/** What the list of excursions takes from its address; what makes no sense there is as if it were not there. */
-export const excursionQuery = z.object({
-  state: z.enum(STATES).catch('unclosed'),
+/** A stream's name in an address, and a page of a long list; what makes no sense is as if it were not there. */
+const listed = {
   stream: z
     .string()
     .regex(/^[a-z0-9][a-z0-9-]{0,99}$/)
     .nullable()
     .catch(null),
   page: z.coerce.number().int().min(1).max(10_000).catch(1),
-});
+};
+
+/** What the list of wafers to measure again takes from its address. */
+export const measureAgainQuery = z.object(listed);
+
+const STATES = ['unclosed', 'open', 'acknowledged', 'under-investigation', 'closed', 'all'] as const;
+
+/** What the list of excursions takes from its address. */
+export const excursionQuery = z.object({ state: z.enum(STATES).catch('unclosed'), ...listed });
 
 export type ExcursionQuery = z.infer<typeof excursionQuery>;

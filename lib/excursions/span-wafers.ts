@@ -1,4 +1,5 @@
 import type { Pool } from 'pg';
+import { TO_MEASURE } from './to-measure-statement';
 import type { WaferToMeasure } from './types';
 
 /** A wafer of a shown subgroup; times in milliseconds since 1970. */
@@ -116,9 +117,7 @@ SELECT w.id::text, w.subgroup_id::text AS "subgroupId", w.wafer, w.run_or_lot AS
 FROM (SELECT unnest(wafer_ids) AS id FROM subgroup WHERE stream_id = $1 AND position_at >= $2 AND position_at <= $3
   AND array_position(wafer_levels, NULL) IS NOT NULL) member
 JOIN wafer_measurement w ON w.stream_id = $1 AND w.id = member.id
-WHERE w.not_judged_reason IS NOT NULL AND NOT w.history AND NOT EXISTS (
-  SELECT FROM wafer_measurement later WHERE later.stream_id = w.stream_id AND later.run_or_lot = w.run_or_lot
-    AND later.wafer = w.wafer AND later.measured_at > w.measured_at AND later.not_judged_reason IS NULL)
+WHERE ${TO_MEASURE}
 ORDER BY w.measured_at DESC LIMIT $4`;
 
 /** A wafer to measure again, and the subgroup it belongs to. */

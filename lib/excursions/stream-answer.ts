@@ -1,7 +1,6 @@
-import { limitsState } from '@/lib/control/limits-state';
-import { FIRST_BASELINE } from './line';
-import { signalSentence } from './signal-sentence';
+import { limitsWords } from './limits-words';
 import { SINCE_MOST, type StandingCase, type StandingLimits } from './stream-standing';
+import { streamState } from './stream-state';
 import { type SubgroupWord, subgroupLabel } from './subgroup-label';
 import { toldWhen } from './told-when';
 
@@ -35,18 +34,15 @@ export function streamAnswer(figures: StreamFigures): string {
 }
 
 function state({ cases, judged, limits, subgroup, toMeasureAgain }: StreamFigures): string {
-  const [worst] = cases;
-  if (worst !== undefined) {
-    if (worst.signal === null) return 'its signals no longer hold, the case is not closed';
-    return toldWhen(signalSentence(worst.signal), when(worst.signal, subgroup));
-  }
-  if (toMeasureAgain > 0) {
-    return toMeasureAgain === 1 ? 'one wafer to measure again' : `${toMeasureAgain} wafers to measure again`;
-  }
-  if (limits !== null) return judged === 0 ? 'nothing judged yet by the limits in force' : 'steady';
-  if (judged === 0) return 'no wafer judged yet';
-  const progress = judged < FIRST_BASELINE ? `: ${judged} of ${FIRST_BASELINE} subgroups` : '';
-  return `no limits yet${progress}`;
+  const worst = cases[0] ?? null;
+  const { words } = streamState({
+    worst,
+    toMeasureAgain,
+    hasWafers: true,
+    hasLimits: limits !== null,
+    judged,
+  });
+  return worst?.signal ? toldWhen(words, when(worst.signal, subgroup)) : words;
 }
 
 /** "at run R0042", "from run R0035 to run R0042", or "since run R0035" while it goes on. */
@@ -73,7 +69,8 @@ export function streamRemarks(figures: StreamFigures): string[] {
     remarks.push(`Specification is not touched in the ${shown.subgroups} subgroups shown.`);
   }
   if (limits !== null) {
-    remarks.push(`Limits are ${limitsWords(limits)}.`);
+    const words = limitsWords({ ...limits, inherited: limits.origin === 'inherited' });
+    remarks.push(`Limits are ${words}${judged === 0 ? '; they have judged nothing yet' : ''}.`);
     if (openCases === 0 && withSignal > 0) {
       remarks.push(
         `Of ${judged > SINCE_MOST ? `the last ${SINCE_MOST}` : judged} judged by them ${withSignal} ${
@@ -83,10 +80,4 @@ export function streamRemarks(figures: StreamFigures): string[] {
     }
   }
   return remarks;
-}
-
-/** "provisional (25 subgroups)", "young (61 subgroups)", "inherited", "established (214 subgroups)". */
-export function limitsWords(limits: StandingLimits): string {
-  if (limits.origin === 'inherited') return 'inherited';
-  return `${limitsState(limits)} (${limits.limits.n} subgroups)`;
 }

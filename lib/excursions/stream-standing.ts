@@ -2,6 +2,7 @@ import type { Pool } from 'pg';
 import type { LimitSet } from '@/lib/control/limit-set';
 import type { ExcursionFamily } from './line';
 import { limitsInForce } from './judged-points';
+import { LEAD_SIGNAL } from './lead-signal-statement';
 import { LIMIT_SELECTION, type LimitRow, limitSetOf } from './line-rows';
 import type { ExcursionState, SignalWords } from './types';
 
@@ -20,10 +21,7 @@ export interface StandingLimits {
   approvedAt: Date | null;
 }
 
-/**
- * A case that is not closed, with the one of its signals that went on last and, among these, longest; the keys name
- * subgroups.
- */
+/** A case that is not closed, with the signal that speaks for it (`LEAD_SIGNAL`); the keys name subgroups. */
 export interface StandingCase {
   id: string;
   family: ExcursionFamily;
@@ -81,10 +79,7 @@ LEFT JOIN LATERAL (
     'last', json_build_object('id', p.id::text, 'key', p.key, 'isNewest', NOT EXISTS (
       SELECT FROM subgroup n WHERE n.stream_id = p.stream_id AND (n.position_at, n.key) > (p.position_at, p.key)
         AND n.state = 'judged'))) AS signal
-  FROM signal g JOIN subgroup p ON p.stream_id = g.stream_id AND p.id = g.last_subgroup_id
-  WHERE g.stream_id = e.stream_id AND g.excursion_id = e.id AND g.withdrawn_at IS NULL
-  ORDER BY p.position_at DESC, p.key DESC, g.completions + cardinality(g.participant_ids) DESC, g.id DESC
-  LIMIT 1) found ON true
+  FROM (${LEAD_SIGNAL}) g JOIN subgroup p ON p.stream_id = g.stream_id AND p.id = g.last_subgroup_id) found ON true
 ORDER BY e.family = 'specification' DESC, e.state = 'open' DESC, e.id DESC`;
 
 const SINCE = `

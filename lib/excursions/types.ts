@@ -62,6 +62,19 @@ export interface WaferToMeasure {
   reason: string;
 }
 
+/** Wafers to measure again as their page lists them. */
+export interface MeasureAgainList {
+  wafers: (WaferToMeasure & {
+    stream: Pick<BoardStream, 'slug' | 'name'>;
+    gauge: string | null;
+    goodSites: number;
+    /** Sites inside the edge exclusion. */
+    countedSites: number;
+  })[];
+  /** The streams that have any, and how many. */
+  streams: { slug: string; name: string; count: number }[];
+}
+
 /** A stream as the board reads it: its last 30 subgroups and nothing that grows with its history. */
 export interface BoardStream {
   id: string;
@@ -73,15 +86,15 @@ export interface BoardStream {
   recipe: string;
   diameterMm: number;
   chartedValue: 'statistic' | 'relative';
-  /** The latest target in force. */
+  /** The target that the newest charted subgroup was measured against. */
   target: { id: string; target: Target } | null;
   /** Oldest first. */
   points: BoardPoint[];
   /** The first revision, those that judged the points and the worst case, and last the one in force now. */
   limits: BoardLimits[];
   newest: { id: string; wafer: string; runOrLot: string; measuredAt: Date } | null;
-  /** What the newest charted subgroup was measured against, averaged over its wafers. */
-  charted: { expected: number | null; targetId: string | null; ingotFraction: number | null } | null;
+  /** What was expected of the newest charted subgroup; `expected` is null where its wafers differ in it. */
+  charted: { expected: number | null; uncertaintyPercent: number; ingotFraction: number | null } | null;
   /** Of its `openCases`: out of specification before others, unanswered before answered, then the newest. */
   worst: BoardCase | null;
   openCases: number;

@@ -3,7 +3,7 @@ import { SelectField } from '@/app/_ui/field';
 import { Tabs } from '@/app/_ui/tabs';
 import type { ExcursionQuery } from '@/lib/excursions/schema';
 import type { ExcursionList } from '@/lib/excursions/types';
-import { excursionsAddress } from './excursions-address';
+import { listAddress } from '../list-address';
 import styles from './excursion-filters.module.css';
 
 /** Which excursions are shown: by state as tabs, by stream as a choice. Both live in the address. */
@@ -28,7 +28,7 @@ export function ExcursionFilters(props: {
       <Tabs
         label="By state"
         tabs={tabs.map(({ state, name, count }) => ({
-          href: excursionsAddress('/excursions', { ...query, state, page: 1 }),
+          href: listAddress('/excursions', { ...query, state, page: 1 }),
           name: `${name} ${count}`,
           current: query.state === state,
         }))}

@@ -2,19 +2,11 @@ import Link from 'next/link';
 import { DataTable } from '@/app/_ui/data-table';
 import { StateMark } from '@/app/_ui/state-mark';
 import { whoWords } from '@/lib/excursions/excursion-words';
-import { signalSentence } from '@/lib/excursions/signal-sentence';
+import { caseSentence } from '@/lib/excursions/stream-state';
 import { subgroupLabel } from '@/lib/excursions/subgroup-label';
 import type { ListedExcursion } from '@/lib/excursions/types';
 import { formatAge, formatDateTime } from '@/lib/format';
-import styles from './cells.module.css';
-
-/** What happened, by the newest signal of an excursion that holds. */
-export function happened({ signal, family }: Pick<ListedExcursion, 'signal' | 'family'>): string {
-  if (signal === null) return 'its signals no longer hold';
-  return family === 'specification'
-    ? `out of specification: ${signalSentence(signal)}`
-    : signalSentence(signal);
-}
+import styles from '../cells.module.css';
 
 /** Excursions as a table; each opens its own page. */
 export function ExcursionTable(props: {
@@ -43,7 +35,7 @@ export function ExcursionTable(props: {
           head: 'What happened',
           cell: (row) => (
             <span className={styles.words}>
-              <StateMark needsPerson={row.state === 'open'}>{happened(row)}</StateMark>
+              <StateMark needsPerson={row.state === 'open'}>{caseSentence(row.signal)}</StateMark>
             </span>
           ),
         },

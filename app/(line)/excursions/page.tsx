@@ -6,7 +6,7 @@ import { signedIn } from '@/app/page-actor';
 import { readEnvironment } from '@/lib/env';
 import { listExcursions } from '@/lib/excursions/data';
 import { excursionQuery } from '@/lib/excursions/schema';
-import { excursionsAddress } from './excursions-address';
+import { listAddress } from '../list-address';
 import { excursionsAnswer } from './excursions-answer';
 import { ExcursionFilters } from './excursion-filters';
 import { ExcursionTable } from './excursion-table';
@@ -38,15 +38,15 @@ export default async function ExcursionsPage(props: {
           excursions={excursions}
           now={new Date()}
           timeZone={readEnvironment().siteTimeZone}
-          download={excursionsAddress('/api/excursions/csv', { ...query, page: 1 })}
+          download={listAddress('/api/excursions/csv', { ...query, page: 1 })}
         />
       )}
       {(page > 1 || isMore) && (
         <Pager
           label="Excursions"
           where={`${skip + Math.min(1, excursions.length)} to ${skip + excursions.length}`}
-          newer={page > 1 ? excursionsAddress('/excursions', { ...query, page: page - 1 }) : null}
-          older={isMore ? excursionsAddress('/excursions', { ...query, page: page + 1 }) : null}
+          newer={page > 1 ? listAddress('/excursions', { ...query, page: page - 1 }) : null}
+          older={isMore ? listAddress('/excursions', { ...query, page: page + 1 }) : null}
         />
       )}
     </>

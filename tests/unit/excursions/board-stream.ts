@@ -58,7 +58,7 @@ export function boardStream(change: Partial<BoardStream> = {}): BoardStream {
     points: [boardPoint(10), boardPoint(11)],
     limits: [boardLimits()],
     newest: { id: '9', wafer: '03', runOrLot: 'R1', measuredAt: new Date('2031-03-04T06:00:00Z') },
-    charted: { expected: null, targetId: null, ingotFraction: null },
+    charted: null,
     worst,
     openCases: worst === null ? 0 : 1,
     unansweredCases: isUnanswered ? 1 : 0,

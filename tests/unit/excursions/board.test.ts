@@ -70,11 +70,8 @@ describe('the state of a stream in words', () => {
       group: 'needs-someone',
       words: 'beyond the upper limit',
     });
-  });
-
-  it('says out of specification before anything else', () => {
     expect(boardState(boardStream({ worst: specification })).words).toBe(
-      'out of specification: wafer mean below its specification',
+      'wafer mean below its specification',
     );
   });
 
@@ -106,9 +103,9 @@ describe('the state of a stream in words', () => {
   it('says how far limits can be trusted until they are established', () => {
     const of = (n: number, change = {}) =>
       limitWords({ limits: [boardLimits({ limits: { ...LIMITS, n }, ...change })] });
-    expect(of(25, { state: 'provisional' })).toBe('limits provisional (25)');
-    expect(of(24)).toBe('limits provisional (24)');
-    expect(of(61)).toBe('limits young (61)');
+    expect(of(25, { state: 'provisional' })).toBe('limits provisional (25 subgroups)');
+    expect(of(24)).toBe('limits provisional (24 subgroups)');
+    expect(of(61)).toBe('limits young (61 subgroups)');
     expect(of(101)).toBeNull();
     expect(of(0, { inherited: true })).toBe('limits inherited');
   });
@@ -172,9 +169,10 @@ describe('level against expected', () => {
   };
   const target = { id: 'boron', target: boron };
   const expected = expectedValue(boron);
+  const charted = { expected: expected.value, uncertaintyPercent: 3, ingotFraction: null };
 
   it('reads a value above expected as less dopant', () => {
-    const stream = boardStream({ target, points: [boardPoint(expected.value * 1.02)] });
+    const stream = boardStream({ target, charted, points: [boardPoint(expected.value * 1.02)] });
     const found = boardExpected(stream);
     expect(found?.differencePercent).toBeCloseTo(2, 10);
     expect(found?.dopantPercent).toBeCloseTo(100 * (1.02 ** (1 / expected.sensitivity) - 1), 10);
@@ -184,34 +182,33 @@ describe('level against expected', () => {
   });
 
   it('takes the newest level there is, past a wafer that was not judged', () => {
-    const stream = boardStream({ target, points: [boardPoint(expected.value), boardPoint(null)] });
+    const stream = boardStream({ target, charted, points: [boardPoint(expected.value), boardPoint(null)] });
     expect(boardExpected(stream)?.differencePercent).toBeCloseTo(0, 10);
   });
 
-  it('is held against what the wafers were measured against, while the target is the same', () => {
-    const points = [boardPoint(10)];
-    const charted = { expected: 8, targetId: 'boron', ingotFraction: null };
-    expect(boardExpected(boardStream({ target, points, charted }))?.differencePercent).toBeCloseTo(25, 10);
-    const revised = { ...charted, targetId: 'an earlier one' };
-    const against = boardExpected(boardStream({ target, points, charted: revised }))?.charted.value;
-    expect(against).toBeCloseTo(expected.value, 10);
+  it('is held against what its wafers were measured against, known as well as it was then', () => {
+    const stream = boardStream({ target, points: [boardPoint(10)], charted: { ...charted, expected: 8 } });
+    expect(boardExpected(stream)).toMatchObject({ differencePercent: 25, uncertaintyPercent: 3 });
+    expect(boardExpected(stream)?.charted).toEqual({ lower: 8 * 0.97, value: 8, upper: 8 * 1.03 });
+    expect(boardExpected({ ...stream, charted: { ...charted, expected: null } })).toBeNull();
   });
 
   it('needs no value on a relative chart: the level says it itself', () => {
     const crystal = { id: 'crystal', target: { ...boron, alongCrystal: true } };
-    const charted = { expected: null, targetId: null, ingotFraction: 0.4 };
+    const cut = { expected: null, uncertaintyPercent: 3, ingotFraction: 0.4 };
     const points = [boardPoint(100 * Math.log(1.03))];
-    const stream = boardStream({ chartedValue: 'relative', target: crystal, charted, points });
+    const stream = boardStream({ chartedValue: 'relative', target: crystal, charted: cut, points });
     expect(boardExpected(stream)?.differencePercent).toBeCloseTo(3, 10);
     expect(boardExpected(stream)?.charted.value).toBe(0);
-    expect(boardExpected({ ...stream, charted: { ...charted, ingotFraction: null } })).toBeNull();
+    expect(boardExpected({ ...stream, charted: { ...cut, ingotFraction: null } })).toBeNull();
   });
 
   it('is nothing without a target, a level, or a conversion', () => {
     expect(boardExpected(boardStream())).toBeNull();
-    expect(boardExpected(boardStream({ target, points: [] }))).toBeNull();
+    expect(boardExpected(boardStream({ target, charted, points: [] }))).toBeNull();
+    expect(boardExpected(boardStream({ target, points: [boardPoint(10)] }))).toBeNull();
     const beyond = { id: 'beyond', target: { ...boron, densityPerCm3: 1e23 } };
-    expect(boardExpected(boardStream({ target: beyond }))).toBeNull();
+    expect(boardExpected(boardStream({ target: beyond, charted }))).toBeNull();
   });
 
   it('places the band in units of the limits', () => {
@@ -220,8 +217,8 @@ describe('level against expected', () => {
         limits: { ...LIMITS, level: { centre: expected.value, sigma: 1, lower: 0, upper: 99 } },
       }),
     ];
-    const [row] = boardRows([boardStream({ target, limits, points: [boardPoint(expected.value)] })]);
-    const half = (expected.value * expected.uncertaintyPercent) / 100;
+    const [row] = boardRows([boardStream({ target, charted, limits, points: [boardPoint(expected.value)] })]);
+    const half = (expected.value * charted.uncertaintyPercent) / 100;
     expect(row?.strip.band?.upperZ).toBeCloseTo(half, 10);
     expect(row?.strip.band?.lowerZ).toBeCloseTo(-half, 10);
   });

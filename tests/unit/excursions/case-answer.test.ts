@@ -102,6 +102,12 @@ describe('the answer of a case', () => {
     expect(caseAnswer({ stream, points: points(3), signals: [withdrawn] })).toMatch(/no longer hold$/);
   });
 
+  it('speaks by the newer of two signals that tie, in whatever order they come', () => {
+    const [older, newer] = [signal('9', 9, 9), signal('10', 9, 9)];
+    expect(leadSignal([older, newer])?.id).toBe('10');
+    expect(leadSignal([newer, older])?.id).toBe('10');
+  });
+
   it('counts signals and subgroups', () => {
     const withdrawn = signal('2', 3, 3, { withdrawnAt: day(4), withdrawnReason: 'x' });
     const found = { points: points(9), first: run(3), last: run(7), signals: [signal('1', 3, 7), withdrawn] };

@@ -78,8 +78,7 @@ describe('the answer of a stream’s page', () => {
       'no limits yet: 12 of 25 subgroups',
     );
     expect(streamAnswer(figures({ limits: null, judged: 30 }))).toMatch(/no limits yet$/);
-    expect(streamAnswer(figures({ limits: null, judged: 0 }))).toContain('no wafer judged yet');
-    expect(streamAnswer(figures({ judged: 0 }))).toContain('nothing judged yet by the limits in force');
+    expect(streamAnswer(figures({ limits: null, judged: 0 }))).toContain('no limits yet: 0 of 25 subgroups');
     expect(streamAnswer(figures({ toMeasureAgain: 2 }))).toContain('2 wafers to measure again');
   });
 });
@@ -104,6 +103,9 @@ describe('the remarks under it', () => {
 
   it('tell how far the limits can be trusted', () => {
     expect(streamRemarks(figures())).toContain('Limits are young (61 subgroups).');
+    expect(streamRemarks(figures({ judged: 0 }))).toContain(
+      'Limits are young (61 subgroups); they have judged nothing yet.',
+    );
     expect(streamRemarks(figures({ limits: { ...limits, state: 'provisional' } })).join()).toContain(
       'provisional',
     );

@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { type ChartSource, chartRows } from '@/app/(line)/streams/[slug]/chart-points';
-import { modelsOf } from '@/app/(line)/streams/[slug]/point-expected';
+import { modelsOf } from '@/lib/excursions/point-expected';
 import { spanPoint, spanWafer, BORON } from './fixtures';
 
 const source = (over: Partial<ChartSource> = {}): ChartSource => ({

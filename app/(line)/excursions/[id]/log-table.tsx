@@ -2,7 +2,7 @@ import { DataTable } from '@/app/_ui/data-table';
 import { ACTION_WORDS } from '@/lib/excursions/excursion-words';
 import type { ExcursionCase } from '@/lib/excursions/types';
 import { formatDateTime } from '@/lib/format';
-import styles from '../cells.module.css';
+import styles from '../../cells.module.css';
 
 /** The log of a case: who did what, when, in the order it happened. It is only ever added to. */
 export function LogTable({ found, timeZone }: { found: ExcursionCase; timeZone: string }) {

@@ -3,7 +3,7 @@ import { StateMark } from '@/app/_ui/state-mark';
 import { signalSentence } from '@/lib/excursions/signal-sentence';
 import type { CaseSignal, ExcursionCase } from '@/lib/excursions/types';
 import { formatDateTime } from '@/lib/format';
-import styles from '../cells.module.css';
+import styles from '../../cells.module.css';
 import { SubgroupLink, SubgroupWithWafers } from './subgroup-links';
 
 /** The signals of a case: what each says, which subgroup completed it, which took part, and what became of it. */

@@ -1,7 +1,7 @@
 import Link from 'next/link';
 import { subgroupLabel } from '@/lib/excursions/subgroup-label';
 import type { CaseStream, NamedSubgroup } from '@/lib/excursions/types';
-import styles from '../cells.module.css';
+import styles from '../../cells.module.css';
 
 /** A subgroup that leads to its wafer, or, where it has several, to its place on the stream's charts. */
 export function SubgroupLink({ stream, subgroup }: { stream: CaseStream; subgroup: NamedSubgroup }) {

@@ -1,4 +1,5 @@
 import type { StreamChartPoint } from '@/app/_charts/stream-chart-point';
+import { type ModelOf, type PointExpected, pointExpected } from '@/lib/excursions/point-expected';
 import { subgroupLabel } from '@/lib/excursions/subgroup-label';
 import type { SpanWafer } from '@/lib/excursions/span-wafers';
 import { formatDateTime, shortDay } from '@/lib/format';
@@ -6,7 +7,6 @@ import type { Stream } from '@/lib/streams/types';
 import type { ChartUnit } from './chart-unit';
 import type { DrawnPoint } from './drawn-points';
 import { lateOnes } from './late-ones';
-import { type ModelOf, type PointExpected, pointExpected } from './point-expected';
 import { pointTexts } from './point-texts';
 
 /** What the rows of a stream's charts are made of. */

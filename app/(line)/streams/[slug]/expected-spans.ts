@@ -1,6 +1,7 @@
 import type { ExpectedSpan } from '@/app/_charts/stream-chart-point';
+import { expectedBand } from '@/lib/excursions/level-against-expected';
+import type { PointExpected } from '@/lib/excursions/point-expected';
 import type { ChartRow } from './chart-points';
-import type { PointExpected } from './point-expected';
 
 /**
  * What physics expected along a stretch: one span for each run of points measured against the same, value ± standard
@@ -32,28 +33,16 @@ export function expectedSpans(
 type Band = Omit<ExpectedSpan, 'fromIndex' | 'toIndex'>;
 
 function bandOf(expected: PointExpected, options: { isRelative: boolean; factor: number }): Band | null {
-  const share = expected.uncertaintyPercent / 100;
-  const [below, above] = [
-    expected.model?.toleranceLowerRatio ?? null,
-    expected.model?.toleranceUpperRatio ?? null,
-  ];
-  if (options.isRelative) {
-    const percent = (ratio: number | null) => ratio && 100 * Math.log(ratio);
-    return {
-      value: 0,
-      lower: 100 * Math.log1p(-Math.min(share, 0.99)),
-      upper: 100 * Math.log1p(share),
-      toleranceLower: percent(below),
-      toleranceUpper: percent(above),
-    };
-  }
-  if (expected.value === null) return null;
-  const value = expected.value * options.factor;
+  const { isRelative, factor } = options;
+  const band = expectedBand(expected, isRelative ? 'relative' : 'statistic');
+  if (band === null) return null;
+  const edge = (ratio: number | null | undefined) =>
+    ratio == null ? null : isRelative ? 100 * Math.log(ratio) : band.value * factor * ratio;
   return {
-    value,
-    lower: value * (1 - share),
-    upper: value * (1 + share),
-    toleranceLower: below && value * below,
-    toleranceUpper: above && value * above,
+    value: band.value * factor,
+    lower: band.lower * factor,
+    upper: band.upper * factor,
+    toleranceLower: edge(expected.model?.toleranceLowerRatio),
+    toleranceUpper: edge(expected.model?.toleranceUpperRatio),
   };
 }

@@ -1,43 +1,28 @@
 import Link from 'next/link';
-import { DataTable } from '@/app/_ui/data-table';
 import { SectionHead } from '@/app/_ui/section-head';
-import { formatDateTime } from '@/lib/format';
-import styles from './stream-page.module.css';
+import { MeasureAgainTable } from '../../measure-again/measure-again-table';
 import type { StreamView } from './stream-view';
+
+const MOST_WAFERS = 20;
 
 /** Wafers of the stretch that were recorded but not judged, and not measured again since; nothing when there are none. */
 export function MeasureAgain({ view }: { view: StreamView }) {
-  if (view.toMeasure.length === 0) return null;
+  const { toMeasure, timeZone, settings } = view;
+  if (toMeasure.length === 0) return null;
+  const all = `/measure-again?stream=${settings.stream.slug}`;
   return (
     <section>
-      <SectionHead id="measure-again">To be measured again</SectionHead>
-      <DataTable
-        caption="Wafers of this stretch that were recorded, not judged"
-        captionUnseen
-        rows={view.toMeasure}
-        rowKey={(wafer) => wafer.id}
-        columns={[
-          {
-            key: 'wafer',
-            head: 'Wafer',
-            cell: ({ id, wafer, runOrLot }) => (
-              <span className={styles.nowrap}>
-                <Link href={`/wafers/${id}`} prefetch={false}>
-                  {wafer}
-                </Link>{' '}
-                <span className="quiet">{runOrLot}</span>
-              </span>
-            ),
-          },
-          {
-            key: 'at',
-            head: 'Measured',
-            cell: ({ measuredAt }) => (
-              <span className={styles.nowrap}>{formatDateTime(measuredAt, view.timeZone)}</span>
-            ),
-          },
-          { key: 'reason', head: 'Why it is not judged', cell: ({ reason }) => reason },
-        ]}
+      <SectionHead id="measure-again" aside={<Link href={all}>All of this stream</Link>}>
+        To be measured again
+      </SectionHead>
+      <MeasureAgainTable
+        caption={
+          toMeasure.length > MOST_WAFERS
+            ? `The newest ${MOST_WAFERS} of this stretch that were recorded, not judged`
+            : 'Wafers of this stretch that were recorded, not judged'
+        }
+        wafers={toMeasure.slice(0, MOST_WAFERS)}
+        timeZone={timeZone}
       />
     </section>
   );

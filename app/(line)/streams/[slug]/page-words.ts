@@ -46,7 +46,7 @@ export function spanNotices({ span, wish, rows }: StreamView): string[] {
 }
 
 function newestWords({ rows, settings }: StreamView): string | null {
-  const newest = rows.findLast((row) => row.judged);
+  const newest = rows.findLast((row) => row.level !== null);
   const isRelative = settings.stream.chartedValue === 'relative';
   if (newest?.texts.difference == null || newest.expected === null) return null;
   const level = newest.expected.value;

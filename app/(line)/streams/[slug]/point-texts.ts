@@ -1,5 +1,7 @@
 import type { StreamPointTexts } from '@/app/_charts/stream-chart-point';
 import type { ChartedFigures } from '@/lib/excursions/types';
+import { type LevelAgainstExpected, levelAgainstExpected } from '@/lib/excursions/level-against-expected';
+import type { PointExpected } from '@/lib/excursions/point-expected';
 import type { SpanWafer } from '@/lib/excursions/span-wafers';
 import {
   formatNumber,
@@ -8,10 +10,8 @@ import {
   formatWithUncertainty,
   undefinedMark,
 } from '@/lib/format';
-import { dopantPercent } from '@/lib/physics/dopant-percent';
 import type { Stream } from '@/lib/streams/types';
 import type { ChartUnit } from './chart-unit';
-import type { PointExpected } from './point-expected';
 
 /** What is said of a point at the cursor: its figures with unit and fitting digits, and remarks. */
 export function pointTexts(args: {
@@ -25,12 +25,12 @@ export function pointTexts(args: {
   const isRelative = chartedValue === 'relative';
   const inUnit = (value: number | null, digits: number) =>
     value === null ? null : `${formatNumber(value * unit.factor, digits)}\u00a0${unit.unit}`;
-  const ratio = ratioOf(shown.level, expected, isRelative);
+  const against = levelAgainstExpected(shown.level, expected, chartedValue);
   return {
     level: isRelative ? formatSignedPercent(shown.level, 2) : (inUnit(shown.level, 4) ?? undefinedMark),
     expected: expected === null ? null : expectedText(expected, unit, isRelative),
-    difference: ratio === null ? null : formatSignedPercent(100 * (ratio - 1)),
-    dopant: ratio === null || expected === null ? null : dopantText(ratio, expected),
+    difference: against && formatSignedPercent(against.differencePercent),
+    dopant: dopantText(against?.dopant ?? null),
     movingRange: isRelative
       ? shown.movingRange === null
         ? null
@@ -46,23 +46,11 @@ export function pointTexts(args: {
   };
 }
 
-/** Measured over expected. */
-export function ratioOf(
-  level: number | null,
-  expected: PointExpected | null,
-  isRelative: boolean,
-): number | null {
-  if (level === null) return null;
-  if (isRelative) return Math.exp(level / 100);
-  return expected?.value == null ? null : level / expected.value;
-}
-
 /** "+2.1 ± 1.7 %": the difference as percent dopant, with the standard uncertainty of what is expected. */
-export function dopantText(ratio: number, { model, uncertaintyPercent }: PointExpected): string | null {
-  const percent = model === null ? null : dopantPercent(ratio, model.sensitivity);
-  if (model === null || percent === null) return null;
-  const text = formatWithUncertainty(percent, Math.abs(uncertaintyPercent / model.sensitivity), '%');
-  return percent > 0 ? `+${text}` : text;
+function dopantText(dopant: LevelAgainstExpected['dopant']): string | null {
+  if (dopant === null) return null;
+  const text = formatWithUncertainty(dopant.percent, dopant.uncertaintyPercent, '%');
+  return dopant.percent > 0 ? `+${text}` : text;
 }
 
 function expectedText({ value, uncertaintyPercent }: PointExpected, unit: ChartUnit, isRelative: boolean) {

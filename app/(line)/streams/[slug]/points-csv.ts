@@ -1,10 +1,9 @@
 import type { CsvCell } from '@/lib/csv-response';
+import { levelAgainstExpected } from '@/lib/excursions/level-against-expected';
+import { modelsOf, pointExpected } from '@/lib/excursions/point-expected';
 import type { SpanPoint } from '@/lib/excursions/span-points';
 import { subgroupLabel } from '@/lib/excursions/subgroup-label';
-import { dopantPercent } from '@/lib/physics/dopant-percent';
 import type { CsvSpan } from './csv-span';
-import { modelsOf, pointExpected } from './point-expected';
-import { ratioOf } from './point-texts';
 
 /**
  * The subgroups of a stretch as rows of a file, in the quantity's own unit. Of a filtered stretch without limits, rules
@@ -19,7 +18,7 @@ export function pointsCsv(span: CsvSpan): { columns: string[]; rows: CsvCell[][]
   const rows = span.points.map((point): CsvCell[] => {
     const wafers = span.wafersOf.get(point.id) ?? [];
     const expected = pointExpected(wafers, modelOf);
-    const ratio = ratioOf(point.level, expected, isRelative);
+    const against = levelAgainstExpected(point.level, expected, stream.chartedValue);
     const gauges = [...new Set(wafers.map((wafer) => wafer.gauge).filter((gauge) => gauge !== null))];
     return [
       subgroupLabel(stream.subgroup, point.key),
@@ -35,8 +34,8 @@ export function pointsCsv(span: CsvSpan): { columns: string[]; rows: CsvCell[][]
       point.outOfSpecification,
       isRelative ? null : (expected?.value ?? null),
       expected?.uncertaintyPercent ?? null,
-      ratio === null ? null : 100 * (ratio - 1),
-      ratio === null || expected?.model == null ? null : dopantPercent(ratio, expected.model.sensitivity),
+      against?.differencePercent ?? null,
+      against?.dopant?.percent ?? null,
     ];
   });
   const columns = [

@@ -6,6 +6,7 @@ import {
   listSpanWafers,
   listWafersToMeasure,
 } from '@/lib/excursions/data';
+import { modelsOf } from '@/lib/excursions/point-expected';
 import type { SpanWish } from '@/lib/excursions/span-points';
 import type { SpanWafer } from '@/lib/excursions/span-wafers';
 import { listStreamEvents } from '@/lib/streams/data';
@@ -13,10 +14,10 @@ import type { StreamSettings } from '@/lib/streams/types';
 import { chartRows } from './chart-points';
 import { chartUnit } from './chart-unit';
 import { drawnPoints } from './drawn-points';
-import { modelsOf } from './point-expected';
 
 const MOST_EVENTS = 200;
-const MOST_TO_MEASURE = 20;
+/** More than the newest subgroups hold, which are counted as the board counts them. */
+const MOST_TO_MEASURE = 1000;
 
 export type StreamView = NonNullable<Awaited<ReturnType<typeof readStreamView>>>;
 

@@ -1,11 +1,12 @@
-import Link from 'next/link';
 import { DataTable } from '@/app/_ui/data-table';
 import { SectionHead } from '@/app/_ui/section-head';
 import { StateMark } from '@/app/_ui/state-mark';
+import { MEASURED_AGAIN } from '@/lib/excursions/charted-measurements';
 import type { SpanWafer } from '@/lib/excursions/span-wafers';
 import { formatDateTime, formatPercent, formatReading, formatSignedPercent } from '@/lib/format';
+import styles from '../../cells.module.css';
+import { WaferLink } from '../../wafer-link';
 import { streamHref } from './span-wish';
-import styles from './stream-page.module.css';
 import type { StreamView } from './stream-view';
 
 const MOST_WAFERS = 12;
@@ -31,26 +32,19 @@ export function WaferTable({ view }: { view: StreamView }) {
           {
             key: 'wafer',
             head: 'Wafer',
-            cell: ({ id, wafer, runOrLot }) => (
-              <span className={styles.nowrap}>
-                <Link href={`/wafers/${id}`} prefetch={false}>
-                  {wafer}
-                </Link>{' '}
-                <span className="quiet">{runOrLot}</span>
-              </span>
-            ),
+            cell: WaferLink,
           },
           {
             key: 'at',
             head: 'Measured',
             cell: ({ measuredAt }) => (
-              <span className={styles.nowrap}>{formatDateTime(new Date(measuredAt), timeZone)}</span>
+              <span className={styles.line}>{formatDateTime(new Date(measuredAt), timeZone)}</span>
             ),
           },
           {
             key: 'gauge',
             head: 'Gauge',
-            cell: ({ gauge }) => <span className={styles.nowrap}>{gauge ?? '—'}</span>,
+            cell: ({ gauge }) => <span className={styles.line}>{gauge ?? '—'}</span>,
           },
           {
             key: 'value',
@@ -81,16 +75,16 @@ export function WaferTable({ view }: { view: StreamView }) {
           {
             key: 'state',
             head: 'State',
-            cell: (wafer) => (
-              <StateMark needsPerson={wafer.notJudgedReason !== null || wafer.outOfSpecification}>
-                {stateWords(wafer)}
-              </StateMark>
-            ),
+            cell: (wafer) => <StateMark needsPerson={needsPerson(wafer)}>{stateWords(wafer)}</StateMark>,
           },
         ]}
       />
     </section>
   );
+}
+
+function needsPerson({ notJudgedReason, outOfSpecification }: SpanWafer): boolean {
+  return outOfSpecification || (notJudgedReason !== null && notJudgedReason !== MEASURED_AGAIN);
 }
 
 function stateWords(wafer: SpanWafer): string {

@@ -1,6 +1,6 @@
-import type { SpanWafer } from '@/lib/excursions/span-wafers';
-import { type TargetModel, targetModel } from '@/lib/excursions/target-model';
 import type { Target } from '@/lib/physics/target';
+import type { SpanWafer } from './span-wafers';
+import { type TargetModel, targetModel } from './target-model';
 
 /** What physics expected of the wafers of one subgroup. */
 export interface PointExpected {
