@@ -1,6 +1,7 @@
 import { z } from 'zod';
-import { typedChoice, typedText } from '@/lib/typed';
+import { typedChoice, typedText, typedTime } from '@/lib/typed';
 import type { Grant } from './actor';
+import { AUDIT_ACTIONS } from './audit-action';
 import { PERMISSIONS, ROLES, type Role } from './permission';
 
 const emailAddress = z.preprocess(
@@ -67,3 +68,24 @@ export const newToken = z.object({
   reach: typedChoice(['all', 'chosen'], 'Choose the streams.').default('all'),
   days: typedChoice(TOKEN_DAYS, 'Choose how long it holds.').transform(Number),
 });
+
+/** What the audit trail's page takes from its address; what makes no sense is as if it were not there. */
+export const auditQuery = (timeZone: string) => {
+  const instant = typedTime(timeZone).nullable().catch(null);
+  return z.object({
+    who: typedText({ most: 100 })
+      .transform((text) => (text === '' ? null : text))
+      .catch(null),
+    stream: z
+      .string()
+      .regex(/^[a-z0-9][a-z0-9-]{0,99}$/)
+      .nullable()
+      .catch(null),
+    action: z.enum(AUDIT_ACTIONS).nullable().catch(null),
+    from: instant,
+    to: instant,
+    page: z.coerce.number().int().min(1).max(10_000).catch(1),
+  });
+};
+
+export type AuditQuery = z.infer<ReturnType<typeof auditQuery>>;

@@ -17,9 +17,15 @@ const LINKS: readonly { href: string; words: string; says: string; permission: P
     says: 'what each role may do; four eyes',
     permission: 'change-settings',
   },
+  {
+    href: '/audit',
+    words: 'Audit trail',
+    says: 'who did what, when and why',
+    permission: 'read-audit',
+  },
 ];
 
-/** The ways to what an administrator keeps; nothing for anyone else. */
+/** The ways to what an administrator keeps, or a manager reads; nothing for anyone else. */
 export function AccessLinks({ actor }: { actor: Actor }) {
   const links = LINKS.filter(({ permission }) => may(actor, permission));
   if (links.length === 0) return null;
