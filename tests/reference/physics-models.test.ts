@@ -6,21 +6,8 @@ import { ionizedFraction } from '@/lib/physics/ionized-fraction';
 import { klaassenMobility } from '@/lib/physics/klaassen-mobility';
 import { masettiMobility } from '@/lib/physics/masetti-mobility';
 import { modelUncertaintyPercent } from '@/lib/physics/model-uncertainty';
-import { polynomial } from '@/lib/physics/polynomial';
+import { standardResistivity300K } from '@/lib/physics/standard-conversion-300k';
 import { standardResistivity } from '@/lib/physics/standard-resistivity';
-
-/** Resistivity of phosphorus at 300 K, NBS Special Publication 400-64 (1981) [1]. */
-function phosphorus300K(density: number): number {
-  const x = Math.log10(density) - 16;
-  const z =
-    polynomial([-3.0652, 2.1853, -0.6108, 0.056189], x) / polynomial([1, -0.67642, 0.19542, -0.0181], x);
-  return (6.242e18 * 10 ** z) / density;
-}
-
-/** Resistivity of boron at 300 K by the product fit on density, NBS Special Publication 400-64 (1981) [1]. */
-function boron300K(density: number): number {
-  return (0.00215 + (0.02053 - 0.00215) / (1 + (density / 4.09e18) ** -0.727)) / (1.602e-19 * density);
-}
 
 const doped = (donors: number, acceptors: number) => ({
   donor: 'phosphorus' as const,
@@ -54,25 +41,55 @@ describe('the two-carrier conduction law at 300 K with the Masetti model', () =>
   });
 });
 
-describe('the mobility models against the 300 K fits of SP 400-64', () => {
-  it.each<[MobilityModel, number, number]>([
-    ['masetti', 11, 10.1],
-    ['arora', 8.7, 11.9],
-    ['klaassen', 7.4, 9.5],
-  ])('%s differs by at most its stated spread: %s percent for boron, %s for phosphorus', (model, p, n) => {
-    let [boron, phosphorus] = [0, 0];
-    for (let x = 13; x <= 20.0001; x += 0.02) {
-      const density = 10 ** x;
-      const b = conductionResistivity(model, doped(0, density), 300) / boron300K(density) - 1;
-      const f = conductionResistivity(model, doped(density, 0), 300) / phosphorus300K(density) - 1;
-      boron = Math.max(boron, Math.abs(b) * 100);
-      phosphorus = Math.max(phosphorus, Math.abs(f) * 100);
-    }
-    expect(boron).toBeCloseTo(p, 1);
-    expect(phosphorus).toBeCloseTo(n, 1);
-    expect(modelUncertaintyPercent(model, 'boron') * Math.sqrt(3)).toBeCloseTo(p, 10);
-    expect(modelUncertaintyPercent(model, 'phosphorus') * Math.sqrt(3)).toBeCloseTo(n, 10);
+/** Lowest and highest difference of a model's resistivity at 300 K from a conversion over 1e13…1e20, in percent. */
+function extremes(
+  model: MobilityModel,
+  dopant: 'boron' | 'phosphorus',
+  conversion: (dopant: 'boron' | 'phosphorus', densityPerCm3: number) => number,
+): [number, number] {
+  let [lowest, highest] = [Infinity, -Infinity];
+  for (let step = 0; step <= 700; step++) {
+    const density = 10 ** (13 + step / 100);
+    const silicon = dopant === 'boron' ? doped(0, density) : doped(density, 0);
+    const percent = 100 * (conductionResistivity(model, silicon, 300) / conversion(dopant, density) - 1);
+    lowest = Math.min(lowest, percent);
+    highest = Math.max(highest, percent);
+  }
+  return [lowest, highest];
+}
+
+// Masetti (1983), Arora (1982), Klaassen (1992) against ASTM F723 / NBS SP 400-64 (1981); all [calc].
+describe('the mobility models at 300 K against the standard over 1e13 to 1e20', () => {
+  it.each<[MobilityModel, 'boron' | 'phosphorus', number, number]>([
+    ['masetti', 'boron', -10.6, 7.1],
+    ['masetti', 'phosphorus', -9.2, 10.7],
+    ['arora', 'boron', -6.8, 4],
+    ['arora', 'phosphorus', -11.4, 9.6],
+    ['klaassen', 'boron', -6.3, 8.3],
+    ['klaassen', 'phosphorus', -9.2, 10.1],
+  ])('%s reads for %s from %s to %s percent off the conversion at 23 °C', (model, dopant, low, high) => {
+    const [lowest, highest] = extremes(model, dopant, standardResistivity);
+    expect(lowest).toBeCloseTo(low, 1);
+    expect(highest).toBeCloseTo(high, 1);
   });
+
+  it.each<[MobilityModel, 'boron' | 'phosphorus', number, number]>([
+    ['masetti', 'boron', -11, 6.2],
+    ['masetti', 'phosphorus', -9, 10.1],
+    ['arora', 'boron', -8.7, 4],
+    ['arora', 'phosphorus', -11.9, 6.1],
+    ['klaassen', 'boron', -6.8, 7.4],
+    ['klaassen', 'phosphorus', -9, 9.5],
+  ])(
+    '%s reads for %s from %s to %s percent off the fits at its own 300 K, the larger being its stated spread',
+    (model, dopant, low, high) => {
+      const [lowest, highest] = extremes(model, dopant, standardResistivity300K);
+      expect(Math.abs(lowest - low)).toBeLessThan(0.06);
+      expect(Math.abs(highest - high)).toBeLessThan(0.06);
+      const spread = modelUncertaintyPercent(model, dopant) * Math.sqrt(3);
+      expect(spread).toBeCloseTo(Math.max(-lowest, highest), 1);
+    },
+  );
 
   it('agree on the published plateau of electrons and holes in pure silicon', () => {
     const pure = { ...doped(1e12, 0), electronsPerCm3: 1e12, holesPerCm3: 1e8 };

@@ -8,6 +8,8 @@ import { klaassenMobility } from '@/lib/physics/klaassen-mobility';
 import { masettiMobility } from '@/lib/physics/masetti-mobility';
 import { mobilityNotes } from '@/lib/physics/mobility-notes';
 import { monotoneRoot } from '@/lib/physics/monotone-root';
+import { polynomial } from '@/lib/physics/polynomial';
+import { polynomialSlope } from '@/lib/physics/polynomial-slope';
 import { resistivityAtTemperature } from '@/lib/physics/resistivity-at-temperature';
 import { scheilDensity } from '@/lib/physics/scheil-density';
 import { resistivityAt23C } from '@/lib/physics/temperature-coefficient';
@@ -21,8 +23,8 @@ describe('charge neutrality', () => {
         (donors, acceptors) => {
           const { electronsPerCm3: n, holesPerCm3: p } = carriers(10 ** donors, 10 ** acceptors, 300);
           const intrinsic = carriers(0, 0, 300).electronsPerCm3;
-          expect((n * p) / intrinsic ** 2).toBeCloseTo(1, 9);
-          expect(Math.abs(n - p - (10 ** donors - 10 ** acceptors))).toBeLessThan(1e-9 * (n + p));
+          expect((n * p) / intrinsic ** 2).toBeCloseTo(1, 12);
+          expect(Math.abs(n - p - (10 ** donors - 10 ** acceptors))).toBeLessThan(1e-12 * (n + p));
         },
       ),
       { seed: 3 },
@@ -99,8 +101,21 @@ describe('numerical tools', () => {
     expect(() => complementaryErrorFunction(-1)).toThrow(RangeError);
   });
 
+  it('the slope of a polynomial is that of its terms', () => {
+    expect(polynomialSlope([1, 2, 3], 2)).toBe(14);
+    expect(polynomialSlope([5], 2)).toBe(0);
+    expect(polynomial([1, 2, 3], 2)).toBe(17);
+    expect(polynomial([], 2)).toBe(0);
+  });
+
   it('the integral of a known function is exact, also over a step', () => {
     expect(adaptiveIntegral(Math.exp, 0, 1, 1e-10)).toBeCloseTo(Math.E - 1, 12);
+    const spike = adaptiveIntegral((x) => Math.exp(-(((x - 0.3) / 0.01) ** 2)), 0, 1, 1e-9);
+    expect(spike / (0.01 * Math.sqrt(Math.PI))).toBeCloseTo(1, 9);
+    // The 15-point rule is exact for every power up to the 22nd.
+    for (let power = 0; power <= 22; power++) {
+      expect((power + 1) * adaptiveIntegral((x) => x ** power, 0, 1, 1)).toBeCloseTo(1, 13);
+    }
     expect(adaptiveIntegral((x) => (x < 0.3 ? 1 : 3), 0, 1, 1e-9)).toBeCloseTo(2.4, 7);
     expect(() => adaptiveIntegral(Math.exp, 0, Infinity, 1e-9)).toThrow(RangeError);
   });
