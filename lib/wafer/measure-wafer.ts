@@ -1,7 +1,8 @@
 import { featureDescription } from './feature-description';
+import { heldAgainstFlexible } from './held-against-flexible';
 import { partOfPlan, type PlanGeometry } from './plan-geometry';
 import { robustDeviations } from './robust-deviations';
-import { farFromAnySurface, screenOutliers } from './screen-outliers';
+import { screenOutliers } from './screen-outliers';
 import { waferFigures, type WaferFigures } from './wafer-figures';
 import { NO_SHAPE, waferShape, type WaferShape } from './wafer-shape';
 
@@ -88,15 +89,11 @@ export function measureWafer(
   let part = partOfPlan(geometry, isGood);
   let readings = pick(values, part.indices);
   if (options.screen === 'outliers' && counted >= LEAST_SITES_FOR_OUTLIERS) {
-    const deviations = robustDeviations(readings, part.screenFit);
+    const deviations = robustDeviations(readings, part);
     if (deviations !== null) {
-      const { lone, together } = screenOutliers(deviations, part.indices, geometry);
-      const flexible = lone.length === 0 ? null : robustDeviations(readings, part.flexibleFit);
-      const sure =
-        lone.length === 0
-          ? lone
-          : farFromAnySurface(lone, deviations, flexible, part.flexibleFit, part.indices);
-      const out = sure.filter((i) => options.overrides?.get(i) !== 'in');
+      const far = screenOutliers(deviations, part.indices, geometry);
+      const { lone, together } = heldAgainstFlexible(far, deviations, readings, part);
+      const out = lone.filter((i) => options.overrides?.get(i) !== 'in');
       const most = Math.floor(MOST_OUTLIER_SHARE * counted);
       if (out.length > most) tooMany = out.length;
       for (const i of out.slice(0, most)) {

@@ -1,20 +1,6 @@
-import { areaWeights } from './area-weights';
-import { SCREEN_TERMS, SHAPE_TERMS } from './disc-terms';
+import { planPart, type PlanPart } from './plan-part';
 import type { Site } from './site';
 import { siteNeighbours } from './site-neighbours';
-import { surfaceFit, type SurfaceFit } from './surface-fit';
-
-/** What belongs to one set of counted sites of a plan: usually all of them, fewer when some are bad. */
-export interface PlanPart {
-  /** Site numbers in the plan, ascending. */
-  indices: Int32Array;
-  /** Share of the quality area per counted site; null without a diameter. */
-  weights: Float64Array | null;
-  shapeFit: SurfaceFit;
-  /** The surface that readings are screened against, and the most flexible one the sites allow. */
-  screenFit: SurfaceFit;
-  flexibleFit: SurfaceFit;
-}
 
 /** A site plan, prepared once for the many wafers measured on it. */
 export interface PlanGeometry {
@@ -41,47 +27,8 @@ export interface PlanGeometry {
 
 /** 0.0625 inch, the usual spacing of the pins (common practice, no source). */
 const USUAL_PROBE_SPACING_MM = 1.588;
-/**
- * The surface for screening is stiffer than the one for shape: with a term for every third site it
- * bends through three neighbours at the rim that deviate together, and blames the ones beside them.
- */
-const SITES_PER_SCREEN_TERM = 6;
 const MOST_PARTS = 512;
 const SLACK = 1 + 1e-6;
-
-/** Lets a figure be worked out when it is first asked for, and kept. */
-function once<T>(make: () => T): () => T {
-  let kept: { value: T } | null = null;
-  return () => (kept ??= { value: make() }).value;
-}
-
-function planPart(
-  sites: readonly Site[],
-  indices: Int32Array,
-  unitRadiusMm: number,
-  qualityRadiusMm: number | null,
-): PlanPart {
-  const counted = Array.from(indices, (i) => sites[i]!);
-  const weights = once(() => (qualityRadiusMm === null ? null : areaWeights(counted, qualityRadiusMm)));
-  const shapeFit = once(() => surfaceFit(counted, unitRadiusMm, SHAPE_TERMS));
-  const screenFit = once(() => surfaceFit(counted, unitRadiusMm, SCREEN_TERMS, SITES_PER_SCREEN_TERM));
-  const flexibleFit = once(() => surfaceFit(counted, unitRadiusMm, SCREEN_TERMS));
-  return {
-    indices,
-    get weights() {
-      return weights();
-    },
-    get shapeFit() {
-      return shapeFit();
-    },
-    get screenFit() {
-      return screenFit();
-    },
-    get flexibleFit() {
-      return flexibleFit();
-    },
-  };
-}
 
 /** The part of a plan that holds exactly these sites, from the ones met before or made now. */
 export function partOfPlan(geometry: PlanGeometry, isCounted: Uint8Array): PlanPart {
@@ -92,7 +39,7 @@ export function partOfPlan(geometry: PlanGeometry, isCounted: Uint8Array): PlanP
   const known = geometry.parts.get(key);
   if (known) return known;
   const indices = geometry.whole.indices.filter((i) => isCounted[i] !== 0);
-  const part = planPart(geometry.sites, indices, geometry.unitRadiusMm, geometry.qualityRadiusMm);
+  const part = planPart(geometry, indices);
   if (geometry.parts.size >= MOST_PARTS) geometry.parts.clear();
   geometry.parts.set(key, part);
   return part;
@@ -143,7 +90,7 @@ export function planGeometry(
     outerSites:
       ringFromMm > 0.02 * unitRadiusMm ? [...indices].filter((i) => radii[i]! >= ringFromMm / SLACK) : [],
     neighbours,
-    whole: planPart(sites, indices, unitRadiusMm, qualityRadiusMm),
+    whole: planPart({ sites, neighbours, unitRadiusMm, qualityRadiusMm }, indices),
     parts: new Map(),
   };
 }

@@ -1,6 +1,5 @@
 import type { PlanGeometry } from './plan-geometry';
 import type { RobustDeviations } from './robust-deviations';
-import type { SurfaceFit } from './surface-fit';
 
 /** What the smooth surface says of one wafer: readings that stand alone, and places that deviate together. */
 export interface ScreenedReadings {
@@ -11,34 +10,10 @@ export interface ScreenedReadings {
 }
 
 /** A reading is far from here: about one good reading in 10⁸ by chance, were the spread known. */
-const FAR_SCORE = 6;
+export const FAR_SCORE = 6;
 /** A neighbour deviates with it from here, if it also goes a quarter of the way. */
 const WITH_SCORE = 3;
 const WITH_SHARE = 0.25;
-/** A surface that follows a reading by more than this share says nothing against it. */
-const MOST_FOLLOWED = 0.8;
-const SURE_SCORE = 20;
-
-/**
- * Of the readings that stand alone, those that also lie far from the most flexible surface the sites allow.
- * A reading that such a surface can follow may be the wafer: the centre of a ring pattern is the only site that
- * sees it. Where that surface must follow the reading, whatever it is, only a score of 20 against the stiff one
- * is sure. `flexible` is null where the flexible surface leaves nothing far.
- */
-export function farFromAnySurface(
-  lone: readonly number[],
-  stiff: RobustDeviations,
-  flexible: RobustDeviations | null,
-  fit: SurfaceFit,
-  indices: Int32Array,
-): number[] {
-  return lone.filter((site) => {
-    const i = indices.indexOf(site);
-    if (fit.leverage[i]! > MOST_FOLLOWED) return Math.abs(stiff.score[i]!) >= SURE_SCORE;
-    return flexible !== null && Math.abs(flexible.score[i]!) >= FAR_SCORE;
-  });
-}
-
 /**
  * Sorts the far readings of a wafer into those alone and those whose neighbours deviate with them.
  * A probe that slips spoils one reading; what several neighbours agree on is on the wafer (common

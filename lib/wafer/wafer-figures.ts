@@ -1,4 +1,5 @@
-import type { PlanGeometry, PlanPart } from './plan-geometry';
+import type { PlanGeometry } from './plan-geometry';
+import type { PlanPart } from './plan-part';
 
 /** A reading and the site where it was taken. */
 export interface Extreme {

@@ -1,4 +1,4 @@
-import type { PlanPart } from './plan-geometry';
+import type { PlanPart } from './plan-part';
 import { fitCoefficients, fitResiduals } from './surface-fit';
 
 /** One shape of a wafer, in percent of the mean of its good readings. */
