@@ -2,13 +2,17 @@ import { AppError, problemResponse } from '@/lib/errors';
 import { accounts } from './accounts';
 import { AUTH_PATHS } from './auth-paths';
 import { requestOrigin } from './request-origin';
+import { chainAccessEvents } from './chain-access-events';
 import { isSameOrigin } from './same-origin';
 
 const ROOT = '/api/auth';
 /** No form of ours comes near it. */
 const MOST_BODY_BYTES = 16_384;
 
-/** Answers a request below /api/auth by the accounts library, for those of its endpoints that are in use. */
+/**
+ * Answers a request below /api/auth by the accounts library, for those of its endpoints that are in use. What it wrote
+ * is taken into the audit trail before the answer goes out.
+ */
 export async function answerAuth(request: Request): Promise<Response> {
   const asked = new URL(request.url);
   const path = asked.pathname.slice(ROOT.length);
@@ -29,6 +33,7 @@ export async function answerAuth(request: Request): Promise<Response> {
   const answer = await accounts().handler(
     new Request(url, { method: request.method, headers: request.headers, ...(body ? { body } : {}) }),
   );
+  await chainAccessEvents();
   const wait = answer.headers.get('x-retry-after');
   if (wait !== null) answer.headers.set('retry-after', wait);
   answer.headers.set('cache-control', 'no-store');

@@ -1,9 +1,10 @@
 import { createHmac, randomBytes, timingSafeEqual } from 'node:crypto';
 import { hashPassword } from 'better-auth/crypto';
 import { getPool } from '@/lib/database/client';
-import { inTransaction } from '@/lib/database/transaction';
 import { readEnvironment } from '@/lib/env';
+import { audited } from './audited';
 import { isLoopbackName, nameOfHost } from './is-loopback-name';
+import { programActor } from './local-actor';
 import { passwordFault } from './password-fault';
 import type { FirstAdministrator } from './schema';
 import { plantKey } from './secret';
@@ -51,7 +52,7 @@ export async function createFirstAdministrator(
   if (fault !== null) return { ok: false, field: 'password', reason: fault };
   const id = randomBytes(16).toString('hex');
   const hash = await hashPassword(given.password);
-  return inTransaction(async (client) => {
+  return audited(programActor(), async (client, tell) => {
     await client.query('SELECT pg_advisory_xact_lock($1)', [FIRST_ADMINISTRATOR_LOCK]);
     const { rowCount } = await client.query(
       `INSERT INTO person (id, name, email) SELECT $1, $2, $3 WHERE ${NOBODY}`,
@@ -66,6 +67,12 @@ export async function createFirstAdministrator(
       `INSERT INTO role_grant (person_id, role, granted_by) VALUES ($1, 'administrator', 'Evenohm')`,
       [id],
     );
+    tell({
+      action: 'added a person',
+      subject: { kind: 'person', id },
+      after: { name: given.name, roles: ['administrator'] },
+      why: `the first administrator, entered ${isAtMachine ? 'at the machine itself' : 'with the code from the log'}`,
+    });
     return { ok: true };
   });
 }

@@ -85,12 +85,14 @@ async function seedFirstStart(say: (text: string) => void): Promise<void> {
   await withProgress(say, 'Filling in the demonstration line', () => seedDemo(say, endAt));
 }
 
-/** Puts in the people of the demonstration line, and says how the first administrator gets in. */
+/** Puts in the people of the demonstration line, tells of what is not yet in the audit trail, and says how the first administrator gets in. */
 async function preparePeople(address: string, say: (text: string) => void): Promise<void> {
   const { ensureDemonstrationPeople, isDemonstrationOffered } = await import('@/lib/access/demonstration');
   const { firstAdministratorCode, isFirstAdministratorDue } =
     await import('@/lib/access/first-administrator');
+  const { chainAccessEvents } = await import('@/lib/access/chain-access-events');
   if (isDemonstrationOffered()) await ensureDemonstrationPeople();
+  await chainAccessEvents();
   if (!(await isFirstAdministratorDue())) return;
   say(
     `There is no administrator yet: enter one at ${address}/first-administrator, from elsewhere with the code ${firstAdministratorCode()}.`,
