@@ -44,7 +44,7 @@ function byCoefficient(dopant: Dopant, resistivityOhmCm: number, temperatureC: n
  * By how many percent the Arora model lies above the measured coefficient at 18 or at 28 °C, where one hands over to the
  * other: a stated step, never blended away. Null where no coefficient is published.
  *
- * @example temperatureStepPercent('boron', 1.34e15, 10, 28) // −0.7
+ * @example temperatureStepPercent('boron', 1.34e15, 10, 28) // −0.83
  */
 export function temperatureStepPercent(
   dopant: Dopant,
