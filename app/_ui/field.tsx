@@ -1,7 +1,7 @@
 import type { ComponentProps, ReactNode } from 'react';
 import styles from './field.module.css';
 
-interface FieldWords {
+export interface FieldWords {
   /** The name the form sends. */
   name: string;
   label: ReactNode;
@@ -18,7 +18,7 @@ type FieldProps<Tag extends 'input' | 'select' | 'textarea'> = FieldWords &
   Omit<ComponentProps<Tag>, keyof FieldWords>;
 
 /** Splits what the frame says from what the control is given, and ties the two together for screen readers. */
-function parted<Props extends FieldWords>(props: Props) {
+export function parted<Props extends FieldWords>(props: Props) {
   const { label, hint, error, unit, id = props.name, ...rest } = props;
   const described = [hint !== undefined && `${id}-hint`, error && `${id}-error`].filter(Boolean).join(' ');
   return {
@@ -33,7 +33,7 @@ function parted<Props extends FieldWords>(props: Props) {
 }
 
 function Frame({ words, children }: { words: ReturnType<typeof parted>['words']; children: ReactNode }) {
-  const { label, hint, error, unit, id } = words;
+  const { label, unit, id } = words;
   return (
     <div className={styles.field}>
       <label htmlFor={id}>{label}</label>
@@ -41,6 +41,16 @@ function Frame({ words, children }: { words: ReturnType<typeof parted>['words'];
         {children}
         {unit !== undefined && <span className="unit">{unit}</span>}
       </div>
+      <FieldNotes words={words} />
+    </div>
+  );
+}
+
+/** What stands under a field: its hint, and what is wrong. */
+export function FieldNotes({ words }: { words: ReturnType<typeof parted>['words'] }) {
+  const { hint, error, id } = words;
+  return (
+    <>
       {hint !== undefined && (
         <p id={`${id}-hint`} className="quiet small">
           {hint}
@@ -52,7 +62,7 @@ function Frame({ words, children }: { words: ReturnType<typeof parted>['words'];
           {error}
         </p>
       )}
-    </div>
+    </>
   );
 }
 

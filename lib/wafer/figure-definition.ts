@@ -86,6 +86,21 @@ const DEFINITIONS: Record<keyof WaferFigures, FigureDefinition> = {
   },
 };
 
+/** The order in which the figures of a wafer are listed: where it lies, how even it is, its extremes. */
+export const FIGURE_ORDER = [
+  'areaMean',
+  'mean',
+  'median',
+  'standardDeviation',
+  'relativeStandardDeviationPercent',
+  'fullRangeOverMidrangePercent',
+  'halfRangeOverMidrangePercent',
+  'halfRangeOverMeanPercent',
+  'radialVariationPercent',
+  'minimum',
+  'maximum',
+] as const satisfies readonly (keyof WaferFigures)[];
+
 /**
  * The definition of a figure, for whoever reads it: several non-uniformities share a name in the
  * trade and differ by a factor of two, so none is shown without one.

@@ -1,5 +1,5 @@
 import { formatNumber, formatPercent } from '@/lib/format';
-import { figureDefinition } from '@/lib/wafer/figure-definition';
+import { FIGURE_ORDER, figureDefinition } from '@/lib/wafer/figure-definition';
 import type { WaferMeasure } from '@/lib/wafer/measure-wafer';
 import type { PlanGeometry } from '@/lib/wafer/plan-geometry';
 import type { WaferRows } from './read-map-file';
@@ -38,20 +38,6 @@ export function mapResult(rows: WaferRows, geometry: PlanGeometry, measure: Wafe
 
 export type MapResult = ReturnType<typeof mapResult>;
 
-const PRINTED = [
-  'areaMean',
-  'mean',
-  'median',
-  'standardDeviation',
-  'relativeStandardDeviationPercent',
-  'fullRangeOverMidrangePercent',
-  'halfRangeOverMidrangePercent',
-  'halfRangeOverMeanPercent',
-  'radialVariationPercent',
-  'minimum',
-  'maximum',
-] as const;
-
 /** The same for a person: a table of figures, then what is bad and what stands out. */
 export function mapLines(result: MapResult): string[] {
   const name = result.wafer === null ? 'wafer' : `wafer ${result.wafer}`;
@@ -59,7 +45,7 @@ export function mapLines(result: MapResult): string[] {
   return [
     `${name}: ${result.goodSites} of ${result.sites} sites good, ${result.badSites} bad${excluded}`,
     ...(result.notJudgeableReason === null ? [] : [`not fit to be judged: ${result.notJudgeableReason}`]),
-    ...PRINTED.map((figure) => {
+    ...FIGURE_ORDER.map((figure) => {
       const { label, unit } = figureDefinition(figure);
       const value = result[figure];
       const text =

@@ -1,25 +1,11 @@
 import { Figures, type Figure } from '@/app/_ui/figures';
 import { SectionHead } from '@/app/_ui/section-head';
 import { formatPercent, formatSignedPercent } from '@/lib/format';
-import { figureDefinition } from '@/lib/wafer/figure-definition';
+import { FIGURE_ORDER, figureDefinition } from '@/lib/wafer/figure-definition';
 import type { WaferFigures } from '@/lib/wafer/measure-wafer';
 import { formatMm } from './format-site';
 import type { WaferShown } from './wafer-shown';
 import styles from './page.module.css';
-
-const ORDER: readonly (keyof WaferFigures)[] = [
-  'areaMean',
-  'mean',
-  'median',
-  'standardDeviation',
-  'relativeStandardDeviationPercent',
-  'fullRangeOverMidrangePercent',
-  'halfRangeOverMidrangePercent',
-  'halfRangeOverMeanPercent',
-  'radialVariationPercent',
-  'minimum',
-  'maximum',
-];
 
 /** The figures of the wafer, each with its definition behind its name. */
 export function FiguresPart({ shown }: { shown: WaferShown }) {
@@ -34,7 +20,7 @@ export function FiguresPart({ shown }: { shown: WaferShown }) {
         {measure.excludedSites > 0 && `, ${measure.excludedSites} more lie in the edge exclusion`}. Site plan
         “{plan.name}”, a wafer of {plan.diameterMm} mm, edge exclusion {plan.edgeExclusionMm} mm.
       </p>
-      <Figures figures={ORDER.map((name) => figureRow(name, shown, name === controlStatistic))} />
+      <Figures figures={FIGURE_ORDER.map((name) => figureRow(name, shown, name === controlStatistic))} />
     </section>
   );
 }
