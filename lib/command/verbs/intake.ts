@@ -1,9 +1,10 @@
-import { access, constants, stat } from 'node:fs/promises';
+import { open, stat } from 'node:fs/promises';
 import { parseArgs } from 'node:util';
 import { openDatabase } from '@/lib/database/connection';
 import { columnFlag, WAFER_COLUMNS } from '@/lib/maps/map-columns';
 import { sentOptions } from '@/lib/maps/schema';
 import type { MapProblem } from '@/lib/maps/types';
+import { fileFailure } from '../file-failure';
 import { UsageError, type ExitStatus, type Verb, type VerbOutput } from '../verb';
 import { intakeAtServer, type Taken } from './intake-at-server';
 import { intakeHere } from './intake-here';
@@ -35,16 +36,10 @@ async function recordFiles(args: string[], output: VerbOutput): Promise<ExitStat
     throw new UsageError('--follow is not available yet: name the files, or run intake for each new one');
   if (positionals.length === 0) throw new UsageError('name at least one file');
   for (const path of positionals) {
-    const found = await stat(path).catch(() => null);
-    if (!found?.isFile()) {
-      output.say(`${path}: this is no file.`);
-      return 1;
-    }
-    const unreadable = await access(path, constants.R_OK).catch(() => 'unreadable');
-    if (unreadable !== undefined) {
-      output.say(`${path}: this file may not be read.`);
-      return 1;
-    }
+    const fault = await whyNoFile(path);
+    if (fault === null) continue;
+    output.say(fault);
+    return 1;
   }
   const total: Taken = { recorded: 0, repeated: 0, refused: 0, refusals: [], notices: [] };
   const recordAll = async (record: (path: string) => Promise<Taken>) => {
@@ -78,6 +73,19 @@ async function recordFiles(args: string[], output: VerbOutput): Promise<ExitStat
     output.out(`${total.recorded} recorded, ${total.repeated} repeated, ${total.refused} refused.${check}`);
   }
   return total.refused > 0 ? 3 : 0;
+}
+
+/** Why a path cannot be taken in; a file is read twice, so what can be read only once is none. */
+async function whyNoFile(path: string): Promise<string | null> {
+  try {
+    const found = await stat(path);
+    if (!found.isDirectory() && !found.isFile()) return `${path}: this is no file.`;
+    const file = await open(path);
+    await file.read({ length: 1 }).finally(() => file.close());
+    return null;
+  } catch (error) {
+    return fileFailure(path, error);
+  }
 }
 
 function parsed(args: string[]) {

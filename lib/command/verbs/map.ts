@@ -1,8 +1,9 @@
 import { readFile } from 'node:fs/promises';
 import { parseArgs } from 'node:util';
-import { UsageError, type Verb } from '@/lib/command/verb';
 import { measureWafer, type Screen } from '@/lib/wafer/measure-wafer';
 import { planGeometry, type PlanGeometry } from '@/lib/wafer/plan-geometry';
+import { fileFailure } from '../file-failure';
+import { UsageError, type Verb } from '../verb';
 import { mapLines, mapResult } from './map-result';
 import { readMapFile, type Refusal, type WaferRows } from './read-map-file';
 
@@ -88,9 +89,7 @@ export const map: Verb = {
     try {
       bytes = await readFile(file);
     } catch (error) {
-      const missing = error instanceof Error && 'code' in error && error.code === 'ENOENT';
-      const why = missing ? 'there is no such file' : error instanceof Error ? error.message : String(error);
-      output.say(`cannot read ${file}: ${why}`);
+      output.say(fileFailure(file, error));
       return 1;
     }
     const { wafers, refusals } = await readMapFile(file, [bytes]);

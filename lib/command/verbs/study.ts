@@ -3,6 +3,7 @@ import { meanSpreadCharts } from '@/lib/control/mean-spread-charts';
 import { rangeLaw, standardDeviationLaw } from '@/lib/control/spread-law';
 import type { StudyChart, StudyOptions } from '@/lib/control/study-chart';
 import { threeWayCharts } from '@/lib/control/three-way-charts';
+import { fileFailure } from '../file-failure';
 import { studyArguments, type StudyKind } from '../study-arguments';
 import { studySubgroups } from '../study-subgroups';
 import { studyTable } from '../study-table';
@@ -41,7 +42,7 @@ export const study: Verb = {
     try {
       read = await studySubgroups(file, columns);
     } catch (error) {
-      output.say(`${file} cannot be read: ${error instanceof Error ? error.message : String(error)}`);
+      output.say(fileFailure(file, error));
       return 1;
     }
     const refuse = (reasons: readonly string[]): 3 => {

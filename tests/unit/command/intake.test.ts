@@ -25,12 +25,4 @@ describe('intake', () => {
     await expect(run(join(folder, 'map.csv'), '--what')).rejects.toThrow(UsageError);
     await expect(run('--follow', folder)).rejects.toThrow('--follow is not available yet');
   });
-
-  it('fails on a path that is no file before it opens a database', async () => {
-    for (const path of [join(folder, 'none.csv'), folder])
-      expect(await run(join(folder, 'map.csv'), path)).toEqual({
-        exit: 1,
-        said: `${path}: this is no file.`,
-      });
-  });
 });
