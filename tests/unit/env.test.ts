@@ -1,3 +1,4 @@
+import { readFileSync } from 'node:fs';
 import path from 'node:path';
 import { describe, expect, it } from 'vitest';
 import { EnvironmentError, readEnvironment } from '@/lib/env';
@@ -46,5 +47,17 @@ describe('readEnvironment', () => {
       readEnvironment({ PORT: 'x', DATABASE_URL: 'mysql://a', EVENOHM_SITE_TIME_ZONE: 'Mars/Base' });
     expect(read).toThrow(EnvironmentError);
     expect(read).toThrow(/DATABASE_URL: .*; PORT: must be a port.*; EVENOHM_SITE_TIME_ZONE: /);
+  });
+
+  it('reads the variables of the README, all and no others', () => {
+    const root = path.resolve(import.meta.dirname, '../..');
+    const [, table = ''] = readFileSync(path.join(root, 'README.md'), 'utf8').split('## Settings');
+    const described = [...table.matchAll(/^\| (`[^|]*`)/gm)].flatMap(([, names = '']) =>
+      names.match(/[A-Z_]+/g),
+    );
+    const source = readFileSync(path.join(root, 'lib/env.ts'), 'utf8');
+    const read = [...source.matchAll(/^ {2}([A-Z_]+): z\./gm)].map(([, name]) => name);
+    expect(read.length).toBeGreaterThan(8);
+    expect(described.toSorted()).toEqual(read.toSorted());
   });
 });
