@@ -1,3 +1,4 @@
+import { setImmediate } from 'node:timers/promises';
 import type { Metadata } from 'next';
 import Link from 'next/link';
 import { findActor } from '@/lib/access/request-actor';
@@ -5,11 +6,13 @@ import { rolesThatMay } from '@/lib/access/role-words';
 import { PageHead } from './_ui/page-head';
 import { refusedPermission } from './refused-permission';
 
-export const metadata: Metadata = { title: 'Not for your roles' };
+export const metadata: Metadata = { title: 'Not for your roles', icons: '/icon.svg' };
 
 /** Stands in for a page that its reader may not see, and says which roles may. */
 export default async function Forbidden() {
   const actor = await findActor();
+  // Made beside the page, not after it: by then the page has found out what is refused.
+  await setImmediate();
   const { permission } = refusedPermission();
   const isWithoutRole = actor !== null && actor.grants.length === 0;
   return (

@@ -15,6 +15,8 @@ if (process.env.EVENOHM_BROWSER_PORT === undefined) {
 }
 const port = process.env.EVENOHM_BROWSER_PORT;
 const executablePath = findChromium();
+/** The session of the process owner of the demonstration line, made once: tests act as them unless they sign in anew. */
+const storageState = path.join(root, '.results/process-owner.json');
 
 /** The production build on a database of its own with the demonstration line, thrown away at the next run. */
 export default defineConfig({
@@ -33,9 +35,19 @@ export default defineConfig({
     ...(executablePath === null ? {} : { launchOptions: { executablePath } }),
   },
   projects: [
-    { name: 'desktop', use: { viewport: { width: 1440, height: 900 } } },
+    { name: 'sign-in', testMatch: 'process-owner.setup.ts' },
+    {
+      name: 'desktop',
+      dependencies: ['sign-in'],
+      use: { storageState, viewport: { width: 1440, height: 900 } },
+    },
     // Tests marked @phone: elsewhere a narrow window adds nothing.
-    { name: 'phone', grep: /@phone/, use: { viewport: { width: 390, height: 844 }, hasTouch: true } },
+    {
+      name: 'phone',
+      dependencies: ['sign-in'],
+      grep: /@phone/,
+      use: { storageState, viewport: { width: 390, height: 844 }, hasTouch: true },
+    },
   ],
   webServer: {
     command: 'exec node lib/command/evenohm.js serve',

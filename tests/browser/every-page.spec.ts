@@ -29,6 +29,8 @@ const PLACES = {
     '/setup',
     '/setup/plans/new',
     '/setup/streams/new',
+    '/account',
+    '/first-administrator',
   ],
   'the setup of a stream': [
     '/setup/streams/boron-implant-1',

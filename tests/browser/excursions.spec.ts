@@ -54,7 +54,7 @@ test.describe('an excursion', () => {
       await form.getByRole('button', { name: 'Acknowledge' }).click();
       await expect(page.getByText('Acknowledged.', { exact: true })).toBeVisible();
       await expect(log(page)).toContainText('Looking at it');
-      await expect(page.getByText(/acknowledged by local person/)).toBeVisible();
+      await expect(page.getByText(/acknowledged by process owner \(demonstration\)/)).toBeVisible();
       await form.getByRole('button', { name: 'Add the note' }).click();
       await expect(form.getByLabel('Note')).toHaveAttribute('aria-invalid', 'true');
       await form.getByLabel('Note').fill('The map is whole');
@@ -77,7 +77,7 @@ test.describe('an excursion', () => {
       await expect(form.getByLabel('Cause')).toHaveAttribute('aria-invalid', 'true');
       await form.getByLabel('Cause').fill('=Wrong gas bottle');
       await form.getByRole('button', { name: 'Close the excursion' }).click();
-      await expect(page.getByText(/closed by local person/)).toBeVisible();
+      await expect(page.getByText(/closed by process owner \(demonstration\)/)).toBeVisible();
       await expect(log(page)).toContainText('=Wrong gas bottle');
       await expect(page.getByRole('form', { name: 'Close this excursion' })).toHaveCount(0);
 
@@ -106,7 +106,7 @@ test.describe('an excursion', () => {
       expect(rows).toHaveLength(1);
       expect(rows[0]).toMatchObject({
         state: 'closed',
-        closed_by: 'local person',
+        closed_by: 'process owner (demonstration)',
         cause: "'=Wrong gas bottle",
       });
       const entries = await csvFile(request, `/api${address}/log`);

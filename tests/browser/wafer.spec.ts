@@ -70,7 +70,7 @@ test.describe('the page of a wafer', () => {
     await expect(readings).toContainText('Site 4 was taken out; the wafer was measured and judged again.');
     await expect(readings).toContainText('1 reading is kept and shown');
     await expect(readings.getByRole('listitem').first()).toContainText(
-      'local person: Probe slipped <b>twice</b>',
+      'process owner (demonstration): Probe slipped <b>twice</b>',
     );
     await expect(figures).toContainText('8 of 9 sites count');
     expect(await figures.innerText()).not.toBe(whole);
@@ -87,8 +87,12 @@ test.describe('the page of a wafer', () => {
     await expect(figures).toContainText('9 of 9 sites count');
     expect(await figures.innerText()).toBe(whole);
     const log = readings.getByRole('list').getByRole('listitem');
-    await expect(log.first()).toContainText(/Site 4 put back by local person, .*: Read again: it was right/);
-    await expect(log.nth(1)).toContainText(/Site 4 taken out by local person, .*: Probe slipped/);
+    await expect(log.first()).toContainText(
+      /Site 4 put back by process owner \(demonstration\), .*: Read again: it was right/,
+    );
+    await expect(log.nth(1)).toContainText(
+      /Site 4 taken out by process owner \(demonstration\), .*: Probe slipped/,
+    );
   });
 
   test.describe('that is none', () => {
