@@ -16,7 +16,7 @@ export async function checkedFile(
   words: RawMap['words'],
 ): Promise<CheckedFile> {
   try {
-    const check = await checkFile(actor, file, words);
+    const check = await checkFile(actor, file, words, 'show');
     const { measurements, faulty, repeated, problems, problemCount, previews, notices } = check;
     const fresh = Math.max(0, measurements - faulty.size - repeated);
     return {

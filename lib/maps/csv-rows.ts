@@ -6,10 +6,10 @@ const LONGEST_RECORD = 1 << 20;
 /**
  * The text of a CSV file (UTF-8) in pieces that hold whole records: the file is never held whole. Throws
  * `UnreadableFile` for a binary file, text that is not UTF-8 and a record of more than a megabyte; that record is the
- * last piece, so that its reader may find what is wrong with it first.
+ * last piece, so that its reader may find what is wrong with it first. A chunk's memory may be used again for the next.
  */
 export async function* csvPieces(
-  bytes: Iterable<Uint8Array> | AsyncIterable<Uint8Array>,
+  chunks: Iterable<Uint8Array> | AsyncIterable<Uint8Array>,
 ): AsyncGenerator<string> {
   let line = 1;
   let rest: Uint8Array = new Uint8Array(0);
@@ -24,24 +24,26 @@ export async function* csvPieces(
     isFirst = false;
     return hasMark ? text.slice(1) : text;
   };
-  for await (const chunk of bytes) {
+  for await (const chunk of chunks) {
     const zero = chunk.indexOf(0);
     if (zero !== -1)
       throw unreadable(
         'this is a binary file, not text',
         line + lineEnds(rest) + lineEnds(chunk.subarray(0, zero)),
       );
-    rest = rest.length === 0 ? chunk : Buffer.concat([rest, chunk]);
-    const end = lastRecordEnd(rest);
+    const bytes = rest.length === 0 ? chunk : Buffer.concat([rest, chunk]);
+    const end = lastRecordEnd(bytes);
+    // A copy: the chunk's memory may hold the next one by then.
+    rest = Uint8Array.from(bytes.subarray(end));
     if (end === 0 && rest.length > LONGEST_RECORD) {
       yield Buffer.from(rest).toString();
       throw unreadable('a row is longer than a megabyte', line);
     }
     if (end === 0) continue;
-    const piece = rest.subarray(0, end);
+    const piece = bytes.subarray(0, end);
+    const ends = lineEnds(piece);
     yield textOf(piece);
-    line += lineEnds(piece);
-    rest = rest.subarray(end);
+    line += ends;
   }
   const last = textOf(rest);
   if (last !== '') yield last;

@@ -12,6 +12,7 @@ export interface Desk {
 }
 
 const desks = new WeakMap<Pool, Map<string, Desk>>();
+const means = new WeakMap<Pool, Map<string, MeasuringStream>>();
 
 /** Keeps a desk's line short: what a later wafer in order needs, with some room for late ones. */
 const KEPT_POINTS = LINE_DEPTH + 20;
@@ -39,6 +40,13 @@ export function putDeskBack(pool: Pool, desk: Desk): void {
   }
   const stock = desks.get(pool) ?? new Map<string, Desk>();
   desks.set(pool, stock.set(line.streamId, desk));
+  const known = means.get(pool) ?? new Map<string, MeasuringStream>();
+  means.set(pool, known.set(line.streamId, desk.by));
+}
+
+/** How the stream's wafers were measured last, also while its desk is taken; null where nobody has been at it. */
+export function latestMeans(pool: Pool, streamId: string): MeasuringStream | null {
+  return means.get(pool)?.get(streamId) ?? null;
 }
 
 /**

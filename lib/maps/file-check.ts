@@ -29,8 +29,9 @@ export interface FileCheck {
   problemCount: number;
   previews: MapPreview[];
   notices: string[];
-  /** The first measurements, kept so that a file of ordinary size need not be read twice; `keptTo` places are covered. */
+  /** The first measurements, where they are wanted, so that a file of ordinary size need not be read twice. */
   kept: (FileMeasurement | undefined)[];
+  /** So many places are covered by them. */
   keptTo: number;
 }
 
@@ -39,6 +40,9 @@ export const MOST_PREVIEWS = 50;
 
 /** So many readings are kept between checking and recording; beyond them the file is read again. */
 const MOST_KEPT_READINGS = 1_000_000;
+
+/** For so many measurements at a time the database is asked what it has of them. */
+const ASKED_AT_ONCE = 2000;
 
 /** A measurement as a file holds it: its place among the others, the line it begins on, and what checking made of it. */
 export interface FileMeasurement {
@@ -114,13 +118,15 @@ export async function* fileMeasurements(
 }
 
 /**
- * Reads a file from beginning to end and records nothing: what it holds, every problem with its line and column, and
- * pictures of the first maps. Memory does not grow with the file, but for a few bytes a measurement.
+ * Reads a file from beginning to end and records nothing: what it holds and every problem with its line and column; to
+ * `show` it also pictures of the first maps, to `record` it its first measurements. Memory does not grow with the file,
+ * but for a few bytes a measurement.
  */
 export async function checkFile(
   actor: Actor,
   file: FileSource,
   defaults: RawMap['words'],
+  purpose: 'show' | 'record',
 ): Promise<FileCheck> {
   const settings = await settingsBySlug(actor);
   const check: FileCheck = {
@@ -146,10 +152,26 @@ export async function checkFile(
     if (header.unread.length > 0)
       check.notices.push(`columns that are not read: ${header.unread.join(', ')}`);
   };
+  let sound: { place: number; line: number; name: string; measurement: Measurement }[] = [];
+  const askWhatIsThere = async () => {
+    const asked = sound;
+    sound = [];
+    const earlier = await earlierOutcomes(
+      actor,
+      getPool(),
+      asked.map((one) => one.measurement),
+    );
+    asked.forEach(({ place, line, name }, i) => {
+      const outcome = earlier[i];
+      if (outcome?.kind === 'repeated') check.repeated += 1;
+      if (outcome?.kind === 'refused') {
+        refuse(place, [{ file: file.name, line, column: null, measurement: name, reason: outcome.reason }]);
+      }
+    });
+  };
   for await (const some of fileMeasurements(actor, file, settings, defaults, onHeader)) {
     check.measurements += some.length;
-    const sound: { place: number; line: number; name: string; measurement: Measurement }[] = [];
-    if (readings < MOST_KEPT_READINGS) {
+    if (purpose === 'record' && readings < MOST_KEPT_READINGS) {
       check.kept.push(...some);
       check.keptTo = check.measurements;
     }
@@ -172,23 +194,14 @@ export async function checkFile(
         for (const other of earlier.repeats ?? []) check.faulty.add(other);
       } else {
         sound.push({ place, line, name, measurement: found });
+        const own = byId.get(found.streamId);
+        if (own && purpose === 'show' && check.previews.length < MOST_PREVIEWS)
+          check.previews.push(mapPreview(own, found, name));
       }
     }
-    const earlier = await earlierOutcomes(
-      actor,
-      getPool(),
-      sound.map((one) => one.measurement),
-    );
-    sound.forEach(({ place, line, name, measurement }, i) => {
-      const outcome = earlier[i];
-      if (outcome?.kind === 'repeated') check.repeated += 1;
-      if (outcome?.kind === 'refused') {
-        refuse(place, [{ file: file.name, line, column: null, measurement: name, reason: outcome.reason }]);
-      }
-      const own = byId.get(measurement.streamId);
-      if (own && check.previews.length < MOST_PREVIEWS)
-        check.previews.push(mapPreview(own, measurement, name));
-    });
+    if (sound.length >= ASKED_AT_ONCE) await askWhatIsThere();
   }
+  await askWhatIsThere();
+  check.problems.sort((a, b) => (a.line ?? 0) - (b.line ?? 0));
   return check;
 }

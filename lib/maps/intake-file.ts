@@ -1,3 +1,4 @@
+import { setImmediate as nextTurn } from 'node:timers/promises';
 import type { Actor } from '@/lib/access/actor';
 import { audited } from '@/lib/access/audited';
 import { getPool } from '@/lib/database/client';
@@ -13,10 +14,11 @@ import {
   type FileMeasurement,
   type FileSource,
 } from './file-check';
+import { measureAhead } from './measured-ahead';
 import type { RawMap } from './raw-maps';
 import { recordMeasurements } from './record-measurements';
 import { batchTelling, type Batch } from './record-statement';
-import type { IntakeResult, MapProblem, Measurement, Origin } from './types';
+import type { IntakeResult, MapProblem, Origin } from './types';
 
 export interface IntakeOptions {
   origin: Origin;
@@ -33,6 +35,9 @@ export interface IntakeOptions {
 
 /** A transaction takes as many measurements as hold about so many readings. */
 const READINGS_AT_ONCE = 100_000;
+
+/** After so many wafers measured the batch on its way to the database gets its turn. */
+const TURN_AFTER = 32;
 
 /**
  * Takes a wafer-map file: checks it from beginning to end, then, if it is sound or the sound part is wanted, reads it
@@ -62,7 +67,7 @@ export async function intakeFile(
     notices: [],
   };
   try {
-    const check = await checkFile(actor, file, options.defaults);
+    const check = await checkFile(actor, file, options.defaults, 'record');
     result.notices.push(...check.notices);
     result.refusals.push(...check.problems);
     result.refused = check.faulty.size;
@@ -92,6 +97,10 @@ export async function intakeFile(
   return { ...result, batchId: batch.id };
 }
 
+/**
+ * Records what is sound, a batch at a time. While the database writes one batch the next is read and measured; a batch
+ * begins when the one before has ended.
+ */
 async function recordSound(
   actor: Actor,
   file: FileSource,
@@ -100,53 +109,58 @@ async function recordSound(
   options: IntakeOptions,
   result: IntakeResult,
 ): Promise<void> {
-  let waiting: { measurement: Measurement; line: number; name: string }[] = [];
+  let waiting: FileMeasurement[] = [];
   let readings = 0;
-  const record = async () => {
-    const outcomes = await recordMeasurements(
-      actor,
-      batch,
-      waiting.map((one) => one.measurement),
-    );
+  let recording = Promise.resolve();
+  const record = async (some: readonly FileMeasurement[]) => {
+    const measurements = some.flatMap(({ found }) => (Array.isArray(found) ? [] : [found]));
+    const outcomes = await recordMeasurements(actor, batch, measurements);
     outcomes.forEach((outcome, i) => {
-      const { line = null, name = null } = waiting[i] ?? {};
+      const { line = null, name = null } = some[i] ?? {};
       result[outcome.kind] += 1;
       if (outcome.kind !== 'refused') return;
-      result.refusals.push({
-        file: file.name,
-        line,
-        column: null,
-        measurement: name,
-        reason: outcome.reason,
-      });
+      const { reason } = outcome;
+      result.refusals.push({ file: file.name, line, column: null, measurement: name, reason });
     });
-    waiting = [];
-    readings = 0;
     options.onProgress?.(result.recorded + result.repeated);
   };
-  const take = async ({ place, line, name, found }: FileMeasurement) => {
-    if (check.faulty.has(place)) return;
-    if (Array.isArray(found)) {
+  const hand = async () => {
+    await recording;
+    recording = record(waiting);
+    // Whoever waits for it next meets its failure; until then it is nobody's.
+    recording.catch(() => undefined);
+    waiting = [];
+    readings = 0;
+  };
+  const take = async (one: FileMeasurement) => {
+    if (check.faulty.has(one.place)) return;
+    if (Array.isArray(one.found)) {
       result.refused += 1;
-      result.refusals.push(...found);
+      result.refusals.push(...one.found);
       return;
     }
-    waiting.push({ measurement: found, line, name });
-    readings += found.readings.length;
-    if (readings >= READINGS_AT_ONCE) await record();
+    measureAhead(getPool(), one.found);
+    waiting.push(one);
+    readings += one.found.readings.length;
+    if (readings >= READINGS_AT_ONCE) await hand();
+    else if (waiting.length % TURN_AFTER === 0) await nextTurn();
   };
-  for (let i = 0; i < check.kept.length; i += 1) {
-    const one = check.kept[i];
-    check.kept[i] = undefined;
-    if (one !== undefined) await take(one);
-  }
-  if (check.measurements > check.keptTo) {
-    const settings = await settingsBySlug(actor);
-    for await (const some of fileMeasurements(actor, file, settings, options.defaults)) {
-      for (const one of some) if (one.place >= check.keptTo) await take(one);
+  try {
+    for (let i = 0; i < check.kept.length; i += 1) {
+      const one = check.kept[i];
+      check.kept[i] = undefined;
+      if (one !== undefined) await take(one);
     }
+    if (check.measurements > check.keptTo) {
+      const settings = await settingsBySlug(actor);
+      for await (const some of fileMeasurements(actor, file, settings, options.defaults)) {
+        for (const one of some) if (one.place >= check.keptTo) await take(one);
+      }
+    }
+    await hand();
+  } finally {
+    await recording;
   }
-  await record();
 }
 
 function measurementsWord(count: number, kind = ''): string {

@@ -12,7 +12,8 @@ import { isPlain, withIds, writeFindings, type JudgedLine } from '@/lib/excursio
 import { loadDesks, putDeskBack, reachesBackTo, takeDesk, type Desk } from './desk';
 import { earlierOutcomes } from './earlier-outcomes';
 import { againAmong, notCharted } from './measured-again';
-import { measuredWafer, type MeasuredWafer } from './measured-wafer';
+import { measuredAt } from './measured-ahead';
+import type { MeasuredWafer } from './measured-wafer';
 import { batchTelling, recordStatement, type Batch, type Written } from './record-statement';
 import type { Measurement, Outcome } from './types';
 import { runOrLot, subgroupKey, type WaferRow } from './wafer-rows';
@@ -160,7 +161,7 @@ interface Fresh {
 
 function measuredAll(desk: Desk, fresh: readonly Omit<Fresh, 'measured'>[]): Fresh[] {
   return fresh.map(({ measurement, id }) => {
-    const measured = measuredWafer(desk.by, measurement.facts, measurement.readings);
+    const measured = measuredAt(desk.by, measurement);
     return { measurement, id, measured };
   });
 }

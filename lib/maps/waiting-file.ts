@@ -1,5 +1,5 @@
 import { randomBytes } from 'node:crypto';
-import { createReadStream, createWriteStream } from 'node:fs';
+import { createWriteStream } from 'node:fs';
 import { mkdir, readdir, readFile, rename, rm, stat, writeFile } from 'node:fs/promises';
 import path from 'node:path';
 import { Readable, Transform } from 'node:stream';
@@ -7,6 +7,7 @@ import { pipeline } from 'node:stream/promises';
 import type { ReadableStream as NodeStream } from 'node:stream/web';
 import type { Actor } from '@/lib/access/actor';
 import { readEnvironment } from '@/lib/env';
+import { fileBytes } from './file-bytes';
 import type { FileSource } from './file-check';
 
 /** Files larger than this are for the command line, which reads them where they are. */
@@ -102,8 +103,7 @@ async function openFile(token: string, part: 'csv' | 'taken'): Promise<WaitingFi
       stat(filePath),
       readFile(pathOf(token, 'name'), 'utf8'),
     ]);
-    const open = () => createReadStream(filePath, { highWaterMark: 1 << 20 });
-    return { token, name, bytes: size, sentAt: mtime, open };
+    return { token, name, bytes: size, sentAt: mtime, open: () => fileBytes(filePath) };
   } catch (error) {
     if (isMissing(error)) return null;
     throw error;

@@ -1,8 +1,9 @@
-import { createReadStream, mkdtempSync, rmSync, statSync } from 'node:fs';
+import { mkdtempSync, rmSync, statSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import path from 'node:path';
 import { programActor } from '@/lib/access/local-actor';
 import { getPool } from '@/lib/database/client';
+import { fileBytes } from '@/lib/maps/file-bytes';
 import { intakeFile } from '@/lib/maps/intake-file';
 import { benchStreams } from '@/seed/bench-streams';
 import { createDemoStreams } from '@/seed/seed-demo';
@@ -35,7 +36,7 @@ export async function intakeBench(server: ScratchServer): Promise<Figure[]> {
       const start = performance.now();
       const result = await intakeFile(
         actor,
-        { name: 'wafers.csv', open: () => createReadStream(file, { highWaterMark: 1 << 17 }) },
+        { name: 'wafers.csv', open: () => fileBytes(file) },
         { origin: 'command', history: false, sound: false, defaults: {} },
       );
       seconds.push((performance.now() - start) / 1000);

@@ -97,7 +97,7 @@ describe('a sound file', () => {
     const text = freshText(2);
     const twice = text + text.split('\n').slice(1).join('\n');
     for (const chunk of [50, 100_000]) {
-      const check = await checkFile(actor, source(twice, chunk), {});
+      const check = await checkFile(actor, source(twice, chunk), {}, 'record');
       expect([check.measurements, check.faulty.size, check.repeated]).toEqual([4, 0, 2]);
     }
     expect(await take(twice)).toMatchObject({ recorded: 2, repeated: 2, refused: 0 });

@@ -1,6 +1,6 @@
-import { createReadStream } from 'node:fs';
 import { basename } from 'node:path';
 import { commandActor } from '@/lib/access/local-actor';
+import { fileBytes } from '@/lib/maps/file-bytes';
 import { intakeFile } from '@/lib/maps/intake-file';
 import type { SentOptions } from '@/lib/maps/schema';
 import type { IntakeResult } from '@/lib/maps/types';
@@ -15,7 +15,7 @@ export function intakeHere(options: SentOptions, say: (text: string) => void) {
       toldAt = Date.now();
       say(`${basename(path)}: ${count} measurements so far.`);
     };
-    const open = () => createReadStream(path, { highWaterMark: 1 << 17 });
+    const open = () => fileBytes(path);
     return withSmallMemory(() =>
       intakeFile(
         commandActor(),

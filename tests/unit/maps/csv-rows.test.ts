@@ -107,6 +107,19 @@ describe('csvPieces', () => {
     expect(await piecesOf('', 'a', '')).toEqual(['a']);
   });
 
+  it('reads chunks that come in the same memory one after another', async () => {
+    const memory = new Uint8Array(3);
+    const chunks = (function* () {
+      for (const text of ['a,b', '\nc,', 'd\ne']) {
+        memory.set(bytesOf(text));
+        yield memory;
+      }
+    })();
+    let text = '';
+    for await (const piece of csvPieces(chunks)) text += piece;
+    expect(text).toBe('a,b\nc,d\ne');
+  });
+
   it('drops a byte-order mark and joins characters that a chunk cuts in two', async () => {
     const bytes = bytesOf('\uFEFFµΩ\n');
     const single = [...bytes].map((byte) => Uint8Array.of(byte));
