@@ -1,3 +1,4 @@
+import { hasTemperatureCoefficient } from '@/lib/physics/temperature-coefficient';
 import type { StreamSettings } from '@/lib/streams/types';
 import { VALUE_COLUMNS, type ValueColumn } from './map-columns';
 import type { RawMap } from './raw-maps';
@@ -20,6 +21,8 @@ export interface CheckContext {
 
 /** Clocks of gauges and of this machine may differ by so much. */
 const CLOCKS_DIFFER_MS = 10 * 60_000;
+/** A measurement wrong on every row says so so often. */
+const MOST_ROWS_TOLD = 20;
 
 /** What checking made of a measurement; `identity` tells it from the others of a file, whatever its faults. */
 export type Checked = { name: string; identity: string } & (
@@ -100,13 +103,26 @@ export function checkedMeasurement(map: RawMap, context: CheckContext): Checked 
         'corrections_applied',
         'the stream has no target: whether its silicon is n or p, which decides the correction, is not known',
       );
+    } else {
+      for (const row of beyondCorrection(map.values).slice(0, MOST_ROWS_TOLD)) {
+        const reason = `the temperature correction holds from 0.001 to 500 Ω·cm, not at ${map.values[row]}: correct it at the gauge`;
+        problem(map.lines[row] as number, context.valueColumn, reason);
+      }
     }
   }
   const { readings, faults } = inSiteOrder(stream.plan, map);
   if (map.faults.length === 0) {
-    for (const fault of faults.slice(0, 20))
+    for (const fault of faults.slice(0, MOST_ROWS_TOLD))
       problem(map.lines[fault.row] as number, fault.column, fault.reason);
   }
   if (problems.length > 0) return { problems, name, identity };
   return { measurement: { streamId: stream.id, facts, readings }, name, identity };
+}
+
+/** The rows whose reading the temperature correction does not know; what is zero or negative is no resistivity anyway. */
+function beyondCorrection(values: readonly (number | null)[]): number[] {
+  return [...values.keys()].filter((row) => {
+    const value = values[row];
+    return typeof value === 'number' && value > 0 && !hasTemperatureCoefficient(value);
+  });
 }

@@ -11,8 +11,8 @@ export function correctedBy(correctionsApplied: readonly string[]): string {
 
 /**
  * Readings as they count: as sent where the sender had corrected them for temperature, else brought to 23 °C by the
- * coefficient of uniform silicon (ASTM F84). A reading too far out for the coefficient stays null: it is no silicon
- * the method knows.
+ * coefficient of uniform silicon (ASTM F84). A reading beyond the coefficient's range is null: files that
+ * hold one are refused.
  */
 export function valuesAt23C(
   readings: readonly (number | null)[],

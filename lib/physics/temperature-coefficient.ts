@@ -24,12 +24,17 @@ const P_TYPE = [
  * @example temperatureCoefficientPercentPerC('p', 10) // 0.8248
  */
 export function temperatureCoefficientPercentPerC(type: 'n' | 'p', resistivityOhmCm: number): number {
-  if (!(resistivityOhmCm >= 0.001 && resistivityOhmCm <= 500)) {
+  if (!hasTemperatureCoefficient(resistivityOhmCm)) {
     throw new RangeError(
       `The temperature coefficient is published from 0.001 to 500 Ω·cm, not at ${resistivityOhmCm}.`,
     );
   }
   return polynomial(type === 'n' ? N_TYPE : P_TYPE, Math.log(resistivityOhmCm));
+}
+
+/** Whether the coefficient is published at a resistivity: 0.001 to 500 Ω·cm. */
+export function hasTemperatureCoefficient(resistivityOhmCm: number): boolean {
+  return resistivityOhmCm >= 0.001 && resistivityOhmCm <= 500;
 }
 
 /** Whether the published coefficients serve at a wafer temperature: 18 to 28 °C. */

@@ -127,6 +127,22 @@ describe('a measurement checked against its stream', () => {
     );
   });
 
+  it('is refused with the line of each reading that the temperature correction does not reach', () => {
+    const words = { corrections_applied: 'thickness geometry spacing', temperature_c: '25' };
+    const values = rawMap().values.map((value, i) =>
+      i === 2 ? 500.1 : i === 4 ? 0.0009 : i === 5 ? -1 : value,
+    );
+    expect(problems(rawMap(words, { values }))).toEqual(
+      [2, 4].map((row) => ({
+        line: rawMap().lines[row],
+        column: 'resistivity_ohm_cm',
+        reason: `the temperature correction holds from 0.001 to 500 Ω·cm, not at ${values[row]}: correct it at the gauge`,
+      })),
+    );
+    expect(problems(rawMap({}, { values }))).toEqual([]);
+    expect(problems(rawMap(words, { values: values.map(() => 600) }))).toHaveLength(9);
+  });
+
   it('tells every fault at once, and those of rows instead of what follows from them', () => {
     const map = rawMap(
       { measured_at: 'noon', diameter_mm: '150' },
