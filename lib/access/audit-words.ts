@@ -1,4 +1,4 @@
-import { formatCount, formatDateTime, formatNumber } from '@/lib/format';
+import { formatCount, formatDateTime, formatDensity, formatNumber } from '@/lib/format';
 import type { AuditFacts } from './audit-entry';
 import type { ListedEntry } from './audit-trail';
 
@@ -57,8 +57,14 @@ const INSTANT = /^\d{4}-\d\d-\d\dT\d\d:\d\d:\d\d(\.\d+)?(Z|[+-]\d\d:\d\d)$/;
 function valueWords(value: AuditFacts[string], timeZone: string): string {
   if (value === null || value === '') return '—';
   if (typeof value === 'boolean') return value ? 'yes' : 'no';
-  if (typeof value === 'number') return Number.isInteger(value) ? formatCount(value) : formatNumber(value, 5);
+  if (typeof value === 'number') return numberWords(value);
   if (typeof value === 'string')
     return INSTANT.test(value) ? formatDateTime(new Date(value), timeZone) : value;
   return value.length === 0 ? 'none' : value.join(', ');
+}
+
+/** Dopant densities are the only large numbers there are. */
+function numberWords(value: number): string {
+  if (Math.abs(value) >= 1e10) return formatDensity(value);
+  return Number.isInteger(value) ? formatCount(value) : formatNumber(value, 5);
 }

@@ -1,18 +1,16 @@
-import type { ClientBase } from 'pg';
 import type { Actor } from '@/lib/access/actor';
+import { audited } from '@/lib/access/audited';
 import { isFourEyes } from '@/lib/access/four-eyes';
 import { refuse } from '@/lib/access/refusal';
 import { hasRoom } from '@/lib/control/has-room';
 import { limitSet, type LimitSet } from '@/lib/control/limit-set';
-import { columnNames, rowsAsQuery } from '@/lib/database/columnar';
-import { inTransaction } from '@/lib/database/transaction';
-import { LIMIT_COLUMNS } from '@/lib/excursions/judgement-rows';
 import { holdStream, judgeAgain } from '@/lib/excursions/mutations';
 import { newestProcessedAt } from '@/lib/streams/newest-processed-at';
 import type { Screen } from '@/lib/wafer/measure-wafer';
 import { listBaselinePoints } from './data';
+import { draftIn, insertLimits } from './new-limits';
 import { remeasuredBaseline } from './remeasured-baseline';
-import type { LimitOrigin, LimitState } from './types';
+import type { LimitState } from './types';
 
 export type Result = { ok: true } | { ok: false; reason: string };
 
@@ -33,8 +31,8 @@ export async function draftLimits(
   if (!hasRoom(limits))
     return { ok: false, reason: 'All levels of that span are equal: no limits come of it.' };
   const baselineIds = points.map((point) => point.id);
-  await inTransaction((client) =>
-    insertLimits(actor, client, streamId, limits, {
+  await audited(actor, (client, tell) =>
+    draftIn(actor, client, tell, streamId, limits, {
       state: 'draft',
       origin: 'chosen-span',
       baselineIds,
@@ -56,8 +54,8 @@ export async function enterInheritedLimits(
 ): Promise<Result> {
   const refusal = refuse(actor, 'draft-limits', streamId);
   if (refusal) return refusal;
-  await inTransaction((client) =>
-    insertLimits(actor, client, streamId, limits, {
+  await audited(actor, (client, tell) =>
+    draftIn(actor, client, tell, streamId, limits, {
       state: 'draft',
       origin: 'inherited',
       baselineIds: [],
@@ -78,7 +76,7 @@ export async function approveLimits(
   revisionId: string,
   approval: { reason: string; effectiveFrom: Date; at?: Date },
 ): Promise<Result> {
-  return inTransaction(async (client) => {
+  return audited(actor, async (client, tell) => {
     const { rows } = await client.query<{
       stream_id: string;
       state: LimitState;
@@ -119,6 +117,14 @@ export async function approveLimits(
        WHERE stream_id = $1 AND state = 'provisional'`,
       [found.stream_id, effectiveFrom],
     );
+    tell({
+      action: 'approved limits',
+      subject: { kind: 'limit-revision', id: revisionId },
+      streamId: found.stream_id,
+      before: { state: found.state },
+      after: { revision: found.revision, state: 'approved', effectiveFrom: effectiveFrom.toISOString() },
+      why: approval.reason,
+    });
     if (found.state === 'draft' || superseded !== 0) {
       const why = `limit revision ${found.revision} took force`;
       await judgeAgain(actor, client, found.stream_id, effectiveFrom.getTime(), why);
@@ -129,9 +135,9 @@ export async function approveLimits(
 
 /** Sets a draft aside. It stays on record. */
 export async function discardLimits(actor: Actor, revisionId: string): Promise<Result> {
-  return inTransaction(async (client) => {
-    const { rows } = await client.query<{ stream_id: string }>(
-      "SELECT stream_id FROM limit_revision WHERE id = $1 AND state = 'draft' FOR UPDATE",
+  return audited(actor, async (client, tell) => {
+    const { rows } = await client.query<{ stream_id: string; revision: number }>(
+      "SELECT stream_id, revision FROM limit_revision WHERE id = $1 AND state = 'draft' FOR UPDATE",
       [revisionId],
     );
     const [found] = rows;
@@ -139,6 +145,13 @@ export async function discardLimits(actor: Actor, revisionId: string): Promise<R
     const refusal = refuse(actor, 'draft-limits', found.stream_id);
     if (refusal) return refusal;
     await client.query("UPDATE limit_revision SET state = 'discarded' WHERE id = $1", [revisionId]);
+    tell({
+      action: 'set limits aside',
+      subject: { kind: 'limit-revision', id: revisionId },
+      streamId: found.stream_id,
+      before: { state: 'draft' },
+      after: { revision: found.revision, state: 'discarded' },
+    });
     return { ok: true };
   });
 }
@@ -156,7 +169,7 @@ export async function changeScreening(
 ): Promise<Result> {
   const refusal = refuse(actor, 'change-rules', streamId);
   if (refusal) return refusal;
-  return inTransaction(async (client) => {
+  return audited(actor, async (client, tell) => {
     await holdStream(client, streamId);
     const { rows } = await client.query<{ screening: Screen }>('SELECT screening FROM stream WHERE id = $1', [
       streamId,
@@ -177,6 +190,14 @@ export async function changeScreening(
       'INSERT INTO screening_change (stream_id, at, former, screening, author, reason) VALUES ($1, $2, $3, $4, $5, $6)',
       [streamId, at, before, screening, actor.name, reason],
     );
+    tell({
+      action: 'changed the screening',
+      subject: { kind: 'stream', id: streamId },
+      streamId,
+      before: { screening: before },
+      after: { screening, at: at.toISOString() },
+      why: reason,
+    });
     if (points === null || limits === null) return { ok: true };
     await insertLimits(actor, client, streamId, limits, {
       state: 'provisional',
@@ -187,50 +208,4 @@ export async function changeScreening(
     });
     return { ok: true };
   });
-}
-
-async function insertLimits(
-  actor: Actor,
-  client: ClientBase,
-  streamId: string,
-  limits: LimitSet,
-  meta: {
-    state: LimitState;
-    origin: LimitOrigin;
-    baselineIds: string[];
-    at: Date;
-    draftedAt?: Date;
-    reason: string;
-  },
-): Promise<void> {
-  await holdStream(client, streamId);
-  const { rows } = await client.query<{ next: number }>(
-    'SELECT coalesce(max(revision), 0) + 1 AS next FROM limit_revision WHERE stream_id = $1',
-    [streamId],
-  );
-  const line = {
-    id: null,
-    revision: rows[0]?.next ?? 1,
-    effectiveFrom: meta.at.getTime(),
-    supersededFrom: null,
-    baselineIds: meta.baselineIds,
-    limits,
-  };
-  const own = { id: true, state: meta.state, origin: meta.origin, reason: meta.reason };
-  const columns = [
-    ...LIMIT_COLUMNS.filter((column) => column.name !== 'id').map((column) =>
-      column.name in own ? { ...column, value: () => own[column.name as keyof typeof own] } : column,
-    ),
-    { name: 'author_id', type: 'text', value: () => (actor.kind === 'person' ? actor.id : null) } as const,
-  ];
-  const parameters: unknown[] = [];
-  const given = rowsAsQuery(
-    columns,
-    [{ streamId, limits: line, author: actor.name, at: meta.draftedAt ?? new Date() }],
-    parameters,
-  );
-  await client.query(
-    `INSERT INTO limit_revision (${columnNames(columns)}) SELECT given.* FROM ${given} given`,
-    parameters,
-  );
 }

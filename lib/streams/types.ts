@@ -111,3 +111,6 @@ export interface StreamSettings {
 export function unitOf(quantity: Target['quantity']): string {
   return quantity === 'resistivity' ? 'Ω·cm' : 'Ω/□';
 }
+
+/** What comes of a write: what it made, or why it was not done. */
+export type Result<Value = undefined> = { ok: true; value: Value } | { ok: false; reason: string };

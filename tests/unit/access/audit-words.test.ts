@@ -31,6 +31,11 @@ describe('what was before and is after', () => {
       { streams: ['a', 'b'], roles: [], on: true, at: null },
       ['streams: a, b', 'roles: none', 'on: yes', 'at: —'],
     ],
+    [
+      { revision: 2, densityPerCm3: 1.3e15 },
+      { revision: 3, densityPerCm3: 1.34e15 },
+      ['revision: 2 → 3', 'density per cm3: 1.30\u00a0×\u00a010¹⁵ → 1.34\u00a0×\u00a010¹⁵'],
+    ],
     [null, null, []],
   ])('%o and %o are read as %o', (before, after, words) => {
     expect(factWords(before, after, 'Europe/Berlin')).toEqual(words);

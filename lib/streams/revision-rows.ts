@@ -1,0 +1,103 @@
+import type { ClientBase } from 'pg';
+import type { Actor } from '@/lib/access/actor';
+import type { AuditFacts } from '@/lib/access/audit-entry';
+import type { Target } from '@/lib/physics/target';
+import type { Specification } from './types';
+
+/** A revision that was written, and small facts of the one before it. */
+export interface WrittenRevision {
+  id: string;
+  revision: number;
+  before: AuditFacts | null;
+}
+
+interface RevisionMeta {
+  effectiveFrom: Date;
+  reason: string;
+}
+
+/** What the audit trail tells of a target. */
+export function targetFacts(target: Target): AuditFacts {
+  const { dopant, densityPerCm3, tolerancePercent, calibrationFactor } = target;
+  return { dopant, densityPerCm3, tolerancePercent, calibrationFactor };
+}
+
+/** Writes the next revision of a target. */
+export async function insertTarget(
+  actor: Actor,
+  client: ClientBase,
+  streamId: string,
+  target: Target,
+  meta: RevisionMeta & { calibrationWafers?: number | null },
+): Promise<WrittenRevision> {
+  const { rows } = await client.query<WrittenRevision>(
+    `INSERT INTO target_revision (stream_id, revision, effective_from, dopant, density_per_cm3, tolerance_percent,
+       along_crystal, profile, length_um, background_dopant, background_density_per_cm3, calibration_factor,
+       calibration_percent, calibration_wafers, author, reason)
+     VALUES ($1, ${nextRevision('target_revision')}, $2, $3, $4, $5, $6, $7, $8, $9, $10, $11, $12, $13, $14, $15)
+     RETURNING id, revision, ${factsBefore('target_revision', [
+       "'dopant', p.dopant, 'densityPerCm3', p.density_per_cm3",
+       "'tolerancePercent', p.tolerance_percent, 'calibrationFactor', p.calibration_factor",
+     ])}`,
+    [
+      streamId,
+      meta.effectiveFrom,
+      target.dopant,
+      target.densityPerCm3,
+      target.tolerancePercent,
+      target.alongCrystal,
+      target.profile,
+      target.lengthUm,
+      target.backgroundDopant,
+      target.backgroundDensityPerCm3,
+      target.calibrationFactor,
+      target.calibrationPercent,
+      meta.calibrationWafers ?? null,
+      actor.name,
+      meta.reason,
+    ],
+  );
+  return rows[0] as WrittenRevision;
+}
+
+/** Writes the next revision of a specification. */
+export async function insertSpecification(
+  actor: Actor,
+  client: ClientBase,
+  streamId: string,
+  specification: Specification,
+  meta: RevisionMeta,
+): Promise<WrittenRevision> {
+  const { rows } = await client.query<WrittenRevision>(
+    `INSERT INTO specification_revision (stream_id, revision, effective_from, mean_lower, mean_upper, site_lower,
+       site_upper, nonuniformity_metric, nonuniformity_upper, author, reason)
+     VALUES ($1, ${nextRevision('specification_revision')}, $2, $3, $4, $5, $6, $7, $8, $9, $10)
+     RETURNING id, revision, ${factsBefore('specification_revision', [
+       "'meanLower', p.mean_lower, 'meanUpper', p.mean_upper, 'siteLower', p.site_lower, 'siteUpper', p.site_upper",
+       "'nonuniformityMetric', p.nonuniformity_metric, 'nonuniformityUpper', p.nonuniformity_upper",
+     ])}`,
+    [
+      streamId,
+      meta.effectiveFrom,
+      specification.meanLower,
+      specification.meanUpper,
+      specification.siteLower,
+      specification.siteUpper,
+      specification.nonuniformityMetric,
+      specification.nonuniformityUpper,
+      actor.name,
+      meta.reason,
+    ],
+  );
+  return rows[0] as WrittenRevision;
+}
+
+function nextRevision(table: string): string {
+  return `(SELECT coalesce(max(revision), 0) + 1 FROM ${table} WHERE stream_id = $1)`;
+}
+
+/** Within RETURNING a query does not yet see the row that is written: the newest is the one before it. */
+function factsBefore(table: string, facts: readonly string[]): string {
+  return `(SELECT json_build_object('revision', p.revision, ${facts.join(', ')}) FROM ${table} p
+    WHERE p.stream_id = $1 ORDER BY p.revision DESC LIMIT 1) AS before`;
+}
