@@ -3,6 +3,7 @@ import { Beside } from '@/app/_ui/beside';
 import { PageHead } from '@/app/_ui/page-head';
 import { Pager } from '@/app/_ui/pager';
 import { SectionHead } from '@/app/_ui/section-head';
+import { IfMay } from '@/app/if-may';
 import { signedIn } from '@/app/page-actor';
 import { readEnvironment } from '@/lib/env';
 import { formatAge } from '@/lib/format';
@@ -39,7 +40,9 @@ export default async function IntakePage(props: { searchParams: Promise<{ before
             : `${newest.source}, ${formatAge(Date.now() - newest.startedAt.getTime())} ago, by ${newest.actor}.`
         }
       />
-      <UploadForm mostBytes={MOST_FILE_BYTES} />
+      <IfMay permission="record-maps">
+        <UploadForm mostBytes={MOST_FILE_BYTES} />
+      </IfMay>
       <Beside summary="What a wafer-map file holds">
         <FileForm />
       </Beside>

@@ -3,6 +3,7 @@ import { ButtonLink } from '@/app/_ui/button-link';
 import { EmptyState } from '@/app/_ui/empty-state';
 import { PageHead } from '@/app/_ui/page-head';
 import { SectionHead } from '@/app/_ui/section-head';
+import { IfMay } from '@/app/if-may';
 import { signedIn } from '@/app/page-actor';
 import { listLimitsInForce } from '@/lib/limits/data';
 import { listSitePlans, listStreams, listStreamSettings } from '@/lib/streams/data';
@@ -37,14 +38,16 @@ export default async function SetupPage() {
         }
         sub="A stream is one step, tool, chamber, recipe, target and site plan: what one control chart is about."
       />
-      <p style={{ display: 'flex', flexWrap: 'wrap', gap: 12 }}>
-        <ButtonLink href="/setup/streams/new" weight={plans.length > 0 ? 'main' : 'plain'}>
-          Set up a stream
-        </ButtonLink>
-        <ButtonLink href="/setup/plans/new" weight={plans.length > 0 ? 'plain' : 'main'}>
-          Draw up a site plan
-        </ButtonLink>
-      </p>
+      <IfMay permission="create-stream">
+        <p style={{ display: 'flex', flexWrap: 'wrap', gap: 12 }}>
+          <ButtonLink href="/setup/streams/new" weight={plans.length > 0 ? 'main' : 'plain'}>
+            Set up a stream
+          </ButtonLink>
+          <ButtonLink href="/setup/plans/new" weight={plans.length > 0 ? 'plain' : 'main'}>
+            Draw up a site plan
+          </ButtonLink>
+        </p>
+      </IfMay>
       {rows.length === 0 ? (
         <EmptyState
           what="Each stream will stand here with its target, its specification and the limits that judge it."

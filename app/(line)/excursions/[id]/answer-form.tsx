@@ -5,27 +5,25 @@ import { Button } from '@/app/_ui/button';
 import { TextField } from '@/app/_ui/field';
 import type { FormState } from '@/app/_ui/form-state';
 import type { ExcursionState } from '@/lib/excursions/types';
+import type { CaseStep } from './case-steps';
 
 type Action = (state: FormState, form: FormData) => Promise<FormState>;
-type Step = 'acknowledged' | 'under-investigation' | 'noted';
 
-const WORDS: Record<Step, string> = {
+const WORDS: Record<CaseStep, string> = {
   acknowledged: 'Acknowledge',
   'under-investigation': 'Investigate',
   noted: 'Add the note',
 };
 
-/** The steps a state leaves open; the first is the one it waits for. */
-const STEPS: Record<ExcursionState, readonly [Step, ...Step[]]> = {
-  open: ['acknowledged', 'under-investigation', 'noted'],
-  acknowledged: ['under-investigation', 'noted'],
-  'under-investigation': ['noted'],
-  closed: ['noted'],
-};
-
 /** Answers an excursion: says that someone looks after it, or adds what was found. */
-export function AnswerForm({ action, state }: { action: Action; state: ExcursionState }) {
-  const [first, ...others] = STEPS[state];
+export function AnswerForm(props: {
+  action: Action;
+  state: ExcursionState;
+  /** The steps that are open; the first is the one the case waits for. */
+  steps: readonly [CaseStep, ...CaseStep[]];
+}) {
+  const { action, state } = props;
+  const [first, ...others] = props.steps;
   return (
     <ActionForm
       action={action}

@@ -3,18 +3,23 @@ import { Caution } from '@/app/_ui/caution';
 import { Figures } from '@/app/_ui/figures';
 import { SectionHead } from '@/app/_ui/section-head';
 import { StateMark } from '@/app/_ui/state-mark';
+import { IfMay } from '@/app/if-may';
+import { findActor } from '@/lib/access/request-actor';
 import { CHART_WORDS, STATE_WORDS } from '@/lib/excursions/excursion-words';
 import { firstChecks } from '@/lib/excursions/first-checks';
 import type { ExcursionCase } from '@/lib/excursions/types';
 import { formatDateTime } from '@/lib/format';
 import { takeStep } from './actions';
 import { AnswerForm } from './answer-form';
+import { caseSteps } from './case-steps';
 import { CloseForm } from './close-form';
 
 /** Beside the evidence of a case: its state, what to look at first, and the ways to answer it. */
-export function CaseAside({ found, timeZone }: { found: ExcursionCase; timeZone: string }) {
+export async function CaseAside({ found, timeZone }: { found: ExcursionCase; timeZone: string }) {
   const { state } = found;
   const action = takeStep.bind(null, found.id);
+  const streamId = found.stream.id;
+  const [first, ...others] = caseSteps(await findActor(), state, streamId);
   const time = (at: Date | null) => formatDateTime(at, timeZone);
   return (
     <aside id="answer" tabIndex={-1}>
@@ -44,11 +49,15 @@ export function CaseAside({ found, timeZone }: { found: ExcursionCase; timeZone:
         </p>
       )}
       <SectionHead>{state === 'closed' ? 'Add to the log' : 'Answer'}</SectionHead>
-      <AnswerForm action={action} state={state} />
+      <IfMay permission="comment-case" streamId={streamId}>
+        {first !== undefined && <AnswerForm action={action} state={state} steps={[first, ...others]} />}
+      </IfMay>
       {state !== 'closed' && (
         <>
           <Beside summary="Close with its cause">
-            <CloseForm action={action} />
+            <IfMay permission="close-case" streamId={streamId}>
+              <CloseForm action={action} />
+            </IfMay>
           </Beside>
           <SectionHead>Worth looking at first</SectionHead>
           <Caution>

@@ -1,5 +1,6 @@
 import { Beside } from '@/app/_ui/beside';
 import { SectionHead } from '@/app/_ui/section-head';
+import { IfMay } from '@/app/if-may';
 import { formatDateTime } from '@/lib/format';
 import { waferTitle } from '@/lib/maps/wafer-title';
 import { BadReadings } from './bad-readings';
@@ -33,7 +34,9 @@ export function ReadingsPart({ shown, site }: { shown: WaferShown; site: string 
       )}
       <div id="decide">
         <Beside summary="Take a reading out, or put one back" open={site !== ''} key={site}>
-          <DecisionForm waferId={wafer.id} choices={choices} chosen={chosen} />
+          <IfMay permission="exclude-reading" streamId={wafer.streamId}>
+            <DecisionForm waferId={wafer.id} choices={choices} chosen={chosen} />
+          </IfMay>
         </Beside>
       </div>
       <Beside summary={`All ${wafer.readings.length} readings as a table`}>

@@ -1,5 +1,6 @@
 import type { Metadata } from 'next';
 import { SectionHead } from '@/app/_ui/section-head';
+import { IfMay } from '@/app/if-may';
 import { signedIn } from '@/app/page-actor';
 import { readEnvironment } from '@/lib/env';
 import { listLatestWafers } from '@/lib/maps/data';
@@ -49,14 +50,16 @@ export default async function TargetPage(props: {
         />
       )}
       <SectionHead id="new">A new revision</SectionHead>
-      <TargetForm
-        slug={stream.slug}
-        quantity={stream.quantity}
-        wafers={latestWafers}
-        target={target}
-        now={siteTimeField(now, siteTimeZone)}
-        timeZone={siteTimeZone}
-      />
+      <IfMay permission="revise-target" streamId={stream.id}>
+        <TargetForm
+          slug={stream.slug}
+          quantity={stream.quantity}
+          wafers={latestWafers}
+          target={target}
+          now={siteTimeField(now, siteTimeZone)}
+          timeZone={siteTimeZone}
+        />
+      </IfMay>
     </>
   );
 }

@@ -1,6 +1,7 @@
 import type { Metadata } from 'next';
 import { DataTable } from '@/app/_ui/data-table';
 import { SectionHead } from '@/app/_ui/section-head';
+import { IfMay } from '@/app/if-may';
 import { signedIn } from '@/app/page-actor';
 import { readEnvironment } from '@/lib/env';
 import { formatAge, formatDateTime } from '@/lib/format';
@@ -51,7 +52,9 @@ export default async function EventsPage(props: { params: Promise<{ slug: string
         ]}
       />
       <SectionHead id="new">Record one</SectionHead>
-      <EventForm slug={stream.slug} now={siteTimeField(now, siteTimeZone)} timeZone={siteTimeZone} />
+      <IfMay permission="record-event" streamId={stream.id}>
+        <EventForm slug={stream.slug} now={siteTimeField(now, siteTimeZone)} timeZone={siteTimeZone} />
+      </IfMay>
     </>
   );
 }

@@ -1,4 +1,5 @@
 import { BaselineChart } from '@/app/_charts/baseline-chart';
+import { IfMay } from '@/app/if-may';
 import type { Actor } from '@/lib/access/actor';
 import { limitAge } from '@/lib/control/limit-age';
 import { findLatestSpan, listBaselinePoints } from '@/lib/limits/data';
@@ -71,7 +72,9 @@ export async function DraftFromSpan(props: {
         current={current?.limits ?? null}
         text={text}
       />
-      <DraftForm slug={stream.slug} span={typed} />
+      <IfMay permission="draft-limits" streamId={stream.id}>
+        <DraftForm slug={stream.slug} span={typed} />
+      </IfMay>
     </>
   );
 }

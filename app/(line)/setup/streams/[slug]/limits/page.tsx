@@ -1,5 +1,6 @@
 import type { Metadata } from 'next';
 import { SectionHead } from '@/app/_ui/section-head';
+import { IfMay } from '@/app/if-may';
 import { signedIn } from '@/app/page-actor';
 import { readEnvironment } from '@/lib/env';
 import { findFirstLevels, listLimitRevisions } from '@/lib/limits/data';
@@ -39,7 +40,7 @@ export default async function LimitsPage(props: {
         </p>
       )}
       <PendingLimits
-        slug={stream.slug}
+        stream={stream}
         revisions={revisions}
         current={current}
         text={text}
@@ -64,13 +65,15 @@ export default async function LimitsPage(props: {
         timeZone={timeZone}
       />
       <SectionHead id="inherited">Enter limits that were in use before</SectionHead>
-      <InheritedForm
-        slug={stream.slug}
-        unit={text.unit}
-        hasBetween={stream.subgroupSize > 1}
-        now={nowField}
-        timeZone={timeZone}
-      />
+      <IfMay permission="draft-limits" streamId={stream.id}>
+        <InheritedForm
+          slug={stream.slug}
+          unit={text.unit}
+          hasBetween={stream.subgroupSize > 1}
+          now={nowField}
+          timeZone={timeZone}
+        />
+      </IfMay>
     </>
   );
 }

@@ -1,5 +1,7 @@
 import { SectionHead } from '@/app/_ui/section-head';
+import { IfMay } from '@/app/if-may';
 import { ORIGIN_WORDS, type LimitRevision } from '@/lib/limits/types';
+import type { Stream } from '@/lib/streams/types';
 import { ApproveForm } from './approve-form';
 import type { ChartedText } from './charted-text';
 import { LimitFigures } from './limit-figures';
@@ -7,7 +9,7 @@ import { baselineWords } from './limits-answer';
 
 /** The revisions that wait for someone's word: the provisional one that judges already, and the drafts. */
 export function PendingLimits(props: {
-  slug: string;
+  stream: Stream;
   revisions: readonly LimitRevision[];
   current: LimitRevision | null;
   text: ChartedText;
@@ -38,14 +40,16 @@ export function PendingLimits(props: {
           text={props.text}
         />
       )}
-      <ApproveForm
-        slug={props.slug}
-        revisionId={one.id}
-        revision={one.revision}
-        isDraft={one.state === 'draft'}
-        now={props.now}
-        timeZone={props.timeZone}
-      />
+      <IfMay permission="approve-limits" streamId={props.stream.id}>
+        <ApproveForm
+          slug={props.stream.slug}
+          revisionId={one.id}
+          revision={one.revision}
+          isDraft={one.state === 'draft'}
+          now={props.now}
+          timeZone={props.timeZone}
+        />
+      </IfMay>
     </section>
   ));
 }

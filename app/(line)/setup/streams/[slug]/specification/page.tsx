@@ -1,6 +1,7 @@
 import type { Metadata } from 'next';
 import { DataTable } from '@/app/_ui/data-table';
 import { SectionHead } from '@/app/_ui/section-head';
+import { IfMay } from '@/app/if-may';
 import { signedIn } from '@/app/page-actor';
 import { readEnvironment } from '@/lib/env';
 import { siteTimeField } from '@/lib/site-time';
@@ -61,13 +62,15 @@ export default async function SpecificationPage(props: { params: Promise<{ slug:
         ]}
       />
       <SectionHead id="new">A new revision</SectionHead>
-      <SpecificationForm
-        slug={stream.slug}
-        quantity={stream.quantity}
-        specification={current}
-        now={siteTimeField(now, siteTimeZone)}
-        timeZone={siteTimeZone}
-      />
+      <IfMay permission="revise-specification" streamId={stream.id}>
+        <SpecificationForm
+          slug={stream.slug}
+          quantity={stream.quantity}
+          specification={current}
+          now={siteTimeField(now, siteTimeZone)}
+          timeZone={siteTimeZone}
+        />
+      </IfMay>
     </>
   );
 }

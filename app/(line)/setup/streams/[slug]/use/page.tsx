@@ -1,6 +1,7 @@
 import type { Metadata } from 'next';
 import { Figures } from '@/app/_ui/figures';
 import { SectionHead } from '@/app/_ui/section-head';
+import { IfMay } from '@/app/if-may';
 import { signedIn } from '@/app/page-actor';
 import { readEnvironment } from '@/lib/env';
 import { formatNumber } from '@/lib/format';
@@ -61,11 +62,15 @@ export default async function UsePage(props: { params: Promise<{ slug: string }>
       {screenings.length > 0 && (
         <ScreeningTable changes={screenings} timeZone={readEnvironment().siteTimeZone} />
       )}
-      <ScreeningForm slug={stream.slug} screening={stream.screening} />
+      <IfMay permission="change-rules" streamId={stream.id}>
+        <ScreeningForm slug={stream.slug} screening={stream.screening} />
+      </IfMay>
       <SectionHead id="retire">
         {stream.retiredAt === null ? 'Take out of use' : 'Take back into use'}
       </SectionHead>
-      <RetireForm slug={stream.slug} retired={stream.retiredAt !== null} />
+      <IfMay permission="retire-stream" streamId={stream.id}>
+        <RetireForm slug={stream.slug} retired={stream.retiredAt !== null} />
+      </IfMay>
     </>
   );
 }
