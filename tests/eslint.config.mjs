@@ -36,6 +36,10 @@ const law = {
     regex: '^next/(headers|server)$',
     message: 'Only lib/access reads cookies and headers: take an Actor as first argument.',
   },
+  audited: {
+    regex: '^@/lib/database/transaction$',
+    message: 'What a room writes goes into the audit trail with it: use audited of lib/access/audited.',
+  },
   drawing: {
     regex: `^@/(seed|tests|lib/(?!(${pure})/|format$|(${service})/(types|schema)$))`,
     message: 'Drawing takes plain props: pure rooms, types.ts and schema.ts of a room, and lib/format only.',
@@ -129,7 +133,7 @@ export default tseslint.config(
         law.appFromLib,
         law.statistics,
         ...roomsAbove(name),
-        ...(name === 'access' ? [] : [law.request]),
+        ...(name === 'access' ? [] : [law.request, law.audited]),
       ],
       [namedExports],
     ),
