@@ -68,8 +68,8 @@ export async function enterInheritedLimits(
 
 /**
  * Approves a draft or provisional limits. A draft takes force at `effectiveFrom`, provisional ones go on as they were;
- * from then on no other provisional revision judges, and what lies later is judged again. Approved limits are never
- * edited. Where four eyes are asked for, whoever drew limits up does not approve them.
+ * from then on no other provisional revision judges, but one that a later change of the screening began, and what lies
+ * later is judged again. Approved limits are never edited. Where four eyes are asked for, whoever drew limits up does not approve them.
  */
 export async function approveLimits(
   actor: Actor,
@@ -114,7 +114,7 @@ export async function approveLimits(
     );
     const { rowCount: superseded } = await client.query(
       `UPDATE limit_revision SET superseded_from = least(superseded_from, $2)
-       WHERE stream_id = $1 AND state = 'provisional'`,
+       WHERE stream_id = $1 AND state = 'provisional' AND (origin <> 'screening' OR effective_from <= $2)`,
       [found.stream_id, effectiveFrom],
     );
     tell({

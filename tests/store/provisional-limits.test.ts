@@ -83,14 +83,16 @@ describe('a provisional revision', () => {
     expect((await judgedBy(id)).at(-1)).toBe(2);
   });
 
-  it('begun after the approval, by a change of the screening, judges', async () => {
+  it('begun by a change of the screening judges, whatever is approved for the time before', async () => {
     const id = await draftedStream();
     await approveLimits(actor, await revisionId(id, 2), approval(hour(9)));
     await changeScreening(actor, id, 'impossible', 'few sites');
     const later = new Date(Date.now() + 60_000);
-    expect((await findStreamStanding(actor, id, later)).inForce).toMatchObject({
-      revision: 3,
-      state: 'provisional',
-    });
+    const inForce = async () => (await findStreamStanding(actor, id, later)).inForce;
+    expect(await inForce()).toMatchObject({ revision: 3, state: 'provisional' });
+    await draftLimits(actor, id, { from: hour(0), to: hour(19) }, 'for the time before that');
+    await approveLimits(actor, await revisionId(id, 4), approval(hour(19)));
+    expect(await judgedBy(id)).toEqual([...times(10, null), ...times(10, 2), ...times(10, 4)]);
+    expect(await inForce()).toMatchObject({ revision: 3, state: 'provisional' });
   });
 });

@@ -57,7 +57,7 @@ export function ApproveForm(props: {
                   name="effectiveFrom"
                   type="datetime-local"
                   label="In force for subgroups after"
-                  hint={`Clock time in ${props.timeZone}. What lies later is judged again, by no provisional revision any more`}
+                  hint={`Clock time in ${props.timeZone}. What lies later is judged again, up to a later approved revision or change of the screening`}
                   defaultValue={props.now}
                   error={errors['effectiveFrom'] ?? null}
                 />
