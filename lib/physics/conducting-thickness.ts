@@ -1,11 +1,10 @@
 import { depletionWidth } from './depletion-width';
 import { conductionType } from './dopant';
-import { standardDensityLimits } from './standard-density-limits';
 import type { Target } from './target';
 
 /**
  * The thickness, in µm, of a uniform layer that conducts: t − w, the junction under it having depleted w
- * (`depletionWidth`). All of it where nothing is named underneath, or nothing of the conversion's densities.
+ * (`depletionWidth`). All of it where nothing is named underneath.
  *
  * A four-point probe needs that junction. On a substrate of the layer's own type it measures the substrate: RangeError,
  * unless the target declares another method, for which the whole thickness counts. RangeError too where the layer is
@@ -22,7 +21,6 @@ export function conductingThicknessUm(target: Target, densityPerCm3: number, thi
       'Layer and substrate are of one type: without a junction between them a four-point probe measures the substrate. Declare another method, or name a substrate of the other type.',
     );
   }
-  if (background < standardDensityLimits(backgroundDopant).lowerPerCm3) return thicknessUm;
   const depletedUm = depletionWidth(densityPerCm3, background);
   if (!(depletedUm < thicknessUm)) {
     throw new RangeError(

@@ -18,8 +18,12 @@ export function expectedNotes(target: Target, densityPerCm3: number, wafer: Expe
   }
   const drive = targetDriveIn(target, densityPerCm3);
   if (drive !== null && !drive.isClassical) {
+    const what =
+      target.calibrationFactor === null
+        ? 'an order of magnitude only, no band'
+        : 'from physics an order of magnitude only; the calibration carries the value';
     notes.push(
-      'The dopant exceeds the intrinsic density at the drive-in, where the classical diffusivity fails: from physics an order of magnitude only; the calibration carries the value.',
+      `The dopant exceeds the intrinsic density at the drive-in, ${drive.intrinsicPerCm3.toExponential(1)} per cm³, where the classical diffusivity fails: ${what}.`,
     );
   }
   if (target.quantity === 'sheet_resistance' && target.profile === 'uniform') {

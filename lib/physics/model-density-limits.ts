@@ -20,7 +20,7 @@ function grownLimits(target: Target, limits: Limits, background: number, wafer: 
   const isOfOneType =
     target.backgroundDopant !== null &&
     conductionType(target.backgroundDopant) === conductionType(target.dopant);
-  if (thicknessUm === null || isOfOneType || background < limits.lowerPerCm3) return limits;
+  if (thicknessUm === null || isOfOneType) return limits;
   const spare = (ln: number): number => Math.log(thicknessUm / depletionWidth(Math.exp(ln), background));
   const [from, to] = [Math.log(limits.lowerPerCm3), Math.log(limits.upperPerCm3)];
   if (spare(from) > 0) return limits;

@@ -12,7 +12,17 @@ export interface PossibleCause {
   usual: number;
   /** The size over what is usual: the nearer to 1 or below, the less it takes. No probability. */
   timesUsual: number;
+  /** Whether the size lies where the slope can be trusted; beyond, the straight line says no more than "a great deal". */
+  isOnSlope: boolean;
 }
+
+/** How far the slope at the target carries: the coefficient's own 18 to 28 °C, and a fifth of dopant or thickness. */
+const REACH: Readonly<Record<PossibleCause['cause'], number>> = {
+  dopant: 20,
+  'measurement-temperature': 5,
+  thickness: 20,
+  'drive-in-temperature': 20,
+};
 
 /** One standard deviation of what a line sees, common practice, no source; a caller that knows its line gives its own. */
 export const USUAL_SIZES: Readonly<Record<PossibleCause['cause'], number>> = {
@@ -68,6 +78,7 @@ export function possibleCauses(
           uncertainty: differenceUncertaintyPercent / Math.abs(perUnit),
           usual: usualSize,
           timesUsual: Math.abs(size) / usualSize,
+          isOnSlope: Math.abs(size) <= REACH[cause],
         },
       ];
     })

@@ -55,6 +55,30 @@ describe('the standard conversion at 23 °C', () => {
     },
   );
 
+  it.each<Dopant>(['boron', 'phosphorus', 'arsenic', 'antimony'])(
+    'turns round for %s as halving by brute force does, and closes to 1e-9 [calc]',
+    (dopant) => {
+      for (let x = 12.1; x < 18.95; x += 0.37) {
+        const resistivity = standardResistivity(dopant, 10 ** x);
+        let [low, high] = [1e12, 9.9e18];
+        for (let step = 0; step < 200; step++) {
+          const middle = Math.sqrt(low * high);
+          if (standardResistivity(dopant, middle) > resistivity) low = middle;
+          else high = middle;
+        }
+        expect(standardDensity(dopant, resistivity, 'numeric') / low).toBeCloseTo(1, 9);
+        expect(standardDensity(dopant, resistivity, 'numeric') / 10 ** x).toBeCloseTo(1, 9);
+      }
+    },
+  );
+
+  it('says its range, and what to do with lighter silicon', () => {
+    expect(() => standardResistivity('boron', 1e11)).toThrow(/from 1e\+12 to 1e\+21.*both carriers/);
+    expect(() => standardResistivity('phosphorus', 6e20)).toThrow(/to 5e\+20 per cm³, not 6/);
+    expect(() => standardResistivity('antimony', 2e19)).toThrow(/to 1e\+19/);
+    expect(() => standardDensity('boron', 2e4, 'direct')).toThrow(/0.0001 to 10000 Ω·cm/);
+  });
+
   it('keeps the step of 3.8 % between phosphorus and arsenic at 1e19 and their 25 % at 1e20 [calc]', () => {
     const at19 = standardResistivity('phosphorus', 1e19) / standardResistivity('arsenic', 1e19);
     expect((1 - 1 / at19) * 100).toBeCloseTo(3.8, 1);

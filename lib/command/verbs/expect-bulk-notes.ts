@@ -43,9 +43,13 @@ function standardWords(question: BulkQuestion, density: number, uncertaintyPerce
   return notes;
 }
 
-function crystalWords(question: BulkQuestion, melt: readonly MeltDopant[]): string[] {
+function crystalWords(question: BulkQuestion, { melt, place }: Worked): string[] {
   if (question.fraction === null) return [];
   const notes = ['The doping given is the seed end’s; Scheil’s law leads to the fraction asked for.'];
+  if (melt.length > 1) {
+    const [donors, acceptors] = [place.donorsPerCm3, place.acceptorsPerCm3].map((d) => d.toExponential(3));
+    notes.push(`There it holds ${donors} donors and ${acceptors} acceptors per cm³.`);
+  }
   const turn = typeChangeFraction(melt);
   if (turn !== null) notes.push(`The crystal changes from p- to n-type at the fraction ${turn.toFixed(4)}.`);
   return notes;
@@ -53,7 +57,7 @@ function crystalWords(question: BulkQuestion, melt: readonly MeltDopant[]): stri
 
 /** What a person should know about the answer, in whole sentences. */
 export function bulkNotes(question: BulkQuestion, worked: Worked): string[] {
-  const { melt, place, uncertaintyPercent } = worked;
+  const { place, uncertaintyPercent } = worked;
   const { model, dopant, temperatureC } = question;
   const density = dopant === 'boron' ? place.acceptorsPerCm3 : place.donorsPerCm3;
   const notes =
@@ -63,5 +67,5 @@ export function bulkNotes(question: BulkQuestion, worked: Worked): string[] {
       'The Masetti model holds at 300 K (26.85 °C) and is moved by the temperature ratio of the Arora model.',
     );
   }
-  return [...notes, ...crystalWords(question, melt)];
+  return [...notes, ...crystalWords(question, worked)];
 }

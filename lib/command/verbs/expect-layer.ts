@@ -36,11 +36,6 @@ function notesOf(target: Target): string[] {
     notes.push(
       `The drive-in adds ${Math.sqrt(drive.spreadUm2).toPrecision(3)} µm to the straggle in quadrature (textbook diffusivity, from memory).`,
     );
-    if (!drive.isClassical) {
-      notes.push(
-        `Order of magnitude only, no band: the peak exceeds the intrinsic density at the furnace, ${drive.intrinsicPerCm3.toExponential(1)} per cm³.`,
-      );
-    }
   }
   if (target.profile === 'uniform') {
     const conducting = conductingThicknessUm(target, target.densityPerCm3, target.lengthUm ?? 0);

@@ -18,13 +18,16 @@ function layerWords(answer: LayerAnswer): string[] {
   ];
 }
 
-function movedWords({ sensitivities: moved }: ExpectAnswer): string[] {
+function movedWords(answer: ExpectAnswer | LayerAnswer): string[] {
+  const moved = answer.sensitivities;
   if (moved === null) return [];
   const words = [`${signed(moved.perPercentDopant, 3)} % for 1 % more dopant`];
   if (moved.perMeasurementC !== null)
     words.push(`${signed(moved.perMeasurementC, 3)} % for 1 °C of the wafer`);
-  if (moved.perPercentThickness !== null)
-    words.push(`${signed(moved.perPercentThickness, 3)} % for 1 % of thickness`);
+  if (moved.perPercentThickness !== null) {
+    const whose = 'sheetResistanceOhmSq' in answer ? 'thickness' : 'the thickness it is computed by';
+    words.push(`${signed(moved.perPercentThickness, 3)} % for 1 % of ${whose}`);
+  }
   if (moved.perDriveInC !== null) words.push(`${signed(moved.perDriveInC, 3)} % for 1 °C of the drive-in`);
   return [`it moves          ${words.join(', ')}`];
 }
@@ -54,8 +57,8 @@ function causeWords({ causes }: ExpectAnswer): string[] {
   return [
     'each would by itself explain the difference; a reading alone tells none from the other',
     ...causes.map(
-      ({ cause, unit, size, uncertainty, timesUsual }) =>
-        `  ${signed(size, 2)} ± ${uncertainty.toFixed(2)} ${unit} ${CAUSE_WORDS[cause]}, ${timesUsual.toFixed(1)} times what is usual (common practice, no source)`,
+      ({ cause, unit, size, uncertainty, timesUsual, isOnSlope }) =>
+        `  ${signed(size, 2)} ± ${uncertainty.toFixed(2)} ${unit} ${CAUSE_WORDS[cause]}, ${timesUsual.toFixed(1)} times what is usual (common practice, no source)${isOnSlope ? '' : '; farther than the slope carries'}`,
     ),
     'Before any equipment is touched: site procedures, change control, qualified staff.',
   ];

@@ -57,6 +57,25 @@ describe('the mobility models', () => {
     }
   });
 
+  it('of Klaassen is continuous where its minority factor is held at its least', () => {
+    // Electrons among acceptors: P falls with doping and meets the factor's minimum on the way.
+    const at = (density: number): number =>
+      klaassenMobility(
+        'electron',
+        {
+          donor: 'phosphorus',
+          donorsPerCm3: 0,
+          acceptorsPerCm3: density,
+          electronsPerCm3: 1,
+          holesPerCm3: density,
+        },
+        300,
+      );
+    for (let x = 17; x < 20.9; x += 0.002) {
+      expect(Math.abs(Math.log(at(10 ** (x + 0.002)) / at(10 ** x)))).toBeLessThan(0.01);
+    }
+  });
+
   it('let phosphorus stand in for antimony, and say so', () => {
     expect(() => masettiMobility('antimony', 1e17)).toThrow(RangeError);
     const doping = { donor: 'antimony' as const, donorsPerCm3: 1e17, acceptorsPerCm3: 0 };

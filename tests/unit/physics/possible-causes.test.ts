@@ -54,6 +54,12 @@ describe('what would explain a difference', () => {
     );
   });
 
+  it('says where a size lies farther than the slope carries', () => {
+    const far = possibleCauses(0.8, 1, sensitivities(BORON));
+    expect(far.every(({ isOnSlope }) => !isOnSlope)).toBe(true);
+    expect(possibleCauses(0.98, 1, sensitivities(BORON)).every(({ isOnSlope }) => isOnSlope)).toBe(true);
+  });
+
   it('needs nothing of anything where there is no difference', () => {
     for (const { size, timesUsual } of possibleCauses(1, 1, sensitivities(EPI))) {
       expect(Object.is(size, 0)).toBe(true);
