@@ -42,6 +42,7 @@ function makeAccounts(environment: Environment) {
       max: 100,
       customRules: {
         '/sign-in/email': { window: 60, max: 10 },
+        '/sign-in/social': { window: 60, max: 30 },
         '/change-password': { window: 60, max: 10 },
         '/reset-password': { window: 60, max: 10 },
         '/sign-in/demonstration': { window: 60, max: 100 },

@@ -1,5 +1,6 @@
 import { Figures } from '@/app/_ui/figures';
 import { SectionHead } from '@/app/_ui/section-head';
+import { IfMay } from '@/app/if-may';
 import type { Actor } from '@/lib/access/actor';
 import { formatNumber, formatPercent } from '@/lib/format';
 import { calibrationStudy, type CalibrationStudy } from '@/lib/limits/calibration-study';
@@ -60,14 +61,16 @@ export async function Calibration(props: {
               ]}
             />
           </div>
-          <CalibrationForm
-            slug={stream.slug}
-            target={target}
-            wafers={props.latestWafers}
-            found={found}
-            now={siteTimeField(new Date(), timeZone)}
-            timeZone={timeZone}
-          />
+          <IfMay permission="revise-target" streamId={props.stream.id}>
+            <CalibrationForm
+              slug={stream.slug}
+              target={target}
+              wafers={props.latestWafers}
+              found={found}
+              now={siteTimeField(new Date(), timeZone)}
+              timeZone={timeZone}
+            />
+          </IfMay>
         </>
       )}
     </>
