@@ -9,14 +9,11 @@ const timeZone = z.string().refine(isTimeZone, 'is no IANA time zone such as Eur
 const portWords = 'must be a port, a whole number from 0 to 65535';
 const port = z.coerce.number(portWords).int(portWords).min(0, portWords).max(65535, portWords);
 
+const databaseAddress = z.string().regex(/^postgres(ql)?:\/\//, 'must begin with postgresql://');
+
 const variables = z.object({
-  DATABASE_URL: z.preprocess(
-    blankIsAbsent,
-    z
-      .string()
-      .regex(/^postgres(ql)?:\/\//, 'must begin with postgresql://')
-      .optional(),
-  ),
+  DATABASE_URL: z.preprocess(blankIsAbsent, databaseAddress.optional()),
+  EVENOHM_OWNER_URL: z.preprocess(blankIsAbsent, databaseAddress.optional()),
   EVENOHM_DATA: z.preprocess(blankIsAbsent, z.string().default('.evenohm')),
   PORT: z.preprocess(blankIsAbsent, port.default(3000)),
   EVENOHM_HOST: z.preprocess(blankIsAbsent, z.string().default('127.0.0.1')),
@@ -48,6 +45,8 @@ export interface OidcEnvironment {
 export interface Environment {
   /** Address of an existing PostgreSQL 15 or later; null means the embedded server. */
   databaseUrl: string | null;
+  /** The same database as its owner, who migrates it and grants what the program needs; null: DATABASE_URL does both. */
+  ownerUrl: string | null;
   /** The embedded server's folder, absolute. */
   dataFolder: string;
   port: number;
@@ -77,8 +76,14 @@ export function readEnvironment(source: Record<string, string | undefined> = pro
     throw new EnvironmentError(faults.join('; '));
   }
   const found = parsed.data;
+  if (found.EVENOHM_OWNER_URL !== undefined && found.DATABASE_URL === undefined) {
+    throw new EnvironmentError(
+      'EVENOHM_OWNER_URL: DATABASE_URL, by which the program itself signs in, must stand beside it',
+    );
+  }
   return {
     databaseUrl: found.DATABASE_URL ?? null,
+    ownerUrl: found.EVENOHM_OWNER_URL ?? null,
     dataFolder: path.resolve(found.EVENOHM_DATA),
     port: found.PORT,
     host: found.EVENOHM_HOST,

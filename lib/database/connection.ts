@@ -3,6 +3,7 @@ import { readEnvironment } from '@/lib/env';
 import { AppError } from '@/lib/errors';
 import { closeClients, openClients } from './client';
 import { startEmbeddedServer, stopEmbeddedServer } from './embedded-server';
+import { grantProgram } from './grant-program';
 import { applyMigrations } from './migration-runner';
 import { type Presence, enterDatabase } from './presence';
 
@@ -10,6 +11,8 @@ import { type Presence, enterDatabase } from './presence';
 export interface OpenDatabase {
   url: string;
   embedded: boolean;
+  /** Whether the connection to the server was lost and is being opened again. */
+  isAway(): boolean;
   /** Leaves; the last process to leave an embedded server stops it. */
   close(): Promise<void>;
 }
@@ -19,6 +22,10 @@ interface Entered {
   pid: number | null;
   presence: Presence;
 }
+
+/** How long to wait before the database is looked for once more: twice as long each time, up to half a minute. */
+const LEAST_PAUSE_MS = 1000;
+const MOST_PAUSE_MS = 30_000;
 
 /** Another process is the web server of this embedded database already. */
 export class AlreadyServing extends AppError {
@@ -33,6 +40,7 @@ interface OpeningOptions {
   serving?: boolean;
   /** Absent: from the environment. */
   databaseUrl?: string | null;
+  ownerUrl?: string | null;
   dataFolder?: string;
 }
 
@@ -43,30 +51,39 @@ interface OpeningOptions {
 export async function openDatabase(options: OpeningOptions): Promise<OpenDatabase> {
   const environment = readEnvironment();
   const databaseUrl = options.databaseUrl === undefined ? environment.databaseUrl : options.databaseUrl;
+  const ownerUrl = options.ownerUrl === undefined ? environment.ownerUrl : options.ownerUrl;
   const dataFolder = options.dataFolder ?? environment.dataFolder;
   const enter = () =>
     databaseUrl === null ? enterEmbedded(dataFolder, options.say) : enterGiven(databaseUrl);
 
   let entered = await enter();
   let closing = false;
+  let away = false;
   const watch = ({ presence }: Entered) => {
     presence.client.once('end', () => {
       if (closing) return;
+      away = true;
       options.say('The connection to the database was lost; opening it again.');
       void reenter();
     });
   };
   const reenter = async () => {
-    while (!closing) {
+    for (let pauseMs = LEAST_PAUSE_MS; !closing; pauseMs = Math.min(2 * pauseMs, MOST_PAUSE_MS)) {
       try {
+        const before = entered.url;
         entered = await enter();
         if (options.serving === true) await entered.presence.serve();
+        if (entered.url !== before) {
+          await closeClients();
+          openClients(entered.url);
+        }
+        away = false;
         options.say('The database is back.');
         watch(entered);
         return;
       } catch (error) {
         options.say(`The database does not come back: ${error instanceof Error ? error.message : error}`);
-        await sleep(2000);
+        await sleep(pauseMs);
       }
     }
   };
@@ -81,7 +98,8 @@ export async function openDatabase(options: OpeningOptions): Promise<OpenDatabas
   try {
     const alone = options.serving !== true || entered.pid === null || (await entered.presence.serve());
     if (!alone) throw new AlreadyServing();
-    const applied = await applyMigrations(entered.url);
+    const applied = await applyMigrations(ownerUrl ?? entered.url);
+    if (ownerUrl !== null) await grantProgram(ownerUrl, entered.url);
     if (applied.length > 0) options.say(`Database brought to ${applied.at(-1)}.`);
   } catch (error) {
     await leave();
@@ -92,6 +110,7 @@ export async function openDatabase(options: OpeningOptions): Promise<OpenDatabas
   return {
     url: entered.url,
     embedded: databaseUrl === null,
+    isAway: () => away,
     close: leave,
   };
 }

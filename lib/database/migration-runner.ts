@@ -19,7 +19,7 @@ interface RecordedMigration {
 }
 
 /** The advisory lock that Prisma's own command line takes while it migrates: we wait for it, and it for us. */
-const prismaMigrationLock = 72_707_369;
+export const prismaMigrationLock = 72_707_369;
 
 /** The table as Prisma's own command line makes it, so that `prisma migrate status` agrees with us. */
 const migrationTable = `

@@ -7,6 +7,7 @@ describe('readEnvironment', () => {
   it('fills in what is absent or blank', () => {
     const defaults = {
       databaseUrl: null,
+      ownerUrl: null,
       dataFolder: path.resolve('.evenohm'),
       port: 3000,
       host: '127.0.0.1',
@@ -42,6 +43,12 @@ describe('readEnvironment', () => {
     });
     expect(() => readEnvironment({ ...given, EVENOHM_OIDC_CLIENT_SECRET: '' })).toThrow(/go together/);
   });
+  it('needs the program’s own address beside the owner’s', () => {
+    expect(() => readEnvironment({ EVENOHM_OWNER_URL: 'postgresql://owner@localhost/line' })).toThrow(
+      /DATABASE_URL.*must stand beside it/,
+    );
+  });
+
   it('names every variable at fault in one line', () => {
     const read = () =>
       readEnvironment({ PORT: 'x', DATABASE_URL: 'mysql://a', EVENOHM_SITE_TIME_ZONE: 'Mars/Base' });
