@@ -1,5 +1,6 @@
 import { spawn, type ChildProcess } from 'node:child_process';
 import { programActor } from '@/lib/access/local-actor';
+import { findRequestActor } from '@/lib/access/request-actor';
 import { getPool } from '@/lib/database/client';
 import { takeIds } from '@/lib/database/take-ids';
 import { listBoardStreams } from '@/lib/excursions/data';
@@ -9,6 +10,7 @@ import { benchStreams } from '@/seed/bench-streams';
 import { benchWafers } from '@/seed/bench-wafers';
 import { createDemoStreams, demoMeasurement } from '@/seed/seed-demo';
 import { freePort } from '../support/free-port';
+import { sessionOf } from '../support/session-of';
 import { middle, type Figure } from './figure';
 import type { ScratchServer } from './scratch-database';
 
@@ -21,6 +23,8 @@ const END = new Date('2026-05-17T06:00:00Z');
 /** An app on a database of its own, and the pages that are timed on it. */
 interface TimedApp {
   process: ChildProcess;
+  /** The Cookie header of someone who is signed in there. */
+  cookie: string;
   pages: { empty: string; board: string; stream: string };
 }
 
@@ -33,30 +37,34 @@ export async function pageBench(server: ScratchServer): Promise<Figure[]> {
   const spread = await timedApp(server, FEW, STREAMS);
   const together = await timedApp(server, FEW, 5);
   const many = await timedApp(server, MANY, STREAMS);
-  const addresses = {
-    empty: many.pages.empty,
-    board: many.pages.board,
-    stream: many.pages.stream,
-    fewBoard: spread.pages.board,
-    fewStream: together.pages.stream,
-  };
-  const times = new Map<string, number[]>(Object.keys(addresses).map((name) => [name, []]));
+  const timedPages = {
+    empty: [many, 'empty'],
+    board: [many, 'board'],
+    stream: [many, 'stream'],
+    fewBoard: [spread, 'board'],
+    fewStream: [together, 'stream'],
+  } as const;
+  const times = new Map<string, number[]>(Object.keys(timedPages).map((name) => [name, []]));
   const sql: number[] = [];
+  const asking: number[] = [];
+  const request = new Request(many.pages.board, { headers: { cookie: many.cookie } });
   try {
     for (let round = 0; round < ROUNDS; round += 1) {
-      for (const [name, address] of Object.entries(addresses)) {
-        times.get(name)?.push(await timed(() => answered(address)));
+      for (const [name, [app, page]] of Object.entries(timedPages)) {
+        times.get(name)?.push(await timed(() => answered(app.pages[page], app.cookie)));
       }
+      asking.push(await timed(() => findRequestActor(request)));
       sql.push(await timed(() => listBoardStreams(programActor())));
     }
   } finally {
     for (const app of [spread, together, many]) await stopped(app.process);
   }
-  const settled = (name: keyof typeof addresses) => middle((times.get(name) ?? []).slice(10));
+  const settled = (name: keyof typeof timedPages) => middle((times.get(name) ?? []).slice(10));
   const [empty, board, stream] = [settled('empty'), settled('board'), settled('stream')];
   return [
     { name: 'an empty page of the app', value: empty, unit: 'ms' },
     { name: `board, 40 streams, ${MANY} wafers`, value: board, unit: 'ms' },
+    { name: 'knowing who asks, of either', value: middle(asking.slice(10)), unit: 'ms', atMost: 1 },
     { name: 'its rows read from the database alone', value: middle(sql.slice(10)), unit: 'ms' },
     { name: `stream, 200 points, ${MANY} wafers`, value: stream, unit: 'ms' },
     { name: 'board against an empty page', value: board / empty, unit: '×', atMost: 5 },
@@ -87,6 +95,7 @@ async function timedApp(server: ScratchServer, wafers: number, busyStreams: numb
   const from = new Date(END.getTime() - 200 * 3_600_000).toISOString();
   const stream = `${base}/streams/${streams[0]?.slug}?from=${from}&to=${END.toISOString()}`;
   return {
+    cookie: await sessionOf('viewer'),
     process: await startApp(url, port),
     pages: { empty: `${base}/methods`, board: `${base}/`, stream },
   };
@@ -98,8 +107,8 @@ async function timed(work: () => Promise<unknown>): Promise<number> {
   return performance.now() - start;
 }
 
-async function answered(address: string): Promise<void> {
-  const answer = await fetch(address);
+async function answered(address: string, cookie: string): Promise<void> {
+  const answer = await fetch(address, { headers: { cookie }, redirect: 'manual' });
   await answer.text();
   if (!answer.ok) throw new Error(`${address} answered ${answer.status}.`);
 }
