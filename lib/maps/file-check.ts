@@ -9,7 +9,7 @@ import { mapPreview, type MapPreview } from './map-preview';
 import { rawMaps, type RawMap } from './raw-maps';
 import type { MapHeader } from './map-columns';
 import type { MapProblem, Measurement } from './types';
-import { sentContent } from './sent-content';
+import { forgetContent, sentContent } from './sent-content';
 import { unreadable, UnreadableFile } from './unreadable-file';
 
 /** A file that can be read more than once, from its beginning. */
@@ -161,8 +161,9 @@ export async function checkFile(
       getPool(),
       asked.map((one) => one.measurement),
     );
-    asked.forEach(({ place, line, name }, i) => {
+    asked.forEach(({ place, line, name, measurement }, i) => {
       const outcome = earlier[i];
+      if (place >= check.keptTo) forgetContent(measurement);
       if (outcome?.kind === 'repeated') check.repeated += 1;
       if (outcome?.kind === 'refused') {
         refuse(place, [{ file: file.name, line, column: null, measurement: name, reason: outcome.reason }]);

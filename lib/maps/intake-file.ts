@@ -18,6 +18,7 @@ import { measureAhead } from './measured-ahead';
 import type { RawMap } from './raw-maps';
 import { recordMeasurements } from './record-measurements';
 import { batchTelling, type Batch } from './record-statement';
+import { forgetContent } from './sent-content';
 import type { IntakeResult, MapProblem, Origin } from './types';
 
 export interface IntakeOptions {
@@ -115,6 +116,7 @@ async function recordSound(
   const record = async (some: readonly FileMeasurement[]) => {
     const measurements = some.flatMap(({ found }) => (Array.isArray(found) ? [] : [found]));
     const outcomes = await recordMeasurements(actor, batch, measurements);
+    measurements.forEach(forgetContent);
     outcomes.forEach((outcome, i) => {
       const { line = null, name = null } = some[i] ?? {};
       result[outcome.kind] += 1;

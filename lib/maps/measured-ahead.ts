@@ -15,5 +15,6 @@ export function measureAhead(pool: Pool, measurement: Measurement): void {
 /** A wafer as a desk measures it: what was measured ahead counts where nothing has changed since by which it was. */
 export function measuredAt(by: MeasuringStream, measurement: Measurement): MeasuredWafer {
   const earlier = ahead.get(measurement);
+  ahead.delete(measurement);
   return earlier?.by === by ? earlier.measured : measuredWafer(by, measurement.facts, measurement.readings);
 }

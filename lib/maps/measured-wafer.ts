@@ -6,7 +6,8 @@ import { inForce } from '@/lib/streams/in-force';
 import { screeningAt } from '@/lib/streams/screening-at';
 import type { Specification, Stream, StreamSettings, TargetRevision } from '@/lib/streams/types';
 import { measureWafer, type Screen, type WaferMeasure } from '@/lib/wafer/measure-wafer';
-import { planGeometry, type PlanGeometry } from '@/lib/wafer/plan-geometry';
+import type { PlanGeometry } from '@/lib/wafer/plan-geometry';
+import { sharedGeometry } from './shared-geometry';
 import type { MeasurementFacts } from './types';
 import { valuesAt23C } from './values-at-23c';
 
@@ -38,8 +39,7 @@ type Facts = Pick<
 >;
 
 export function measuringStream(settings: StreamSettings): MeasuringStream {
-  const { diameterMm, edgeExclusionMm, sites } = settings.stream.plan;
-  return { settings, geometry: planGeometry(sites, { diameterMm, edgeExclusionMm }), expectedOf: new Map() };
+  return { settings, geometry: sharedGeometry(settings.stream.plan), expectedOf: new Map() };
 }
 
 /**

@@ -1,4 +1,5 @@
 import { hash } from 'node:crypto';
+import { detached } from './detached';
 import { readingsLiteral } from './readings-literal';
 import type { Measurement } from './types';
 
@@ -43,7 +44,15 @@ export function sentContent(measurement: Measurement): SentContent {
   ];
   const readings = readingsLiteral(measurement.readings);
   const text = JSON.stringify([words, more]) + readings;
-  const content = { readings, hash: hash('sha256', text).slice(0, 32) };
+  const content = { readings, hash: detached(hash('sha256', text).slice(0, 32)) };
   known.set(measurement, content);
   return content;
+}
+
+/**
+ * Lets go of what was worked out. The collector clears a `WeakMap` only when it goes through the whole heap: until then
+ * every wafer of a long file would stay.
+ */
+export function forgetContent(measurement: Measurement): void {
+  known.delete(measurement);
 }
