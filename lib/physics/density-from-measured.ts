@@ -1,3 +1,4 @@
+import { isCompensated } from './compensated-target';
 import { missingForExpected } from './missing-for-expected';
 import { modelDensityLimits } from './model-density-limits';
 import { modelValue } from './model-value';
@@ -23,7 +24,8 @@ export function densityFromMeasured(
 ): number | null {
   const reading = measured / (target.calibrationFactor ?? 1);
   if (!(reading > 0 && Number.isFinite(reading))) return null;
-  if (missingForExpected(target, { ...wafer, ingotFraction: 0 }) !== null) return null;
+  const known = isCompensated(target) ? wafer : { ...wafer, ingotFraction: 0 };
+  if (missingForExpected(target, known) !== null) return null;
   const { lowerPerCm3, upperPerCm3 } = modelDensityLimits(target, wafer);
   const excess = (lnDensity: number): number => {
     const density = Math.min(upperPerCm3, Math.max(lowerPerCm3, Math.exp(lnDensity)));

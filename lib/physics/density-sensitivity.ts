@@ -1,4 +1,5 @@
 import { checkedBackground } from './checked-background';
+import { compensatedSensitivity, isCompensated } from './compensated-target';
 import { conductingThicknessUm } from './conducting-thickness';
 import { depletionSensitivity } from './depletion-width';
 import type { Layer } from './layer';
@@ -43,13 +44,15 @@ function grownSensitivity(target: Target, densityPerCm3: number, wafer: Expected
 /**
  * d ln value / d ln density of a target's model at a density: −1 in lightly doped silicon, about −0.5 near
  * 1e18 per cm³; of a layer per percent of dose. Divide a percent change of the reading by it to read a percent change
- * of dopant. Analytic: the slope of the published fits, carried through the layer's integral.
+ * of dopant. Analytic: the slope of the published fits, carried through the layer's integral; of compensated silicon a
+ * difference.
  *
  * Throws RangeError where `modelValue` does.
  *
  * @example densitySensitivity(boronAt1e17, 1e17) // −0.755
  */
 export function densitySensitivity(target: Target, densityPerCm3: number, wafer: ExpectedWafer = {}): number {
+  if (isCompensated(target)) return compensatedSensitivity(target, densityPerCm3, wafer);
   if (target.quantity === 'resistivity') return standardSensitivity(target.dopant, densityPerCm3);
   if (target.profile === 'uniform') return grownSensitivity(target, densityPerCm3, wafer);
   return layerSensitivity(layerOfTarget(target, densityPerCm3, wafer));

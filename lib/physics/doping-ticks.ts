@@ -1,4 +1,6 @@
 import { densityFromMeasured } from './density-from-measured';
+import { isCompensated } from './compensated-target';
+import { densitySensitivity } from './density-sensitivity';
 import { missingForExpected } from './missing-for-expected';
 import { modelDensityLimits } from './model-density-limits';
 import { modelValue } from './model-value';
@@ -25,6 +27,13 @@ export function dopingTicks(target: Target, lower: number, upper: number, count:
     );
   }
   if (missingForExpected(target, { ingotFraction: 0 }) !== null) return [];
+  // The counter dopant's density differs from wafer to wafer, or leads: no one scale of the own dopant falls with the value.
+  if (
+    isCompensated(target) &&
+    (target.alongCrystal || densitySensitivity(target, target.densityPerCm3) > 0)
+  ) {
+    return [];
+  }
   const limits = modelDensityLimits(target);
   const factor = target.calibrationFactor ?? 1;
   const value = (densityPerCm3: number): number => factor * modelValue(target, densityPerCm3);

@@ -1,13 +1,18 @@
+import { COMPENSATED_MODEL, compensatedDoping, isCompensated } from './compensated-target';
 import { conductingThicknessUm } from './conducting-thickness';
+import { densitySensitivity } from './density-sensitivity';
 import { isImplantedOrDiffused } from './is-implanted-or-diffused';
 import { layerExtent } from './layer-extent';
 import { layerOfTarget, targetDriveIn, targetLengthUm } from './layer-of-target';
+import { mobilityNotes } from './mobility-notes';
 import { standardNotes } from './standard-notes';
 import type { ExpectedWafer, Target } from './target';
 
 /** What a person should know about an expected value, in whole sentences; empty where there is nothing to say. */
 export function expectedNotes(target: Target, densityPerCm3: number, wafer: ExpectedWafer = {}): string[] {
-  const notes = standardNotes(target.dopant, densityPerCm3);
+  const notes = isCompensated(target)
+    ? compensatedNotes(target, densityPerCm3, wafer)
+    : standardNotes(target.dopant, densityPerCm3);
   if (isImplantedOrDiffused(target) && target.calibrationFactor === null) {
     notes.push(
       'Every dopant atom counts as active. Implanted and diffused layers miss by 5 to 20 % in practice; set a calibration factor from a baseline.',
@@ -38,6 +43,14 @@ export function expectedNotes(target: Target, densityPerCm3: number, wafer: Expe
     }
   }
   return notes;
+}
+
+function compensatedNotes(target: Target, densityPerCm3: number, wafer: ExpectedWafer): string[] {
+  const perPercent = densitySensitivity(target, densityPerCm3, wafer).toPrecision(3);
+  return [
+    ...mobilityNotes(COMPENSATED_MODEL, compensatedDoping(target, densityPerCm3, wafer)),
+    `The dopants partly cancel: 1 % more ${target.dopant} moves it by ${perPercent} %. What is not known of either density moves it as much.`,
+  ];
 }
 
 function grownNotes(target: Target, densityPerCm3: number, wafer: ExpectedWafer): string[] {

@@ -1,3 +1,4 @@
+import { COMPENSATED_MODEL, isCompensated } from './compensated-target';
 import type { MobilityModel } from './conduction-resistivity';
 import { isImplantedOrDiffused } from './is-implanted-or-diffused';
 import { modelSpreadPercent } from './model-uncertainty';
@@ -61,6 +62,11 @@ function modelParts(target: Target, model: MobilityModel | null): UncertaintyPar
   return [conversion, activation];
 }
 
+/** The model of a target that the standard conversion does not know: compensated silicon. */
+function standIn(target: Target): MobilityModel | null {
+  return isCompensated(target) ? COMPENSATED_MODEL : null;
+}
+
 /**
  * The uncertainty of a target's expected value, part by part (JCGM 100:2008): the conversion's self-consistency as a
  * rectangular bound, or the model's spread where one stands in; for implanted and diffused layers the 20 % by which
@@ -76,7 +82,7 @@ export function expectedBudget(
   wafer: ExpectedWafer = {},
   known: KnownOfMeasurement = {},
 ): UncertaintyBudget {
-  const parts = modelParts(target, known.model ?? null);
+  const parts = modelParts(target, known.model ?? standIn(target));
   if (known.temperature) parts.push(...temperatureParts(target, known.temperature, wafer));
   const thickness = known.thicknessPercent ?? null;
   if (thickness !== null) {
@@ -102,5 +108,5 @@ export function expectedBudget(
  * @example a uniform boron target without calibration // 1.732
  */
 export function expectedUncertaintyPercent(target: Target): number {
-  return combinedBudget(modelParts(target, null)).standardPercent;
+  return combinedBudget(modelParts(target, standIn(target))).standardPercent;
 }

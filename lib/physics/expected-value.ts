@@ -1,3 +1,4 @@
+import { COMPENSATED_MODEL, isCompensated } from './compensated-target';
 import { densitySensitivity } from './density-sensitivity';
 import { expectedNotes } from './expected-notes';
 import { expectedUncertaintyPercent } from './expected-uncertainty';
@@ -15,11 +16,11 @@ export interface Expected {
   fromPhysics: number;
   /** Standard uncertainty (k = 1) of `value`, in percent, common to all wafers of a stream. */
   uncertaintyPercent: number;
-  /** The value at the density plus the tolerance; null without one, or where the conversion ends before it. */
+  /** The lower value within the tolerance, most often at more dopant; null without one, or where the model ends before it. */
   toleranceLower: number | null;
-  /** The value at the density minus the tolerance. */
+  /** The higher value within the tolerance. */
   toleranceUpper: number | null;
-  /** d ln value / d ln density, negative. */
+  /** d ln value / d ln density; negative but for silicon in which the counter dopant leads. */
   sensitivity: number;
   model: string;
   notes: string[];
@@ -65,14 +66,16 @@ export function expectedValue(target: Target, wafer: ExpectedWafer = {}): Expect
     if (shifted < limits.lowerPerCm3 || shifted > limits.upperPerCm3) return null;
     return factor * modelValue(target, shifted, wafer);
   };
+  const sensitivity = densitySensitivity(target, density, wafer);
+  const [atMore, atLess] = [at(1 + (tolerance ?? 0) / 100), at(1 - (tolerance ?? 0) / 100)];
   return {
     value: factor * fromPhysics,
     fromPhysics,
     uncertaintyPercent: expectedUncertaintyPercent(target),
-    toleranceLower: at(1 + (tolerance ?? 0) / 100),
-    toleranceUpper: at(1 - (tolerance ?? 0) / 100),
-    sensitivity: densitySensitivity(target, density, wafer),
-    model: 'standard',
+    toleranceLower: sensitivity < 0 ? atMore : atLess,
+    toleranceUpper: sensitivity < 0 ? atLess : atMore,
+    sensitivity,
+    model: isCompensated(target) ? COMPENSATED_MODEL : 'standard',
     notes: expectedNotes(target, density, wafer),
   };
 }

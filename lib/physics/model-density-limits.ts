@@ -1,3 +1,4 @@
+import { compensatedLimits, isCompensated } from './compensated-target';
 import { depletionWidth } from './depletion-width';
 import { conductionType } from './dopant';
 import { implantPeakShare } from './layer-extent';
@@ -5,6 +6,7 @@ import { layerOfTarget, targetLengthUm } from './layer-of-target';
 import { monotoneRoot } from './monotone-root';
 import { standardDensityLimits } from './standard-density-limits';
 import type { ExpectedWafer, Target } from './target';
+import { targetDensity } from './target-density';
 
 /** A hair beyond a limit, so that the model is defined at it. */
 const HAIR = 1e-6;
@@ -31,9 +33,10 @@ function grownLimits(target: Target, limits: Limits, background: number, wafer: 
 /**
  * The lowest and highest density, per cm³, for which `modelValue` of a target is defined. Over a background the
  * conversion is asked at the sum of both dopings, and the layer must be the heavier of the two, an implant also after
- * its drive-in; a grown layer must not be depleted through.
+ * its drive-in; a grown layer must not be depleted through; compensated silicon must keep its type.
  */
 export function modelDensityLimits(target: Target, wafer: ExpectedWafer = {}): Limits {
+  if (isCompensated(target)) return compensatedLimits(target, targetDensity(target, wafer), wafer);
   const limits = standardDensityLimits(target.dopant);
   const background = target.backgroundDensityPerCm3;
   if (background === null || target.quantity === 'resistivity') return limits;

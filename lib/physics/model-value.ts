@@ -1,3 +1,4 @@
+import { compensatedResistivity, isCompensated } from './compensated-target';
 import { conductingThicknessUm } from './conducting-thickness';
 import { isUniform } from './is-uniform';
 import { layerOfTarget, targetLengthUm } from './layer-of-target';
@@ -8,7 +9,7 @@ import type { ExpectedWafer, Target } from './target';
 /**
  * What the probe should read on a wafer whose (peak) density is `densityPerCm3`, by physics alone: Ω·cm for a
  * resistivity, Ω/□ for a sheet resistance, at 23 °C. The density is the wafer's own: the crystal's law has been
- * applied before. A uniform layer is ρ/(t − w), w what the junction under it depletes.
+ * applied before. Compensated silicon goes by a mobility model at the total doping. A uniform layer is ρ/(t − w), w what the junction under it depletes.
  *
  * Throws RangeError outside the standard conversion, for a missing thickness, for the resistivity of a graded
  * layer, which has no single one, and for an epitaxial layer that no four-point probe can measure.
@@ -16,7 +17,9 @@ import type { ExpectedWafer, Target } from './target';
 export function modelValue(target: Target, densityPerCm3: number, wafer: ExpectedWafer = {}): number {
   if (target.quantity === 'resistivity') {
     if (!isUniform(target)) throw new RangeError(`A ${target.profile} layer has no single resistivity.`);
-    return standardResistivity(target.dopant, densityPerCm3);
+    return isCompensated(target)
+      ? compensatedResistivity(target, densityPerCm3, wafer)
+      : standardResistivity(target.dopant, densityPerCm3);
   }
   if (target.profile !== 'uniform') {
     return sheetResistance(layerOfTarget(target, densityPerCm3, wafer)).sheetResistanceOhmSq;

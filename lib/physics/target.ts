@@ -26,6 +26,9 @@ export interface Target {
   calibrationFactor: number | null;
   /** Standard uncertainty of the calibration factor, in percent. */
   calibrationPercent: number | null;
+  /** A dopant of the other type in the same uniform silicon; both or neither. Along a crystal its density at the seed end. */
+  counterDopant?: Dopant | null;
+  counterDensityPerCm3?: number | null;
   /** Projected range of an implant. */
   rangeUm?: number | null;
   /** The drive-in after an implant; both or neither. */

@@ -1,4 +1,5 @@
 import { coefficientDisagreementPercentPerC } from './coefficient-disagreement';
+import { isCompensated } from './compensated-target';
 import { ionizedFraction } from './ionized-fraction';
 import { isImplantedOrDiffused } from './is-implanted-or-diffused';
 import { isUniform } from './is-uniform';
@@ -16,9 +17,9 @@ export interface MeasuredTemperature {
   uncertaintyC: number;
 }
 
-/** What two sources of the coefficient make of the way to 23 °C; for layers the 0.09 % per °C by which models miss. */
+/** What two sources of the coefficient of uniform silicon make of the way to 23 °C. */
 function coefficientPart(target: Target, densityPerCm3: number, fromReferenceC: number): UncertaintyPart[] {
-  if (!isUniform(target) || isImplantedOrDiffused(target)) return [];
+  if (!isUniform(target) || isImplantedOrDiffused(target) || isCompensated(target)) return [];
   const disagreement = coefficientDisagreementPercentPerC(
     target.dopant,
     standardResistivity(target.dopant, densityPerCm3),

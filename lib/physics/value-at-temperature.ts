@@ -1,3 +1,4 @@
+import { compensatedResistivity, isCompensated } from './compensated-target';
 import { conductionType } from './dopant';
 import { isImplantedOrDiffused } from './is-implanted-or-diffused';
 import { layerCoefficient, layerTemperatureRatio } from './layer-temperature';
@@ -25,6 +26,10 @@ export function targetCoefficientPercentPerC(target: Target, wafer: ExpectedWafe
     return own;
   }
   const density = targetDensity(target, wafer);
+  if (isCompensated(target)) {
+    const at = (celsius: number): number => compensatedResistivity(target, density, wafer, celsius);
+    return (100 * (at(23.5) - at(22.5))) / at(23);
+  }
   if (isImplantedOrDiffused(target))
     return layerCoefficient(layerOfTarget(target, density, wafer)).percentPerC;
   return temperatureCoefficientPercentPerC(
@@ -44,6 +49,10 @@ function towards23C(target: Target, temperatureC: number, wafer: ExpectedWafer):
     );
   }
   const density = targetDensity(target, wafer);
+  if (isCompensated(target)) {
+    const at = (celsius: number): number => compensatedResistivity(target, density, wafer, celsius);
+    return at(23) / at(temperatureC);
+  }
   if (isImplantedOrDiffused(target)) {
     return 1 / layerTemperatureRatio(layerOfTarget(target, density, wafer), temperatureC);
   }
@@ -54,7 +63,8 @@ function towards23C(target: Target, temperatureC: number, wafer: ExpectedWafer):
 /** Uniform silicon near 23 °C has the coefficient of the resistivity measured, not of the one aimed at. */
 function goesByItsOwnSize(target: Target, temperatureC: number): boolean {
   const own = target.temperatureCoefficientPercentPerC ?? null;
-  return target.quantity === 'resistivity' && own === null && isNear23C(temperatureC);
+  const isPlain = target.quantity === 'resistivity' && !isCompensated(target);
+  return isPlain && own === null && isNear23C(temperatureC);
 }
 
 /**

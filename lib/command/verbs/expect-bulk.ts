@@ -1,7 +1,8 @@
 import { carriers, type Carriers } from '@/lib/physics/carriers';
 import { codopedPlace, type MeltDopant } from '@/lib/physics/codoped-crystal';
-import { conductionResistivity, type Doping, type MobilityModel } from '@/lib/physics/conduction-resistivity';
+import type { Doping } from '@/lib/physics/conduction-resistivity';
 import { ionizedCarriers, type IonizedCarriers } from '@/lib/physics/ionized-carriers';
+import { modelResistivity } from '@/lib/physics/model-resistivity';
 import { monotoneRoot } from '@/lib/physics/monotone-root';
 import { resistivityAtTemperature } from '@/lib/physics/resistivity-at-temperature';
 import { standardDensity300K, standardResistivity300K } from '@/lib/physics/standard-conversion-300k';
@@ -36,15 +37,6 @@ function dopants(question: BulkQuestion, densityPerCm3: number): MeltDopant[] {
   const own = { dopant: question.dopant, seedDensityPerCm3: densityPerCm3 };
   if (question.counter === null) return [own];
   return [own, { dopant: question.counter.dopant, seedDensityPerCm3: question.counter.densityPerCm3 }];
-}
-
-function modelResistivity(model: MobilityModel, mixed: Doping, temperatureC: number): number {
-  const temperatureK = temperatureC + 273.15;
-  if (model !== 'masetti' || temperatureK === 300) return conductionResistivity(model, mixed, temperatureK);
-  // The Masetti model holds at 300 K: the Arora model carries it to the temperature asked for.
-  const ratio =
-    conductionResistivity('arora', mixed, temperatureK) / conductionResistivity('arora', mixed, 300);
-  return conductionResistivity('masetti', mixed, 300) * ratio;
 }
 
 /** The conversion at 300 K of a dopant: where phosphorus data serve at 23 °C they serve here, and nowhere else. */
