@@ -8,6 +8,8 @@ const config = {
   serverExternalPackages: ['pg', 'pg-copy-streams', '@prisma/client', '@prisma/adapter-pg'],
   /** `forbidden()` answers 403 with a page of our own. */
   experimental: { authInterrupts: true },
+  /** Browsers ask for it by themselves where no page has named its icon yet, and put a missing one on the console. */
+  rewrites: async () => [{ source: '/favicon.ico', destination: '/icon.svg' }],
   turbopack: { root: import.meta.dirname },
 };
 

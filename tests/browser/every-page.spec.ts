@@ -1,8 +1,8 @@
-import AxeBuilder from '@axe-core/playwright';
-import { expect, type APIRequestContext, type Page } from '@playwright/test';
+import { expect, type APIRequestContext } from '@playwright/test';
 import { csvFile } from './csv-file';
 import { openPage } from './open-page';
 import { waferMapFile } from './own-line';
+import { expectSound } from './sound-page';
 import { test } from './watched-test';
 
 /** The pages of each place; `*` stands for an id that there is. */
@@ -14,6 +14,8 @@ const PLACES = {
     '/streams/phosphorus-furnace-c',
     '/streams/boron-crystal?gauge=Gauge+1',
     '/methods',
+    '/measure-again',
+    '/measure-again?stream=boron-crystal&page=9',
   ],
   'wafers and excursions': [
     '/wafers/*',
@@ -117,32 +119,4 @@ async function halfSoundFile(request: APIRequestContext): Promise<string | undef
   });
   const { href } = (await answer.json()) as { href: string };
   return href.split('/').at(-1);
-}
-
-/**
- * Axe with everything that folds away unfolded: all its rules in the light, and in the dark those of contrast, which
- * alone depend on the theme. And nothing is wider than the window.
- */
-async function expectSound(page: Page, address: string) {
-  await page.locator('main details').evaluateAll((all) => all.forEach((one) => one.setAttribute('open', '')));
-  const overflow = await page.evaluate(
-    () => document.documentElement.scrollWidth - document.documentElement.clientWidth,
-  );
-  expect.soft(overflow, `${address} scrolls sideways`).toBeLessThanOrEqual(0);
-  expect.soft(await seriousViolations(axe(page)), `${address}, light`).toEqual([]);
-  await page.emulateMedia({ colorScheme: 'dark' });
-  const contrast = axe(page).withRules(['color-contrast']);
-  expect.soft(await seriousViolations(contrast), `${address}, dark`).toEqual([]);
-}
-
-/** Legacy mode leaves out frames of other origins, of which there are none, and is several times as fast. */
-function axe(page: Page): AxeBuilder {
-  return new AxeBuilder({ page }).setLegacyMode().options({ resultTypes: ['violations'] });
-}
-
-async function seriousViolations(builder: AxeBuilder): Promise<string[]> {
-  const { violations } = await builder.analyze();
-  return violations
-    .filter(({ impact }) => impact === 'serious' || impact === 'critical')
-    .flatMap(({ id, nodes }) => nodes.map(({ target }) => `${id}: ${target.join(' ')}`));
 }

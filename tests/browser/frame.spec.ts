@@ -27,6 +27,12 @@ test.describe('the frame around every page', () => {
     expect(policies[0]).not.toBe(policies[1]);
   });
 
+  test('has its icon where browsers look for one before a page names it', async ({ request }) => {
+    const [guessed, named] = await Promise.all(['/favicon.ico', '/icon.svg'].map((one) => request.get(one)));
+    expect([guessed?.status(), guessed?.headers()['content-type']]).toEqual([200, 'image/svg+xml']);
+    expect(await guessed?.text()).toBe(await named?.text());
+  });
+
   test('refuses a foreign name and a foreign page that posts', async ({ request }) => {
     const rebound = await request.get('/', { headers: { host: 'rebound.example' } });
     expect(rebound.status()).toBe(421);

@@ -160,7 +160,7 @@ test.describe('setup', () => {
       await expect(beside).toContainText('2, young');
       await expect(beside).toContainText('New liner');
       await expect(page.getByRole('list', { name: 'Key to the charts' })).toContainText(
-        '90 % interval of a young limit',
+        '90 % interval of a limit not yet established',
       );
       const { rows } = await csvFile(request, `/api/streams/${SLUG}/points.csv`);
       expect(rows.map((row) => row['limits_revision'])).toEqual(expect.arrayContaining(['1', '2']));

@@ -33,23 +33,29 @@ export default async function MeasureAgainPage(props: {
       <PageHead
         back={{ href: '/', label: 'Board' }}
         answer={measureAgainAnswer(count, stream === null ? null : (asked[0]?.name ?? stream))}
-        sub="They are recorded and kept, but not judged. A wafer leaves this list when a later measurement of it, under the same run or lot, is judged, or when it is judged itself, as after a reading was put back."
+        sub="Recorded and kept, but not judged. A wafer leaves this list when a later measurement of it, under the same run or lot, is judged, or when it is judged itself, as after a reading was put back."
       />
-      <form action="/measure-again" className={styles.stream}>
-        <SelectField key={stream} name="stream" label="Stream" defaultValue={stream ?? ''}>
-          <option value="">all streams in use</option>
-          {streams.map((one) => (
-            <option key={one.slug} value={one.slug}>
-              {one.name} ({one.count})
-            </option>
-          ))}
-        </SelectField>
-        <Button type="submit">Show</Button>
-      </form>
+      {streams.length > 0 && (
+        <form action="/measure-again" className={styles.stream}>
+          <SelectField key={stream} name="stream" label="Stream" defaultValue={stream ?? ''}>
+            <option value="">all streams in use</option>
+            {streams.map((one) => (
+              <option key={one.slug} value={one.slug}>
+                {one.name} ({one.count})
+              </option>
+            ))}
+          </SelectField>
+          <Button type="submit">Show</Button>
+        </form>
+      )}
       {wafers.length === 0 ? (
         <EmptyState
-          what={count === 0 ? 'No wafer waits to be measured again.' : 'The list ends before this page.'}
-          how="A wafer with too few good sites, or too many bad ones, is recorded, not judged, and listed here."
+          what={
+            count === 0
+              ? 'Wafers that are recorded but cannot be judged will stand here.'
+              : 'The list ends before this page.'
+          }
+          how="That is so of a wafer with too few good sites, or with more bad ones than are taken out by themselves."
         />
       ) : (
         <MeasureAgainTable
