@@ -23,6 +23,18 @@ export class AppError extends Error {
   }
 }
 
+/**
+ * Whether an error says that the database is shutting down, starting up or gone: PostgreSQL documentation, appendix A,
+ * classes 08 and 57; the Prisma error reference, P1001 and P1017; and the words of the socket and of `pg`.
+ */
+export function isDatabaseAway(error: unknown): boolean {
+  const { code, message } = (error ?? {}) as { code?: unknown; message?: unknown };
+  return (
+    /^(57P0|08|ECONN|EPIPE|P1001|P1017)/.test(String(code)) ||
+    /Connection terminated|Can't reach database server|Server has closed the connection/.test(String(message))
+  );
+}
+
 /** RFC 9457 problem details, with `faults` as our extension member. */
 export interface Problem {
   type: 'about:blank';
@@ -49,7 +61,11 @@ const httpMeaning = {
  */
 export function problemOf(thrown: unknown): Problem {
   const error =
-    thrown instanceof AppError ? thrown : new AppError('internal', 'The server could not do this.');
+    thrown instanceof AppError
+      ? thrown
+      : isDatabaseAway(thrown)
+        ? new AppError('unavailable', 'The database does not answer just now: try again in a moment.')
+        : new AppError('internal', 'The server could not do this.');
   return {
     type: 'about:blank',
     ...httpMeaning[error.code],

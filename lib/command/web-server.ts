@@ -3,6 +3,7 @@ import { type IncomingMessage, type Server, type ServerResponse, createServer } 
 import type { AddressInfo } from 'node:net';
 import { AppError } from '@/lib/errors';
 import { ADDRESS_HEADER } from '@/lib/access/requested-address';
+import { answerUnavailable } from './answer-unavailable';
 import { projectRoot } from './project-root';
 import { requestGate } from './request-gate';
 import { securityHeaders } from './security-headers';
@@ -13,6 +14,8 @@ interface WebServerOptions {
   dev: boolean;
   publicUrl: string | null;
   trustedProxy: string | null;
+  /** Whether the database is away: then pages and data are answered 503 until it is back. */
+  isAway(): boolean;
 }
 
 /** A web server that listens. Until `open` is called it answers 503: the address is held while the app is built. */
@@ -25,14 +28,19 @@ export interface WebServer {
 type Handler = (request: IncomingMessage, response: ServerResponse) => Promise<void>;
 
 const graceMs = 5000;
+const STARTING = 'Evenohm is starting.';
+const AWAY = 'The database does not answer just now; Evenohm is opening it again.';
 
 export async function startWebServer(options: WebServerOptions): Promise<WebServer> {
-  let handle: Handler = sayStarting;
+  let handle: Handler = async (request, response) => answerUnavailable(request, response, STARTING);
   const running = new Set<ServerResponse>();
   const server = createServer((request, response) => {
     running.add(response);
     response.once('close', () => running.delete(response));
-    if (prepare(request, response, options)) void handle(request, response);
+    if (!prepare(request, response, options)) return;
+    const isAsset = request.url?.startsWith('/_next/') === true;
+    if (options.isAway() && !isAsset) answerUnavailable(request, response, AWAY);
+    else void handle(request, response);
   });
   /** Half a gigabyte through a slow line takes its time. */
   server.requestTimeout = 3_600_000;
@@ -91,11 +99,6 @@ function forgetForwarding(request: IncomingMessage, trustedProxy: string | null)
   delete request.headers['x-forwarded-proto'];
   delete request.headers.forwarded;
   request.headers['x-forwarded-for'] = peer;
-}
-
-async function sayStarting(_request: IncomingMessage, response: ServerResponse): Promise<void> {
-  response.writeHead(503, { 'content-type': 'text/plain; charset=utf-8', 'retry-after': '2' });
-  response.end('Evenohm is starting.\n');
 }
 
 function listen(server: Server, { host, port }: WebServerOptions): Promise<number> {

@@ -18,6 +18,8 @@ export interface EmbeddedServer {
 /** A server that recovers from a crash replays its log first; a killed one blocks its folder for up to 15 s. */
 const patienceMs = 120_000;
 const pauseMs = 100;
+/** One that falls over at once is not started again sooner than this. */
+const leastBetweenLaunchesMs = 500;
 
 /**
  * Brings up the embedded server of a data folder, or adopts the one that runs there already (another process of
@@ -34,13 +36,15 @@ export async function startEmbeddedServer(
   const began = Date.now();
   let saidAt = began;
   let child: { exited: boolean } | null = null;
+  let launchedAt = 0;
   while (Date.now() - began < patienceMs) {
     const running = findPostmaster(folder.cluster);
     if (running !== null) {
       const url = urlOf(folder, running.port);
       if (await answers(url)) return { url, pid: running.pid };
-    } else if (child === null || child.exited) {
+    } else if (child === null || (child.exited && Date.now() - launchedAt > leastBetweenLaunchesMs)) {
       removeStalePidFile(folder.cluster);
+      launchedAt = Date.now();
       child = await launch(folder, binaries);
     }
     if (Date.now() - saidAt > 1000) {

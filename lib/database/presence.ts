@@ -1,4 +1,5 @@
 import pg from 'pg';
+import { isDatabaseAway } from '@/lib/errors';
 
 /** Advisory locks of ours, in one two-number family so that they meet nobody else's. */
 const family = 69_118;
@@ -40,7 +41,7 @@ export async function enterDatabase(url: string): Promise<Presence | null> {
     }
   } catch (error) {
     await client.end().catch(() => undefined);
-    if (isServerGoing(error)) return null;
+    if (isDatabaseAway(error)) return null;
     throw error;
   }
   return {
@@ -51,11 +52,4 @@ export async function enterDatabase(url: string): Promise<Presence | null> {
       return lock('pg_try_advisory_lock', inUse);
     },
   };
-}
-
-/** Shutting down, starting up, or gone: PostgreSQL documentation, appendix A, class 57, and the socket's words. */
-function isServerGoing(error: unknown): boolean {
-  const code = (error as { code?: string }).code ?? '';
-  const message = error instanceof Error ? error.message : '';
-  return /^57P0|^ECONN/.test(code) || message.includes('Connection terminated');
 }

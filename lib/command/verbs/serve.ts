@@ -53,7 +53,7 @@ async function serveUntilStopped(
     }
     closers.push(() => opening.close());
     stop.throwIfAborted();
-    const web = await startWebServer({ ...environment, dev });
+    const web = await startWebServer({ ...environment, dev, isAway: opening.isAway });
     closers.push(() => web.close());
     if (opening.embedded) {
       writeServingNote(environment.dataFolder, { pid: process.pid, address: web.address });
