@@ -14,6 +14,14 @@ describe('problemOf', () => {
       faults: [{ reason: 'not a number', field: 'x_mm', line: 3, column: 1 }],
     });
   });
+  it('is 503 where the database is shutting down, starting up or gone (PostgreSQL documentation, appendix A)', () => {
+    for (const code of ['57P01', '57P03', '08006', 'ECONNREFUSED']) {
+      expect(problemOf(Object.assign(new Error('inside'), { code })).status).toBe(503);
+    }
+    expect(problemOf(new Error('Connection terminated unexpectedly')).status).toBe(503);
+    expect(problemOf(Object.assign(new Error('inside'), { code: '23505' })).status).toBe(500);
+    expect(problemOf(null).status).toBe(500);
+  });
   it('tells nothing of the inside for what was not thrown on purpose', () => {
     const problem = problemOf(new Error('select secret from somewhere'));
     expect(problem.status).toBe(500);
