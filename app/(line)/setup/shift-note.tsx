@@ -20,9 +20,11 @@ export function ShiftNote(props: {
     <>
       <p aria-live="polite">
         The charts show measured against expected.{' '}
-        {shift === null
-          ? 'By how much they move cannot be told: no wafer is charted yet of which both targets expect something.'
-          : `Wafers made as the latest were ${shiftWords(shift)} from then on.`}{' '}
+        {after === null
+          ? 'By how much they move stands here as soon as the target is whole.'
+          : shift === null
+            ? 'By how much they move cannot be told: no wafer is charted yet of which both targets expect something.'
+            : `Wafers made as the latest were ${shiftWords(shift)} from then on.`}{' '}
         {toolFollows
           ? 'A tool that is set to the new target makes up for it, and nothing moves; one that is not stands off by as much.'
           : 'No wafer changes by it.'}{' '}
