@@ -38,7 +38,8 @@ export function calibrationStudy(
   kind: StreamKind,
   wafers: readonly CalibrationWafer[],
 ): CalibrationStudy {
-  const physics: Target = { ...target, calibrationFactor: null, calibrationPercent: null };
+  // A factor of one is physics alone, also where physics without a factor is an order of magnitude only.
+  const physics: Target = { ...target, calibrationFactor: 1, calibrationPercent: 0 };
   const ofSubgroup = new Map<string, number[]>();
   const left = { lacking: 0, beyond: 0 };
   for (const { subgroupId, measured, ingotFraction, thicknessUm } of wafers) {

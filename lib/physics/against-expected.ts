@@ -1,6 +1,6 @@
 import { densityFromMeasured } from './density-from-measured';
-import { expectedValue, type Expected } from './expected-value';
-import { missingForExpected } from './missing-for-expected';
+import { expectedOrNull } from './expected-or-null';
+import type { Expected } from './expected-value';
 import type { ExpectedWafer, Target } from './target';
 import { targetDensity } from './target-density';
 
@@ -36,7 +36,6 @@ export function againstExpected(
   if (!(measured > 0 && Number.isFinite(measured))) {
     throw new RangeError(`A measured value is positive, not ${measured}.`);
   }
-  if (missingForExpected(target, wafer) !== null) return null;
   const expected = expectedOrNull(target, wafer);
   if (expected === null) return null;
   const ratio = measured / expected.value;
@@ -53,13 +52,4 @@ export function againstExpected(
       ((densityPerCm3 ?? targetDensityPerCm3) / targetDensityPerCm3) *
       (expected.uncertaintyPercent / Math.abs(expected.sensitivity)),
   };
-}
-
-function expectedOrNull(target: Target, wafer: ExpectedWafer): Expected | null {
-  try {
-    return expectedValue(target, wafer);
-  } catch (error) {
-    if (error instanceof RangeError) return null;
-    throw error;
-  }
 }

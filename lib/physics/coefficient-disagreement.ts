@@ -1,8 +1,7 @@
-import type { Dopant } from './dopant';
-import { conductionType } from './dopant';
+import { conductionType, type Dopant } from './dopant';
 import { standardResistivity300K } from './standard-conversion-300k';
 import { standardDensity } from './standard-density';
-import { temperatureCoefficientPercentPerC } from './temperature-coefficient';
+import { hasTemperatureCoefficient, temperatureCoefficientPercentPerC } from './temperature-coefficient';
 
 /**
  * By how much, in percent per °C, two sources of one laboratory differ in the temperature coefficient of a resistivity:
@@ -16,7 +15,7 @@ import { temperatureCoefficientPercentPerC } from './temperature-coefficient';
  */
 export function coefficientDisagreementPercentPerC(dopant: Dopant, resistivityOhmCm: number): number | null {
   const fit = dopant === 'boron' ? 'boron' : 'phosphorus';
-  if (!(resistivityOhmCm >= 0.001 && resistivityOhmCm <= 500)) return null;
+  if (!hasTemperatureCoefficient(resistivityOhmCm)) return null;
   const density = standardDensity(fit, resistivityOhmCm, 'numeric');
   const implied = (100 * (standardResistivity300K(fit, density) / resistivityOhmCm - 1)) / 3.85;
   return temperatureCoefficientPercentPerC(conductionType(dopant), resistivityOhmCm) - implied;

@@ -1,8 +1,8 @@
 import { COMPENSATED_MODEL, isCompensated } from './compensated-target';
 import type { MobilityModel } from './conduction-resistivity';
 import { isImplantedOrDiffused } from './is-implanted-or-diffused';
-import { modelSpreadPercent } from './model-uncertainty';
-import { standardBoundPercent } from './standard-uncertainty';
+import { modelSpreadPercent } from './model-spread';
+import { standardBoundPercent } from './standard-bound';
 import type { ExpectedWafer, Target } from './target';
 import { temperatureParts, type MeasuredTemperature } from './temperature-parts';
 import {

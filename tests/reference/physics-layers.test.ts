@@ -51,6 +51,18 @@ describe('resistivity along a crystal of 1e15 at its seed', () => {
   });
 });
 
+describe('the segregation coefficients', () => {
+  // Values in general use [1].
+  it.each<[Dopant, number]>([
+    ['boron', 0.8],
+    ['phosphorus', 0.35],
+    ['arsenic', 0.3],
+    ['antimony', 0.023],
+  ])('of %s is %s: the crystal holds at half its length 2^(1 − k) of its seed end', (dopant, k) => {
+    expect(scheilDensity(dopant, 1e15, 0.5) / 1e15).toBeCloseTo(2 ** (1 - k), 12);
+  });
+});
+
 describe('the depletion edge of a junction without bias', () => {
   it('takes 1.04 µm of a layer of 1e15 on 1e19, a tenth of 10 µm [calc]', () => {
     expect(depletionWidth(1e15, 1e19)).toBeCloseTo(1.04, 2);

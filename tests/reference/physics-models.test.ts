@@ -2,10 +2,11 @@ import { describe, expect, it } from 'vitest';
 import { aroraMobility } from '@/lib/physics/arora-mobility';
 import { conductionResistivity, type MobilityModel } from '@/lib/physics/conduction-resistivity';
 import { intrinsicDensity } from '@/lib/physics/intrinsic-density';
+import { ionizationTerms } from '@/lib/physics/ionization-terms';
 import { ionizedFraction } from '@/lib/physics/ionized-fraction';
 import { klaassenMobility } from '@/lib/physics/klaassen-mobility';
 import { masettiMobility } from '@/lib/physics/masetti-mobility';
-import { modelUncertaintyPercent } from '@/lib/physics/model-uncertainty';
+import { modelSpreadPercent } from '@/lib/physics/model-spread';
 import { standardResistivity300K } from '@/lib/physics/standard-conversion-300k';
 import { standardResistivity } from '@/lib/physics/standard-resistivity';
 
@@ -86,8 +87,7 @@ describe('the mobility models at 300 K against the standard over 1e13 to 1e20', 
       const [lowest, highest] = extremes(model, dopant, standardResistivity300K);
       expect(Math.abs(lowest - low)).toBeLessThan(0.06);
       expect(Math.abs(highest - high)).toBeLessThan(0.06);
-      const spread = modelUncertaintyPercent(model, dopant) * Math.sqrt(3);
-      expect(spread).toBeCloseTo(Math.max(-lowest, highest), 1);
+      expect(modelSpreadPercent(model, dopant)).toBeCloseTo(Math.max(-lowest, highest), 1);
     },
   );
 
@@ -116,6 +116,20 @@ describe('the share of ionized dopants at 300 K', () => {
   ])('is for %s at %s per cm³ %s', (dopant, density, share) => {
     // One unit of the last digit: boron at 1e18 comes to 0.7635.
     expect(Math.abs((ionizedFraction(dopant, density, 300) ?? 0) - share)).toBeLessThan(1e-3);
+  });
+
+  // Green, J. Appl. Phys. 67, 2944 (1990) [1].
+  it('rests on the band densities 2.86e19 and 3.10e19 at 300 K, with powers 1.58 and 1.85 of the temperature', () => {
+    const k = 8.617333262e-5;
+    const band = (dopant: 'boron' | 'phosphorus', kelvin: number): number => {
+      const [degeneracy, ev] = dopant === 'boron' ? [1 / 4, 0.04439] : [1 / 2, 0.0455];
+      const terms = ionizationTerms(dopant, 1e10, kelvin);
+      return (terms?.levelPerCm3 ?? 0) / degeneracy / Math.exp(-ev / (k * kelvin));
+    };
+    expect(band('phosphorus', 300) / 2.86e19).toBeCloseTo(1, 6);
+    expect(band('boron', 300) / 3.1e19).toBeCloseTo(1, 6);
+    expect(Math.log2(band('phosphorus', 400) / band('phosphorus', 200))).toBeCloseTo(1.58, 6);
+    expect(Math.log2(band('boron', 400) / band('boron', 200))).toBeCloseTo(1.85, 6);
   });
 
   it('is one in lightly doped silicon, and unknown for antimony', () => {

@@ -2,6 +2,7 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { calibrationStudy } from '@/lib/limits/calibration-study';
 import { expectedValue } from '@/lib/physics/expected-value';
+import { modelValue } from '@/lib/physics/model-value';
 import type { Target } from '@/lib/physics/target';
 
 const target: Target = {
@@ -47,6 +48,21 @@ describe('a calibration', () => {
     expect(calibrationFactor(before, 'implant', wafers)).toEqual(
       calibrationFactor(target, 'implant', wafers),
     );
+  });
+
+  it('is found also of an implant whose drive-in physics knows to an order of magnitude only', () => {
+    const driven: Target = {
+      ...target,
+      profile: 'implant',
+      rangeUm: 0.1,
+      lengthUm: 0.04,
+      driveInC: 1000,
+      driveInMin: 30,
+    };
+    expect(() => expectedValue(driven)).toThrow(/order of magnitude/);
+    const alone = modelValue(driven, driven.densityPerCm3);
+    const measured = [1.4, 1.5].map((ratio, i) => ({ ...wafer(String(i), 1), measured: ratio * alone }));
+    expect(calibrationFactor(driven, 'implant', measured)?.factor).toBeCloseTo(1.45, 12);
   });
 
   it('is none with fewer than two subgroups, or where physics expects nothing', () => {

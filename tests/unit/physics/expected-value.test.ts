@@ -9,7 +9,6 @@ import { standardDensity } from '@/lib/physics/standard-density';
 import { standardResistivity } from '@/lib/physics/standard-resistivity';
 import type { Target } from '@/lib/physics/target';
 import { targetDensity } from '@/lib/physics/target-density';
-import { variesByWafer } from '@/lib/physics/varies-by-wafer';
 
 const boron: Target = {
   quantity: 'resistivity',
@@ -136,15 +135,6 @@ describe('the expected value', () => {
     expect(() =>
       expectedValue({ ...diffused, backgroundDopant: null, backgroundDensityPerCm3: null }),
     ).toThrow(/background/);
-  });
-});
-
-describe('whether wafers of one target differ in what is expected of them', () => {
-  it('is so along a crystal and for layers that bring their thickness, and not else', () => {
-    expect(variesByWafer(boron)).toBe(false);
-    expect(variesByWafer(diffused)).toBe(false);
-    expect(variesByWafer({ ...boron, alongCrystal: true })).toBe(true);
-    expect(variesByWafer({ ...boron, quantity: 'sheet_resistance' })).toBe(true);
   });
 });
 
