@@ -31,7 +31,9 @@ export function isDatabaseAway(error: unknown): boolean {
   const { code, message } = (error ?? {}) as { code?: unknown; message?: unknown };
   return (
     /^(57P0|08|ECONN|EPIPE|P1001|P1017)/.test(String(code)) ||
-    /Connection terminated|Can't reach database server|Server has closed the connection/.test(String(message))
+    /Connection terminated|is not queryable|Can't reach database server|Server has closed the connection/.test(
+      String(message),
+    )
   );
 }
 

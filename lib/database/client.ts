@@ -25,8 +25,9 @@ export function openClients(url: string): void {
     },
     types: { getTypeParser: typeParser as typeof pg.types.getTypeParser },
   });
-  /** A connection lost while idle is replaced at the next query. */
+  /** A connection lost while idle is replaced at the next query; of one lost in use its query tells. */
   pool.on('error', () => undefined);
+  pool.on('connect', (client) => client.on('error', () => undefined));
   holder.evenohmDatabase = { url, pool, prisma: null };
 }
 

@@ -7,15 +7,17 @@ import { getPool } from './client';
  */
 export async function inTransaction<Result>(work: (client: PoolClient) => Promise<Result>): Promise<Result> {
   const client = await getPool().connect();
+  let isBroken = false;
   try {
     await client.query('BEGIN');
     const result = await work(client);
     await client.query('COMMIT');
     return result;
   } catch (error) {
-    await client.query('ROLLBACK');
+    /** Where even that fails, the server has rolled back by itself and the connection is of no more use. */
+    await client.query('ROLLBACK').catch(() => (isBroken = true));
     throw error;
   } finally {
-    client.release();
+    client.release(isBroken);
   }
 }

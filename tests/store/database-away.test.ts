@@ -5,6 +5,7 @@ import { afterAll, beforeAll, describe, expect, it, vi } from 'vitest';
 import { problemOf } from '@/lib/errors';
 import { getPool, getPrisma } from '@/lib/database/client';
 import { openDatabase, type OpenDatabase } from '@/lib/database/connection';
+import { inTransaction } from '@/lib/database/transaction';
 import { findPostmaster } from '@/lib/database/postmaster';
 import { stopEmbeddedServer } from '@/lib/database/embedded-server';
 
@@ -59,15 +60,22 @@ describe('an embedded server that dies under a process', () => {
         );
         expect(rows[0]?.n).toBeGreaterThan(20);
       }, patience);
-      await end(pid);
+      const open = inTransaction(async (client) => {
+        await client.query('INSERT INTO kept VALUES ($1)', [-from]);
+        await end(pid);
+        await vi.waitFor(() => expect(database.isAway()).toBe(true), patience);
+        await client.query('INSERT INTO kept VALUES ($1)', [-from - 1]);
+      });
+      await expect(open.catch((error: unknown) => problemOf(error).status)).resolves.toBe(503);
       const { confirmed, status } = await writing;
       expect(status).toBe(503);
       await vi.waitFor(() => expect([0, pid]).not.toContain(postmaster()), patience);
       await back();
-      const { rows } = await getPool().query<{ n: number }>('SELECT n FROM kept WHERE n >= $1', [from]);
+      const { rows } = await getPool().query<{ n: number }>('SELECT n FROM kept');
       const kept = new Set(rows.map(({ n }) => n));
       expect(confirmed.length).toBeGreaterThan(20);
       expect(confirmed.filter((n) => !kept.has(n))).toEqual([]);
+      expect([kept.has(-from), kept.has(-from - 1)]).toEqual([false, false]);
       await write(from - 1);
       expect(await getPrisma().$queryRaw`SELECT 1 AS one`).toEqual([{ one: 1 }]);
       expect(said.at(-1)).toBe('The database is back.');
