@@ -1,6 +1,7 @@
 import type { Actor } from '@/lib/access/actor';
 import { checkFile, SpoiltFile, type FileCheck, type FileSource } from './file-check';
 import type { RawMap } from './raw-maps';
+import { withSmallMemory } from './small-memory';
 
 export interface CheckedFile extends Omit<FileCheck, 'kept' | 'keptTo'> {
   /** The file as a whole cannot be taken; `problems` say why. */
@@ -16,7 +17,7 @@ export async function checkedFile(
   words: RawMap['words'],
 ): Promise<CheckedFile> {
   try {
-    const check = await checkFile(actor, file, words, 'show');
+    const check = await withSmallMemory(() => checkFile(actor, file, words, 'show'));
     const { measurements, faulty, repeated, problems, problemCount, previews, notices } = check;
     const fresh = Math.max(0, measurements - faulty.size - repeated);
     return {

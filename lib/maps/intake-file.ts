@@ -19,6 +19,7 @@ import type { RawMap } from './raw-maps';
 import { recordMeasurements } from './record-measurements';
 import { batchTelling, type Batch } from './record-statement';
 import { forgetContent } from './sent-content';
+import { withSmallMemory } from './small-memory';
 import type { IntakeResult, MapProblem, Origin } from './types';
 
 export interface IntakeOptions {
@@ -45,11 +46,11 @@ const TURN_AFTER = 32;
  * again and records it batch by batch. Every measurement is recorded whole or not at all, and a file that is taken
  * twice records nothing twice.
  */
-export async function intakeFile(
-  actor: Actor,
-  file: FileSource,
-  options: IntakeOptions,
-): Promise<IntakeResult> {
+export function intakeFile(actor: Actor, file: FileSource, options: IntakeOptions): Promise<IntakeResult> {
+  return withSmallMemory(() => taken(actor, file, options));
+}
+
+async function taken(actor: Actor, file: FileSource, options: IntakeOptions): Promise<IntakeResult> {
   const [id = ''] = options.checkOnly ? ['0'] : await takeIds(getPool(), 'intake_batch', 1);
   const batch: Batch = {
     id,

@@ -4,7 +4,6 @@ import { fileBytes } from '@/lib/maps/file-bytes';
 import { intakeFile } from '@/lib/maps/intake-file';
 import type { SentOptions } from '@/lib/maps/schema';
 import type { IntakeResult } from '@/lib/maps/types';
-import { withSmallMemory } from '../small-memory';
 
 /** Records files in the database that is open, and says every second how far it is. */
 export function intakeHere(options: SentOptions, say: (text: string) => void) {
@@ -16,12 +15,10 @@ export function intakeHere(options: SentOptions, say: (text: string) => void) {
       say(`${basename(path)}: ${count} measurements so far.`);
     };
     const open = () => fileBytes(path);
-    return withSmallMemory(() =>
-      intakeFile(
-        commandActor(),
-        { name: basename(path), open },
-        { origin: 'command', ...options, onProgress },
-      ),
+    return intakeFile(
+      commandActor(),
+      { name: basename(path), open },
+      { origin: 'command', ...options, onProgress },
     );
   };
 }

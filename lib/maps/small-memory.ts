@@ -5,13 +5,14 @@ const LARGE = 230e6;
 const GROWTH = 40e6;
 
 /**
- * Keeps a long run's memory small while `work` goes on: beyond some 230 MB resident, what earlier batches left behind is
- * collected before the heap grows for it. Node alone would let it grow, as the machine has memory to spare.
+ * Keeps memory small while a file is read, however long it is: beyond some 230 MB resident, what earlier pieces of it
+ * left behind is collected before the heap grows for it by more than 40 MB. Node alone would let it grow, as the machine
+ * has memory to spare.
  */
 export async function withSmallMemory<Result>(work: () => Promise<Result>): Promise<Result> {
   setFlagsFromString('--expose-gc');
   const collect = runInNewContext('gc') as () => void;
-  let floor = 0;
+  let floor = process.memoryUsage().heapUsed;
   const watch = setInterval(() => {
     const { rss, heapUsed } = process.memoryUsage();
     if (rss < LARGE || heapUsed < floor + GROWTH) return;
