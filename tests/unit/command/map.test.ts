@@ -42,6 +42,7 @@ describe('map', () => {
       bad: [],
       features: [],
     });
+    // 100·√(0.1/4)/10, computed by the definition.
     expect(json()['relativeStandardDeviationPercent']).toBeCloseTo(1.58114, 5);
     expect((await run(five, '--json', '--diameter-mm', '100')).json()['areaMean']).toBeCloseTo(10, 1);
   });

@@ -55,6 +55,7 @@ describe('evenohm study', () => {
       charts: { signals: { point: number; rule: string }[]; upper: number }[];
     };
     expect(charts[0]?.signals).toMatchObject([{ point: 6, rule: 'six-in-a-trend' }]);
+    // Mean moving range 1. D4 of two, 3.267 (ASTM MNL7); by probability 3.760, computed from the range's law.
     expect(charts[1]?.upper).toBeCloseTo(3.267, 3);
     const live = await run(ramp, '--value', 'y', '--limits', 'probability', '--json');
     expect((JSON.parse(live.printed) as { charts: { upper: number }[] }).charts[1]?.upper).toBeCloseTo(

@@ -44,7 +44,7 @@ describe('a subgroup that still waits for wafers', () => {
 
   it('counts a wafer that is not judged as there, but not for the spread between wafers', () => {
     const line = emptyLine({ ...setting, ...runs });
-    // Two wafers 2.2 apart: s = 1.556, inside the limit of three wafers (2) and beyond no limit of two either.
+    // Two wafers 2.2 apart: s = 2.2/√2 = 1.556, inside the limit of three wafers (2) and beyond no limit of two either.
     add(line, run('a', [0, 2.2, null], 0));
     expect(line.points[0]).toMatchObject({ state: 'judged', level: 1.1 });
     expect(line.points[0]?.between).toBeCloseTo(1.5556, 4);

@@ -22,6 +22,7 @@ describe('a crystal from a melt of two dopants', () => {
       }),
       { seed: 4 },
     );
+    // By the same formula: 1 − 0.5^(1/0.45).
     expect(typeChangeFraction(melt(1e16, 5e15))).toBeCloseTo(0.7857, 4);
   });
 

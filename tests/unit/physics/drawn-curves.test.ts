@@ -19,6 +19,7 @@ describe('the curve of resistivity against doping', () => {
   it('leaves arsenic’s step of 3.8 % at 1e19 standing, between two pieces', () => {
     const [light = [], heavy = []] = conversionCurve('arsenic', 23, 10);
     const step = (light.at(-1)?.resistivityOhmCm ?? 0) / (heavy[0]?.resistivityOhmCm ?? 1);
+    // Computed from the two published fits (ASTM F723), which do not meet.
     expect((1 - 1 / step) * 100).toBeCloseTo(3.8, 1);
     expect(conversionCurve('antimony', 23, 5)).toHaveLength(1);
   });
@@ -38,6 +39,7 @@ describe('a layer as it is drawn', () => {
     expect(drawn.points[0]).toEqual({ depthUm: 0, densityPerCm3: 1e19 });
     expect(drawn.points.at(-1)?.depthUm).toBeCloseTo(1.3 * drawn.junctionUm, 12);
     expect(drawn.points.at(-1)?.densityPerCm3).toBeLessThan(drawn.backgroundPerCm3 ?? 0);
+    // By the formula of a Gaussian: 0.5·√(ln 1e4) µm.
     expect(drawn.junctionUm).toBeCloseTo(1.517, 3);
   });
 

@@ -22,7 +22,7 @@ describe('summaries of a sample', () => {
     expect(() => quantile([1, 2], 1.1)).toThrow(RangeError);
   });
 
-  it('give the examples of their docstrings', () => {
+  it('give the examples of their docstrings (computed by their definitions)', () => {
     expect(mean([1, 2, 6])).toBe(3);
     expect(sampleStandardDeviation([1, 2, 3])).toBe(1);
     expect(median([5, 1, 9])).toBe(5);
