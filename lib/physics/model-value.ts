@@ -1,5 +1,5 @@
 import { compensatedResistivity, isCompensated } from './compensated-target';
-import { conductingThicknessUm } from './conducting-thickness';
+import { conductingThicknessUm, refuseWithoutJunction } from './conducting-thickness';
 import { isUniform } from './is-uniform';
 import { layerOfTarget, targetLengthUm } from './layer-of-target';
 import { sheetResistance } from './sheet-resistance';
@@ -17,6 +17,7 @@ import type { ExpectedWafer, Target } from './target';
 export function modelValue(target: Target, densityPerCm3: number, wafer: ExpectedWafer = {}): number {
   if (target.quantity === 'resistivity') {
     if (!isUniform(target)) throw new RangeError(`A ${target.profile} layer has no single resistivity.`);
+    refuseWithoutJunction(target);
     return isCompensated(target)
       ? compensatedResistivity(target, densityPerCm3, wafer)
       : standardResistivity(target.dopant, densityPerCm3);

@@ -107,6 +107,11 @@ describe('the expected value', () => {
   it('refuses a layer on a substrate of its own type unless another method is declared', () => {
     const onOwnType = { ...epi, backgroundDopant: 'boron' as const };
     expect(() => expectedValue(onOwnType)).toThrow(/measures the substrate/);
+    const asResistivity: Target = { ...onOwnType, quantity: 'resistivity' };
+    expect(() => expectedValue(asResistivity)).toThrow(/measures the substrate/);
+    expect(expectedValue({ ...asResistivity, method: 'other' }).value).toBe(
+      standardResistivity('boron', 1e15),
+    );
     const other = expectedValue({ ...onOwnType, method: 'other' });
     expect(other.value).toBeCloseTo(standardResistivity('boron', 1e15) / 1e-3, 8);
     expect(other.notes.join(' ')).toMatch(/another method/);

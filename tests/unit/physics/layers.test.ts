@@ -38,6 +38,30 @@ describe('the sheet resistance of a layer', () => {
     expect(sheetResistance(layer).sheetResistanceOhmSq / byTrapezoid(layer)).toBeCloseTo(1, 7);
   });
 
+  /** Smooth layers by Simpson's rule over 20 000 strips between their ends. */
+  function bySimpson(layer: Layer): number {
+    const background = layer.backgroundDensityPerCm3 ?? 0;
+    const { topUm, junctionUm } = layerExtent(layer);
+    const [strips, width] = [20_000, junctionUm - topUm];
+    let sum = 0;
+    for (let i = 0; i <= strips; i++) {
+      const density = layerDensity(layer, topUm + (width * i) / strips);
+      const total = density + background;
+      const weight = i === 0 || i === strips ? 1 : i % 2 === 1 ? 4 : 2;
+      sum += ((density - background) / total / standardResistivity(layer.dopant, total)) * weight;
+    }
+    return 1 / ((sum * width) / strips / 3 / 1e4);
+  }
+
+  it.each(layers.filter(([name]) => name !== 'pairs'))('is integrated for a %s to 1e-8', (_, layer) => {
+    expect(Math.abs(sheetResistance(layer).sheetResistanceOhmSq / bySimpson(layer) - 1)).toBeLessThan(1e-8);
+  });
+
+  it('steps over arsenic’s own step at 1e19 on its way down', () => {
+    const arsenic = layerOfTarget({ ...ERFC, dopant: 'arsenic' }, 1e20);
+    expect(sheetResistance(arsenic).sheetResistanceOhmSq / byTrapezoid(arsenic)).toBeCloseTo(1, 5);
+  });
+
   it('is that of a gaussian where it is given as depths and densities, to the straight lines between them', () => {
     const smooth = sheetResistance(layerOfTarget(GAUSSIAN, 1e19));
     const drawn = sheetResistance(layerOfTarget(PAIRS, 1e19));
