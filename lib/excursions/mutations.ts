@@ -6,9 +6,9 @@ import type { Permission } from '@/lib/access/permission';
 import { refuse } from '@/lib/access/refusal';
 import { getPool } from '@/lib/database/client';
 import { loadLines } from './data';
-import { judgedLine } from './judged-line';
+import { judgedLine, LineTooShort } from './judged-line';
 import type { Line, LinePoint } from './line';
-import { pointLiterals, pointsStatement, withIds, writeFindings } from './write-judgement';
+import { type JudgedLine, pointLiterals, pointsStatement, withIds, writeFindings } from './write-judgement';
 
 /**
  * Holds a stream until the transaction ends, so that nothing else is judged meanwhile, and moves its version on: what
@@ -20,7 +20,7 @@ export async function holdStream(client: ClientBase, streamId: string): Promise<
 
 /**
  * Judges a held stream again from an instant (milliseconds) on, after something that decides the judgement has
- * changed. `amend` may change points of the loaded line first and returns those it touched.
+ * changed. `amend` may change points anywhere in the stream first and returns those it touched.
  */
 export async function judgeAgain(
   actor: Actor,
@@ -28,17 +28,23 @@ export async function judgeAgain(
   streamId: string,
   from: number,
   why: string,
-  amend: (line: Line) => LinePoint[] = () => [],
+  amend: ((line: Line) => LinePoint[]) | null = null,
 ): Promise<void> {
-  const [line] = await loadLines(actor, client, [{ streamId, from: -Infinity }]);
-  if (line === undefined) return;
-  const touched = new Set(amend(line));
-  const start = line.points.findIndex((point) => point.at >= from || touched.has(point));
-  if (start === -1) return;
-  const change = judgedLine(line, touched, start, why);
-  const judged = [{ line, change }];
+  const judgedSince = async (since: number): Promise<JudgedLine[]> => {
+    const [line] = await loadLines(actor, client, [{ streamId, from: since }]);
+    if (line === undefined) return [];
+    const touched = new Set(amend?.(line));
+    const start = line.points.findIndex((point) => point.at >= from || touched.has(point));
+    return start === -1 ? [] : [{ line, change: judgedLine(line, touched, start, why) }];
+  };
+  const judged = await judgedSince(amend === null ? from : -Infinity).catch((error: unknown) => {
+    if (error instanceof LineTooShort) return judgedSince(-Infinity);
+    throw error;
+  });
   await withIds(getPool(), judged, client);
-  if (change.points.length > 0) await client.query(pointsStatement(1), pointLiterals(judged));
+  if (judged.some(({ change }) => change.points.length > 0)) {
+    await client.query(pointsStatement(1), pointLiterals(judged));
+  }
   await writeFindings(client, judged, actor.name, new Date());
 }
 

@@ -183,6 +183,21 @@ describe('a restart', () => {
     await record([wafer(streamId, 20, 10.09)]);
     expect((await judgementOf(streamId)).signals).toMatchObject([{ completions: 2 }]);
   });
+
+  it('recorded long after ends as one that was there before the wafers', async () => {
+    const event = { kind: 'adjustment', at: hour(149.5), restart: true, text: 'new tube' } as const;
+    const levels = (i: number) => (i >= 143 && i < 156 ? 10.08 : quietLevel(i));
+    const ends = [];
+    for (const isFirst of [true, false]) {
+      const streamId = await settledStream();
+      if (isFirst) await recordStreamEvent(actor, streamId, event);
+      await record(Array.from({ length: 160 }, (_, i) => wafer(streamId, i, levels(i))));
+      if (!isFirst) await recordStreamEvent(actor, streamId, event);
+      ends.push(await judgementOf(streamId));
+    }
+    expect(ends[1]).toEqual(ends[0]);
+    expect(ends[0]?.points[150]?.moving_range).toBeNull();
+  });
 });
 
 describe('an excursion', () => {
