@@ -2,7 +2,7 @@ import { expect, test } from '@playwright/test';
 
 test.describe('the frame around every page', () => {
   for (const address of ['/', '/no-such-page']) {
-    test(`runs on ${address} only scripts that carry the nonce of the response`, async ({ page }) => {
+    test(`sends with ${address} only scripts that carry the nonce of the response`, async ({ page }) => {
       const refused: string[] = [];
       page.on('console', (message) => {
         if (message.text().includes('Content Security Policy')) refused.push(message.text());
@@ -11,11 +11,10 @@ test.describe('the frame around every page', () => {
       const policy = response?.headers()['content-security-policy'] ?? '';
       const nonce = /'nonce-([^']+)'/.exec(policy)?.[1] ?? '';
       expect(nonce.length).toBeGreaterThan(20);
-      const nonces = await page
-        .locator('script')
-        .evaluateAll((scripts) => scripts.map((script) => script.nonce));
-      expect(nonces.length).toBeGreaterThan(0);
-      expect(new Set(nonces)).toEqual(new Set([nonce]));
+      // What these load later comes without one: 'strict-dynamic' trusts it because it trusts them.
+      const scripts = ((await response?.text()) ?? '').match(/<script[^>]*>/g) ?? [];
+      expect(scripts.length).toBeGreaterThan(0);
+      expect(scripts.filter((script) => !script.includes(`nonce="${nonce}"`))).toEqual([]);
       expect(refused).toEqual([]);
     });
   }
