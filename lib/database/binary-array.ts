@@ -33,7 +33,7 @@ export function binaryArray(type: string, values: readonly unknown[]): Buffer | 
   const element = ELEMENT_TYPES[type];
   if (element === undefined) return null;
   const { oid, bytes, put } = element;
-  const buffer = Buffer.alloc(HEADER_BYTES + values.length * (4 + bytes));
+  const buffer = Buffer.allocUnsafe(HEADER_BYTES + values.length * (4 + bytes));
   const view = new DataView(buffer.buffer, buffer.byteOffset, buffer.length);
   let end = HEADER_BYTES;
   let nulls = 0;
