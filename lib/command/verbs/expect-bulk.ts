@@ -9,12 +9,12 @@ import { standardDensity300K, standardResistivity300K } from '@/lib/physics/stan
 import { standardDensity } from '@/lib/physics/standard-density';
 import { standardDensityLimits } from '@/lib/physics/standard-density-limits';
 import { standardResistivity } from '@/lib/physics/standard-resistivity';
-import type { Target } from '@/lib/physics/target';
 import { isNear23C, resistivityAt23C } from '@/lib/physics/temperature-coefficient';
 import { conductionType } from '@/lib/physics/dopant';
 import { bulkNotes } from './expect-bulk-notes';
 import type { BulkQuestion } from './expect-bulk-question';
 import { budgetIn, extras, type Extras } from './expect-extras';
+import { plainTarget } from './expect-plain-target';
 import type { Circumstances } from './expect-question';
 
 /** The answer of `expect`, as `--json` prints it. */
@@ -101,22 +101,6 @@ function densityOf(question: BulkQuestion, resistivityOhmCm: number): number {
   return rootDensity(question, resistivityOhmCm, from, 1e21);
 }
 
-function uniformTarget(dopant: BulkQuestion['dopant'], densityPerCm3: number): Target {
-  return {
-    quantity: 'resistivity',
-    dopant,
-    densityPerCm3,
-    tolerancePercent: null,
-    alongCrystal: false,
-    profile: 'uniform',
-    lengthUm: null,
-    backgroundDopant: null,
-    backgroundDensityPerCm3: null,
-    calibrationFactor: null,
-    calibrationPercent: null,
-  };
-}
-
 /**
  * Answers `expect` for silicon of one doping, maybe compensated, at a temperature, maybe along a crystal, where each
  * dopant follows its own segregation.
@@ -131,7 +115,7 @@ export function expectBulk(question: BulkQuestion, circumstances: Circumstances)
   const densityPerCm3 = question.dopant === 'boron' ? place.acceptorsPerCm3 : place.donorsPerCm3;
   const asGiven = fraction === null ? question.resistivityOhmCm : null;
   const resistivityOhmCm = asGiven ?? resistivityOf(question, place);
-  const target = uniformTarget(question.dopant, densityPerCm3);
+  const target = plainTarget('resistivity', question.dopant, densityPerCm3);
   const budget = budgetIn(
     target,
     question.conversion === '300k' ? { ...circumstances, temperatureC: 23 } : circumstances,

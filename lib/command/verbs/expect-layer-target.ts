@@ -8,6 +8,7 @@ import { standardDensity } from '@/lib/physics/standard-density';
 import type { Target } from '@/lib/physics/target';
 import { given } from './expect-bulk-question';
 import { number, pair, refuse, word, type Flags } from './expect-flags';
+import { plainTarget } from './expect-plain-target';
 
 const OF_BULK = [
   'density',
@@ -33,17 +34,9 @@ const OF_PROFILE: Readonly<Record<Exclude<Target['profile'], 'uniform'>, readonl
 
 function plain(dopant: Dopant, densityPerCm3: number, under: ReturnType<typeof pair>): Target {
   return {
-    quantity: 'sheet_resistance',
-    dopant,
-    densityPerCm3,
-    tolerancePercent: null,
-    alongCrystal: false,
-    profile: 'uniform',
-    lengthUm: null,
+    ...plainTarget('sheet_resistance', dopant, densityPerCm3),
     backgroundDopant: under?.dopant ?? null,
     backgroundDensityPerCm3: under?.densityPerCm3 ?? null,
-    calibrationFactor: null,
-    calibrationPercent: null,
   };
 }
 
