@@ -4,7 +4,7 @@
  *
  * Additive, as charts want it: a step of the tool's dose by 1 % is a step of 1 on every product, whatever its doping;
  * for small steps it is `dopantPercent`. `ratio` is measured over expected, `sensitivity` d ln value/d ln density.
- * Throws RangeError unless the ratio is positive and the sensitivity is neither zero nor infinite.
+ * Throws RangeError unless the ratio is positive and the sensitivity is neither zero, nor next to it, nor infinite.
  *
  * @example dopantScalePercent(0.98, -0.5) // 4.04
  */
@@ -16,5 +16,7 @@ export function dopantScalePercent(ratio: number, sensitivity: number): number {
     throw new RangeError(`A sensitivity is a number other than zero, not ${sensitivity}.`);
   }
   const percent = (100 * Math.log(ratio)) / sensitivity;
+  if (!Number.isFinite(percent))
+    throw new RangeError(`A sensitivity of ${sensitivity} tells nothing of the dopant.`);
   return percent === 0 ? 0 : percent;
 }

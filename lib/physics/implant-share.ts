@@ -2,6 +2,8 @@ import type { ImplantShape } from './layer';
 import { normalShare } from './normal-share';
 
 const ROOT_TWO_PI = Math.sqrt(2 * Math.PI);
+/** A spread below this share of the straggle's square moves nothing that a number could hold. */
+const NO_SPREAD = 1e-12;
 
 /** An implant's density at one depth, over its peak as implanted, and how that changes per µm² of spread. */
 export interface ImplantShare {
@@ -24,7 +26,7 @@ export function implantShare(shape: ImplantShape, depthUm: number): ImplantShare
   const { rangeUm: range, lengthUm: straggle, spreadUm2: spread } = shape;
   const s = straggle ** 2 + spread;
   const below = Math.exp((-0.5 * (depthUm - range) ** 2) / s);
-  if (spread === 0) {
+  if (spread <= NO_SPREAD * straggle ** 2) {
     const curvature = (((depthUm - range) / straggle) ** 2 - 1) / straggle ** 2;
     return { share: below, slopePerUm2: 0.5 * curvature * below };
   }

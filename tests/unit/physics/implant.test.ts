@@ -49,6 +49,12 @@ describe('an implant', () => {
     }
   });
 
+  it('gives numbers for a drive-in too short to move anything', () => {
+    const hardly = implantShare({ ...shape, spreadUm2: 1e-300 }, 0.08);
+    expect(hardly).toEqual(implantShare(shape, 0.08));
+    expect(Number.isFinite(implantShare({ ...shape, spreadUm2: 2e-15 }, 0).slopePerUm2)).toBe(true);
+  });
+
   it('ends as the gaussian of its dose at the surface when driven far', () => {
     const far = { ...shape, spreadUm2: 100 };
     const half = layerDose({ ...far, peakDensityPerCm3: 1 }) / 1e-4;

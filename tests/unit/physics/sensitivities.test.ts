@@ -131,6 +131,7 @@ describe('the one scale of a tool', () => {
       [Infinity, -1],
       [1, 0],
       [1, Number.NaN],
+      [2, 1e-320],
     ] as const) {
       expect(() => dopantScalePercent(ratio, sensitivity)).toThrow(RangeError);
     }
