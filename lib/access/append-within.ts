@@ -2,7 +2,7 @@ import type { ClientBase, PoolClient } from 'pg';
 import { getPool } from '@/lib/database/client';
 import { endAfter, endOf, knownChain, learnEnd, type EndRow } from './audit-chain';
 import { linkedEntries, type ChainEnd, type LinkedEntry, type Told } from './audit-entry';
-import { keepHeadSoon } from './audit-head';
+import { keepHead } from './audit-head';
 import { plantKey } from './secret';
 
 /** After so many times that others were quicker the caller goes the way that waits. */
@@ -23,12 +23,16 @@ export async function appendWithin<Result extends { appeared: boolean }>(
   const chain = knownChain(getPool());
   // The connection before the turn: whoever has the turn waits for no connection.
   const client = await getPool().connect();
+  let isBroken = false;
   try {
     const mine = chain.turn.then(() => written(client, told, write));
     chain.turn = mine.catch(() => undefined);
     return await mine;
+  } catch (error) {
+    isBroken = true;
+    throw error;
   } finally {
-    client.release();
+    client.release(isBroken);
   }
 }
 
@@ -46,7 +50,7 @@ async function written<Result extends { appeared: boolean }>(
       if (result.appeared) {
         const newEnd = endAfter(end, entries);
         learnEnd(pool, newEnd);
-        keepHeadSoon(newEnd);
+        keepHead(newEnd);
       }
       return result;
     } catch (error) {

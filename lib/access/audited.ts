@@ -4,7 +4,7 @@ import { inTransaction } from '@/lib/database/transaction';
 import type { Actor } from './actor';
 import { appendEntries, learnEnd } from './audit-chain';
 import type { ChainEnd, Telling, Told } from './audit-entry';
-import { headsKept, keepHead } from './audit-head';
+import { keepHead } from './audit-head';
 import { plantKey } from './secret';
 
 /** Tells of one thing that was done; it is written at the end of the transaction. */
@@ -23,18 +23,17 @@ export async function audited<Result>(
   const told: Told[] = [];
   let end: ChainEnd | null = null;
   const result = await inTransaction(async (client) => {
-    await client.query("SELECT set_config('evenohm.audited', 'on', true)");
     const answer = await work(client, (telling) => told.push({ ...telling, actor }));
     if (told.length > 0) end = await appendEntries(client, told);
     return answer;
-  });
-  await committed(end);
+  }, "SET LOCAL evenohm.audited = 'on'");
+  committed(end);
   return result;
 }
 
 /** What is left to do after a commit: to know the new end of the chain, if there is one, and to keep it outside. */
-export async function committed(end: ChainEnd | null): Promise<void> {
-  if (end === null) return headsKept();
+export function committed(end: ChainEnd | null): void {
+  if (end === null) return;
   learnEnd(getPool(), end);
-  await keepHead(end);
+  keepHead(end);
 }

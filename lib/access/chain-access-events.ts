@@ -46,6 +46,6 @@ export async function chainAccessEvents(): Promise<number> {
     if (told.length > 0) end = await appendEntries(client, told);
     return told.length;
   });
-  await committed(end);
+  committed(end);
   return taken < AT_ONCE ? taken : taken + (await chainAccessEvents());
 }

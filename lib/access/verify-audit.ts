@@ -2,7 +2,7 @@ import type { ClientBase } from 'pg';
 import { getPool } from '@/lib/database/client';
 import { AppError } from '@/lib/errors';
 import { entryMac, MAC_BEFORE_FIRST, type AuditEntry } from './audit-entry';
-import { headFile, readHead, type AuditHead } from './audit-head';
+import { headFile, keepWaitingHeads, readHead, type AuditHead } from './audit-head';
 import { plantKey } from './secret';
 
 /** A place where the chain does not hold: these entries, and what is wrong with them. */
@@ -37,20 +37,21 @@ const MOST_PLACES = 1000;
  * where a file that was named holds no head.
  */
 export async function verifyAudit(headFiles: readonly string[] = []): Promise<AuditVerdict> {
+  keepWaitingHeads();
   const client = await getPool().connect();
   try {
     const { rows } = await client.query<{ name: string }>('SELECT name FROM audit_chain');
     const chain = rows[0]?.name ?? '';
-    const own = await readHead(headFile(chain));
-    const others = await Promise.all(headFiles.map(givenHead));
+    const own = readHead(headFile(chain));
+    const others = headFiles.map(givenHead);
     return await followed(client, chain, own === null ? others : [own, ...others]);
   } finally {
     client.release();
   }
 }
 
-async function givenHead(file: string): Promise<AuditHead> {
-  const head = await readHead(file);
+function givenHead(file: string): AuditHead {
+  const head = readHead(file);
   if (head === null) throw new AppError('invalid', `There is no head of an audit trail in ${file}.`);
   return head;
 }

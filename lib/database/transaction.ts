@@ -3,13 +3,17 @@ import { getPool } from './client';
 
 /**
  * Runs `work` in one transaction: committed when it returns, rolled back when it throws. All its queries go by the
- * given client: were each transaction to wait for a second connection, all could wait for each other.
+ * given client: were each transaction to wait for a second connection, all could wait for each other. `setting` is a
+ * SET LOCAL that begins it.
  */
-export async function inTransaction<Result>(work: (client: PoolClient) => Promise<Result>): Promise<Result> {
+export async function inTransaction<Result>(
+  work: (client: PoolClient) => Promise<Result>,
+  setting = '',
+): Promise<Result> {
   const client = await getPool().connect();
   let isBroken = false;
   try {
-    await client.query('BEGIN');
+    await client.query(`BEGIN; ${setting}`);
     const result = await work(client);
     await client.query('COMMIT');
     return result;

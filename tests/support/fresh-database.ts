@@ -3,6 +3,7 @@ import { mkdtempSync, rmSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import path from 'node:path';
 import { inject } from 'vitest';
+import { keepWaitingHeads } from '@/lib/access/audit-head';
 import { closeClients, openClients } from '@/lib/database/client';
 import { databaseUrl, runSql } from './store-server';
 
@@ -26,6 +27,7 @@ export async function freshDatabase(): Promise<FreshDatabase> {
     drop: async () => {
       await closeClients();
       await database.drop();
+      keepWaitingHeads();
       rmSync(dataFolder, { recursive: true });
     },
   };
