@@ -18,12 +18,12 @@ export interface RobustDeviations {
 }
 
 /**
- * The quick ways out. Against the plain fit a reading that scores 6 against the robust one scores 4.5, or several
- * hide each other: then leaving out some patch explains much, and on a plan of many sites, where trying them all
- * takes longest, a reading scores 3.5 too or neighbours go the same way. Of 1 000 even wafers with 49 sites about
- * 140 have their patches tried, and 8 are looked at closer.
+ * The quick ways out. Leaving out the patch of a far reading or a feature explains much of what the plain fit leaves;
+ * several gross readings apart hide that from each other, but not their own scores. On a plan of many sites, where
+ * trying all patches takes longest, they are tried only where a reading scores 3.5 or neighbours go the same way: about
+ * 140 of 1 000 even wafers with 49 sites, of which one or two are looked at closer.
  */
-const LOUD_SCORE = 4.5;
+const LOUD_SCORE = 8;
 const LIVELY_SCORE = 3.5;
 const LIVELY_CORRELATION = 0;
 const FEW_SITES = 36;
@@ -91,10 +91,10 @@ export function robustDeviations(readings: Float64Array, part: PlanPart): Robust
 function greatestScore(residuals: Float64Array, sigma: number, { leverage }: SurfaceFit): number {
   let greatest = 0;
   for (let i = 0; i < residuals.length; i++) {
-    const freedom = Math.max(LEAST_FREEDOM, 1 - leverage[i]!);
-    greatest = Math.max(greatest, Math.abs(residuals[i]!) / (sigma * Math.sqrt(freedom)));
+    const square = residuals[i]! ** 2 / Math.max(LEAST_FREEDOM, 1 - leverage[i]!);
+    if (square > greatest) greatest = square;
   }
-  return greatest;
+  return Math.sqrt(greatest) / sigma;
 }
 
 /** The patches of the plan, the most telling first. */
