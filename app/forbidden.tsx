@@ -6,7 +6,7 @@ import { rolesThatMay } from '@/lib/access/role-words';
 import { PageHead } from './_ui/page-head';
 import { refusedPermission } from './refused-permission';
 
-export const metadata: Metadata = { title: 'Not for your roles', icons: '/icon.svg' };
+export const metadata: Metadata = { title: 'Not for your roles' };
 
 /** Stands in for a page that its reader may not see, and says which roles may. */
 export default async function Forbidden() {

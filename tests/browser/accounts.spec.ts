@@ -39,7 +39,7 @@ test.describe('someone who is not signed in', () => {
 });
 
 test.describe('a viewer', () => {
-  test.use({ storageState: { cookies: [], origins: [] }, statuses: [403, 404] });
+  test.use({ storageState: { cookies: [], origins: [] }, statuses: [403] });
 
   test.beforeEach(async ({ page, baseURL }) => {
     await lookRound(page.request, baseURL ?? '', 'viewer');
