@@ -33,28 +33,24 @@ export async function insertTarget(
   const { rows } = await client.query<WrittenRevision>(
     `INSERT INTO target_revision (stream_id, revision, effective_from, dopant, density_per_cm3, tolerance_percent,
        along_crystal, profile, length_um, background_dopant, background_density_per_cm3, calibration_factor,
-       calibration_percent, calibration_wafers, author, reason)
-     VALUES ($1, ${nextRevision('target_revision')}, $2, $3, $4, $5, $6, $7, $8, $9, $10, $11, $12, $13, $14, $15)
+       calibration_percent, calibration_wafers, author, reason, range_um, drive_in_c, drive_in_min, profile_pairs,
+       temperature_coefficient_percent_per_c, method, counter_dopant, counter_density_per_cm3)
+     VALUES ($1, ${nextRevision('target_revision')}, $2, $3, $4, $5, $6, $7, $8, $9, $10, $11, $12, $13, $14, $15,
+       $16, $17, $18, $19, $20, $21, $22, $23)
      RETURNING id, revision, ${factsBefore('target_revision', [
        "'dopant', p.dopant, 'densityPerCm3', p.density_per_cm3",
        "'tolerancePercent', p.tolerance_percent, 'calibrationFactor', p.calibration_factor",
      ])}`,
     [
-      streamId,
-      meta.effectiveFrom,
-      target.dopant,
-      target.densityPerCm3,
-      target.tolerancePercent,
-      target.alongCrystal,
-      target.profile,
-      target.lengthUm,
-      target.backgroundDopant,
-      target.backgroundDensityPerCm3,
-      target.calibrationFactor,
-      target.calibrationPercent,
-      meta.calibrationWafers ?? null,
-      actor.name,
-      meta.reason,
+      ...[streamId, meta.effectiveFrom, target.dopant, target.densityPerCm3, target.tolerancePercent],
+      ...[target.alongCrystal, target.profile, target.lengthUm],
+      ...[target.backgroundDopant, target.backgroundDensityPerCm3],
+      ...[target.calibrationFactor, target.calibrationPercent, meta.calibrationWafers ?? null],
+      ...[actor.name, meta.reason],
+      ...[target.rangeUm, target.driveInC, target.driveInMin],
+      ...[target.pairs ? JSON.stringify(target.pairs) : null],
+      ...[target.temperatureCoefficientPercentPerC, target.method],
+      ...[target.counterDopant, target.counterDensityPerCm3],
     ],
   );
   return rows[0] as WrittenRevision;

@@ -1,13 +1,8 @@
 import { z } from 'zod';
-import { DOPANTS } from '@/lib/physics/dopant';
-import { expectedValue } from '@/lib/physics/expected-value';
-import { missingForExpected } from '@/lib/physics/missing-for-expected';
-import type { Target } from '@/lib/physics/target';
 import { typedBox, typedChoice, typedNumber, typedNumberOrNone, typedText, typedTime } from '@/lib/typed';
 import type { Specification } from './types';
 
 export const QUANTITIES = ['resistivity', 'sheet_resistance'] as const;
-export const PROFILES = ['uniform', 'box', 'gaussian', 'erfc'] as const;
 export const KINDS = ['substrate', 'crystal', 'epi', 'implant', 'diffusion'] as const;
 export const SUBGROUPS = ['wafer', 'run', 'lot', 'ingot'] as const;
 export const STATISTICS = ['areaMean', 'mean', 'median'] as const;
@@ -21,7 +16,6 @@ export const METRICS = [
   'radialVariationPercent',
 ] as const;
 
-const dopants = DOPANTS as readonly [Target['dopant'], ...Target['dopant'][]];
 const positive = (value: number) => value > 0;
 const isShare = (value: number) => value >= 0 && value <= 100;
 
@@ -58,67 +52,6 @@ export const newStream = z
     path: ['subgroupSize'],
     message: 'A point that is one wafer has one wafer. Count runs, lots or ingots for more.',
   });
-
-const targetFields = z.object({
-  dopant: z.enum(dopants, { error: 'Choose the dopant.' }),
-  densityPerCm3: typedNumber({ wish: 'a density above 0, such as 1e15', holds: positive }),
-  tolerancePercent: typedNumberOrNone({
-    wish: 'a tolerance above 0 and below 100 %, or nothing',
-    holds: (value) => value > 0 && value < 100,
-  }),
-  alongCrystal: typedBox,
-  profile: typedChoice(PROFILES, 'Choose the profile.'),
-  lengthUm: typedNumberOrNone({ wish: 'a length above 0 µm, or nothing', holds: positive }),
-  backgroundDopant: z.preprocess((value) => value || null, z.enum(dopants).nullable()),
-  backgroundDensityPerCm3: typedNumberOrNone({ wish: 'a density above 0, or nothing', holds: positive }),
-  calibrationFactor: typedNumberOrNone({ wish: 'a factor above 0, or nothing', holds: positive }),
-  calibrationPercent: typedNumberOrNone({
-    wish: 'an uncertainty from 0 to 100 %, or nothing',
-    holds: isShare,
-  }),
-});
-
-/** A target as a form sends it. What physics cannot expect anything of is refused, in physics' own words. */
-export function typedTarget(quantity: Target['quantity']) {
-  return targetFields.transform((fields, context): Target => {
-    const target: Target = { quantity, ...fields };
-    const fault = targetFault(target);
-    if (fault !== null) context.addIssue({ code: 'custom', path: [fault.field], message: fault.reason });
-    return target;
-  });
-}
-
-function targetFault(target: Target): { field: keyof Target; reason: string } | null {
-  if ((target.backgroundDopant === null) !== (target.backgroundDensityPerCm3 === null)) {
-    const field = target.backgroundDopant === null ? 'backgroundDopant' : 'backgroundDensityPerCm3';
-    return { field, reason: 'A background has a dopant and a density: give both or neither.' };
-  }
-  if (target.calibrationPercent !== null && target.calibrationFactor === null) {
-    return {
-      field: 'calibrationFactor',
-      reason: 'An uncertainty belongs to a factor: give both or neither.',
-    };
-  }
-  const ingotFraction = target.alongCrystal ? 0 : null;
-  if (missingForExpected(target, { ingotFraction }) === 'layerThicknessUm' && target.profile !== 'uniform') {
-    return { field: 'lengthUm', reason: `A ${target.profile} layer needs its length.` };
-  }
-  const isGraded = target.profile === 'gaussian' || target.profile === 'erfc';
-  if (isGraded && target.quantity === 'sheet_resistance' && target.backgroundDopant === null) {
-    return {
-      field: 'backgroundDopant',
-      reason: `A ${target.profile} layer ends at a junction: say on what.`,
-    };
-  }
-  try {
-    const layerThicknessUm = target.lengthUm ?? 1;
-    expectedValue(target, { ingotFraction, layerThicknessUm });
-    return null;
-  } catch (error) {
-    if (error instanceof RangeError) return { field: 'densityPerCm3', reason: error.message };
-    throw error;
-  }
-}
 
 const limit = { wish: 'a number above 0, or nothing', holds: positive };
 

@@ -1,6 +1,8 @@
 import type { Prisma } from '@/lib/database/generated/client';
 import type { Dopant } from '@/lib/physics/dopant';
+import type { DepthDensity } from '@/lib/physics/pairs-shape';
 import type { Target } from '@/lib/physics/target';
+import { furtherTarget } from './further-target';
 import type {
   SitePlan,
   SpecificationRevision,
@@ -67,6 +69,16 @@ export function targetRevisionOf(
       backgroundDensityPerCm3: row.backgroundDensityPerCm3,
       calibrationFactor: row.calibrationFactor,
       calibrationPercent: row.calibrationPercent,
+      ...furtherTarget({
+        counterDopant: row.counterDopant as Dopant | null,
+        counterDensityPerCm3: row.counterDensityPerCm3,
+        rangeUm: row.rangeUm,
+        driveInC: row.driveInC,
+        driveInMin: row.driveInMin,
+        pairs: row.profilePairs as readonly DepthDensity[] | null,
+        temperatureCoefficientPercentPerC: row.temperatureCoefficientPercentPerC,
+        method: row.method as 'four-point' | 'other' | null,
+      }),
     },
     calibrationWafers: row.calibrationWafers,
     author: row.author,

@@ -5,7 +5,7 @@ import { formatDensityPerCm3, formatReading, formatSignedPercent, formatWithUnce
 import { expectedValue, type Expected } from '@/lib/physics/expected-value';
 import { targetDensity } from '@/lib/physics/target-density';
 import type { Target } from '@/lib/physics/target';
-import { typedTarget } from '@/lib/streams/schema';
+import { typedTarget } from '@/lib/streams/typed-target';
 import { unitOf } from '@/lib/streams/types';
 import styles from './expected-note.module.css';
 

@@ -4,7 +4,7 @@ import { CheckField } from '@/app/_ui/check-field';
 import { Field, SelectField } from '@/app/_ui/field';
 import { DOPANTS } from '@/lib/physics/dopant';
 import type { Target } from '@/lib/physics/target';
-import { PROFILES } from '@/lib/streams/schema';
+import { PROFILES } from '@/lib/streams/target-fields';
 import { Options } from './options';
 import { PROFILE_WORDS } from './words';
 

@@ -6,7 +6,8 @@ import { actionActor } from '@/app/action-actor';
 import { readEnvironment } from '@/lib/env';
 import { findStreamSettings } from '@/lib/streams/data';
 import { reviseTarget } from '@/lib/streams/mutations';
-import { targetMeta, typedTarget } from '@/lib/streams/schema';
+import { targetMeta } from '@/lib/streams/schema';
+import { typedTarget } from '@/lib/streams/typed-target';
 import { typedNumberOrNone } from '@/lib/typed';
 
 const wafers = typedNumberOrNone({ wish: 'a number of wafers', holds: (v) => Number.isInteger(v) && v > 0 });

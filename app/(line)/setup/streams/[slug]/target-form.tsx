@@ -5,7 +5,7 @@ import { ActionForm } from '@/app/_ui/action-form';
 import { formWords } from '@/app/_ui/form-state';
 import type { ExpectedWafer, Target } from '@/lib/physics/target';
 import { ExpectedNote } from '../../expected-note';
-import { typedTarget } from '@/lib/streams/schema';
+import { typedTarget } from '@/lib/streams/typed-target';
 import { RevisionFields } from '../../revision-fields';
 import { ShiftNote } from '../../shift-note';
 import { TargetFields } from '../../target-fields';

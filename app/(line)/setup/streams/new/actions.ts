@@ -5,8 +5,9 @@ import { redirect } from 'next/navigation';
 import { faultsOf, formWords, refusedForm, type FormState } from '@/app/_ui/form-state';
 import { actionActor } from '@/app/action-actor';
 import { createStream } from '@/lib/streams/mutations';
-import { newStream, typedSpecification, typedTarget } from '@/lib/streams/schema';
+import { newStream, typedSpecification } from '@/lib/streams/schema';
 import { slugOf } from '@/lib/streams/slug-of';
+import { typedTarget } from '@/lib/streams/typed-target';
 
 /** Sets up a stream with its first target and specification, and goes to its page. */
 export async function createStreamAction(before: FormState, form: FormData): Promise<FormState> {
