@@ -1,3 +1,4 @@
+import { auditBench } from './audit-bench';
 import { figureLine, holds, type Figure } from './figure';
 import { intakeBench } from './intake-bench';
 import { oneWaferBench } from './one-wafer-bench';
@@ -16,6 +17,7 @@ const server = (): Promise<ScratchServer> => (scratch.server ??= scratchServer()
 const parts: Record<string, () => Promise<Figure[]> | Figure[]> = {
   physics: physicsBench,
   wafer: async () => oneWaferBench(await server()),
+  audit: async () => auditBench(await server()),
   intake: async () => intakeBench(await server()),
   pages: async () => pageBench(await server()),
 };
