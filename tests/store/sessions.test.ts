@@ -231,3 +231,39 @@ describe('a person of the demonstration line', () => {
     }
   });
 });
+
+describe('a server that is reached by https', () => {
+  let own: FreshDatabase;
+  beforeAll(async () => {
+    vi.stubEnv('EVENOHM_URL', 'https://line.plant.example');
+    own = await freshDatabase();
+    await createFirstAdministrator(PERSON, true);
+  });
+  afterAll(async () => {
+    await own.drop();
+    vi.unstubAllEnvs();
+  });
+
+  test('marks its cookie Secure, under a name that only https may set', async () => {
+    const text = JSON.stringify(PERSON);
+    const headers = {
+      'content-type': 'application/json',
+      'content-length': String(text.length),
+      host: 'line.plant.example',
+      origin: 'https://line.plant.example',
+      'x-forwarded-for': '10.2.2.2',
+    };
+    const answer = await answerAuth(
+      new Request('http://line.plant.example/api/auth/sign-in/email', {
+        method: 'POST',
+        headers,
+        body: text,
+      }),
+    );
+    expect(answer.status).toBe(200);
+    const [cookie = ''] = answer.headers.getSetCookie();
+    expect(cookie).toMatch(/^__Secure-evenohm\.session_token=.*; HttpOnly; Secure; SameSite=Lax$/);
+    expect(await who(cookieOf(answer))).toMatchObject({ name: PERSON.name });
+    expect(await who(cookieOf(answer).replace('__Secure-', ''))).toBeNull();
+  });
+});
