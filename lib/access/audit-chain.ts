@@ -1,7 +1,6 @@
-import type { ClientBase, Pool } from 'pg';
-import { columnNames, rowsAsQuery } from '@/lib/database/columnar';
+import pg, { type ClientBase, type Pool } from 'pg';
 import {
-  ENTRY_COLUMNS,
+  entriesJson,
   linkedEntries,
   MAC_BEFORE_FIRST,
   type ChainEnd,
@@ -50,15 +49,19 @@ export async function holdChain(client: ClientBase): Promise<ChainEnd> {
   return endOf(rows[0] as EndRow);
 }
 
-/** Appends what was done to the chain, as the last thing before a commit. Returns its new end. */
-export async function appendEntries(client: ClientBase, told: readonly Told[]): Promise<ChainEnd> {
+/**
+ * Holds the chain and says by which statement what was done goes to its end: it is sent together with the commit, so
+ * that the chain is held for one round trip. Returns its new end as well.
+ */
+export async function appending(
+  client: ClientBase,
+  told: readonly Told[],
+): Promise<{ statement: string; end: ChainEnd }> {
   const end = await holdChain(client);
   const entries = linkedEntries(plantKey('audit'), end, told, new Date());
-  const parameters: unknown[] = [];
-  const given = rowsAsQuery(ENTRY_COLUMNS, entries, parameters);
-  const text = `INSERT INTO audit_entry (${columnNames(ENTRY_COLUMNS)}) SELECT given.* FROM ${given} given`;
-  await client.query({ name: 'append-audit-entries', text, values: parameters });
-  return endAfter(end, entries);
+  const rows = pg.escapeLiteral(entriesJson(entries));
+  const statement = `INSERT INTO audit_entry SELECT * FROM json_populate_recordset(NULL::audit_entry, ${rows})`;
+  return { statement, end: endAfter(end, entries) };
 }
 
 /** Where a chain ends after entries that were linked to it. */

@@ -1,5 +1,4 @@
 import { createHmac } from 'node:crypto';
-import type { Column } from '@/lib/database/columnar';
 import type { Actor } from './actor';
 import type { AuditAction, AuditSubject } from './audit-action';
 
@@ -87,22 +86,34 @@ export function linkedEntries(key: Buffer, end: ChainEnd, told: readonly Told[],
   });
 }
 
-/** The columns of audit_entry. */
-export const ENTRY_COLUMNS: readonly Column<LinkedEntry>[] = [
-  { name: 'id', type: 'bigint', value: (entry) => entry.id },
-  { name: 'at', type: 'timestamptz', value: (entry) => entry.at.toISOString() },
-  { name: 'actor_kind', type: 'text', value: (entry) => entry.actorKind },
-  { name: 'actor_id', type: 'text', value: (entry) => entry.actorId },
-  { name: 'actor_name', type: 'text', value: (entry) => entry.actorName },
-  { name: 'action', type: 'text', value: (entry) => entry.action },
-  { name: 'subject_kind', type: 'text', value: (entry) => entry.subjectKind },
-  { name: 'subject_id', type: 'text', value: (entry) => entry.subjectId },
-  { name: 'stream_id', type: 'bigint', value: (entry) => entry.streamId },
-  { name: 'before', type: 'json', value: (entry) => entry.before },
-  { name: 'after', type: 'json', value: (entry) => entry.after },
-  { name: 'why', type: 'text', value: (entry) => entry.why },
-  { name: 'mac', type: 'bytea', value: (entry) => `"\\\\x${entry.mac.toString('hex')}"` },
-];
+/**
+ * Entries as the rows of audit_entry in JSON, for a statement's `json_populate_recordset(NULL::audit_entry, …)`: it keeps
+ * the text of before and after as it stands.
+ */
+export function entriesJson(entries: readonly LinkedEntry[]): string {
+  return JSON.stringify(
+    entries.map((entry) => ({
+      id: entry.id,
+      at: entry.at,
+      actor_kind: entry.actorKind,
+      actor_id: entry.actorId,
+      actor_name: entry.actorName,
+      action: entry.action,
+      subject_kind: entry.subjectKind,
+      subject_id: entry.subjectId,
+      stream_id: entry.streamId,
+      before: parsed(entry.before),
+      after: parsed(entry.after),
+      why: entry.why,
+      mac: `\\x${entry.mac.toString('hex')}`,
+    })),
+  );
+}
+
+/** Made by JSON.stringify, so that it comes out of it alike again. */
+function parsed(text: string | null): unknown {
+  return text === null ? null : JSON.parse(text);
+}
 
 function factsText(facts: AuditFacts | undefined): string | null {
   return facts === undefined

@@ -2,7 +2,7 @@ import type { PoolClient } from 'pg';
 import { getPool } from '@/lib/database/client';
 import { inTransaction } from '@/lib/database/transaction';
 import type { Actor } from './actor';
-import { appendEntries, learnEnd } from './audit-chain';
+import { appending, learnEnd } from './audit-chain';
 import type { ChainEnd, Telling, Told } from './audit-entry';
 import { keepHead } from './audit-head';
 import { plantKey } from './secret';
@@ -15,25 +15,32 @@ export type Tell = (telling: Telling) => void;
  * of a service room goes this way. The chain is held last, just before the commit, so that transactions wait for each
  * other there for no longer than a commit takes.
  */
-export async function audited<Result>(
+export function audited<Result>(
   actor: Actor,
   work: (client: PoolClient, tell: Tell) => Promise<Result>,
 ): Promise<Result> {
-  plantKey('audit');
-  const told: Told[] = [];
-  let end: ChainEnd | null = null;
-  const result = await inTransaction(async (client) => {
-    const answer = await work(client, (telling) => told.push({ ...telling, actor }));
-    if (told.length > 0) end = await appendEntries(client, told);
-    return answer;
-  }, "SET LOCAL evenohm.audited = 'on'");
-  committed(end);
-  return result;
+  return chained((client, tell) => work(client, (telling) => tell({ ...telling, actor })));
 }
 
-/** What is left to do after a commit: to know the new end of the chain, if there is one, and to keep it outside. */
-export function committed(end: ChainEnd | null): void {
-  if (end === null) return;
-  learnEnd(getPool(), end);
-  keepHead(end);
+/** The same for what several did. */
+export async function chained<Result>(
+  work: (client: PoolClient, tell: (told: Told) => void) => Promise<Result>,
+): Promise<Result> {
+  plantKey('audit');
+  const told: Told[] = [];
+  const newEnd: { end: ChainEnd | null } = { end: null };
+  const result = await inTransaction((client) => work(client, (one) => told.push(one)), {
+    setting: "SET LOCAL evenohm.audited = 'on'",
+    last: async (client) => {
+      if (told.length === 0) return '';
+      const { statement, end } = await appending(client, told);
+      newEnd.end = end;
+      return statement;
+    },
+  });
+  if (newEnd.end !== null) {
+    learnEnd(getPool(), newEnd.end);
+    keepHead(newEnd.end);
+  }
+  return result;
 }

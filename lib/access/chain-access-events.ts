@@ -1,8 +1,6 @@
-import { inTransaction } from '@/lib/database/transaction';
 import type { AuditAction } from './audit-action';
-import { appendEntries } from './audit-chain';
-import type { AuditFacts, ChainEnd } from './audit-entry';
-import { committed } from './audited';
+import type { AuditFacts } from './audit-entry';
+import { chained } from './audited';
 import { programActor } from './local-actor';
 
 interface EventRow {
@@ -24,28 +22,23 @@ const AT_ONCE = 500;
  * Returns how many were taken in.
  */
 export async function chainAccessEvents(): Promise<number> {
-  let end: ChainEnd | null = null;
-  const taken = await inTransaction(async (client) => {
+  const taken = await chained(async (client, tell) => {
     const { rows } = await client.query<EventRow>(
       `DELETE FROM access_event WHERE id IN (SELECT id FROM access_event ORDER BY id LIMIT $1 FOR UPDATE SKIP LOCKED)
        RETURNING id, at, action, by_person, person_id, person_name, before, after`,
       [AT_ONCE],
     );
-    const told = rows
-      .sort((a, b) => Number(a.id) - Number(b.id))
-      .map((row) => ({
-        actor: row.by_person
-          ? { kind: 'person' as const, id: row.person_id, name: row.person_name }
-          : programActor(),
+    for (const row of rows.sort((a, b) => Number(a.id) - Number(b.id))) {
+      tell({
+        actor: row.by_person ? { kind: 'person', id: row.person_id, name: row.person_name } : programActor(),
         at: row.at,
         action: row.action,
-        subject: { kind: 'person' as const, id: row.person_id },
+        subject: { kind: 'person', id: row.person_id },
         ...(row.before === null ? {} : { before: row.before }),
         ...(row.after === null ? {} : { after: row.after }),
-      }));
-    if (told.length > 0) end = await appendEntries(client, told);
-    return told.length;
+      });
+    }
+    return rows.length;
   });
-  committed(end);
   return taken < AT_ONCE ? taken : taken + (await chainAccessEvents());
 }

@@ -45,8 +45,7 @@ export function columnLiterals<Row>(
 function element(value: unknown, type: string): string {
   if (value === null || value === undefined) return 'NULL';
   const text = String(value);
-  if (type === 'text' || type === 'json')
-    return `"${/[\\"]/.test(text) ? text.replace(/[\\"]/g, '\\$&') : text}"`;
+  if (type === 'text') return `"${/[\\"]/.test(text) ? text.replace(/[\\"]/g, '\\$&') : text}"`;
   return type.endsWith('[]') ? `"${text.replaceAll('"', '\\"')}"` : text;
 }
 

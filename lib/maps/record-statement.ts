@@ -1,4 +1,4 @@
-import { ENTRY_COLUMNS, type LinkedEntry, type Telling } from '@/lib/access/audit-entry';
+import { entriesJson, type LinkedEntry, type Telling } from '@/lib/access/audit-entry';
 import { columnLiterals, columnNames, columnsAsQuery } from '@/lib/database/columnar';
 import { POINT_COLUMNS } from '@/lib/excursions/line-rows';
 import { pointLiterals, pointsStatement, type JudgedLine } from '@/lib/excursions/write-judgement';
@@ -31,7 +31,7 @@ const OWN_PARAMETERS = 9;
 const GUARD = 'JOIN moved ON moved.id = given.stream_id';
 const FIRST_WAFER = OWN_PARAMETERS + POINT_COLUMNS.length + 1;
 const FIRST_READING = FIRST_WAFER + WAFER_COLUMNS.length;
-const FIRST_ENTRY = FIRST_READING + READING_COLUMNS.length;
+const ENTRIES = FIRST_READING + READING_COLUMNS.length;
 
 /** A stream that someone else holds is passed over, not waited for: xmax is 0 in a row that was new. */
 const TEXT = `WITH free AS (
@@ -52,8 +52,8 @@ const TEXT = `WITH free AS (
     INSERT INTO wafer_reading (${columnNames(READING_COLUMNS)})
     SELECT given.* FROM ${columnsAsQuery(READING_COLUMNS, FIRST_READING)} given ${GUARD}
   ), told AS (
-    INSERT INTO audit_entry (${columnNames(ENTRY_COLUMNS)})
-    SELECT given.* FROM ${columnsAsQuery(ENTRY_COLUMNS, FIRST_ENTRY)} given WHERE (SELECT appeared FROM filed)
+    INSERT INTO audit_entry SELECT given.* FROM json_populate_recordset(NULL::audit_entry, $${ENTRIES}::json) given
+    WHERE (SELECT appeared FROM filed)
   ) SELECT count(*)::integer AS streams, coalesce((SELECT appeared FROM filed), false) AS appeared FROM moved`;
 
 /**
@@ -80,7 +80,7 @@ export function recordStatement(
     ...pointLiterals(judged),
     ...columnLiterals(WAFER_COLUMNS, rows),
     ...columnLiterals(READING_COLUMNS, rows),
-    ...columnLiterals(ENTRY_COLUMNS, entries),
+    entriesJson(entries),
   ];
   return { name: 'record', text: TEXT, values };
 }

@@ -1,7 +1,7 @@
 import { afterAll, beforeAll, describe, expect, test } from 'vitest';
 import { provenActor } from '@/lib/access/actor';
 import { audited } from '@/lib/access/audited';
-import { appendEntries } from '@/lib/access/audit-chain';
+import { appending } from '@/lib/access/audit-chain';
 import { verifyAudit } from '@/lib/access/verify-audit';
 import { getPool } from '@/lib/database/client';
 import { inTransaction } from '@/lib/database/transaction';
@@ -202,7 +202,11 @@ describe('many writers at once', () => {
     };
     const here = () => rounds(() => audited(actor, async (_, tell) => tell(telling)));
     const elsewhere = () =>
-      rounds(() => inTransaction((client) => appendEntries(client, [{ ...telling, actor }])));
+      rounds(() =>
+        inTransaction(async () => undefined, {
+          last: async (client) => (await appending(client, [{ ...telling, actor }])).statement,
+        }),
+      );
     const wafers = Array.from({ length: ROUNDS }, (_, i) => i + 1);
     await Promise.all([
       ...streams.map(({ id }) => recordInTurn(wafers.map((i) => wafer(id, i)))),
