@@ -2,7 +2,7 @@ import type { DemoStream } from './demo-stream';
 import type { DemoWafer } from './demo-wafer';
 import { makeWafer } from './make-wafer';
 import { mishapOnWafer } from './mishap-on-wafer';
-import { seededRandom } from './seeded-random';
+import { seededRandom } from '@/lib/stats/seeded-random';
 import { valueAt } from './value-at';
 import { waferNames } from './wafer-names';
 

@@ -1,7 +1,7 @@
 import type { DemoStream } from './demo-stream';
 import { diffusionLengthPercentPerC } from './diffusion-length-percent-per-c';
 import type { MishapOnWafer } from './mishap-on-wafer';
-import type { SeededRandom } from './seeded-random';
+import type { SeededRandom } from '@/lib/stats/seeded-random';
 import { spreadAtSite } from './spread-at-site';
 
 /** One deviation of each cause, in the causes' units. */

@@ -1,7 +1,7 @@
 import type { DemoStream } from './demo-stream';
 import type { DemoWafer } from './demo-wafer';
 import type { MadeWafer } from './make-wafer';
-import type { SeededRandom } from './seeded-random';
+import type { SeededRandom } from '@/lib/stats/seeded-random';
 
 /** Share of wafers on which one site finds no contact and reads nothing. */
 const DEAD_SITE_SHARE = 0.006;

@@ -6,7 +6,7 @@ import type { Mishap } from './mishap';
 import { mishapOnWafer } from './mishap-on-wafer';
 import { MISHAPS } from './mishaps';
 import { probeWafer } from './probe-wafer';
-import { seededRandom } from './seeded-random';
+import { seededRandom } from '@/lib/stats/seeded-random';
 import { valueAt } from './value-at';
 import { waferNames } from './wafer-names';
 

@@ -1,4 +1,4 @@
-import type { SeededRandom } from '@/seed/seeded-random';
+import type { SeededRandom } from '@/lib/stats/seeded-random';
 import { discTermValue, SHAPE_TERMS } from '@/lib/wafer/disc-terms';
 import type { PlanGeometry } from '@/lib/wafer/plan-geometry';
 

@@ -7,7 +7,7 @@ import type { DemoWafer } from '@/seed/demo-wafer';
 import { diffusionLengthPercentPerC } from '@/seed/diffusion-length-percent-per-c';
 import { lineEvents } from '@/seed/events';
 import { PLANT } from '@/seed/plant';
-import { seededRandom } from '@/seed/seeded-random';
+import { seededRandom } from '@/lib/stats/seeded-random';
 import { simulateStream } from '@/seed/simulate';
 import { spreadAtSite } from '@/seed/spread-at-site';
 import { valueAt } from '@/seed/value-at';

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { seededRandom } from '@/seed/seeded-random';
+import { seededRandom } from '@/lib/stats/seeded-random';
 import { neighbourCorrelation } from '@/lib/wafer/neighbour-correlation';
 import { patchGains } from '@/lib/wafer/patch-gains';
 import { planGeometry } from '@/lib/wafer/plan-geometry';

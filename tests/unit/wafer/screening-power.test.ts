@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { seededRandom } from '@/seed/seeded-random';
+import { seededRandom } from '@/lib/stats/seeded-random';
 import { measureWafer } from '@/lib/wafer/measure-wafer';
 import { planGeometry } from '@/lib/wafer/plan-geometry';
 import { polarSites } from '@/lib/wafer/polar-sites';

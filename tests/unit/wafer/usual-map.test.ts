@@ -4,7 +4,7 @@ import { planGeometry } from '@/lib/wafer/plan-geometry';
 import { polarSites } from '@/lib/wafer/polar-sites';
 import { shapeFamily, shapeHabits, usualReaches } from '@/lib/wafer/shape-habits';
 import { usualMap } from '@/lib/wafer/usual-map';
-import { seededRandom } from '@/seed/seeded-random';
+import { seededRandom } from '@/lib/stats/seeded-random';
 
 const sites = polarSites(3, 97);
 const geometry = planGeometry(sites, { diameterMm: 200, edgeExclusionMm: 3 });
