@@ -1,123 +1,86 @@
 'use client';
 
+import { useEffect, useRef } from 'react';
 import { CheckField } from '@/app/_ui/check-field';
-import { Field, SelectField } from '@/app/_ui/field';
-import { DOPANTS } from '@/lib/physics/dopant';
+import { SelectField } from '@/app/_ui/field';
 import type { Target } from '@/lib/physics/target';
-import { PROFILES } from '@/lib/streams/target-fields';
+import { GIVEN_FIELD } from '@/lib/streams/target-of-fields';
+import type { Stream } from '@/lib/streams/types';
+import { FurtherFields } from './further-fields';
+import { LayerFields } from './layer-fields';
 import { Options } from './options';
-import { PROFILE_WORDS } from './words';
+import { targetChoices } from './target-choices';
+import { TargetDopant, type TargetForm, TargetNumber } from './target-field';
+import { GIVEN_WORDS, givenField, PROFILE_WORDS } from './words';
 
-const DOPANT_WORDS = {
-  boron: 'boron (p)',
-  phosphorus: 'phosphorus (n)',
-  arsenic: 'arsenic (n)',
-  antimony: 'antimony (n)',
-};
-
-/** A number as a person would type it: densities with an exponent, figures to ten digits. */
-const text = (value: number | null | undefined) => {
-  if (value == null) return '';
-  const plain = String(Number(value.toPrecision(10)));
-  return value >= 1e6 ? Number(plain).toExponential().replace('e+', 'e') : plain;
-};
-
-/** What a step aims at. `target` fills the fields to begin with. */
-export function TargetFields(props: {
-  target: Target | null;
-  errors: Readonly<Record<string, string>>;
-  /** The quantity is known where the stream exists. */
-  quantity: Target['quantity'] | null;
-}) {
-  const { target, errors, quantity } = props;
-  const error = (name: keyof Target) => errors[name] ?? null;
-  const number = { inputMode: 'decimal', autoComplete: 'off' } as const;
+/**
+ * What a step aims at, asked as people of its kind know it: doping or resistivity, a dose with range and straggle, a
+ * surface density and a depth. `words` is what stands in the form now; a field that appears is read at once.
+ */
+export function TargetFields(
+  props: TargetForm & {
+    words: Readonly<Record<string, string>>;
+    kind: Stream['kind'];
+    quantity: Target['quantity'];
+  },
+) {
+  const { words, kind, quantity, initial, errors } = props;
+  const form = { initial, errors };
+  const choices = targetChoices(kind, words, initial['profile']);
+  const { profile, givenNow, lengthNow } = choices;
+  const place = useRef<HTMLDivElement>(null);
+  useEffect(() => {
+    place.current?.dispatchEvent(new Event('input', { bubbles: true }));
+  }, [kind, profile, givenNow, lengthNow, quantity]);
+  const isUniform = profile === 'uniform';
+  const isCrystal = kind === 'crystal' || initial['alongCrystal'] !== undefined;
+  const value = givenField(givenNow, profile);
   return (
-    <>
+    <div ref={place}>
       <div className="columns">
+        <TargetDopant {...form} name="dopant" label="Dopant" />
+        {choices.profiles.length === 1 ? (
+          <input type="hidden" name="profile" value={profile} />
+        ) : (
+          <SelectField
+            key={`profile of ${kind}`}
+            name="profile"
+            label="Profile in depth"
+            hint={quantity === 'resistivity' ? 'A graded layer has no single resistivity' : undefined}
+            defaultValue={profile}
+            error={errors['profile'] ?? null}
+          >
+            <Options words={PROFILE_WORDS} order={choices.profiles} />
+          </SelectField>
+        )}
         <SelectField
-          name="dopant"
-          label="Dopant"
-          defaultValue={target?.dopant ?? 'boron'}
-          error={error('dopant')}
+          key={`given of ${profile}`}
+          name="given"
+          label="Known of it"
+          defaultValue={givenNow}
+          error={errors['given'] ?? null}
         >
-          <Options words={DOPANT_WORDS} order={DOPANTS} />
+          <Options words={GIVEN_WORDS} order={choices.given} />
         </SelectField>
-        <Field
-          name="densityPerCm3"
-          label="Dopant density"
-          unit="cm⁻³"
-          hint="Such as 1.34e15. Of a gaussian or erfc: the peak, at the surface"
-          defaultValue={text(target?.densityPerCm3)}
-          error={error('densityPerCm3')}
-          {...number}
-        />
-        <Field
+        <TargetNumber {...form} key={givenNow} name={GIVEN_FIELD[givenNow]} {...value} />
+        <LayerFields {...form} kind={kind} quantity={quantity} choices={choices} />
+        <TargetNumber
+          {...form}
           name="tolerancePercent"
           label="Tolerance of the density"
           unit="± %"
           hint="What is accepted. Empty: none agreed"
-          defaultValue={text(target?.tolerancePercent)}
-          error={error('tolerancePercent')}
-          {...number}
-        />
-        <SelectField
-          name="profile"
-          label="Profile in depth"
-          hint={quantity === 'resistivity' ? 'A graded layer has no single resistivity' : undefined}
-          defaultValue={target?.profile ?? 'uniform'}
-          error={error('profile')}
-        >
-          <Options words={PROFILE_WORDS} order={PROFILES} />
-        </SelectField>
-        <Field
-          name="lengthUm"
-          label="Thickness or length"
-          unit="µm"
-          hint="Of a gaussian or erfc: L in exp(−(x/L)²), erfc(x/L). Uniform, empty: each wafer brings its own"
-          defaultValue={text(target?.lengthUm)}
-          error={error('lengthUm')}
-          {...number}
-        />
-        <SelectField
-          name="backgroundDopant"
-          label="Dopant underneath"
-          defaultValue={target?.backgroundDopant ?? ''}
-          error={error('backgroundDopant')}
-        >
-          <Options words={DOPANT_WORDS} order={DOPANTS} none="none" />
-        </SelectField>
-        <Field
-          name="backgroundDensityPerCm3"
-          label="Its density"
-          unit="cm⁻³"
-          defaultValue={text(target?.backgroundDensityPerCm3)}
-          error={error('backgroundDensityPerCm3')}
-          {...number}
-        />
-        <Field
-          name="calibrationFactor"
-          label="Calibration factor"
-          hint="Measured over model. Empty: physics stands alone"
-          defaultValue={text(target?.calibrationFactor)}
-          error={error('calibrationFactor')}
-          {...number}
-        />
-        <Field
-          name="calibrationPercent"
-          label="Its standard uncertainty"
-          unit="%"
-          defaultValue={text(target?.calibrationPercent)}
-          error={error('calibrationPercent')}
-          {...number}
         />
       </div>
-      <CheckField
-        name="alongCrystal"
-        label="Along a crystal"
-        hint="The density above is that at the seed end; each wafer's own follows from its solidified fraction (Scheil)."
-        defaultChecked={target?.alongCrystal ?? false}
-      />
-    </>
+      {isCrystal && (
+        <CheckField
+          name="alongCrystal"
+          label="Along a crystal"
+          hint="The density is that at the seed end; each wafer's own follows from its solidified fraction (Scheil)."
+          defaultChecked={initial['dopant'] === undefined || initial['alongCrystal'] !== undefined}
+        />
+      )}
+      <FurtherFields {...form} mayCounter={isUniform && quantity === 'resistivity'} />
+    </div>
   );
 }

@@ -1,4 +1,4 @@
-import { formatDensityPerCm3, formatNumber, formatReading } from '@/lib/format';
+import { formatDensityPerCm3, formatNumber, formatReading, formatSignedPercent } from '@/lib/format';
 import type { Target } from '@/lib/physics/target';
 import type { NonuniformityMetric, Specification, Stream } from '@/lib/streams/types';
 
@@ -23,6 +23,52 @@ export const PROFILE_WORDS: Record<Target['profile'], string> = {
   implant: 'implant (dose, range and straggle)',
   pairs: 'profile of depths and densities',
 };
+
+/** What may be known of a dopant. */
+export const GIVEN_WORDS = {
+  density: 'its density',
+  resistivity: 'the resistivity it makes',
+  dose: 'its dose',
+} as const;
+
+export const LENGTH_WORDS = { length: 'characteristic length', junction: 'depth of the junction' } as const;
+
+export const METHOD_WORDS = { 'four-point': 'four-point probe', other: 'another method' } as const;
+
+/** How a form asks for what is known of a dopant. */
+export function givenField(
+  given: keyof typeof GIVEN_WORDS,
+  profile: Target['profile'],
+): { label: string; unit: string; hint?: string } {
+  if (given === 'resistivity') {
+    return {
+      label: 'Resistivity at 23 °C',
+      unit: 'Ω·cm',
+      hint: 'Numeric inverse of the standard conversion',
+    };
+  }
+  if (given === 'dose') {
+    return {
+      label: 'Dose',
+      unit: 'cm⁻²',
+      hint: profile === 'implant' ? 'As the implanter counts it' : 'All of it',
+    };
+  }
+  if (profile === 'uniform' || profile === 'box') {
+    return { label: 'Dopant density', unit: 'cm⁻³', hint: 'Such as 1.34e15' };
+  }
+  if (profile === 'implant') {
+    return { label: 'Peak density as implanted', unit: 'cm⁻³', hint: 'Before the drive-in' };
+  }
+  if (profile === 'pairs') {
+    return {
+      label: 'Peak density',
+      unit: 'cm⁻³',
+      hint: 'Empty: as the profile stands. Else it is scaled to it',
+    };
+  }
+  return { label: 'Surface density', unit: 'cm⁻³', hint: 'Such as 1e19' };
+}
 
 export const SUBGROUP_WORDS: Record<Stream['subgroup'], string> = {
   wafer: 'one wafer',
@@ -63,16 +109,24 @@ function plain(value: number): string {
 
 /** A target in one line: "phosphorus, 1.00 × 10¹⁵ cm⁻³ ± 5 %, uniform, 12 µm". */
 export function targetWords(target: Target): string {
+  const counter = target.counterDopant;
   const density =
     formatDensityPerCm3(target.densityPerCm3) +
     (target.tolerancePercent === null ? '' : ` ± ${plain(target.tolerancePercent)} %`);
   return [
     target.dopant,
     target.alongCrystal ? `${density} at the seed end` : density,
-    target.profile,
-    target.lengthUm !== null && `${plain(target.lengthUm)} µm`,
+    counter != null && `with ${counter} ${formatDensityPerCm3(target.counterDensityPerCm3 ?? null)}`,
+    target.profile === 'pairs' ? `profile of ${target.pairs?.length ?? 0} depths` : target.profile,
+    target.rangeUm != null && `range ${plain(target.rangeUm)} µm`,
+    target.lengthUm !== null &&
+      `${target.profile === 'implant' ? 'straggle ' : ''}${plain(target.lengthUm)} µm`,
+    target.driveInC != null && `${plain(target.driveInC)} °C for ${plain(target.driveInMin ?? 0)} min`,
     target.backgroundDopant !== null &&
       `on ${target.backgroundDopant} ${formatDensityPerCm3(target.backgroundDensityPerCm3)}`,
+    target.method === 'other' && 'not by four-point probe',
+    target.temperatureCoefficientPercentPerC != null &&
+      `${formatSignedPercent(target.temperatureCoefficientPercentPerC, 3)} per °C`,
     target.calibrationFactor !== null && `factor ${formatNumber(target.calibrationFactor, 4)}`,
   ]
     .filter((part) => part !== false)

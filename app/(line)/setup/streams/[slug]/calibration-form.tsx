@@ -4,7 +4,8 @@ import { ActionForm } from '@/app/_ui/action-form';
 import { Beside } from '@/app/_ui/beside';
 import type { CalibrationFactor } from '@/lib/limits/calibration-study';
 import type { ExpectedWafer, Target } from '@/lib/physics/target';
-import { ExpectedFigures } from '../../expected-note';
+import { wordsOfTarget } from '@/lib/streams/words-of-target';
+import { ExpectedFigures } from '../../expected-figures';
 import { RevisionFields } from '../../revision-fields';
 import { ShiftNote } from '../../shift-note';
 import { reviseTargetAction } from './target-actions';
@@ -26,7 +27,6 @@ export function CalibrationForm(props: {
     calibrationFactor: Number(found.factor.toPrecision(6)),
     calibrationPercent: Number(found.percent.toPrecision(3)),
   };
-  const kept = Object.entries(calibrated).filter(([, value]) => value !== null && value !== false);
   return (
     <Beside summary="Make it the target’s calibration">
       <ActionForm
@@ -38,8 +38,8 @@ export function CalibrationForm(props: {
       >
         {({ errors }) => (
           <>
-            {kept.map(([name, value]) => (
-              <input key={name} type="hidden" name={name} value={String(value)} />
+            {Object.entries(wordsOfTarget(calibrated)).map(([name, value]) => (
+              <input key={name} type="hidden" name={name} value={value} />
             ))}
             <input type="hidden" name="calibrationWafers" value={found.wafers} />
             <div className={styles.note}>

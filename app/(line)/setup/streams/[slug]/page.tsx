@@ -53,6 +53,7 @@ export default async function TargetPage(props: {
       <IfMay permission="revise-target" streamId={stream.id}>
         <TargetForm
           slug={stream.slug}
+          kind={stream.kind}
           quantity={stream.quantity}
           wafers={latestWafers}
           target={target}

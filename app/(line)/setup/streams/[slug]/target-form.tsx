@@ -4,8 +4,10 @@ import { useState } from 'react';
 import { ActionForm } from '@/app/_ui/action-form';
 import { formWords } from '@/app/_ui/form-state';
 import type { ExpectedWafer, Target } from '@/lib/physics/target';
-import { ExpectedNote } from '../../expected-note';
 import { typedTarget } from '@/lib/streams/typed-target';
+import type { Stream } from '@/lib/streams/types';
+import { wordsOfTarget } from '@/lib/streams/words-of-target';
+import { ExpectedNote } from '../../expected-note';
 import { RevisionFields } from '../../revision-fields';
 import { ShiftNote } from '../../shift-note';
 import { TargetFields } from '../../target-fields';
@@ -14,6 +16,7 @@ import { reviseTargetAction } from './target-actions';
 /** A new revision of a target, begun from the one in force; what it makes physics expect is said as it is typed. */
 export function TargetForm(props: {
   slug: string;
+  kind: Stream['kind'];
   quantity: Target['quantity'];
   /** The latest wafers, where these are charted against what is expected of them. */
   wafers: readonly ExpectedWafer[] | null;
@@ -21,9 +24,11 @@ export function TargetForm(props: {
   now: string;
   timeZone: string;
 }) {
-  const { slug, quantity, wafers, target, now, timeZone } = props;
+  const { slug, kind, quantity, wafers, target, now, timeZone } = props;
   const [typed, setTyped] = useState<Record<string, string> | null>(null);
-  const parsed = typedTarget(quantity).safeParse(typed ?? wordsOf(target));
+  const initial = target === null ? {} : { given: 'density', ...wordsOfTarget(target) };
+  const words = typed ?? initial;
+  const parsed = typedTarget(quantity).safeParse(words);
   return (
     <ActionForm
       action={reviseTargetAction.bind(null, slug)}
@@ -36,9 +41,9 @@ export function TargetForm(props: {
         <>
           <div className="with-beside">
             <div>
-              <TargetFields target={target} errors={errors} quantity={quantity} />
+              <TargetFields initial={initial} words={words} errors={errors} kind={kind} quantity={quantity} />
             </div>
-            <ExpectedNote words={typed ?? wordsOf(target)} quantity={quantity} />
+            <ExpectedNote words={words} quantity={quantity} />
           </div>
           <RevisionFields
             now={now}
@@ -59,11 +64,4 @@ export function TargetForm(props: {
       )}
     </ActionForm>
   );
-}
-
-/** A target as the fields of its form hold it. */
-function wordsOf(target: Target | null): Record<string, string> {
-  if (target === null) return {};
-  const filled = Object.entries(target).filter(([, value]) => value !== null && value !== false);
-  return Object.fromEntries(filled.map(([name, value]) => [name, String(value)]));
 }

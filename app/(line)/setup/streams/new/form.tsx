@@ -4,6 +4,7 @@ import { useState } from 'react';
 import { ActionForm } from '@/app/_ui/action-form';
 import { formWords } from '@/app/_ui/form-state';
 import { SectionHead } from '@/app/_ui/section-head';
+import { KINDS } from '@/lib/streams/schema';
 import type { Stream } from '@/lib/streams/types';
 import { ExpectedNote } from '../../expected-note';
 import { SpecificationFields } from '../../specification-fields';
@@ -17,6 +18,7 @@ export function NewStreamForm({ plans }: { plans: readonly { id: string; name: s
   const [words, setWords] = useState<Record<string, string>>({});
   const quantity: Stream['quantity'] =
     words['quantity'] === 'sheet_resistance' ? 'sheet_resistance' : 'resistivity';
+  const kind = KINDS.find((one) => one === words['kind']) ?? 'substrate';
   return (
     <ActionForm
       action={createStreamAction}
@@ -34,7 +36,7 @@ export function NewStreamForm({ plans }: { plans: readonly { id: string; name: s
           <SectionHead>What it aims at</SectionHead>
           <div className="with-beside">
             <div>
-              <TargetFields target={null} errors={errors} quantity={quantity} />
+              <TargetFields initial={{}} words={words} errors={errors} kind={kind} quantity={quantity} />
             </div>
             <ExpectedNote words={words} quantity={quantity} />
           </div>
