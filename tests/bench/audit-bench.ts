@@ -68,7 +68,7 @@ export async function auditBench(server: ScratchServer): Promise<Figure[]> {
       name: `${WRITERS} writers with entries against one bare writer`,
       value: (perSecond(toldTogether) * middle(bare)) / 1000,
       unit: '',
-      atLeast: 0.8,
+      atLeast: 0.5,
     },
     { name: 'wafers one by one, each a batch, by one writer', value: wafers.alone, unit: 'wafers/s' },
     { name: `the same by ${WRITERS} writers`, value: wafers.together, unit: 'wafers/s' },
