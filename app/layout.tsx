@@ -32,6 +32,7 @@ const places = [
   { href: '/', label: 'Board', covers: ['/streams', '/wafers'] },
   { href: '/excursions', label: 'Excursions' },
   { href: '/intake', label: 'Intake' },
+  { href: '/expected', label: 'Expected' },
   { href: '/setup', label: 'Setup' },
 ];
 

@@ -1,0 +1,147 @@
+import { CurvePlot } from '@/app/_charts/curve-plot';
+import { Figures } from '@/app/_ui/figures';
+import { SectionHead } from '@/app/_ui/section-head';
+import { formatDensityPerCm3, formatPercent, formatReading, formatSignedPercent } from '@/lib/format';
+import { againstExpected } from '@/lib/physics/against-expected';
+import { expectedOrNull } from '@/lib/physics/expected-or-null';
+import { standardResistivity } from '@/lib/physics/standard-resistivity';
+import type { Target } from '@/lib/physics/target';
+import { targetDensity } from '@/lib/physics/target-density';
+import { causeRows } from '../cause-rows';
+import { Causes } from '../causes';
+import { crystalPlot } from '../crystal-plot';
+import { AtTemperature } from './at-temperature';
+import { benchBudget } from './bench-budget';
+import type { BenchQuestion } from './bench-question';
+import { BudgetTable, DopantTable, ModelTable } from './bench-tables';
+import { conversionPlot } from './conversion-plot';
+import { layerPlot } from './layer-plot';
+import { modelRows } from './model-rows';
+
+/** All that the bench says of a target: its place on the curves, its depth or crystal, temperature, uncertainty. */
+export function BenchAnswer(props: { target: Target; question: BenchQuestion; query: string }) {
+  const { target, question, query } = props;
+  const { wafer, temperatureC } = question;
+  const density = targetDensity(target, wafer);
+  const expected = expectedOrNull(target, wafer);
+  const budget = expected && benchBudget(target, question);
+  const isLayer = target.quantity === 'sheet_resistance';
+  const ohmCm = standardOrNull(target, density);
+  return (
+    <>
+      {question.measured !== null && expected !== null && (
+        <Reading target={target} question={question} measured={question.measured} />
+      )}
+      <SectionHead id="conversion">Doping and resistivity</SectionHead>
+      <p className="quiet small">
+        ASTM F723 / SEMI MF723, one line for each published fit. Below 10¹⁹ cm⁻³ the phosphorus data serve for
+        arsenic and antimony.{isLayer && ' The mark is the peak of the layer.'}
+      </p>
+      <CurvePlot {...conversionPlot(target.dopant, density, temperatureC)} />
+      <div className="columns">
+        {ohmCm !== null && (
+          <DopantTable
+            densityPerCm3={density}
+            resistivityOhmCm={ohmCm}
+            href={`/api/expected/curves.csv?at=${temperatureC}`}
+          />
+        )}
+        <ModelTable rows={modelRows(target, density, wafer.ingotFraction ?? null)} />
+      </div>
+      {isLayer && (
+        <>
+          <SectionHead id="depth">In depth</SectionHead>
+          <CurvePlot {...layerPlot(target, density, wafer)} />
+        </>
+      )}
+      {target.alongCrystal && (
+        <>
+          <SectionHead id="crystal">Along the crystal</SectionHead>
+          <CurvePlot
+            {...crystalPlot(
+              target,
+              expected === null
+                ? []
+                : [
+                    {
+                      x: wafer.ingotFraction ?? 0,
+                      y: expected.value,
+                      label: 'expected here',
+                      kind: 'expected',
+                    },
+                  ],
+            )}
+          />
+        </>
+      )}
+      {expected !== null && (
+        <>
+          <SectionHead id="temperature">Away from 23 °C</SectionHead>
+          <AtTemperature
+            {...{ target, wafer, temperatureC }}
+            value={expected.value}
+            densityPerCm3={density}
+          />
+        </>
+      )}
+      {budget && (
+        <>
+          <SectionHead id="uncertainty">How well it is known</SectionHead>
+          <p className="quiet small">
+            The target’s tolerance is no part of it (JCGM 106:2012). Temperature and thickness enter once it
+            is said how well they are known.
+          </p>
+          <BudgetTable budget={budget} href={`/api/expected/budget.csv?${query}`} />
+        </>
+      )}
+    </>
+  );
+}
+
+/** The resistivity of the target's own dopant at a density; null outside the conversion. */
+function standardOrNull(target: Target, densityPerCm3: number): number | null {
+  try {
+    return standardResistivity(target.dopant, densityPerCm3);
+  } catch (error) {
+    if (error instanceof RangeError) return null;
+    throw error;
+  }
+}
+
+/** A reading held against what is expected, and what would explain the difference. */
+function Reading(props: { target: Target; question: BenchQuestion; measured: number }) {
+  const { target, question, measured } = props;
+  const against = againstExpected(target, measured, question.wafer);
+  if (against === null) return null;
+  const { expected } = against;
+  return (
+    <>
+      <SectionHead id="reading">A reading of {formatReading(target.quantity, measured)}</SectionHead>
+      <Figures
+        figures={[
+          {
+            name: 'difference',
+            value: `${formatSignedPercent(against.differencePercent)} ± ${formatPercent(against.differenceUncertaintyPercent, 1)}`,
+          },
+          { name: 'stands for', value: formatDensityPerCm3(against.densityPerCm3) },
+          {
+            name: 'against target',
+            value:
+              against.dopantPercent === null
+                ? '—'
+                : `${formatSignedPercent(against.dopantPercent)} dopant ± ${formatPercent(against.dopantUncertaintyPercent, 1)}`,
+          },
+        ]}
+      />
+      <SectionHead level={3}>What would explain it</SectionHead>
+      <Causes
+        rows={causeRows(
+          target,
+          question.wafer,
+          measured / expected.value,
+          against.differenceUncertaintyPercent,
+        )}
+      />
+    </>
+  );
+}
