@@ -1,5 +1,5 @@
-import { logGamma } from './log-gamma';
-import { standardNormalQuantile } from './standard-normal';
+import { logGamma, stirlingError } from './log-gamma';
+import { positiveQuantile } from './positive-quantile';
 
 /**
  * The part of a chi-square distribution that lies below x. Serves limits and intervals of standard deviations.
@@ -10,15 +10,51 @@ import { standardNormalQuantile } from './standard-normal';
  * Throws `RangeError` unless x is finite and the degrees of freedom are finite and positive.
  */
 export function chiSquareCdf(x: number, degreesOfFreedom: number): number {
+  return tails(x, degreesOfFreedom).lower;
+}
+
+/** The part of a chi-square distribution that lies above x, to its own digits where it is small. See `chiSquareCdf`. */
+export function chiSquareUpperTail(x: number, degreesOfFreedom: number): number {
+  return tails(x, degreesOfFreedom).upper;
+}
+
+/**
+ * The value below which a part p of a chi-square distribution lies, found on its tails.
+ *
+ * Throws `RangeError` unless 0 < p < 1 and the degrees of freedom are finite and positive.
+ *
+ * @example chiSquareQuantile(0.95, 1) // 3.841458821
+ */
+export function chiSquareQuantile(p: number, degreesOfFreedom: number): number {
+  return positiveQuantile(
+    p,
+    degreesOfFreedom,
+    (x) => chiSquareCdf(x, degreesOfFreedom),
+    (x) => chiSquareUpperTail(x, degreesOfFreedom),
+  );
+}
+
+function tails(x: number, degreesOfFreedom: number): { lower: number; upper: number } {
   if (!Number.isFinite(x)) throw new RangeError(`no chi-square probability at ${x}`);
   if (!(degreesOfFreedom > 0 && Number.isFinite(degreesOfFreedom))) {
     throw new RangeError(`chi-square needs positive degrees of freedom, not ${degreesOfFreedom}`);
   }
-  if (x <= 0) return 0;
+  if (x <= 0) return { lower: 0, upper: 1 };
   const a = degreesOfFreedom / 2;
   const y = x / 2;
-  const scale = Math.exp(a * Math.log(y) - y - logGamma(a));
-  return y < a + 1 ? scale * lowerSeries(a, y) : 1 - scale * upperFraction(a, y);
+  if (y < a + 1) {
+    const lower = power(a, y) * lowerSeries(a, y);
+    return { lower, upper: 1 - lower };
+  }
+  const upper = power(a, y) * upperFraction(a, y);
+  return { lower: 1 - upper, upper };
+}
+
+/** yᵃ·e⁻ʸ/Γ(a); for large a about its peak, where the three factors would cancel. */
+function power(a: number, y: number): number {
+  if (a < 10) return Math.exp(a * Math.log(y) - y - logGamma(a));
+  const off = (y - a) / a;
+  return Math.sqrt(a / (2 * Math.PI)) * Math.exp(a * (Math.log1p(off) - off) - stirlingError(a));
 }
 
 function lowerSeries(a: number, y: number): number {
@@ -45,26 +81,4 @@ function upperFraction(a: number, y: number): number {
     if (Math.abs(c * d - 1) < 1e-16) break;
   }
   return fraction;
-}
-
-/**
- * The value below which a part p of a chi-square distribution lies: bisection on `chiSquareCdf` from the bracket
- * around the cube of a normal value (E. B. Wilson and M. M. Hilferty, PNAS 17, 684 (1931)).
- *
- * Throws `RangeError` unless 0 < p < 1 and the degrees of freedom are finite and positive.
- *
- * @example chiSquareQuantile(0.95, 1) // 3.841458821
- */
-export function chiSquareQuantile(p: number, degreesOfFreedom: number): number {
-  const part = 2 / (9 * degreesOfFreedom);
-  const cube = 1 - part + standardNormalQuantile(p) * Math.sqrt(part);
-  let upper = Math.max(degreesOfFreedom * cube ** 3, 1e-6) * 2;
-  let lower = 0;
-  while (chiSquareCdf(upper, degreesOfFreedom) < p) upper *= 2;
-  for (let step = 0; step < 200 && upper - lower > 1e-15 * upper; step++) {
-    const middle = (lower + upper) / 2;
-    if (chiSquareCdf(middle, degreesOfFreedom) < p) lower = middle;
-    else upper = middle;
-  }
-  return (lower + upper) / 2;
 }

@@ -7,9 +7,9 @@ export interface SeededRandom {
 }
 
 /**
- * A small seeded generator for simulations and the demonstration line: a 32-bit counter through a mixing function (the finalizer of
- * A. Appleby's public-domain hash), normals by Box and Muller, Ann. Math. Statist. 29, 610 (1958). Good enough for
- * wafers, not for secrets.
+ * A small seeded generator for simulations and the demonstration line: a 32-bit counter through a mixing function (the
+ * finalizer of A. Appleby's public-domain hash), normals by Box and Muller, Ann. Math. Statist. 29, 610 (1958). Good
+ * enough for wafers, not for secrets.
  *
  * `seed` any text. Throws nothing.
  */

@@ -31,10 +31,25 @@ export function standardNormalCdf(z: number): number {
   return z < 0 ? tail : 1 - tail;
 }
 
+/**
+ * The natural logarithm of `standardNormalCdf`, also where the probability itself is smaller than any double.
+ *
+ * Throws `RangeError` when z is not finite.
+ */
+export function standardNormalLogCdf(z: number): number {
+  if (z > -3) return Math.log(standardNormalCdf(z));
+  if (!Number.isFinite(z)) throw new RangeError(`no normal probability at ${z}`);
+  return -0.5 * z * z - LOG_ROOT_TWO_PI - Math.log(tailFraction(-z));
+}
+
 function upperTail(z: number): number {
+  return standardNormalDensity(z) / tailFraction(z);
+}
+
+function tailFraction(z: number): number {
   let fraction = z;
   for (let k = 120; k >= 1; k--) fraction = z + k / fraction;
-  return standardNormalDensity(z) / fraction;
+  return fraction;
 }
 
 /**
