@@ -1,6 +1,7 @@
 import { mean } from '@/lib/stats/mean';
 import { betweenLimits } from './between-limits';
 import { MEAN_RANGE_OF_TWO, MOVING_RANGE_CLASSICAL, MOVING_RANGE_PROBABILITY } from './moving-range-factors';
+import { movingRangeSigma, type MovingRangeEstimator } from './moving-range-sigma';
 import { withinLimits } from './within-limits';
 
 export { limitAge, type LimitAge } from './limit-age';
@@ -32,8 +33,9 @@ export interface LimitSet {
  * The control limits that a baseline of subgroups sets.
  *
  * Level: centre ± 3σ with σ = mean moving range / d2(2), as for individuals in the NIST/SEMATECH e-Handbook,
- * section 6.3.2.2: from one subgroup to the next, never from the spread within a wafer, which is systematic.
- * Moving range: upper limit `probability` (3.760 × mean, the default) or `classical` (3.267 × mean).
+ * section 6.3.2.2: from one subgroup to the next, never from the spread within a wafer, which is systematic; or from
+ * the median moving range, which a few jumps in the baseline do not widen (`estimator`).
+ * Moving range: centre d2(2)·σ, upper limit `probability` (3.760 × mean, the default) or `classical` (3.267 × mean).
  * Within: limits at 0.135 and 99.865 % of a lognormal distribution, exp(m ± 3·s/c4) of the logarithms; null with
  * fewer than two subgroups of positive spread. Between: pooled over subgroups of two wafers or more, upper limit
  * the 99.73 % point of chi-square; null where no subgroup has two.
@@ -44,14 +46,13 @@ export interface LimitSet {
  */
 export function limitSet(
   baseline: readonly SubgroupPoint[],
-  options: { movingRange?: 'probability' | 'classical' } = {},
+  options: { movingRange?: 'probability' | 'classical'; estimator?: MovingRangeEstimator } = {},
 ): LimitSet {
   if (baseline.length < 2) throw new RangeError('a baseline needs at least two subgroups');
   const levels = baseline.map((point) => point.level);
   const centre = mean(levels);
-  const ranges = levels.slice(1).map((level, i) => Math.abs(level - (levels[i] ?? level)));
-  const meanRange = mean(ranges);
-  const sigma = meanRange / MEAN_RANGE_OF_TWO;
+  const sigma = movingRangeSigma(levels, options.estimator);
+  const meanRange = sigma * MEAN_RANGE_OF_TWO;
   const factor = options.movingRange === 'classical' ? MOVING_RANGE_CLASSICAL : MOVING_RANGE_PROBABILITY;
   return {
     n: baseline.length,

@@ -1,0 +1,48 @@
+import { monotoneRoot } from '@/lib/physics/monotone-root';
+import { ewmaRunLength, type EwmaDesign } from './ewma-run-length';
+import { assertWanted, type Wanted } from './wanted';
+
+/**
+ * The EWMA that sees the wanted shift soonest among those with the wanted mean number of points between false
+ * signals: for each λ the width that gives it, and the λ whose run length at the shift is the shortest, to about
+ * 0.01 (S. V. Crowder, J. Quality Technology 21, 155 (1989), for this way to choose, from memory). λ from 0.02 to 1.
+ *
+ * Throws `RangeError` unless 10 ≤ inControl ≤ 100 000 and 0.1 ≤ |shift| ≤ 6.
+ */
+export function ewmaFor(wanted: Wanted): EwmaDesign {
+  assertWanted(wanted);
+  const { shift } = wanted;
+  const at = (place: number): { design: EwmaDesign; length: number } => {
+    const lambda = Math.exp(place);
+    const design = { lambda, width: ewmaWidthFor(lambda, wanted.inControl) };
+    return { design, length: ewmaRunLength(design, { shift }) };
+  };
+  let [low, high] = [Math.log(0.02), 0];
+  const golden = (Math.sqrt(5) - 1) / 2;
+  let [left, right] = [at(high - golden * (high - low)), at(low + golden * (high - low))];
+  while (high - low > 0.05) {
+    if (left.length <= right.length) {
+      high = low + golden * (high - low);
+      [right, left] = [left, at(high - golden * (high - low))];
+    } else {
+      low = high - golden * (high - low);
+      [left, right] = [right, at(low + golden * (high - low))];
+    }
+  }
+  return left.length <= right.length ? left.design : right.design;
+}
+
+/**
+ * The limits, in σ of what is plotted, that give an EWMA of weight λ the wanted mean number of points between false
+ * signals. Throws `RangeError` unless 0.01 ≤ λ ≤ 1 and 10 ≤ inControl ≤ 100 000.
+ *
+ * @example ewmaWidthFor(0.1, 500) // 2.81
+ */
+export function ewmaWidthFor(lambda: number, inControl: number): number {
+  assertWanted({ inControl, shift: 1 });
+  const excess = (width: number): number =>
+    Math.log(ewmaRunLength({ lambda, width }) / inControl);
+  const width = monotoneRoot(excess, 0.3, 5, 1e-4);
+  if (width === null) throw new RangeError(`no width gives ${inControl} points at λ = ${lambda}`);
+  return width;
+}
