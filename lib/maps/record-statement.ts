@@ -92,6 +92,6 @@ export function batchTelling(batch: Batch, streamId: string | null): Telling {
     action: 'recorded maps',
     subject: { kind: 'batch', id },
     streamId,
-    after: { source, origin, history },
+    after: { source, origin, ...(history ? { history } : {}) },
   };
 }

@@ -35,6 +35,8 @@ export function AuditTable(props: { entries: readonly ListedEntry[]; timeZone: s
           cell: (entry) => {
             const href = subjectHref(entry);
             const words = subjectWords(entry);
+            if (entry.subjectId === entry.actorId && entry.subjectKind === 'person')
+              return <span className={styles.words}>{entry.action}</span>;
             return (
               <span className={styles.words}>
                 {entry.action}:{' '}
