@@ -66,6 +66,26 @@ test.describe('a stream with a past', () => {
     await expect(row).toContainText('impossible readings alone are taken out');
     await expect(page.getByRole('heading', { level: 1 })).toContainText('impossible readings alone');
   });
+
+  test('says why a draft is not set aside that was set aside meanwhile', async ({ page, context }) => {
+    await openPage(page, `/setup/streams/${SLUG}/limits`);
+    await page.getByText('Lower limit, centre line and upper limit from elsewhere').click();
+    const form = page.getByRole('form', { name: 'Enter inherited limits' });
+    await form.getByLabel('Level, lower limit').fill('4.4');
+    await form.getByLabel('Level, centre line').fill('4.5');
+    await form.getByLabel('Level, upper limit').fill('4.6');
+    await form.getByLabel('In force from').fill('2026-01-07T00:00');
+    await form.getByLabel('Why').fill('Once more');
+    await form.getByRole('button', { name: 'Enter them as a draft' }).click();
+    const button = { name: 'Set it aside' };
+    await expect(page.getByRole('button', button)).toBeVisible();
+    const other = await context.newPage();
+    await openPage(other, `/setup/streams/${SLUG}/limits`);
+    await other.getByRole('button', button).click();
+    await expect(other.getByRole('button', button)).toHaveCount(0);
+    await page.getByRole('button', button).click();
+    await expect(page.getByText('Only a draft can be set aside.')).toBeVisible();
+  });
 });
 
 test('a target of an implanted layer takes its calibration from a baseline', async ({ page }) => {

@@ -101,7 +101,7 @@ export const ACTIONS: Record<string, readonly ActionCall[]> = {
     stream('draft-limits', { lower: '9.7', centre: '10', upper: '10.3', ...from, ...why }),
   ],
   [`${OF_STREAM}/limits/actions.ts discardLimitsAction`]: [
-    { ...stream('draft-limits', {}, ({ own }) => [own.draftId]), silent: true },
+    stream('draft-limits', {}, ({ own }) => [own.draftId]),
   ],
   [`${OF_STREAM}/limits/actions.ts approveLimitsAction`]: [
     {

@@ -3,7 +3,6 @@
 import { revalidatePath } from 'next/cache';
 import { doneForm, faultsOf, formWords, refusedForm, type FormState } from '@/app/_ui/form-state';
 import { actionActor } from '@/app/action-actor';
-import { signedIn } from '@/app/page-actor';
 import { readEnvironment } from '@/lib/env';
 import { approveLimits, discardLimits, draftLimits, enterInheritedLimits } from '@/lib/limits/mutations';
 import { baselineSpan, inheritedLimits, limitApproval, limitDraft } from '@/lib/limits/schema';
@@ -78,8 +77,14 @@ export async function approveLimitsAction(
 }
 
 /** Sets a draft aside; it stays on record. */
-export async function discardLimitsAction(revisionId: string): Promise<void> {
-  const actor = await signedIn('draft-limits');
-  if (/^\d{1,18}$/.test(String(revisionId))) await discardLimits(actor, revisionId);
+export async function discardLimitsAction(revisionId: string, before: FormState): Promise<FormState> {
+  const asked = await actionActor('draft-limits');
+  if (!asked.ok) return refusedForm(before, { message: asked.reason });
+  if (!/^\d{1,18}$/.test(String(revisionId))) {
+    return refusedForm(before, { message: 'There is no such revision.' });
+  }
+  const discarded = await discardLimits(asked.actor, String(revisionId));
+  if (!discarded.ok) return refusedForm(before, { message: discarded.reason });
   revalidatePath('/setup', 'layout');
+  return doneForm(before, 'It is set aside.');
 }

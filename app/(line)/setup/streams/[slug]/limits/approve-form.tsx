@@ -1,8 +1,11 @@
 'use client';
 
+import { useActionState } from 'react';
 import { ActionForm } from '@/app/_ui/action-form';
 import { Button } from '@/app/_ui/button';
 import { Field } from '@/app/_ui/field';
+import { UNSENT } from '@/app/_ui/form-state';
+import { Notice } from '@/app/_ui/notice';
 import { approveLimitsAction, discardLimitsAction } from './actions';
 
 /** Someone's word on limits: approved with a reason and from when, or, where they judge nothing yet, set aside. */
@@ -16,15 +19,11 @@ export function ApproveForm(props: {
 }) {
   const { slug, revisionId, revision, isDraft } = props;
   const aside = `set-aside-${revisionId}`;
+  const [setAside, discard] = useActionState(discardLimitsAction.bind(null, revisionId), UNSENT);
   return (
     <>
-      {isDraft && (
-        <form
-          id={aside}
-          action={discardLimitsAction.bind(null, revisionId)}
-          aria-label={`Set revision ${revision} aside`}
-        />
-      )}
+      {isDraft && <form id={aside} action={discard} aria-label={`Set revision ${revision} aside`} />}
+      {setAside.message !== null && <Notice kind="call">{setAside.message}</Notice>}
       <ActionForm
         action={approveLimitsAction.bind(null, slug)}
         label={`Approve revision ${revision}`}
