@@ -5,7 +5,7 @@ import { type Environment, readEnvironment } from '@/lib/env';
 import { AppError } from '@/lib/errors';
 
 /** What a key is for: each purpose has its own, so that none can be used for another. */
-export type KeyPurpose = 'sessions' | 'audit' | 'demonstration' | 'first administrator';
+export type KeyPurpose = 'sessions' | 'audit' | 'first administrator';
 
 const KEY_BYTES = 32;
 const keys = new Map<string, Buffer>();

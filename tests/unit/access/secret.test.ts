@@ -26,7 +26,7 @@ describe('the plant’s secret', () => {
   });
 
   test('gives a key of its own for each purpose', () => {
-    const keys = (['sessions', 'audit', 'demonstration', 'first administrator'] as const).map((purpose) =>
+    const keys = (['sessions', 'audit', 'first administrator'] as const).map((purpose) =>
       plantKey(purpose).toString('hex'),
     );
     expect(new Set(keys).size).toBe(keys.length);
