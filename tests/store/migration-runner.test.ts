@@ -29,6 +29,12 @@ describe('applyMigrations', () => {
     expect(await applyMigrations(database.url, folder)).toEqual([]);
   });
 
+  it('goes by the whole name where two bear one number', async () => {
+    write('0002_pumps', 'alter table furnace add pumps int');
+    write('0002_lines', 'alter table furnace add lines int');
+    expect(await applyMigrations(database.url, folder)).toEqual(['0001_furnace', '0002_lines', '0002_pumps']);
+  });
+
   it('lets several instances start together: one applies, none fails', async () => {
     const results = await Promise.all(Array.from({ length: 6 }, () => applyMigrations(database.url, folder)));
     expect(results.flat()).toEqual(['0001_furnace']);
