@@ -109,7 +109,7 @@ export function CurvePlot(props: CurvePlotProps) {
               />
               <text
                 x={across.place(place.x) + (across.place(place.x) > width / 2 ? -5 : 5)}
-                y={box.top + 14 + 16 * (at % 3)}
+                y={box.bottom - 8 - 16 * (at % 3)}
                 textAnchor={across.place(place.x) > width / 2 ? 'end' : 'start'}
               >
                 {place.label}

@@ -3,6 +3,7 @@ import { Figures } from '@/app/_ui/figures';
 import { SectionHead } from '@/app/_ui/section-head';
 import { formatDensityPerCm3, formatPercent, formatReading, formatSignedPercent } from '@/lib/format';
 import { againstExpected } from '@/lib/physics/against-expected';
+import { isCompensated } from '@/lib/physics/compensated-target';
 import { expectedOrNull } from '@/lib/physics/expected-or-null';
 import { standardResistivity } from '@/lib/physics/standard-resistivity';
 import type { Target } from '@/lib/physics/target';
@@ -26,7 +27,8 @@ export function BenchAnswer(props: { target: Target; question: BenchQuestion; qu
   const expected = expectedOrNull(target, wafer);
   const budget = expected && benchBudget(target, question);
   const isLayer = target.quantity === 'sheet_resistance';
-  const ohmCm = standardOrNull(target, density);
+  const isMixed = isCompensated(target);
+  const ohmCm = isMixed ? null : standardOrNull(target, density);
   return (
     <>
       {question.measured !== null && expected !== null && (
@@ -36,8 +38,9 @@ export function BenchAnswer(props: { target: Target; question: BenchQuestion; qu
       <p className="quiet small">
         ASTM F723 / SEMI MF723, one line for each published fit. Below 10¹⁹ cm⁻³ the phosphorus data serve for
         arsenic and antimony.{isLayer && ' The mark is the peak of the layer.'}
+        {isMixed && ' Silicon of two dopants has no point on the curves of one.'}
       </p>
-      <CurvePlot {...conversionPlot(target.dopant, density, temperatureC)} />
+      <CurvePlot {...conversionPlot(target.dopant, isMixed ? null : density, temperatureC)} />
       <div className="columns">
         {ohmCm !== null && (
           <DopantTable
@@ -117,22 +120,24 @@ function Reading(props: { target: Target; question: BenchQuestion; measured: num
   return (
     <>
       <SectionHead id="reading">A reading of {formatReading(target.quantity, measured)}</SectionHead>
-      <Figures
-        figures={[
-          {
-            name: 'difference',
-            value: `${formatSignedPercent(against.differencePercent)} ± ${formatPercent(against.differenceUncertaintyPercent, 1)}`,
-          },
-          { name: 'stands for', value: formatDensityPerCm3(against.densityPerCm3) },
-          {
-            name: 'against target',
-            value:
-              against.dopantPercent === null
-                ? '—'
-                : `${formatSignedPercent(against.dopantPercent)} dopant ± ${formatPercent(against.dopantUncertaintyPercent, 1)}`,
-          },
-        ]}
-      />
+      <div style={{ maxWidth: 560 }}>
+        <Figures
+          figures={[
+            {
+              name: 'difference',
+              value: `${formatSignedPercent(against.differencePercent)} ± ${formatPercent(against.differenceUncertaintyPercent, 1)}`,
+            },
+            { name: 'stands for', value: formatDensityPerCm3(against.densityPerCm3) },
+            {
+              name: 'against target',
+              value:
+                against.dopantPercent === null
+                  ? '—'
+                  : `${formatSignedPercent(against.dopantPercent)} dopant ± ${formatPercent(against.dopantUncertaintyPercent, 1)}`,
+            },
+          ]}
+        />
+      </div>
       <SectionHead level={3}>What would explain it</SectionHead>
       <Causes
         rows={causeRows(

@@ -7,13 +7,17 @@ import { standardResistivity } from '@/lib/physics/standard-resistivity';
 
 const PER_DECADE = 12;
 
-/** Resistivity against doping for every dopant at a temperature, with one density marked on its own curve. */
-export function conversionPlot(dopant: Dopant, densityPerCm3: number, temperatureC: number): CurvePlotProps {
-  const at = resistivityAt(dopant, densityPerCm3, temperatureC);
-  const point = at === null ? [] : [{ x: densityPerCm3, y: at }];
+/** Resistivity against doping for every dopant at a temperature, with one density, if any, marked on its own curve. */
+export function conversionPlot(
+  dopant: Dopant,
+  densityPerCm3: number | null,
+  temperatureC: number,
+): CurvePlotProps {
+  const at = densityPerCm3 === null ? null : resistivityAt(dopant, densityPerCm3, temperatureC);
+  const point = at === null || densityPerCm3 === null ? [] : [{ x: densityPerCm3, y: at }];
   const words = `${formatDensityPerCm3(densityPerCm3)}, ${formatResistivity(at)}`;
   return {
-    title: `Resistivity against doping at ${temperatureC} °C, for ${DOPANTS.join(', ')}; ${dopant} of ${words} is marked.`,
+    title: `Resistivity against doping at ${temperatureC} °C, for ${DOPANTS.join(', ')}${point.length === 0 ? '' : `; ${dopant} of ${words} is marked`}.`,
     x: { label: 'dopant density, cm⁻³', domain: [1e12, 1e21], isLog: true },
     y: { label: `resistivity at ${temperatureC} °C, Ω·cm`, domain: [1e-4, 3e4], isLog: true },
     curves: DOPANTS.map((one) => ({

@@ -15,6 +15,7 @@ import { sensitivities } from '@/lib/physics/sensitivities';
 import { sheetResistance } from '@/lib/physics/sheet-resistance';
 import type { ExpectedWafer, Target } from '@/lib/physics/target';
 import { unitOf } from '@/lib/streams/types';
+import { rangeWords } from './words';
 
 /** The expected value with its standard uncertainty: "13.31 ± 0.23 Ω·cm". */
 export function expectedWords(target: Target, { value, uncertaintyPercent }: Expected): string {
@@ -29,7 +30,11 @@ export function knownRows(target: Target, expected: Expected): Figure[] {
     { name: 'standard uncertainty', value: formatPercent(uncertaintyPercent) },
     {
       name: 'band, k = 2',
-      value: `${reading(value * (1 - uncertaintyPercent / 50))} to ${reading(value * (1 + uncertaintyPercent / 50))}`,
+      value: rangeWords(
+        value * (1 - uncertaintyPercent / 50),
+        value * (1 + uncertaintyPercent / 50),
+        reading,
+      ),
       ink: 'expected',
       definition:
         'Twice the standard uncertainty to either side (JCGM 100:2008, 6.2). What is tolerated is no part of it.',
@@ -42,7 +47,7 @@ export function knownRows(target: Target, expected: Expected): Figure[] {
   if (target.tolerancePercent !== null) {
     rows.push({
       name: 'at the tolerance',
-      value: `${reading(expected.toleranceLower)} to ${reading(expected.toleranceUpper)}`,
+      value: rangeWords(expected.toleranceLower, expected.toleranceUpper, reading),
     });
   }
   return rows;
