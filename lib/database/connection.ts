@@ -6,6 +6,7 @@ import { startEmbeddedServer, stopEmbeddedServer } from './embedded-server';
 import { grantProgram } from './grant-program';
 import { applyMigrations } from './migration-runner';
 import { type Presence, enterDatabase } from './presence';
+import { programBelow } from './program-below';
 
 /** A database at the newest migration, with `getPool` and `getPrisma` pointed at it. */
 export interface OpenDatabase {
@@ -98,8 +99,9 @@ export async function openDatabase(options: OpeningOptions): Promise<OpenDatabas
   try {
     const alone = options.serving !== true || entered.pid === null || (await entered.presence.serve());
     if (!alone) throw new AlreadyServing();
+    const role = ownerUrl === null ? null : await programBelow(ownerUrl, entered.url);
     const applied = await applyMigrations(ownerUrl ?? entered.url);
-    if (ownerUrl !== null) await grantProgram(ownerUrl, entered.url);
+    if (ownerUrl !== null && role !== null) await grantProgram(ownerUrl, role);
     if (applied.length > 0) options.say(`Database brought to ${applied.at(-1)}.`);
   } catch (error) {
     await leave();

@@ -5,7 +5,7 @@ import { ensureDemonstrationPeople } from '@/lib/access/demonstration';
 import { verifyAudit } from '@/lib/access/verify-audit';
 import { closeClients, getPool, openClients } from '@/lib/database/client';
 import { openDatabase, type OpenDatabase } from '@/lib/database/connection';
-import { grantProgram } from '@/lib/database/grant-program';
+import { programBelow } from '@/lib/database/program-below';
 import { stepExcursion } from '@/lib/excursions/mutations';
 import { decideReading } from '@/lib/maps/mutations';
 import { retireStream } from '@/lib/streams/mutations';
@@ -87,8 +87,33 @@ describe('a program whose role is not the owner of its tables', () => {
   });
 });
 
-test('a program that signs in as the owner, or above it, is told so', async () => {
-  await expect(grantProgram(database.url, database.url)).rejects.toThrow(
-    'give the program a role of its own',
-  );
+describe('a program that could undo what it is not granted', () => {
+  const HINT = 'REASSIGN OWNED BY';
+
+  test('is told so where it signs in as the owner', async () => {
+    await expect(programBelow(database.url, database.url)).rejects.toThrow(
+      'give the program a role of its own',
+    );
+  });
+
+  test.each([
+    ['owns the database', (name: string) => `ALTER DATABASE ${name} OWNER TO ${role}`],
+    ['owns a table', () => `ALTER TABLE audit_entry OWNER TO ${role}`],
+    ['owns what a trigger calls', () => `ALTER FUNCTION refuse_change OWNER TO ${role}`],
+  ])('is told so where it %s', async (_words, sql) => {
+    const own = await freshDatabase();
+    try {
+      await runSql(own.url, sql(new URL(own.url).pathname.slice(1)));
+      const url = new URL(own.url);
+      url.username = role;
+      url.password = 'of this test only';
+      const opening = openDatabase({ say: () => undefined, databaseUrl: url.href, ownerUrl: own.url });
+      await expect(opening).rejects.toThrow(HINT);
+      await runSql(own.url, `REASSIGN OWNED BY ${role} TO CURRENT_USER`);
+      expect(await programBelow(own.url, url.href)).toBe(role);
+    } finally {
+      await own.drop();
+      openClients(programUrl);
+    }
+  });
 });
