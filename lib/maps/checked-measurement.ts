@@ -1,9 +1,11 @@
-import { hasTemperatureCoefficient } from '@/lib/physics/temperature-coefficient';
+import { inForce } from '@/lib/streams/in-force';
 import type { StreamSettings } from '@/lib/streams/types';
+import { expectedWafer } from './measured-wafer';
 import { VALUE_COLUMNS, type ValueColumn } from './map-columns';
 import type { RawMap } from './raw-maps';
 import { readFacts } from './read-facts';
 import { inSiteOrder } from './site-order';
+import { temperatureFaults } from './temperature-faults';
 import { runOrLot } from './wafer-rows';
 import { measurementName, type MapProblem, type Measurement } from './types';
 
@@ -85,28 +87,18 @@ export function checkedMeasurement(map: RawMap, context: CheckContext): Checked 
   } else if (!facts.correctionsApplied.includes('temperature')) {
     if (facts.temperatureC === null)
       problem(map.firstLine, 'temperature_c', 'not corrected for temperature, and none is given');
-    else if (facts.temperatureC < 18 || facts.temperatureC > 28) {
-      problem(
-        map.firstLine,
-        'temperature_c',
-        `the correction holds from 18 to 28 °C, not at ${facts.temperatureC} °C`,
-      );
-    } else if (stream.quantity !== 'resistivity') {
-      problem(
-        map.firstLine,
-        'corrections_applied',
-        'a layer has no general temperature coefficient: correct it at the gauge',
-      );
-    } else if (settings.targets.length === 0) {
-      problem(
-        map.firstLine,
-        'corrections_applied',
-        'the stream has no target: whether its silicon is n or p, which decides the correction, is not known',
-      );
-    } else {
-      for (const row of beyondCorrection(map.values).slice(0, MOST_ROWS_TOLD)) {
-        const reason = `the temperature correction holds from 0.001 to 500 Ω·cm, not at ${map.values[row]}: correct it at the gauge`;
-        problem(map.lines[row] as number, context.valueColumn, reason);
+    else {
+      const target = inForce(settings.targets, facts.processedAt)?.target;
+      if (target === undefined) {
+        const reason =
+          'the stream has no target: what its wafers are, which decides the correction, is not known';
+        problem(map.firstLine, 'corrections_applied', reason);
+      } else {
+        const found = temperatureFaults(target, map.values, facts.temperatureC, expectedWafer(stream, facts));
+        for (const { row, reason } of found.slice(0, MOST_ROWS_TOLD)) {
+          if (row === null) problem(map.firstLine, 'temperature_c', reason);
+          else problem(map.lines[row] as number, context.valueColumn, reason);
+        }
       }
     }
   }
@@ -117,12 +109,4 @@ export function checkedMeasurement(map: RawMap, context: CheckContext): Checked 
   }
   if (problems.length > 0) return { problems, name, identity };
   return { measurement: { streamId: stream.id, facts, readings }, name, identity };
-}
-
-/** The rows whose reading the temperature correction does not know; what is zero or negative is no resistivity anyway. */
-function beyondCorrection(values: readonly (number | null)[]): number[] {
-  return [...values.keys()].filter((row) => {
-    const value = values[row];
-    return typeof value === 'number' && value > 0 && !hasTemperatureCoefficient(value);
-  });
 }

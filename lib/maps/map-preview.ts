@@ -1,7 +1,7 @@
 import type { StreamSettings } from '@/lib/streams/types';
 import type { SiteStatus } from '@/lib/wafer/measure-wafer';
 import type { Site } from '@/lib/wafer/site';
-import { measuredWafer, measuringStream, type MeasuringStream } from './measured-wafer';
+import { expectedWafer, measuredWafer, measuringStream, type MeasuringStream } from './measured-wafer';
 import type { Measurement } from './types';
 import { valuesAt23C } from './values-at-23c';
 
@@ -41,7 +41,14 @@ export function mapPreview(settings: StreamSettings, measurement: Measurement, n
     diameterMm: stream.plan.diameterMm,
     orientation: stream.plan.orientation,
     sites: stream.plan.sites,
-    values: [...valuesAt23C(measurement.readings, measurement.facts, measured.target?.target ?? null)],
+    values: [
+      ...valuesAt23C(
+        measurement.readings,
+        measurement.facts,
+        measured.target?.target ?? null,
+        expectedWafer(stream, measurement.facts),
+      ),
+    ],
     status: measured.measure.status,
     repeatabilityPercent: stream.repeatabilityPercent,
     level: measured.measure.figures[stream.controlStatistic],

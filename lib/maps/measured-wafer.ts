@@ -54,7 +54,7 @@ export function measuredWafer(
 ): MeasuredWafer {
   const { stream, targets, specifications } = by.settings;
   const target = inForce(targets, facts.processedAt);
-  const values = valuesAt23C(readings, facts, target?.target ?? null);
+  const values = valuesAt23C(readings, facts, target?.target ?? null, expectedWafer(stream, facts));
   const screening = options.screen ?? screeningAt(by.settings, facts.processedAt);
   const measure = measureWafer(values, by.geometry, {
     screen: screening,

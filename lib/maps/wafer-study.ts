@@ -54,14 +54,14 @@ export function waferStudy({ wafer, settings, decisions, usual: past }: WaferOnR
   const { stream } = settings;
   const geometry = geometryOf(stream.plan);
   const target = settings.targets.find(({ id }) => id === wafer.targetRevisionId) ?? null;
-  const values = valuesAt23C(wafer.readings, wafer.facts, target?.target ?? null);
+  const brought = expectedWafer(stream, wafer.facts);
+  const values = valuesAt23C(wafer.readings, wafer.facts, target?.target ?? null, brought);
   const out = new Map(wafer.badSites.map(({ siteIndex }) => [siteIndex, 'out' as const]));
   const measure = measureWafer(values, geometry, { screen: 'off', overrides: out, shape: true });
   const reasons = new Map(wafer.badSites.map(({ siteIndex, reason }) => [siteIndex, reason]));
   const overrides = new Map(decisions.map(({ siteIndex, action }) => [siteIndex, action]));
   const screened = measureWafer(values, geometry, { screen: wafer.screening, overrides, shape: false });
   const statistic = measure.figures[stream.controlStatistic];
-  const brought = expectedWafer(stream, wafer.facts);
   const hold = (calibrated: boolean): AgainstExpected | null => {
     if (target === null || statistic === null || statistic <= 0) return null;
     const bare = { ...target.target, calibrationFactor: null, calibrationPercent: null };
@@ -69,7 +69,7 @@ export function waferStudy({ wafer, settings, decisions, usual: past }: WaferOnR
   };
   const usual = usualMap(
     past.wafers.map((one) => ({
-      values: valuesAt23C(one.readings, one, target?.target ?? null),
+      values: valuesAt23C(one.readings, one, target?.target ?? null, brought),
       badSites: one.badSites,
     })),
     geometry,

@@ -114,17 +114,26 @@ describe('a measurement checked against its stream', () => {
     const words = { corrections_applied: 'thickness geometry spacing', temperature_c: '25' };
     expect(problems(rawMap(words))).toEqual([]);
     expect(problems(rawMap({ ...words, temperature_c: '' }))).toMatchObject([{ column: 'temperature_c' }]);
-    expect(because(rawMap({ ...words, temperature_c: '29' }))).toEqual([
-      'the correction holds from 18 to 28 °C, not at 29 °C',
+    expect(problems(rawMap({ ...words, temperature_c: '29' }))).toEqual([]);
+    expect(problems(rawMap({ ...words, temperature_c: '80' }))).toMatchObject([
+      { column: 'temperature_c', reason: expect.stringMatching(/340 K.*Correct it at the gauge\.$/) },
     ]);
     expect(because(rawMap({ corrections_applied: 'temperature' }))[0]).toContain(
       'not corrected for thickness and geometry and spacing',
     );
     expect(because(rawMap(words), settings({}, { target: null }))[0]).toContain('the stream has no target');
-    const sheet = settings({ quantity: 'sheet_resistance' });
-    expect(because(rawMap(words), sheet, { valueColumn: 'sheet_resistance_ohm_sq' })[0]).toContain(
-      'a layer has no',
-    );
+  });
+
+  it('of a layer is corrected by its own profile, or refused where that has none', () => {
+    const words = { corrections_applied: 'thickness geometry spacing', temperature_c: '25' };
+    const ofLayer = (target: Parameters<typeof settings>[1]) =>
+      because(rawMap(words), settings({ quantity: 'sheet_resistance' }, target), {
+        valueColumn: 'sheet_resistance_ohm_sq',
+      });
+    const gaussian = { quantity: 'sheet_resistance', profile: 'gaussian', densityPerCm3: 1e19 } as const;
+    const on = { lengthUm: 0.5, backgroundDopant: 'phosphorus', backgroundDensityPerCm3: 1e15 } as const;
+    expect(ofLayer({ target: { ...gaussian, ...on } })).toEqual([]);
+    expect(ofLayer({ target: gaussian })[0]).toContain('Correct it at the gauge');
   });
 
   it('is refused with the line of each reading that the temperature correction does not reach', () => {
@@ -136,7 +145,7 @@ describe('a measurement checked against its stream', () => {
       [2, 4].map((row) => ({
         line: rawMap().lines[row],
         column: 'resistivity_ohm_cm',
-        reason: `the temperature correction holds from 0.001 to 500 Ω·cm, not at ${values[row]}: correct it at the gauge`,
+        reason: `The temperature coefficient is published from 0.001 to 500 Ω·cm, not at ${values[row]}. Correct it at the gauge.`,
       })),
     );
     expect(problems(rawMap({}, { values }))).toEqual([]);

@@ -5,6 +5,8 @@ import type { RawMap } from '@/lib/maps/raw-maps';
 import { sentContent } from '@/lib/maps/sent-content';
 import { correctedBy, valuesAt23C } from '@/lib/maps/values-at-23c';
 import { subgroupKey } from '@/lib/maps/wafer-rows';
+import { targetCoefficientPercentPerC } from '@/lib/physics/value-at-temperature';
+import { GAUSSIAN } from '../physics/targets';
 import { plan, settings } from './demo-settings';
 
 const factsOf = (words: RawMap['words'] = {}) =>
@@ -19,20 +21,33 @@ describe('valuesAt23C', () => {
 
   it('leaves readings as sent where the sender corrected them', () => {
     const readings = [1, null, -2];
-    expect(valuesAt23C(readings, { correctionsApplied: ['temperature'], temperatureC: 25 }, boron)).toBe(
+    expect(valuesAt23C(readings, { correctionsApplied: ['temperature'], temperatureC: 25 }, boron, {})).toBe(
       readings,
     );
   });
 
   it('brings each possible reading to 23 °C (ASTM F84: 10 Ω·cm p-type at 25 °C is 9.835)', () => {
-    const [a, b, c, d] = valuesAt23C([10, null, -2, 0], uncorrected, boron);
+    const [a, b, c, d] = valuesAt23C([10, null, -2, 0], uncorrected, boron, {});
     expect(a).toBeCloseTo(9.835, 3);
     expect([b, c, d]).toEqual([null, -2, 0]);
-    expect(valuesAt23C([10], { ...uncorrected, temperatureC: 23 }, boron)).toEqual([10]);
+    expect(valuesAt23C([10], { ...uncorrected, temperatureC: 23 }, boron, {})).toEqual([10]);
+  });
+
+  it('brings a layer to 23 °C by its own profile, not as silicon of that many Ω·cm', () => {
+    // p-type silicon of 170 Ω·cm would have 0.88 % per °C (ASTM F84); its depths are far heavier.
+    const [value = 0] = valuesAt23C([170], uncorrected, GAUSSIAN, {});
+    expect(100 * (1 - (value ?? 0) / 170)).toBeCloseTo(2 * targetCoefficientPercentPerC(GAUSSIAN), 9);
+    expect(targetCoefficientPercentPerC(GAUSSIAN)).toBeLessThan(0.2);
+    const own = { ...GAUSSIAN, temperatureCoefficientPercentPerC: 0.2 };
+    expect(valuesAt23C([100, null, -1], uncorrected, own, {})).toEqual([expect.closeTo(99.6, 9), null, -1]);
+  });
+
+  it('knows no correction without a target', () => {
+    expect(valuesAt23C([10], uncorrected, null, {})).toEqual([null]);
   });
 
   it('has no value for a reading beyond the method, and says who corrected what', () => {
-    expect(valuesAt23C([600], uncorrected, boron)).toEqual([null]);
+    expect(valuesAt23C([600], uncorrected, boron, {})).toEqual([null]);
     expect(correctedBy(['temperature', 'spacing'])).toBe('all as sent');
     expect(correctedBy([])).toContain('ASTM F84');
   });
