@@ -36,6 +36,13 @@ export function AtCursor(props: {
                 { name: 'expected', value: texts.expected ?? dash, ink: 'expected' as const },
                 { name: 'difference', value: texts.difference ?? dash },
                 { name: 'as dopant', value: texts.dopant ?? dash },
+                { name: 'stands for', value: texts.density ?? dash },
+                {
+                  name: 'on the one before',
+                  value: texts.onBefore ?? dash,
+                  definition:
+                    'As dopant, with one standard uncertainty of the gauge’s repeatability alone: what is common to all wafers of a stream tells none from the next.',
+                },
               ]
             : []),
           { name: 'moving range', value: texts.movingRange ?? dash },

@@ -31,6 +31,7 @@ export function packedPoints(points: readonly StreamChartPoint[]): string {
       const { id, index, label, at, day, href, completions, outOfSpecification, open, judged, hollow } =
         point;
       const { level, expected, difference, dopant, movingRange, within, between, notes } = point.texts;
+      const { density, onBefore } = point.texts;
       return [
         id,
         index,
@@ -44,7 +45,18 @@ export function packedPoints(points: readonly StreamChartPoint[]): string {
         figure(point.between),
         completions.length === 0 ? 0 : completions,
         (outOfSpecification ? 1 : 0) + (open ? 2 : 0) + (judged ? 4 : 0) + (hollow ? 8 : 0),
-        [level, point.texts.at, expected, difference, dopant, movingRange, within, between],
+        [
+          level,
+          point.texts.at,
+          expected,
+          difference,
+          dopant,
+          movingRange,
+          within,
+          between,
+          density,
+          onBefore,
+        ],
         notes,
       ];
     }),
@@ -81,6 +93,8 @@ export function unpackedPoints(packed: string): StreamChartPoint[] {
         movingRange: texts[5] ?? null,
         within: texts[6] ?? null,
         between: texts[7] ?? null,
+        density: texts[8] ?? null,
+        onBefore: texts[9] ?? null,
         notes: row[13],
       },
     };

@@ -36,6 +36,10 @@ export interface StreamPointTexts {
   expected: string | null;
   difference: string | null;
   dopant: string | null;
+  /** The density that the level stands for. */
+  density: string | null;
+  /** Against the point before it, as dopant: what is common to a stream tells neither from the other. */
+  onBefore: string | null;
   movingRange: string | null;
   within: string | null;
   between: string | null;

@@ -6,8 +6,10 @@ import type { BoardStream } from './types';
 export interface LevelAgainstExpected {
   /** 100 · (measured / expected − 1). */
   differencePercent: number;
-  /** The same as dopant, with the standard uncertainty (k = 1) of what is expected; null without a model. */
-  dopant: { percent: number; uncertaintyPercent: number } | null;
+  /** Standard uncertainty (k = 1) of that, from what is expected; null where nothing is known of it. */
+  uncertaintyPercent: number | null;
+  /** The same as dopant, with its uncertainty, and the density that it makes; null without a model. */
+  dopant: { percent: number; uncertaintyPercent: number; densityPerCm3: number } | null;
 }
 
 /** Null without a level, and where the wafers of a subgroup differ in what is expected of them. */
@@ -20,15 +22,23 @@ export function levelAgainstExpected(
   const value = expected?.value ?? null;
   if (chartedValue !== 'relative' && value === null) return null;
   const ratio = chartedValue === 'relative' ? Math.exp(level / 100) : level / (value as number);
-  return { differencePercent: 100 * (ratio - 1), dopant: asDopant(ratio, expected) };
+  return {
+    differencePercent: 100 * (ratio - 1),
+    uncertaintyPercent: expected && ratio * expected.uncertaintyPercent,
+    dopant: asDopant(ratio, expected),
+  };
 }
 
 function asDopant(ratio: number, expected: PointExpected | null): LevelAgainstExpected['dopant'] {
   if (expected === null || expected.model === null) return null;
-  const { sensitivity } = expected.model;
+  const { sensitivity, densityPerCm3 } = expected.model;
   const percent = dopantPercent(ratio, sensitivity);
   if (percent === null) return null;
-  return { percent, uncertaintyPercent: Math.abs(expected.uncertaintyPercent / sensitivity) };
+  return {
+    percent,
+    uncertaintyPercent: Math.abs(expected.uncertaintyPercent / sensitivity),
+    densityPerCm3: densityPerCm3 * (1 + percent / 100),
+  };
 }
 
 /**

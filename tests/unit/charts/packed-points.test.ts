@@ -24,6 +24,8 @@ const point: StreamChartPoint = {
     expected: null,
     difference: '−1.6 %',
     dopant: '+1.8 ± 0.4 %',
+    density: '1.02 × 10¹⁵ cm⁻³',
+    onBefore: '−0.31 ± 0.05 %',
     movingRange: null,
     within: '0.00 %',
     between: '0.25 Ω·cm',

@@ -9,6 +9,8 @@ const texts = {
   expected: null,
   difference: null,
   dopant: null,
+  density: null,
+  onBefore: null,
   movingRange: null,
   within: null,
   between: null,

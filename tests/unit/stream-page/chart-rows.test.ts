@@ -4,7 +4,7 @@ import { modelsOf } from '@/lib/excursions/point-expected';
 import { spanPoint, spanWafer, BORON } from './fixtures';
 
 const source = (over: Partial<ChartSource> = {}): ChartSource => ({
-  stream: { subgroup: 'wafer', chartedValue: 'statistic' },
+  stream: { subgroup: 'wafer', chartedValue: 'statistic', repeatabilityPercent: 0.7 },
   points: [0, 1, 2].map((nth) => ({ ...spanPoint(nth, { level: 13 + nth / 10 }), index: nth })),
   wafersOf: new Map(['1', '2', '3'].map((id) => [id, [spanWafer(id)]])),
   modelOf: modelsOf([{ id: 't1', target: BORON }]),
@@ -25,22 +25,39 @@ describe('the rows of a stream’s charts', () => {
 
   it('hold the level against expected, in percent and as percent dopant with its uncertainty', () => {
     const [row] = chartRows(source({ points: [{ ...spanPoint(0, { level: 13.306 * 0.98 }), index: 0 }] }));
-    expect(row?.texts.difference).toMatch(/^−2\.0\s%$/);
+    expect(row?.texts.difference).toMatch(/^−2\.0 ± 2\.0\s%$/);
     expect(row?.texts.dopant).toMatch(/^\+2\.1 ± 2\.0\s%$/);
     expect(row?.texts.expected).toMatch(/^13\.31 ± 0\.27\sΩ·cm$/);
+  });
+
+  it('say what density a point stands for, and how it differs from the one before it by the gauge alone', () => {
+    const [first, second] = chartRows(source());
+    expect(first?.texts.density).toMatch(/^1\.02\s×\s10¹⁵\scm⁻³$/);
+    expect(first?.texts.onBefore).toBeNull();
+    // 13.0 to 13.1 Ω·cm: −100·ln(13.1/13)/0.986; 0.7 % over 49 sites of each: 0.7·√(2/49)/0.986.
+    expect(second?.texts.onBefore).toMatch(/^−0\.78 ± 0\.14\s%$/);
+  });
+
+  it('compare with the point before each by its own target', () => {
+    const wafersOf = new Map([
+      ['1', [spanWafer('1', { expected: 13 })]],
+      ['2', [spanWafer('2', { expected: 13.1 })]],
+    ]);
+    const points = [0, 1].map((nth) => ({ ...spanPoint(nth, { level: 13 + nth / 10 }), index: nth }));
+    expect(chartRows(source({ points, wafersOf }))[1]?.texts.onBefore).toMatch(/^0\.00 ± 0\.14\s%$/);
   });
 
   it('read a relative level as what it is: 100·ln(measured/expected)', () => {
     const [row] = chartRows(
       source({
-        stream: { subgroup: 'run', chartedValue: 'relative' },
+        stream: { subgroup: 'run', chartedValue: 'relative', repeatabilityPercent: 0.7 },
         points: [{ ...spanPoint(0, { key: 'R0042', level: -2.02 }), index: 0 }],
         unit: { unit: '%', factor: 1, levelLabel: '' },
       }),
     );
     expect(row?.label).toBe('run R0042');
     expect(row?.texts.level).toMatch(/^−2\.02\s%$/);
-    expect(row?.texts.difference).toMatch(/^−2\.0\s%$/);
+    expect(row?.texts.difference).toMatch(/^−2\.0 ± 2\.0\s%$/);
     expect(row?.texts.dopant).toMatch(/^\+2\.1 ± 2\.0\s%$/);
   });
 

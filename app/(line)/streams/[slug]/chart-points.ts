@@ -1,4 +1,5 @@
 import type { StreamChartPoint } from '@/app/_charts/stream-chart-point';
+import { levelAgainstExpected } from '@/lib/excursions/level-against-expected';
 import { type ModelOf, type PointExpected, pointExpected } from '@/lib/excursions/point-expected';
 import { subgroupLabel } from '@/lib/excursions/subgroup-label';
 import type { SpanWafer } from '@/lib/excursions/span-wafers';
@@ -7,11 +8,11 @@ import type { Stream } from '@/lib/streams/types';
 import type { ChartUnit } from './chart-unit';
 import type { DrawnPoint } from './drawn-points';
 import { lateOnes } from './late-ones';
-import { pointTexts } from './point-texts';
+import { type PointAgainst, pointTexts } from './point-texts';
 
 /** What the rows of a stream's charts are made of. */
 export interface ChartSource {
-  stream: Pick<Stream, 'subgroup' | 'chartedValue'>;
+  stream: Pick<Stream, 'subgroup' | 'chartedValue' | 'repeatabilityPercent'>;
   points: readonly DrawnPoint[];
   wafersOf: ReadonlyMap<string, readonly SpanWafer[]>;
   modelOf: ModelOf;
@@ -33,12 +34,17 @@ export function chartRows(source: ChartSource): ChartRow[] {
   const late = lateOnes(source.points, source.wafersOf);
   const scaled = (value: number | null) => value && value * unit.factor;
   let before: number | null = null;
+  let pointBefore: PointAgainst | null = null;
   return source.points.map((point) => {
     const wafers = source.wafersOf.get(point.id) ?? [];
     const expected = pointExpected(wafers, source.modelOf);
     const ownRange = before === null || point.level === null ? null : Math.abs(point.level - before);
     if (point.level !== null) before = point.level;
     const shown = { ...point, movingRange: isFiltered ? ownRange : point.movingRange };
+    const texts = pointTexts({ shown, wafers, expected, unit, stream, before: pointBefore });
+    if (point.level !== null) {
+      pointBefore = { against: levelAgainstExpected(point.level, expected, stream.chartedValue), wafers };
+    }
     const at = new Date(point.at);
     const minute = formatDateTime(at, source.timeZone);
     return {
@@ -57,10 +63,7 @@ export function chartRows(source: ChartSource): ChartRow[] {
       judged: point.state === 'judged',
       hollow: late.has(point.id) || wafers.some((wafer) => wafer.isMeasuredAgain),
       href: wafers[0] === undefined ? '' : `/wafers/${wafers[0].id}`,
-      texts: {
-        at: minute,
-        ...pointTexts({ shown, wafers, expected, unit, chartedValue: stream.chartedValue }),
-      },
+      texts: { at: minute, ...texts },
       expected,
     };
   });

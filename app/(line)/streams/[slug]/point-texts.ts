@@ -4,12 +4,14 @@ import { type LevelAgainstExpected, levelAgainstExpected } from '@/lib/excursion
 import type { PointExpected } from '@/lib/excursions/point-expected';
 import type { SpanWafer } from '@/lib/excursions/span-wafers';
 import {
+  formatDensityPerCm3,
   formatNumber,
   formatPercent,
   formatSignedPercent,
   formatWithUncertainty,
   undefinedMark,
 } from '@/lib/format';
+import { dopantScalePercent } from '@/lib/physics/dopant-scale-percent';
 import type { Stream } from '@/lib/streams/types';
 import type { ChartUnit } from './chart-unit';
 
@@ -19,9 +21,12 @@ export function pointTexts(args: {
   wafers: readonly SpanWafer[];
   expected: PointExpected | null;
   unit: ChartUnit;
-  chartedValue: Stream['chartedValue'];
+  stream: Pick<Stream, 'chartedValue' | 'repeatabilityPercent'>;
+  /** The point before it, where there is one with a level. */
+  before: PointAgainst | null;
 }): Omit<StreamPointTexts, 'at'> {
-  const { shown, wafers, expected, unit, chartedValue } = args;
+  const { shown, wafers, expected, unit, stream } = args;
+  const { chartedValue } = stream;
   const isRelative = chartedValue === 'relative';
   const inUnit = (value: number | null, digits: number) =>
     value === null ? null : `${formatNumber(value * unit.factor, digits)}\u00a0${unit.unit}`;
@@ -29,8 +34,10 @@ export function pointTexts(args: {
   return {
     level: isRelative ? formatSignedPercent(shown.level, 2) : (inUnit(shown.level, 4) ?? undefinedMark),
     expected: expected === null ? null : expectedText(expected, unit, isRelative),
-    difference: against && formatSignedPercent(against.differencePercent),
+    difference: against && differenceText(against),
     dopant: dopantText(against?.dopant ?? null),
+    density: against?.dopant ? formatDensityPerCm3(against.dopant.densityPerCm3) : null,
+    onBefore: onBeforeText({ against, wafers }, args.before, expected, stream.repeatabilityPercent),
     movingRange: isRelative
       ? shown.movingRange === null
         ? null
@@ -46,8 +53,47 @@ export function pointTexts(args: {
   };
 }
 
+/** A point as the next is told from it. */
+export interface PointAgainst {
+  against: LevelAgainstExpected | null;
+  wafers: readonly SpanWafer[];
+}
+
+/** "−2.0 ± 1.7 %": the difference in the reading, with the standard uncertainty of what is expected. */
+function differenceText({ differencePercent, uncertaintyPercent }: LevelAgainstExpected): string {
+  const difference = formatSignedPercent(differencePercent).replace(/\s%$/, '');
+  return uncertaintyPercent === null
+    ? formatSignedPercent(differencePercent)
+    : `${difference} ± ${formatPercent(uncertaintyPercent, 1)}`;
+}
+
+/**
+ * A point against the one before it, in percent of dopant. Each is held against what was expected of it, so a change of
+ * the target in between is no difference; of the uncertainty only the repeatability of the gauge is not common to both.
+ */
+function onBeforeText(
+  { against, wafers }: PointAgainst,
+  before: PointAgainst | null,
+  expected: PointExpected | null,
+  repeatabilityPercent: number,
+): string | null {
+  if (against === null || !before?.against || expected?.model == null) return null;
+  const ratio = (100 + against.differencePercent) / (100 + before.against.differencePercent);
+  const { sensitivity } = expected.model;
+  const readings = (of: readonly SpanWafer[]) =>
+    Math.max(
+      1,
+      of.reduce((sum, wafer) => sum + wafer.sites - wafer.badSites, 0),
+    );
+  const ownPercent = repeatabilityPercent * Math.sqrt(1 / readings(wafers) + 1 / readings(before.wafers));
+  return dopantText({
+    percent: dopantScalePercent(ratio, sensitivity),
+    uncertaintyPercent: Math.abs(ownPercent / sensitivity),
+  });
+}
+
 /** "+2.1 ± 1.7 %": the difference as percent dopant, with the standard uncertainty of what is expected. */
-function dopantText(dopant: LevelAgainstExpected['dopant']): string | null {
+function dopantText(dopant: { percent: number; uncertaintyPercent: number } | null): string | null {
   if (dopant === null) return null;
   const text = formatWithUncertainty(dopant.percent, dopant.uncertaintyPercent, '%');
   return dopant.percent > 0 ? `+${text}` : text;
