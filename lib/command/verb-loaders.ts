@@ -9,4 +9,5 @@ export const verbLoaders: ReadonlyMap<string, () => Promise<Verb>> = new Map([
   ['map', async () => (await import('./verbs/map')).map],
   ['expect', async () => (await import('./verbs/expect')).expect],
   ['study', async () => (await import('./verbs/study')).study],
+  ['components', async () => (await import('./verbs/components')).components],
 ]);

@@ -1,4 +1,5 @@
 import { describe, expect, it } from 'vitest';
+import { varianceComponents } from '@/lib/control/variance-components';
 import { andersonDarling } from '@/lib/stats/anderson-darling';
 import { betaCdf, betaQuantile } from '@/lib/stats/beta-distribution';
 import { chiSquareCdf, chiSquareQuantile, chiSquareUpperTail } from '@/lib/stats/chi-square';
@@ -141,6 +142,24 @@ const claims: Claim[] = [
     1e-12,
   ],
 ];
+
+/** Values of lots of unequal size, of wafers of unequal size, and what a dense restricted likelihood says of them. */
+const unequal = [3, 1, 5, 2, 4, 3].flatMap((wafers, lot) => {
+  const level = 3 * random.normal();
+  return Array.from({ length: wafers }, (_, wafer) => {
+    const here = level + random.normal();
+    return Array.from({ length: 2 + ((lot + wafer) % 4) }, () => ({
+      labels: [`L${lot}`, `W${wafer}`],
+      value: 50 + here + random.normal(),
+    }));
+  }).flat();
+});
+claims.push([
+  'reml',
+  [unequal.map(({ value }) => value), unequal.map(({ labels }) => labels)],
+  varianceComponents(unequal, ['lot', 'wafer']).levels.map(({ reml }) => reml ?? 0),
+  1e-8,
+]);
 
 describe.skipIf(!generalPurposePresent)(
   'a general-purpose package (scipy, statsmodels; skipped where absent)',
