@@ -9,6 +9,7 @@ import { PageHead } from '@/app/_ui/page-head';
 import { signedIn } from '@/app/page-actor';
 import { readEnvironment } from '@/lib/env';
 import { findStreamSettings } from '@/lib/streams/data';
+import { AlongCrystal } from './along-crystal';
 import { chartProps } from './chart-props';
 import { MeasureAgain } from './measure-again';
 import { pageWords, spanNotices } from './page-words';
@@ -66,6 +67,7 @@ export default async function StreamPage(props: Props) {
           <aside>{beside}</aside>
         </div>
       )}
+      <AlongCrystal view={view} />
       <WaferTable view={view} />
       <MeasureAgain view={view} />
     </>

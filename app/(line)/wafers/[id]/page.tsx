@@ -4,6 +4,7 @@ import { readEnvironment } from '@/lib/env';
 import { mapViewOf } from '@/lib/maps/wafer-map-view';
 import { waferStudy } from '@/lib/maps/wafer-study';
 import { waferTitle } from '@/lib/maps/wafer-title';
+import { ExplainPart } from './explain-part';
 import { FactsPart } from './facts-part';
 import { FiguresPart } from './figures-part';
 import { MapPart } from './map-part';
@@ -53,6 +54,7 @@ export default async function WaferPage({ params, searchParams }: WaferPageProps
           <FiguresPart shown={shown} />
         </div>
       </div>
+      <ExplainPart shown={shown} />
       <ReadingsPart shown={shown} site={site ?? ''} />
       <FactsPart shown={shown} />
     </>

@@ -10,6 +10,7 @@ import {
 } from '@/lib/format';
 import { missingWords } from '@/lib/maps/measured-wafer';
 import type { AgainstExpected } from '@/lib/physics/against-expected';
+import { isUniform } from '@/lib/physics/is-uniform';
 import { figureDefinition } from '@/lib/wafer/figure-definition';
 import type { WaferShown } from './wafer-shown';
 import styles from './page.module.css';
@@ -77,8 +78,7 @@ function expectedRows(shown: WaferShown, against: AgainstExpected, options = { b
   const { expected, densityPerCm3, dopantPercent } = against;
   const { target } = shown.study;
   const value = expected.value / shown.scale;
-  const peak =
-    target?.target.profile === 'gaussian' || target?.target.profile === 'erfc' ? ', at the peak' : '';
+  const peak = target && !isUniform(target.target) ? ', at the peak' : '';
   const dopant =
     dopantPercent === null
       ? undefinedMark
@@ -110,7 +110,7 @@ function expectedRows(shown: WaferShown, against: AgainstExpected, options = { b
     {
       name: 'against target',
       value: dopant,
-      definition: `100 · (density / target − 1). Here 1 % more dopant makes the reading ${formatNumber(-expected.sensitivity, 2)} % lower.`,
+      definition: `100 · (density / target − 1). Here 1 % more dopant moves the reading by ${formatSignedPercent(expected.sensitivity, 2)}.`,
     },
   ];
 }

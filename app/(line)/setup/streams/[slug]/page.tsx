@@ -1,4 +1,5 @@
 import type { Metadata } from 'next';
+import Link from 'next/link';
 import { SectionHead } from '@/app/_ui/section-head';
 import { IfMay } from '@/app/if-may';
 import { signedIn } from '@/app/page-actor';
@@ -7,6 +8,8 @@ import { listLatestWafers } from '@/lib/maps/data';
 import { isImplantedOrDiffused } from '@/lib/physics/is-implanted-or-diffused';
 import { siteTimeField } from '@/lib/site-time';
 import { inForce } from '@/lib/streams/in-force';
+import { wordsOfTarget } from '@/lib/streams/words-of-target';
+import { benchAddress } from '../../../expected/bench-question';
 import { foundStream } from '../../found-stream';
 import { StreamHead } from '../../stream-head';
 import { targetWords } from '../../words';
@@ -22,6 +25,7 @@ export default async function TargetPage(props: {
 }) {
   const actor = await signedIn('see-line');
   const { stream, targets } = await foundStream(actor, props.params);
+  const { kind, quantity } = stream;
   const { siteTimeZone } = readEnvironment();
   const now = new Date();
   const target = inForce(targets, now)?.target ?? null;
@@ -49,12 +53,23 @@ export default async function TargetPage(props: {
           timeZone={siteTimeZone}
         />
       )}
-      <SectionHead id="new">A new revision</SectionHead>
+      <SectionHead
+        id="new"
+        aside={
+          target !== null && (
+            <Link href={benchAddress({ kind, quantity, ...wordsOfTarget(target) })} prefetch={false}>
+              the one in force on the bench
+            </Link>
+          )
+        }
+      >
+        A new revision
+      </SectionHead>
       <IfMay permission="revise-target" streamId={stream.id}>
         <TargetForm
           slug={stream.slug}
-          kind={stream.kind}
-          quantity={stream.quantity}
+          kind={kind}
+          quantity={quantity}
           wafers={latestWafers}
           target={target}
           now={siteTimeField(now, siteTimeZone)}
