@@ -1,8 +1,8 @@
 import type { ClientBase, PoolClient } from 'pg';
 import { getPool } from '@/lib/database/client';
-import { endAfter, endOf, knownChain, learnEnd, type EndRow } from './audit-chain';
+import { endAfter, endOf, knownChain, type EndRow } from './audit-chain';
 import { linkedEntries, type ChainEnd, type LinkedEntry, type Told } from './audit-entry';
-import { keepHead } from './audit-head';
+import { keepEnd } from './keep-end';
 import { plantKey } from './secret';
 
 /** After so many times that others were quicker the caller goes the way that waits. */
@@ -41,17 +41,12 @@ async function written<Result extends { appeared: boolean }>(
   told: Told,
   write: (client: ClientBase, entries: readonly LinkedEntry[]) => Promise<Result>,
 ): Promise<Result | null> {
-  const pool = getPool();
-  let end = knownChain(pool).end ?? (await readEnd(client));
+  let end = knownChain(getPool()).end ?? (await readEnd(client));
   for (let tries = 0; tries < MOST_TRIES; tries += 1) {
     const entries = linkedEntries(plantKey('audit'), end, [told], new Date());
     try {
       const result = await write(client, entries);
-      if (result.appeared) {
-        const newEnd = endAfter(end, entries);
-        learnEnd(pool, newEnd);
-        keepHead(newEnd);
-      }
+      if (result.appeared) await keepEnd(client, endAfter(end, entries));
       return result;
     } catch (error) {
       if (!isMovedOn(error)) throw error;

@@ -14,12 +14,14 @@ interface KnownChain {
   end: ChainEnd | null;
   /** Settles when nobody in this process is writing at the end it knows. */
   turn: Promise<unknown>;
+  /** Whether the head that was kept outside the database was found in it; null where nobody has looked yet. */
+  headHolds: boolean | null;
 }
 
 const chains = new WeakMap<Pool, KnownChain>();
 
 export function knownChain(pool: Pool): KnownChain {
-  const chain = chains.get(pool) ?? { end: null, turn: Promise.resolve() };
+  const chain = chains.get(pool) ?? { end: null, turn: Promise.resolve(), headHolds: null };
   chains.set(pool, chain);
   return chain;
 }

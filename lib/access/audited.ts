@@ -2,9 +2,9 @@ import type { PoolClient } from 'pg';
 import { getPool } from '@/lib/database/client';
 import { inTransaction } from '@/lib/database/transaction';
 import type { Actor } from './actor';
-import { appending, learnEnd } from './audit-chain';
+import { appending } from './audit-chain';
 import type { ChainEnd, Telling, Told } from './audit-entry';
-import { keepHead } from './audit-head';
+import { keepEnd } from './keep-end';
 import { plantKey } from './secret';
 
 /** Tells of one thing that was done; it is written at the end of the transaction. */
@@ -38,9 +38,6 @@ export async function chained<Result>(
       return statement;
     },
   });
-  if (newEnd.end !== null) {
-    learnEnd(getPool(), newEnd.end);
-    keepHead(newEnd.end);
-  }
+  if (newEnd.end !== null) await keepEnd(getPool(), newEnd.end);
   return result;
 }
