@@ -1,5 +1,5 @@
 import { randomBytes } from 'node:crypto';
-import { mkdirSync, readFileSync, renameSync, rmSync, writeFileSync } from 'node:fs';
+import { existsSync, mkdirSync, readdirSync, readFileSync, renameSync, rmSync, writeFileSync } from 'node:fs';
 import path from 'node:path';
 import { readEnvironment } from '@/lib/env';
 import type { ChainEnd } from './audit-entry';
@@ -62,6 +62,13 @@ function replaceFile(file: string, { id, mac }: ChainEnd): void {
     rmSync(draft, { force: true });
     throw error;
   }
+}
+
+/** The files in the data folder that keep heads of other chains than this. */
+export function strangeHeads(chain: string): string[] {
+  const { dir, base } = path.parse(headFile(chain));
+  const names = existsSync(dir) ? readdirSync(dir) : [];
+  return names.filter((name) => /^audit-head-[0-9a-f-]{36}$/.test(name) && name !== base).sort();
 }
 
 /** The head in a file; null where there is no such file or it holds none. */

@@ -2,7 +2,7 @@ import type { ClientBase } from 'pg';
 import { getPool } from '@/lib/database/client';
 import { AppError } from '@/lib/errors';
 import { entryMac, MAC_BEFORE_FIRST, type AuditEntry } from './audit-entry';
-import { headFile, keepWaitingHeads, readHead, type AuditHead } from './audit-head';
+import { headFile, keepWaitingHeads, readHead, strangeHeads, type AuditHead } from './audit-head';
 import { plantKey } from './secret';
 
 /** A place where the chain does not hold: these entries, and what is wrong with them. */
@@ -11,15 +11,18 @@ export interface BrokenPlace {
   to: number;
   /**
    * altered: edited, moved, or written with another key; missing: taken out of the middle or the beginning;
-   * cut: taken off the end; replaced: not the entry that was kept outside the database as the last.
+   * unproven: linked to one that is missing, so that nobody can tell whether it is as written; cut: taken off the end;
+   * replaced: not the entry that was kept outside the database as the last.
    */
-  fault: 'altered' | 'missing' | 'cut' | 'replaced';
+  fault: 'altered' | 'missing' | 'unproven' | 'cut' | 'replaced';
 }
 
 export interface AuditVerdict {
   entries: number;
   /** The heads kept outside the database that the chain was held against. */
   heads: number;
+  /** Files beside its own that keep the head of another chain: of another database, or of the one that was here before. */
+  strangers: string[];
   broken: BrokenPlace[];
 }
 
@@ -44,7 +47,8 @@ export async function verifyAudit(headFiles: readonly string[] = []): Promise<Au
     const chain = rows[0]?.name ?? '';
     const own = readHead(headFile(chain));
     const others = headFiles.map(givenHead);
-    return await followed(client, chain, own === null ? others : [own, ...others]);
+    const verdict = await followed(client, chain, own === null ? others : [own, ...others]);
+    return { ...verdict, strangers: strangeHeads(chain) };
   } finally {
     client.release();
   }
@@ -56,9 +60,13 @@ function givenHead(file: string): AuditHead {
   return head;
 }
 
-async function followed(client: ClientBase, chain: string, heads: AuditHead[]): Promise<AuditVerdict> {
+async function followed(
+  client: ClientBase,
+  chain: string,
+  heads: AuditHead[],
+): Promise<Omit<AuditVerdict, 'strangers'>> {
   const key = plantKey('audit');
-  const verdict: AuditVerdict = { entries: 0, heads: heads.length, broken: [] };
+  const verdict: Omit<AuditVerdict, 'strangers'> = { entries: 0, heads: heads.length, broken: [] };
   let last = 0;
   let previousMac: Buffer | null = MAC_BEFORE_FIRST;
   for (;;) {
@@ -68,9 +76,9 @@ async function followed(client: ClientBase, chain: string, heads: AuditHead[]): 
         note(verdict, { from: last + 1, to: entry.id - 1, fault: 'missing' });
         previousMac = null;
       }
-      // What follows a gap is linked to what is missing: it cannot be told whether it is as it was.
-      const isSound = previousMac === null || entryMac(key, chain, previousMac, entry).equals(mac);
-      if (!isSound) note(verdict, { from: entry.id, to: entry.id, fault: 'altered' });
+      const isSound = previousMac !== null && entryMac(key, chain, previousMac, entry).equals(mac);
+      const fault = previousMac === null ? 'unproven' : 'altered';
+      if (!isSound) note(verdict, { from: entry.id, to: entry.id, fault });
       for (const head of heads) {
         if (head.id === entry.id && !head.mac.equals(mac))
           note(verdict, { from: entry.id, to: entry.id, fault: 'replaced' });
@@ -87,7 +95,7 @@ async function followed(client: ClientBase, chain: string, heads: AuditHead[]): 
 }
 
 /** Places that touch and have the same fault are one. */
-function note({ broken }: AuditVerdict, place: BrokenPlace): void {
+function note({ broken }: Pick<AuditVerdict, 'broken'>, place: BrokenPlace): void {
   const before = broken.at(-1);
   if (before?.fault === place.fault && before.to + 1 === place.from) before.to = place.to;
   else if (broken.length < MOST_PLACES) broken.push(place);

@@ -1,4 +1,5 @@
 import { copyFileSync, rmSync } from 'node:fs';
+import path from 'node:path';
 import { afterAll, beforeAll, beforeEach, describe, expect, test, vi } from 'vitest';
 import { commandActor } from '@/lib/access/local-actor';
 import { audited } from '@/lib/access/audited';
@@ -47,7 +48,7 @@ const broken = async () => (await verifyAudit()).broken;
 
 describe('verifying the audit trail', () => {
   test('finds nothing where nothing was touched', async () => {
-    expect(await verifyAudit()).toEqual({ entries: ENTRIES, heads: 1, broken: [] });
+    expect(await verifyAudit()).toEqual({ entries: ENTRIES, heads: 1, strangers: [], broken: [] });
   });
 
   test.each([
@@ -76,12 +77,18 @@ describe('verifying the audit trail', () => {
 
   test('names what is missing in the middle', async () => {
     await asOwner('DELETE FROM audit_entry WHERE id IN (12, 13)');
-    expect(await broken()).toEqual([{ from: 12, to: 13, fault: 'missing' }]);
+    expect(await broken()).toEqual([
+      { from: 12, to: 13, fault: 'missing' },
+      { from: 14, to: 14, fault: 'unproven' },
+    ]);
   });
 
   test('names what is missing at the beginning', async () => {
     await asOwner('DELETE FROM audit_entry WHERE id <= 3');
-    expect(await broken()).toEqual([{ from: 1, to: 3, fault: 'missing' }]);
+    expect(await broken()).toEqual([
+      { from: 1, to: 3, fault: 'missing' },
+      { from: 4, to: 4, fault: 'unproven' },
+    ]);
   });
 
   test('names everything after a gap that was closed by new numbers', async () => {
@@ -140,6 +147,7 @@ describe('verifying the audit trail', () => {
     await rename('gen_random_uuid()');
     expect(await verifyAudit()).toMatchObject({
       heads: 0,
+      strangers: [path.basename(head)],
       broken: [{ from: 1, to: ENTRIES, fault: 'altered' }],
     });
     await rename(`'${rows[0]?.name}'`);
@@ -152,7 +160,7 @@ describe('verifying the audit trail', () => {
     keepWaitingHeads();
     expect(readHead(head)).toMatchObject({ id: ENTRIES + 1 });
     copyFileSync(`${head}.copy`, head);
-    expect(await verifyAudit()).toEqual({ entries: ENTRIES + 1, heads: 1, broken: [] });
+    expect(await verifyAudit()).toMatchObject({ entries: ENTRIES + 1, heads: 1, broken: [] });
   });
 
   test('holds the chain against the heads of other instances as well', async () => {

@@ -10,10 +10,10 @@ export const audit: Verb = {
 
   --verify     follow the chain of entries and name each place where it does not hold
   --head FILE  hold it against the head that another instance kept (audit-head-… in its data folder) as well
-  --json       one JSON object on standard output: entries, heads, broken
+  --json       one JSON object on standard output: entries, heads, strangers, broken
 
 Needs the secret that the entries were written with: EVENOHM_SECRET, or the file in the data folder. Ends with 3 where
-the chain is broken.`,
+the chain is broken, and where no head is there to hold its end against.`,
   run: verify,
 };
 
@@ -25,7 +25,7 @@ async function verify(args: string[], output: VerbOutput): Promise<ExitStatus> {
     const verdict = await verifyAudit(head);
     if (json === true) output.out(JSON.stringify(verdict));
     else for (const line of verdictLines(verdict)) output.out(line);
-    return verdict.broken.length > 0 ? 3 : 0;
+    return verdictStatus(verdict, database.embedded);
   } finally {
     await database.close();
   }
@@ -47,8 +47,26 @@ function parsed(args: string[]) {
   }
 }
 
+/**
+ * Whether a verdict is a good one. A chain whose end is held against nothing is not, nor one in an embedded database,
+ * which is alone in its folder, beside the head of another.
+ */
+export function verdictStatus(verdict: AuditVerdict, embedded: boolean): ExitStatus {
+  const { entries, heads, strangers, broken } = verdict;
+  const isHeld = heads > 0 || entries === 0;
+  return broken.length > 0 || !isHeld || (embedded && strangers.length > 0) ? 3 : 0;
+}
+
 /** What a verdict says, a line for each broken place. */
-export function verdictLines({ entries, heads, broken }: AuditVerdict): string[] {
+export function verdictLines(verdict: AuditVerdict): string[] {
+  const others = verdict.strangers.map(
+    (file) =>
+      `${file} keeps the head of another chain: unless that is of another database, this one was put in its place.`,
+  );
+  return [...chainLines(verdict), ...others];
+}
+
+function chainLines({ entries, heads, broken }: AuditVerdict): string[] {
   const kept = heads === 0 ? ' No head of it is kept here, so that a cut end would not show.' : '';
   if (broken.length === 0) return [`${counted(entries)}, and the chain holds.${kept}`];
   const [first] = broken;
@@ -67,6 +85,7 @@ function counted(entries: number): string {
 const FAULTS: Record<BrokenPlace['fault'], string> = {
   altered: 'not as written: edited, moved, or written with another key',
   missing: 'missing',
+  unproven: 'linked to one that is missing: whether it is as written cannot be told',
   cut: 'missing: cut off the end after they were kept as written',
   replaced: 'not the one that was kept outside the database',
 };
