@@ -1,4 +1,4 @@
-import type { ClientBase } from 'pg';
+import type { ClientBase, Pool } from 'pg';
 import { getPool } from '@/lib/database/client';
 import { AppError } from '@/lib/errors';
 import { entryMac, MAC_BEFORE_FIRST, type AuditEntry } from './audit-entry';
@@ -101,7 +101,8 @@ function note({ broken }: Pick<AuditVerdict, 'broken'>, place: BrokenPlace): voi
   else if (broken.length < MOST_PLACES) broken.push(place);
 }
 
-async function entriesAfter(client: ClientBase, id: number): Promise<EntryRow[]> {
+/** The next entries of the chain after one, so many as are read at once. */
+export async function entriesAfter(client: ClientBase | Pool, id: number): Promise<EntryRow[]> {
   const { rows } = await client.query<Omit<EntryRow, 'id'> & { id: string }>(
     `SELECT id, at, actor_kind AS "actorKind", actor_id AS "actorId", actor_name AS "actorName", action,
        subject_kind AS "subjectKind", subject_id AS "subjectId", stream_id AS "streamId", before::text, after::text, why, mac

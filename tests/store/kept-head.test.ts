@@ -1,5 +1,6 @@
 import { readFileSync, rmSync } from 'node:fs';
 import { afterAll, beforeEach, describe, expect, test, vi } from 'vitest';
+import { auditWarning } from '@/lib/access/audit-at-start';
 import { headFile, keepWaitingHeads } from '@/lib/access/audit-head';
 import { audited } from '@/lib/access/audited';
 import { commandActor } from '@/lib/access/local-actor';
@@ -66,6 +67,27 @@ describe('a head that the database no longer holds, because an older one was put
     await act(1);
     expect(readFileSync(head, 'utf8')).toMatch(/^8 /);
     expect(await verifyAudit()).toMatchObject({ entries: 8, heads: 1, broken: [] });
+  });
+});
+
+describe('what is said of the end of the audit trail at the start', () => {
+  test('is nothing where all is well', async () => {
+    expect(await auditWarning()).toBeNull();
+  });
+
+  test('is that the secret is another one', async () => {
+    vi.stubEnv('EVENOHM_SECRET', 'another secret of thirty-two characters and more');
+    expect(await auditWarning()).toMatch(/does not bear the key of this secret: the secret was lost/);
+    vi.unstubAllEnvs();
+  });
+
+  test('is that it was cut, or that nothing is there to tell by', async () => {
+    await cut(6);
+    expect(await auditWarning()).toMatch(/does not hold entry 10 as it was\.$/);
+    rmSync(head);
+    expect(await auditWarning()).toMatch(/^No head of the audit trail is kept in /);
+    await cut(0);
+    expect(await auditWarning()).toBeNull();
   });
 });
 

@@ -59,7 +59,7 @@ async function serveUntilStopped(
       writeServingNote(environment.dataFolder, { pid: process.pid, address: web.address });
       closers.push(() => removeServingNote(environment.dataFolder));
     }
-    await preparePeople(web.address, say);
+    await prepareAccess(web.address, say);
     if (environment.demo) await seedFirstStart(say);
     stop.throwIfAborted();
     if (!dev && !isBuilt()) await withProgress(say, 'Building the app', () => buildApp(stop));
@@ -85,12 +85,18 @@ async function seedFirstStart(say: (text: string) => void): Promise<void> {
   await withProgress(say, 'Filling in the demonstration line', () => seedDemo(say, endAt));
 }
 
-/** Puts in the people of the demonstration line, tells of what is not yet in the audit trail, and says how the first administrator gets in. */
-async function preparePeople(address: string, say: (text: string) => void): Promise<void> {
+/**
+ * Says what is wrong with the end of the audit trail and tells there of what is not yet in it, puts in the people of the
+ * demonstration line, and says how the first administrator gets in.
+ */
+async function prepareAccess(address: string, say: (text: string) => void): Promise<void> {
   const { ensureDemonstrationPeople, isDemonstrationOffered } = await import('@/lib/access/demonstration');
   const { firstAdministratorCode, isFirstAdministratorDue } =
     await import('@/lib/access/first-administrator');
+  const { auditWarning } = await import('@/lib/access/audit-at-start');
   const { chainAccessEvents } = await import('@/lib/access/chain-access-events');
+  const warning = await auditWarning();
+  if (warning !== null) say(`${warning} Look into it: npx evenohm audit --verify.`);
   if (isDemonstrationOffered()) await ensureDemonstrationPeople();
   await chainAccessEvents();
   if (!(await isFirstAdministratorDue())) return;
