@@ -11,7 +11,7 @@ export function Causes({ rows }: { rows: readonly CauseRow[] }) {
         usual is common practice, not this line’s own.
       </p>
       <DataTable
-        caption="What would explain this difference"
+        caption="Single causes"
         captionUnseen
         rows={rows}
         rowKey={(row) => row.cause}

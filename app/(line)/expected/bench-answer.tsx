@@ -80,11 +80,13 @@ export function BenchAnswer(props: { target: Target; question: BenchQuestion; qu
       {expected !== null && (
         <>
           <SectionHead id="temperature">Away from 23 °C</SectionHead>
-          <AtTemperature
-            {...{ target, wafer, temperatureC }}
-            value={expected.value}
-            densityPerCm3={density}
-          />
+          <div style={{ maxWidth: 560 }}>
+            <AtTemperature
+              {...{ target, wafer, temperatureC }}
+              value={expected.value}
+              densityPerCm3={density}
+            />
+          </div>
         </>
       )}
       {budget && (

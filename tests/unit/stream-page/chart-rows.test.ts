@@ -38,6 +38,11 @@ describe('the rows of a stream’s charts', () => {
     expect(second?.texts.onBefore).toMatch(/^−0\.78 ± 0\.14\s%$/);
   });
 
+  it('stand for no one density where their wafers are of different places along a crystal', () => {
+    const wafers = [0.1, 0.5].map((ingotFraction) => spanWafer('1', { ingotFraction }));
+    expect(chartRows(source({ wafersOf: new Map([['1', wafers]]) }))[0]?.texts.density).toBeNull();
+  });
+
   it('compare with the point before each by its own target', () => {
     const wafersOf = new Map([
       ['1', [spanWafer('1', { expected: 13 })]],

@@ -36,7 +36,7 @@ export function pointTexts(args: {
     expected: expected === null ? null : expectedText(expected, unit, isRelative),
     difference: against && differenceText(against),
     dopant: dopantText(against?.dopant ?? null),
-    density: against?.dopant ? formatDensityPerCm3(against.dopant.densityPerCm3) : null,
+    density: against?.dopant && isOnePlace(wafers) ? formatDensityPerCm3(against.dopant.densityPerCm3) : null,
     onBefore: onBeforeText({ against, wafers }, args.before, expected, stream.repeatabilityPercent),
     movingRange: isRelative
       ? shown.movingRange === null
@@ -52,6 +52,10 @@ export function pointTexts(args: {
     notes: notesOf(wafers),
   };
 }
+
+/** Wafers from different places along a crystal have no one density. */
+const isOnePlace = (wafers: readonly SpanWafer[]) =>
+  new Set(wafers.map((wafer) => wafer.ingotFraction)).size <= 1;
 
 /** A point as the next is told from it. */
 export interface PointAgainst {

@@ -54,12 +54,15 @@ export function ExplainPart({ shown }: { shown: WaferShown }) {
         rows={causeRows(target, brought, statistic / against.expected.value, differenceUncertaintyPercent)}
       />
       {target.alongCrystal && fraction !== null && (
-        <CurvePlot
-          {...crystalPlot(target, [
-            { x: fraction, y: statistic, label: `${waferTitle(wafer.facts)}, measured`, kind: 'measured' },
-            { x: fraction, y: against.expected.value, label: 'expected here', kind: 'expected' },
-          ])}
-        />
+        <>
+          <SectionHead level={3}>Along the crystal</SectionHead>
+          <CurvePlot
+            {...crystalPlot(target, [
+              { x: fraction, y: statistic, label: `${waferTitle(wafer.facts)}, measured`, kind: 'measured' },
+              { x: fraction, y: against.expected.value, label: 'expected here', kind: 'expected' },
+            ])}
+          />
+        </>
       )}
     </section>
   );

@@ -1,4 +1,5 @@
 import { DataTable } from '@/app/_ui/data-table';
+import { subgroupLabel, type SubgroupWord } from '@/lib/excursions/subgroup-label';
 import { formatDateTime, formatPercent } from '@/lib/format';
 import type { BeyondPoint } from './baseline-study';
 import type { ChartedText } from './charted-text';
@@ -6,6 +7,7 @@ import type { ChartedText } from './charted-text';
 /** The points of a baseline that lie beyond the limits drawn from it. */
 export function BeyondTable(props: {
   beyond: readonly BeyondPoint[];
+  subgroup: SubgroupWord;
   text: ChartedText;
   timeZone: string;
   href: string;
@@ -18,7 +20,7 @@ export function BeyondTable(props: {
       rowKey={({ point }) => point.id}
       download={{ href: props.href, label: 'All subgroups of the span as CSV' }}
       columns={[
-        { key: 'key', head: 'subgroup', cell: ({ point }) => point.key },
+        { key: 'key', head: 'subgroup', cell: ({ point }) => subgroupLabel(props.subgroup, point.key) },
         { key: 'at', head: 'processed', cell: ({ point }) => formatDateTime(point.at, props.timeZone) },
         { key: 'level', head: 'level', align: 'right', cell: ({ point }) => text.level(point.level) },
         {

@@ -61,6 +61,7 @@ export async function DraftFromSpan(props: {
       {beyond.length > 0 && (
         <BeyondTable
           beyond={beyond}
+          subgroup={stream.subgroup}
           text={text}
           timeZone={timeZone}
           href={`/api/setup/streams/${stream.slug}/baseline?${query}`}
