@@ -30,5 +30,8 @@ export function signalSentence(signal: {
   const words = (count: number) => ruleSentence(signal.rule, signal.side, count, signal.chart as ChartName);
   const chart = CHART_WORDS[signal.chart];
   if (chart === undefined) return words(inARow);
-  return `${chart} ${inARow > 1 ? `${inARow} times ` : ''}${words(1)}`;
+  if (inARow <= 1) return `${chart} ${words(1)}`;
+  // "24 times beyond the limit" would read as a distance: the count stands behind what is no question.
+  const said = words(1);
+  return said.endsWith('?') ? `${chart} ${inARow} times ${said}` : `${chart} ${said} ${inARow} times`;
 }

@@ -24,11 +24,17 @@ describe('a signal in words', () => {
     expect(sentence('within', 'beyond-limit', 'below')).toBe(
       'spread within the wafer suspiciously even: stuck gauge or copied readings?',
     );
-    expect(sentence('within', 'beyond-limit', 'above', 1, 24)).toBe(
-      'spread within the wafer 24 times beyond the upper limit',
-    );
     expect(sentence('between', 'beyond-limit', 'above')).toBe(
       'spread between the wafers of a subgroup beyond the upper limit',
+    );
+  });
+
+  it('counts how often, and never so that it reads as how far', () => {
+    expect(sentence('within', 'beyond-limit', 'above', 1, 24)).toBe(
+      'spread within the wafer beyond the upper limit 24 times',
+    );
+    expect(sentence('within', 'beyond-limit', 'below', 1, 3)).toBe(
+      'spread within the wafer 3 times suspiciously even: stuck gauge or copied readings?',
     );
   });
 
