@@ -1,3 +1,4 @@
+import { callPlace } from './call-place';
 import { casePlot, type CasePlotInput } from './case-plot';
 import styles from './case-chart.module.css';
 import { Mark } from './mark';
@@ -36,7 +37,7 @@ function Drawing(props: CaseChartProps & { width: number; height: number; classN
   const plot = casePlot(props, { width, height });
   const { left, right, top, bottom } = plot.frame;
   const called = call && plot.marks.find((mark) => mark.index === call.index);
-  const atRight = called ? called.x > (left + right) / 2 : false;
+  const said = called && call ? callPlace(call.words, called.x, width) : null;
   const stat = { stroke: 'var(--stat)' };
   return (
     <svg role="img" aria-label={props.label} viewBox={`0 0 ${width} ${height}`} className={props.className}>
@@ -135,14 +136,9 @@ function Drawing(props: CaseChartProps & { width: number; height: number; classN
           <Mark x={mark.x} y={mark.y} shape={mark.shape} size={2.2} />
         </g>
       ))}
-      {called && call && (
-        <text
-          x={atRight ? Math.min(called.x + 4, right) : Math.max(called.x - 4, 2)}
-          y={13}
-          textAnchor={atRight ? 'end' : 'start'}
-          style={{ fill: 'var(--call)', fontWeight: 600 }}
-        >
-          {call.words}
+      {said && (
+        <text x={said.x} y={13} textAnchor={said.anchor} style={{ fill: 'var(--call)', fontWeight: 600 }}>
+          {call?.words}
         </text>
       )}
     </svg>
