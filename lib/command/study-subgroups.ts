@@ -1,11 +1,19 @@
 import { decimalNumber } from './decimal-number';
 import { readColumns, type Cell, type FileFault } from './read-columns';
 
-/** Which columns make a subgroup: one value a row, values gathered by a group's name, or several values a row. */
-export type SubgroupColumns = { value: string; group?: string } | { values: readonly string[] };
+/**
+ * Which columns make a subgroup: one value a row, values gathered by a group's name (and within it by a wafer's), or
+ * several values a row.
+ */
+export type SubgroupColumns =
+  { value: string; group?: string; wafer?: string } | { values: readonly string[] };
 
-/** Subgroups in the order in which they first appear, or the faults of the file. */
-export type Subgroups = { ok: true; subgroups: number[][] } | { ok: false; faults: FileFault[] };
+/**
+ * Subgroups in the order in which they first appear, each with the name of its group (one a run where each subgroup is
+ * a wafer), or the faults of the file.
+ */
+export type Subgroups =
+  { ok: true; subgroups: number[][]; groups: string[] } | { ok: false; faults: FileFault[] };
 
 /**
  * The subgroups of a CSV file. With several values a row an empty cell is a value that was not taken, as long as
@@ -29,19 +37,26 @@ export async function studySubgroups(file: string, columns: SubgroupColumns): Pr
       if (filled.length === 0 && first) refuse(first, 'the row has no value');
       return filled.flatMap(read);
     });
-    return faults.length > 0 ? { ok: false, faults } : { ok: true, subgroups };
+    return faults.length > 0 ? { ok: false, faults } : { ok: true, subgroups, groups: [] };
   }
-  const { value, group } = columns;
-  const table = await readColumns(file, group === undefined ? [value] : [value, group]);
+  const { value, group, wafer } = columns;
+  const names = [group, wafer].filter((name) => name !== undefined);
+  const table = await readColumns(file, [value, ...names]);
   if (!table.ok) return table;
-  const subgroups = new Map<string, number[]>();
-  table.rows.forEach(([cell, name], row) => {
+  const subgroups = new Map<string, { group: string; values: number[] }>();
+  table.rows.forEach(([cell, ...groupCells], row) => {
     if (!cell) return;
-    if (name?.text === '') refuse(name, 'the cell is empty');
-    const key = name?.text ?? String(row);
-    const values = subgroups.get(key) ?? [];
-    values.push(...read(cell));
-    subgroups.set(key, values);
+    for (const name of groupCells) if (name.text === '') refuse(name, 'the cell is empty');
+    const key = names.length === 0 ? String(row) : JSON.stringify(groupCells.map(({ text }) => text));
+    const subgroup = subgroups.get(key) ?? { group: groupCells[0]?.text ?? '', values: [] };
+    subgroup.values.push(...read(cell));
+    subgroups.set(key, subgroup);
   });
-  return faults.length > 0 ? { ok: false, faults } : { ok: true, subgroups: [...subgroups.values()] };
+  if (faults.length > 0) return { ok: false, faults };
+  const found = [...subgroups.values()];
+  return {
+    ok: true,
+    subgroups: found.map(({ values }) => values),
+    groups: found.map(({ group: name }) => name),
+  };
 }

@@ -3,12 +3,13 @@ import type { StudyChart } from '@/lib/control/study-chart';
 
 /** A study as a table for people: the figures of each chart, and under it each signal in words. */
 export function studyTable(charts: readonly StudyChart[]): string {
-  const rows = charts.map(({ name, lower, centre, upper, sigma }) => [
+  const rows = charts.map(({ name, lower, centre, upper, sigma, estimator }) => [
     name,
     ...[lower, centre, upper, sigma].map(figure),
+    estimator,
   ]);
-  const table = [['chart', 'lower', 'centre', 'upper', 'sigma'], ...rows];
-  const widths = [0, 1, 2, 3, 4].map((i) => Math.max(...table.map((row) => row[i]?.length ?? 0)));
+  const table = [['chart', 'lower', 'centre', 'upper', 'sigma', 'sigma from'], ...rows];
+  const widths = [0, 1, 2, 3, 4, 5].map((i) => Math.max(...table.map((row) => row[i]?.length ?? 0)));
   const lines = table.map((row) =>
     row.map((cell, i) => (i === 0 ? cell.padEnd(widths[i] ?? 0) : cell.padStart(widths[i] ?? 0))).join('  '),
   );

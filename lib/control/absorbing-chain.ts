@@ -48,7 +48,11 @@ export function absorbingChain(kept: Float64Array, size: number): AbsorbingChain
 }
 
 /** x of L·U·x = b, in place. */
-function solved(factors: Float64Array, size: number, b: Float64Array<ArrayBuffer>): Float64Array<ArrayBuffer> {
+function solved(
+  factors: Float64Array,
+  size: number,
+  b: Float64Array<ArrayBuffer>,
+): Float64Array<ArrayBuffer> {
   for (let i = 0; i < size; i++) {
     let sum = b[i] ?? 0;
     for (let j = 0; j < i; j++) sum -= (factors[i * size + j] ?? 0) * (b[j] ?? 0);

@@ -32,8 +32,10 @@ export function conditionalRate(
   source: NormalSource,
   { shift = 0, baselines = 2000 }: { shift?: number; baselines?: number } = {},
 ): ConditionalRate {
-  if (!Number.isInteger(baseline) || baseline < 5) throw new RangeError(`no rate from a baseline of ${baseline}`);
-  if (!Number.isInteger(baselines) || baselines < 20) throw new RangeError(`20 baselines or more, not ${baselines}`);
+  if (!Number.isInteger(baseline) || baseline < 5)
+    throw new RangeError(`no rate from a baseline of ${baseline}`);
+  if (!Number.isInteger(baselines) || baselines < 20)
+    throw new RangeError(`20 baselines or more, not ${baselines}`);
   if (!Number.isFinite(shift)) throw new RangeError(`no shift of ${shift} σ`);
   const automaton = ruleAutomaton(rules);
   const misses = Array.from({ length: baselines }, () => missOf(baseline, source));

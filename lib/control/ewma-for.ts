@@ -1,4 +1,5 @@
 import { monotoneRoot } from '@/lib/physics/monotone-root';
+import { standardNormalQuantile } from '@/lib/stats/standard-normal';
 import { ewmaRunLength, type EwmaDesign } from './ewma-run-length';
 import { assertWanted, type Wanted } from './wanted';
 
@@ -40,9 +41,10 @@ export function ewmaFor(wanted: Wanted): EwmaDesign {
  */
 export function ewmaWidthFor(lambda: number, inControl: number): number {
   assertWanted({ inControl, shift: 1 });
-  const excess = (width: number): number =>
-    Math.log(ewmaRunLength({ lambda, width }) / inControl);
-  const width = monotoneRoot(excess, 0.3, 5, 1e-4);
+  const excess = (width: number): number => Math.log(ewmaRunLength({ lambda, width }) / inControl);
+  // At the same width an EWMA runs longer than the values themselves, so theirs is the widest.
+  const widest = -standardNormalQuantile(0.5 / inControl);
+  const width = monotoneRoot(excess, Math.max(0.1, widest - 1.6), widest + 0.01, 1e-4);
   if (width === null) throw new RangeError(`no width gives ${inControl} points at λ = ${lambda}`);
   return width;
 }

@@ -15,7 +15,8 @@ export interface EwmaDesign {
  *
  * A Markov chain over intervals between the limits (D. Brook and D. A. Evans, Biometrika 59, 539 (1972); J. M.
  * Lucas and M. S. Saccucci, Technometrics 32, 1 (1990)), at two fineness and extrapolated to none: agrees with the
- * integral equation of S. V. Crowder, Technometrics 29, 401 (1987), to 1e-4 of its value. `zero`: the chart begins
+ * integral equation of S. V. Crowder, Technometrics 29, 401 (1987), to 3e-4 of its value from λ = 0.05 up and to 1.1e-3
+ * at 0.01. `zero`: the chart begins
  * on the target. `steady`: it ran long without a signal before the shift came. With limits that widen from the
  * start, run lengths are a little shorter; those are simulated (`simulatedRunLength`).
  *

@@ -73,7 +73,12 @@ function casesIn(points: number, limits: LimitSet, walk: RuleWalk, draw: () => S
       value !== null && limit !== null && (value > limit.upper || value < (limit.lower ?? -Infinity));
     const levelSignals = walk.signals((point.level - level.centre) / level.sigma);
     before = point.level;
-    if (levelSignals || range > movingRange.upper || isOut(point.within, within) || isOut(point.between, between)) {
+    if (
+      levelSignals ||
+      range > movingRange.upper ||
+      isOut(point.within, within) ||
+      isOut(point.between, between)
+    ) {
       cases++;
       walk.restart();
       before = null;

@@ -1,12 +1,21 @@
 import { mean } from '@/lib/stats/mean';
 import { completionsAt, type ChartPoint } from './completions-at';
 import { spreadChart } from './spread-chart';
+import { pooledSigma } from './pooled-sigma';
 import { sigmaWithin, type SpreadLaw } from './spread-law';
-import { baselineOf, oneOrMany, studySignal, type StudyChart, type StudyOptions } from './study-chart';
+import {
+  baselineOf,
+  estimatorOf,
+  oneOrMany,
+  studySignal,
+  type StudyChart,
+  type StudyOptions,
+} from './study-chart';
 
 /**
  * A study of subgroups whose values differ by chance alone: the chart of their means, with limits from the spread
- * within them, and the chart of that spread (`rangeLaw`: mean and range; `standardDeviationLaw`: mean and s). The
+ * within them, and the chart of that spread (`rangeLaw`: mean and range; `standardDeviationLaw`: mean and s, σ from the mean s
+ * or the pooled s). The
  * constants are those of ASTM MNL7, computed for each subgroup's own size; the centre line is the mean of all
  * values of the baseline.
  *
@@ -21,7 +30,11 @@ export function meanSpreadCharts(
   options: StudyOptions,
 ): StudyChart[] {
   const baseline = baselineOf(subgroups, options.baseline);
-  const sigma = sigmaWithin(baseline, law);
+  const estimator =
+    law.name === 'range'
+      ? estimatorOf(options.estimator, ['mean-range'])
+      : estimatorOf(options.estimator, ['mean-s', 'pooled-s']);
+  const sigma = estimator === 'pooled-s' ? pooledSigma(baseline) : sigmaWithin(baseline, law);
   const centre = mean(baseline.flat());
   const points = subgroups.map((values): ChartPoint => {
     const error = sigma / Math.sqrt(values.length);
@@ -48,6 +61,7 @@ export function meanSpreadCharts(
   return [
     {
       name: 'level',
+      estimator,
       centre,
       upper: figure('upper'),
       lower: figure('lower'),
@@ -55,6 +69,6 @@ export function meanSpreadCharts(
       points: points.map((point) => point.level),
       signals: points.flatMap((_, i) => completionsAt(points, i, options.rules)).map(studySignal),
     },
-    spreadChart(law.name, subgroups, law, sigma, options.limits),
+    spreadChart(law.name, subgroups, law, { sigma, estimator }, options),
   ];
 }

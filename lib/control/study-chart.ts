@@ -1,6 +1,11 @@
 import type { Completion } from './completions-at';
 import { isBeyond } from './is-beyond';
+import type { MovingRangeEstimator } from './moving-range-sigma';
 import type { RuleName } from './rule';
+
+/** What σ was estimated from; `given` where it was not. */
+export type SigmaSource =
+  MovingRangeEstimator | 'mean-range' | 'mean-s' | 'pooled-s' | 'log-spread' | 'given';
 
 /** One signal of a study: points are counted from 1, the completing point is the one that is marked. */
 export interface StudySignal {
@@ -16,7 +21,10 @@ export interface StudySignal {
  * subgroups of unequal size, is a list with one entry a point; null where the point is not judged.
  */
 export interface StudyChart {
-  name: 'level' | 'range' | 's' | 'moving-range' | 'within';
+  name:
+    'level' | 'range' | 's' | 'moving-range' | 'between' | 'within' | 'ewma' | 'cusum-above' | 'cusum-below';
+  /** What σ came from: for `within` of a three-way chart by probability the logarithms of the spreads. */
+  estimator: SigmaSource;
   centre: number | (number | null)[];
   upper: number | (number | null)[];
   lower: number | (number | null)[];
@@ -25,11 +33,30 @@ export interface StudyChart {
   signals: StudySignal[];
 }
 
-/** What a study may choose. `baseline`: the first so many points set the limits (all by default). */
+/**
+ * What a study may choose. `baseline`: the first so many points set the limits (all by default). `estimator`: of those
+ * that the kind of chart knows. `spreadRules`: rules of the chart of the spread within subgroups, beside its limits.
+ */
 export interface StudyOptions {
   rules: readonly RuleName[];
   limits: 'classical' | 'probability';
   baseline?: number;
+  estimator?: SigmaSource;
+  spreadRules?: readonly RuleName[];
+}
+
+/**
+ * The estimator that a chart was asked to use, of those it knows; the first where none was asked for. Throws
+ * `RangeError` for one it does not know.
+ */
+export function estimatorOf<E extends SigmaSource>(
+  asked: SigmaSource | undefined,
+  known: readonly [E, ...E[]],
+): E {
+  const found = asked === undefined ? known[0] : known.find((name) => name === asked);
+  if (found === undefined)
+    throw new RangeError(`σ of this chart comes from ${known.join(' or ')}, not ${asked}`);
+  return found;
 }
 
 /** The completion as a signal, its points counted from 1. */

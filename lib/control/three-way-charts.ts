@@ -34,14 +34,18 @@ export function threeWayCharts(
         )
       : null;
   if (!lognormal) {
-    return [...levels, spreadChart('within', subgroups, law, sigmaWithin(baseline, law), options.limits)];
+    const within = { sigma: sigmaWithin(baseline, law), estimator: 'mean-s' as const };
+    return [...levels, spreadChart('within', subgroups, law, within, options)];
   }
+  if (options.spreadRules && options.spreadRules.length > 0)
+    throw new RangeError('a spread with lognormal limits is judged by its limits alone');
   const { lower, centre, upper, logSigma } = lognormal;
   const everywhere = (limit: number) => spreads.map(() => limit);
   return [
     ...levels,
     {
       name: 'within',
+      estimator: 'log-spread',
       centre,
       upper,
       lower,

@@ -41,7 +41,10 @@ function weekly(charts: readonly BusyChart[]): (widening: number) => number {
     const key = [...rules].sort().join();
     points.set(key, { rules, perWeek: (points.get(key)?.perWeek ?? 0) + pointsPerWeek });
   }
-  const kinds = [...points.values()].map(({ rules, perWeek }) => ({ machine: ruleAutomaton(rules), perWeek }));
+  const kinds = [...points.values()].map(({ rules, perWeek }) => ({
+    machine: ruleAutomaton(rules),
+    perWeek,
+  }));
   return (widening) =>
     kinds.reduce(
       (sum, { machine, perWeek }) => sum + perWeek / ruleRunLength(machine, { spread: 1 / widening }),
