@@ -28,6 +28,12 @@ export class Allowance {
     return left >= 1 ? 0 : Math.ceil((1 - left) / perSecond);
   }
 
+  /** Gives back what was taken last: it turned out not to count. */
+  giveBack(actor: Pick<Actor, 'kind' | 'id'>): void {
+    const bucket = this.#buckets.get(`${actor.kind} ${actor.id ?? ''}`);
+    if (bucket !== undefined) bucket.left = Math.min(this.rate.burst, bucket.left + 1);
+  }
+
   #forgetFull(now: number): void {
     const fullAfterMs = (this.rate.burst / this.rate.perSecond) * 1000;
     for (const [key, { at }] of this.#buckets) if (now - at > fullAfterMs) this.#buckets.delete(key);

@@ -3,6 +3,7 @@ import { accounts } from './accounts';
 import { AUTH_PATHS } from './auth-paths';
 import { requestOrigin } from './request-origin';
 import { chainAccessEvents } from './chain-access-events';
+import { withinGuesses } from './guess-allowance';
 import { isSameOrigin } from './same-origin';
 
 const ROOT = '/api/auth';
@@ -30,9 +31,11 @@ export async function answerAuth(request: Request): Promise<Response> {
   }
   const url = `${requestOrigin(request.headers)}${ROOT}${path}${asked.search}`;
   const body = request.method === 'POST' ? await request.text() : undefined;
-  const answer = await accounts().handler(
-    new Request(url, { method: request.method, headers: request.headers, ...(body ? { body } : {}) }),
-  );
+  const ask = () =>
+    accounts().handler(
+      new Request(url, { method: request.method, headers: request.headers, ...(body ? { body } : {}) }),
+    );
+  const answer = path === '/sign-in/email' ? await withinGuesses(body ?? '', ask) : await ask();
   await chainAccessEvents();
   const wait = answer.headers.get('x-retry-after');
   if (wait !== null) answer.headers.set('retry-after', wait);

@@ -3,6 +3,7 @@ import { may } from '@/lib/access/actor';
 import { answerAuth } from '@/lib/access/auth-answer';
 import { ensureDemonstrationPeople } from '@/lib/access/demonstration';
 import { createFirstAdministrator, isFirstAdministratorDue } from '@/lib/access/first-administrator';
+import { withinGuesses } from '@/lib/access/guess-allowance';
 import { findRequestActor } from '@/lib/access/request-actor';
 import { getPool } from '@/lib/database/client';
 import { freshDatabase, type FreshDatabase } from '../support/fresh-database';
@@ -139,6 +140,16 @@ describe('signing in', () => {
       if (i === 10) expect(Number(answer.headers.get('retry-after'))).toBeGreaterThan(0);
     }
     expect(statuses).toEqual([...Array<number>(10).fill(401), 429]);
+  });
+
+  test('is answered 429 for one account after many wrong tries, wherever they came from', async () => {
+    const email = 'ivo@plant.example';
+    const wrong = async () => new Response(null, { status: 401 });
+    for (let i = 0; i < 20; i += 1) await withinGuesses(JSON.stringify({ email }), wrong);
+    const answer = await post('/sign-in/email', { email, password: PASSWORD });
+    expect(answer.status).toBe(429);
+    expect(Number(answer.headers.get('retry-after'))).toBeGreaterThan(0);
+    expect((await signIn()).status).toBe(200);
   });
 
   test('is refused from a page of another site', async () => {

@@ -18,6 +18,14 @@ describe('an allowance', () => {
     expect([0, 0, 0].map(() => allowance.waitS(gauge, 3_600_000))).toEqual([0, 0, 1]);
   });
 
+  it('takes back what did not count, and no more than may be had at once', () => {
+    const allowance = new Allowance({ burst: 1, perSecond: 1 });
+    expect(allowance.waitS(gauge, 0)).toBe(0);
+    allowance.giveBack(gauge);
+    allowance.giveBack(gauge);
+    expect([0, 0].map(() => allowance.waitS(gauge, 0))).toEqual([0, 1]);
+  });
+
   it('is each one’s own', () => {
     const allowance = new Allowance({ burst: 1, perSecond: 1 });
     expect(allowance.waitS(gauge, 0)).toBe(0);
