@@ -35,8 +35,8 @@ export default async function BoardPage(props: { searchParams: Promise<{ find?: 
           what="Each stream will be one row here: its last levels, its level against expected, its evenness and its state."
           how="A stream is one step, tool, chamber, recipe, target and site plan. Set one up, then send its wafer maps."
         >
-          <ButtonLink href="/setup/streams/new" weight="main">
-            Set up a stream
+          <ButtonLink href="/setup" weight="main">
+            Go to the setup
           </ButtonLink>
         </EmptyState>
       )}

@@ -15,7 +15,7 @@ export default async function FirstAdministratorPage() {
     <>
       <PageHead
         answer="Enter the first administrator"
-        sub="Nobody has an account on this server yet. The administrator adds everybody else and gives the roles; this page then goes away."
+        sub="Nobody has an account on this server yet. The administrator signs in, adds everybody else and gives the roles, to themselves too; this page then goes away."
       />
       <FirstAdministratorForm needsCode={!isAtMachine} />
     </>

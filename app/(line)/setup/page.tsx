@@ -5,9 +5,11 @@ import { PageHead } from '@/app/_ui/page-head';
 import { SectionHead } from '@/app/_ui/section-head';
 import { IfMay } from '@/app/if-may';
 import { signedIn } from '@/app/page-actor';
+import { may } from '@/lib/access/actor';
 import { listLimitsInForce } from '@/lib/limits/data';
 import { listSitePlans, listStreams, listStreamSettings } from '@/lib/streams/data';
 import { AccessLinks } from './access-links';
+import { firstStep } from './first-step';
 import { PlanTable } from './plan-table';
 import { setupRows } from './setup-rows';
 import { StreamTable } from './stream-table';
@@ -51,11 +53,7 @@ export default async function SetupPage() {
       {rows.length === 0 ? (
         <EmptyState
           what="Each stream will stand here with its target, its specification and the limits that judge it."
-          how={
-            plans.length === 0
-              ? 'A stream needs a site plan: draw one up first.'
-              : 'Set up the first one, then send its wafer maps.'
-          }
+          how={firstStep(may(actor, 'create-stream'), plans.length)}
         />
       ) : (
         <>

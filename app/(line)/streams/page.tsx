@@ -22,7 +22,13 @@ export default async function StreamsPage(props: { searchParams: Promise<{ find?
     <>
       <PageHead
         answer={`${count} ${streams.length === 1 ? 'stream' : 'streams'}${find === '' ? '' : ` with “${find}”`}`}
-        sub={retired === 0 ? 'All of them are in use.' : `${retired} of them out of use.`}
+        sub={
+          streams.length === 0
+            ? 'None is set up yet.'
+            : retired === 0
+              ? 'All of them are in use.'
+              : `${retired} of them out of use.`
+        }
         back={{ href: '/', label: 'Board' }}
       />
       {streams.length === 0 ? (
@@ -30,8 +36,8 @@ export default async function StreamsPage(props: { searchParams: Promise<{ find?
           what="Each step, tool, chamber, recipe and target that is watched will be a stream here."
           how="Set one up, then send its wafer maps."
         >
-          <ButtonLink href="/setup/streams/new" weight="main">
-            Set up a stream
+          <ButtonLink href="/setup" weight="main">
+            Go to the setup
           </ButtonLink>
         </EmptyState>
       ) : (
