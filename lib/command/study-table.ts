@@ -1,5 +1,5 @@
 import { ruleSentence } from '@/lib/control/rule';
-import type { StudyChart } from '@/lib/control/study-chart';
+import type { StudyChart, StudySignal } from '@/lib/control/study-chart';
 
 /** A study as a table for people: the figures of each chart, and under it each signal in words. */
 export function studyTable(charts: readonly StudyChart[]): string {
@@ -14,17 +14,17 @@ export function studyTable(charts: readonly StudyChart[]): string {
     row.map((cell, i) => (i === 0 ? cell.padEnd(widths[i] ?? 0) : cell.padStart(widths[i] ?? 0))).join('  '),
   );
   const signals = charts.flatMap((chart) =>
-    chart.signals.map(({ point, rule, side, participants }) => {
-      const words = ruleSentence(
-        rule,
-        side,
-        participants.length,
-        chart.name === 'within' ? 'within' : undefined,
-      );
-      return `point ${point}, ${chart.name}: ${words} (${rule})`;
-    }),
+    chart.signals.map(
+      (signal) => `point ${signal.point}, ${chart.name}: ${signalWords(chart, signal)} (${signal.rule})`,
+    ),
   );
   return [...lines, '', ...(signals.length > 0 ? signals : ['no signal'])].join('\n');
+}
+
+function signalWords({ name }: StudyChart, { rule, side, participants }: StudySignal): string {
+  if (name === 'cusum-above') return 'the level has risen';
+  if (name === 'cusum-below') return 'the level has fallen';
+  return ruleSentence(rule, side, participants.length, name === 'within' ? name : undefined);
 }
 
 function figure(value: number | readonly (number | null)[]): string {

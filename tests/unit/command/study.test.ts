@@ -64,6 +64,46 @@ describe('evenohm study', () => {
     );
   });
 
+  it('charts an EWMA and a CUSUM of what is given, or of the baseline', async () => {
+    const values = 'y\n52\n47\n53\n';
+    const ewma = ['--chart', 'ewma', '--target', '50', '--sigma', '2', '--lambda', '0.3', '--width', '3'];
+    const { printed } = await run(values, '--value', 'y', ...ewma, '--json');
+    // NIST/SEMATECH e-Handbook, section 6.3.2.4: the first three values of its example.
+    const { charts } = JSON.parse(printed) as { charts: { name: string; points: number[]; upper: number }[] };
+    expect(charts.map(({ name }) => name)).toEqual(['ewma']);
+    [50.6, 49.52, 50.56].forEach((z, i) => expect(charts[0]?.points[i]).toBeCloseTo(z, 2));
+    expect(charts[0]?.upper).toBeCloseTo(50 + 3 * 2 * Math.sqrt(0.3 / 1.7), 12);
+    const growing = await run(values, '--value', 'y', ...ewma, '--limits', 'growing', '--json');
+    const [grown] = (JSON.parse(growing.printed) as { charts: { upper: number[] }[] }).charts;
+    expect(grown?.upper[0]).toBeCloseTo(50 + 3 * 2 * 0.3, 12);
+    const sums = await run('y\n1\n2\n1\n2\n9\n', '--value', 'y', '--chart', 'cusum', '--baseline', '4');
+    expect(sums.printed).toContain('point 5, cusum-above: the level has risen');
+    const fallen = await run('y\n1\n2\n1\n2\n-9\n', '--value', 'y', '--chart', 'cusum', '--baseline', '4');
+    expect(fallen.printed).toContain('point 5, cusum-below: the level has fallen');
+  });
+
+  it('takes runs of wafers of sites by two groups, and names what σ came from', async () => {
+    const rows = 'run,wafer,y\nA,1,1\nA,1,3\nA,2,2\nA,2,4\nB,1,5\nB,1,7\nB,2,6\nB,2,8\n';
+    const { printed } = await run(rows, '--value', 'y', '--group', 'run,wafer', '--json');
+    const { charts } = JSON.parse(printed) as {
+      charts: { name: string; points: number[]; estimator: string }[];
+    };
+    expect(charts.map(({ name }) => name)).toEqual(['level', 'moving-range', 'between', 'within']);
+    expect(charts[0]?.points).toEqual([2.5, 6.5]);
+    expect(charts[3]?.points).toHaveLength(4);
+    const table = await run('y\n1\n2\n1\n9\n', '--value', 'y', '--estimate', 'median-moving-range');
+    expect(table.printed).toContain('median-moving-range');
+  });
+
+  it('takes rules of the spread where subgroups are large enough, and refuses others with the reason', async () => {
+    const pairs = 'a,b\n1,2\n1,3\n1,2\n';
+    const words = ['--values', 'a,b', '--chart', 'mean-range', '--spread-rules'];
+    expect((await run(pairs, ...words, '7-of-7-beyond-0-sigma')).status).toBe(0);
+    const { status, said } = await run(pairs, ...words, 'eight-on-one-side');
+    expect(status).toBe(3);
+    expect(said[0]).toContain('eight-on-one-side is not for the spread of fewer than 5 values');
+  });
+
   it('refuses cells that are no number, with line and column, past quoted line breaks', async () => {
     const { status, said } = await run(
       'n,y\r\n"a\r\nb",1\r\nc,"1,5"\r\nd,\r\ne,0x10\r\nf,NaN\r\n',
@@ -108,6 +148,13 @@ describe('evenohm study', () => {
     [['--value', 'y', '--rules', 'unheard-of']],
     [['--value', 'y', '--baseline', '1']],
     [['--value', 'y', '--limits', 'tight']],
+    [['--value', 'y', '--lambda', '0.2']],
+    [['--value', 'y', '--chart', 'ewma', '--lambda', 'x']],
+    [['--value', 'y', '--chart', 'ewma', '--rules', 'beyond-3-sigma']],
+    [['--value', 'y', '--chart', 'cusum', '--limits', 'classical']],
+    [['--value', 'y', '--estimate', 'guess']],
+    [['--value', 'y', '--group', 'a,b', '--chart', 'mean-s']],
+    [['--value', 'y', '--chart', 'nested']],
     [['--value', 'y', '--unheard-of']],
   ])('calls %j wrong usage', async (args) => {
     await expect(run('y\n1\n2\n', ...args)).rejects.toThrow(UsageError);
