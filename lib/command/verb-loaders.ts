@@ -11,4 +11,5 @@ export const verbLoaders: ReadonlyMap<string, () => Promise<Verb>> = new Map([
   ['study', async () => (await import('./verbs/study')).study],
   ['components', async () => (await import('./verbs/components')).components],
   ['runlength', async () => (await import('./verbs/runlength')).runlength],
+  ['capability', async () => (await import('./verbs/capability')).capability],
 ]);

@@ -27,12 +27,13 @@ export function noncentralTCdf(t: number, degreesOfFreedom: number, delta: numbe
   const reach = (side: number): number => rootBetween((u) => height(u) + NOTHING, 0, side);
   const low = reach(-NOTHING * (1 / freedom + 1));
   const high = reach(Math.min(300, 1 + NOTHING / freedom));
-  const steps = Math.ceil((high - low) * 2 * Math.sqrt(2 * freedom + (t * Math.exp(high)) ** 2 + 4));
+  const steps = Math.ceil((high - low) * 1.3 * Math.sqrt(2 * freedom + (t * Math.exp(high)) ** 2 + 4));
   const step = (high - low) / steps;
   let sum = 0;
   for (let i = 0; i <= steps; i++) {
     const u = low + i * step;
-    sum += Math.exp(height(u)) * standardNormalCdf(t * Math.exp(u) - delta);
+    const z = t * Math.exp(u) - delta;
+    if (z > -9) sum += Math.exp(height(u)) * (z > 9 ? 1 : standardNormalCdf(z));
   }
   const scale = Math.log(2) + (freedom / 2) * (Math.log(freedom / 2) - 1) - logGamma(freedom / 2);
   return Math.min(1, sum * step * Math.exp(scale));
