@@ -27,7 +27,7 @@ export function noncentralTCdf(t: number, degreesOfFreedom: number, delta: numbe
   const reach = (side: number): number => rootBetween((u) => height(u) + NOTHING, 0, side);
   const low = reach(-NOTHING * (1 / freedom + 1));
   const high = reach(Math.min(300, 1 + NOTHING / freedom));
-  const steps = Math.ceil((high - low) * 1.3 * Math.sqrt(2 * freedom + (t * Math.exp(high)) ** 2 + 4));
+  const steps = Math.ceil((high - low) * 2 * Math.sqrt(2 * freedom + (t * Math.exp(high)) ** 2 + 4));
   const step = (high - low) / steps;
   let sum = 0;
   for (let i = 0; i <= steps; i++) {

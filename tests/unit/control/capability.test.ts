@@ -103,7 +103,7 @@ describe('intervals of capability', () => {
 
   it('hold the truth as often as they say, within 94 and 96 % and 3.5 standard errors of the simulation', () => {
     const random = seededRandom('capability');
-    const trials = 250;
+    const trials = 120;
     const [lower, upper, target] = [-6, 3.5, -0.5];
     const truth = { cp: 9.5 / 6, cpk: 3.5 / 3, pp: 9.5 / 6, ppk: 3.5 / 3, cpm: 9.5 / 6 / Math.hypot(1, 0.5) };
     const names = ['cp', 'cpk', 'pp', 'ppk', 'cpm'] as const;
