@@ -3,13 +3,15 @@ import { isLoopbackName, nameOfHost } from '@/lib/access/is-loopback-name';
 /** What the gate looks at. */
 export interface GateRequest {
   method: string;
+  /** What was asked for, as it stands in the request line. */
+  target: string;
   host: string | undefined;
   origin: string | undefined;
 }
 
 /** Why a request stays outside, with its status (RFC 9110 §15.5). */
 export interface GateRefusal {
-  status: 403 | 421;
+  status: 400 | 403 | 421;
   reason: string;
 }
 
@@ -26,6 +28,10 @@ export function requestGate(request: GateRequest, publicUrl: string | null): Gat
       status: 421,
       reason: 'This server does not answer to that name; EVENOHM_URL sets its public one.',
     };
+  }
+  // RFC 9112 §3.2.2: an absolute target names a host of its own, which would pass by the check of Host.
+  if (!request.target.startsWith('/')) {
+    return { status: 400, reason: 'The address must begin with a slash.' };
   }
   const changes = request.method !== 'GET' && request.method !== 'HEAD';
   if (changes && request.origin !== undefined && hostOf(request.origin) !== host) {

@@ -4,6 +4,7 @@ import type { AddressInfo } from 'node:net';
 import { AppError } from '@/lib/errors';
 import { ADDRESS_HEADER } from '@/lib/access/requested-address';
 import { answerUnavailable } from './answer-unavailable';
+import { limitBodyTime, LONGEST_BODY_MS } from './limit-body-time';
 import { projectRoot } from './project-root';
 import { requestGate } from './request-gate';
 import { securityHeaders } from './security-headers';
@@ -37,13 +38,13 @@ export async function startWebServer(options: WebServerOptions): Promise<WebServ
   const server = createServer((request, response) => {
     running.add(response);
     response.once('close', () => running.delete(response));
+    limitBodyTime(request);
     if (!prepare(request, response, options)) return;
     const isAsset = request.url?.startsWith('/_next/') === true;
     if (options.isAway() && !isAsset) answerUnavailable(request, response, AWAY);
     else void handle(request, response);
   });
-  /** Half a gigabyte through a slow line takes its time. */
-  server.requestTimeout = 3_600_000;
+  server.requestTimeout = LONGEST_BODY_MS;
   const port = await listen(server, options);
   const address = options.publicUrl ?? `http://${bracketed(options.host)}:${port}`;
   let closeApp: () => Promise<void> = async () => undefined;
@@ -74,7 +75,8 @@ function prepare(request: IncomingMessage, response: ServerResponse, options: We
   forgetForwarding(request, options.trustedProxy);
   const { headers } = request;
   headers[ADDRESS_HEADER] = request.url ?? '/';
-  const gate = { method: request.method ?? 'GET', host: headers.host, origin: headers.origin };
+  const { method = 'GET', url: target = '/' } = request;
+  const gate = { method, target, host: headers.host, origin: headers.origin };
   const refusal = requestGate(gate, options.publicUrl);
   if (refusal !== null) {
     const { status, reason } = refusal;

@@ -2,8 +2,8 @@ import { describe, expect, it } from 'vitest';
 import { isLoopbackName } from '@/lib/access/is-loopback-name';
 import { requestGate } from '@/lib/command/request-gate';
 
-const get = (host: string | undefined) => ({ method: 'GET', host, origin: undefined });
-const post = (host: string, origin: string | undefined) => ({ method: 'POST', host, origin });
+const get = (host: string | undefined, target = '/') => ({ method: 'GET', target, host, origin: undefined });
+const post = (host: string, origin: string | undefined) => ({ method: 'POST', target: '/', host, origin });
 
 describe('requestGate', () => {
   it.each(['localhost:3000', '127.0.0.1:3000', '[::1]:3000', 'LOCALHOST'])('lets %s in', (host) => {
@@ -13,6 +13,10 @@ describe('requestGate', () => {
     expect(requestGate(get('rebound.example:3000'), null)?.status).toBe(421);
     expect(requestGate(get('127.0.0.1.example:3000'), null)?.status).toBe(421);
     expect(requestGate(get(undefined), null)?.status).toBe(421);
+  });
+  it('refuses an address that names a host of its own', () => {
+    expect(requestGate(get('localhost', 'http://elsewhere.example/'), null)?.status).toBe(400);
+    expect(requestGate(get('localhost', '*'), null)?.status).toBe(400);
   });
   it('knows its public name', () => {
     expect(requestGate(get('wafers.example'), 'https://wafers.example')).toBeNull();
