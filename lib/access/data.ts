@@ -24,6 +24,8 @@ export async function listPeople(actor: Actor): Promise<Person[]> {
 
 export async function findPerson(actor: Actor, id: string): Promise<Person | null> {
   insist(actor, 'manage-people');
+  // PostgreSQL refuses to look for text that holds NUL.
+  if (!/^[\w-]+$/.test(id)) return null;
   const { rows } = await getPool().query<Person>(`${PEOPLE} WHERE p.id = $1`, [id]);
   return rows[0] ?? null;
 }

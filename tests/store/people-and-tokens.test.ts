@@ -85,6 +85,12 @@ describe('people', () => {
     });
   });
 
+  it('are not found by an id that nobody can have', async () => {
+    for (const id of ['', '\0', 'nobody', "' OR true --"]) {
+      expect(await findPerson(administrator, id), JSON.stringify(id)).toBeNull();
+    }
+  });
+
   it('get roles, each for all streams or chosen ones, and lose those not named', async () => {
     const id = await added(all('viewer'), all('shift-lead'));
     const grants = [{ role: 'shift-lead' as const, streamIds: [other.id] }];
