@@ -1,13 +1,14 @@
 import { type BetterAuthOptions, betterAuth } from 'better-auth';
 import { prismaAdapter } from 'better-auth/adapters/prisma';
-import { APIError, createAuthMiddleware } from 'better-auth/api';
+import { APIError } from 'better-auth/api';
 import { genericOAuth } from 'better-auth/plugins/generic-oauth';
 import { getPool, getPrisma } from '@/lib/database/client';
 import { type Environment, readEnvironment } from '@/lib/env';
 import { PLANT_PROVIDER } from './auth-paths';
 import { demonstrationSignIn } from './demonstration-sign-in';
 import { isDemonstrationOffered } from './demonstration';
-import { LEAST_PASSWORD, MOST_PASSWORD, passwordFault } from './password-fault';
+import { LEAST_PASSWORD, MOST_PASSWORD } from './password-fault';
+import { refusePassword } from './refuse-password';
 import { plantKey } from './secret';
 import { SESSION_COOKIE_PREFIX, hasSecureCookies } from './session-cookie';
 
@@ -64,7 +65,7 @@ function makeAccounts(environment: Environment) {
       session: { create: { before: async ({ userId }) => admit(userId) } },
       account: { create: { before: async (account) => ({ data: { ...account, ...NO_TOKENS } }) } },
     },
-    hooks: { before: createAuthMiddleware(async ({ path, body }) => refuseCommonPassword(path, body)) },
+    hooks: { before: refusePassword },
     plugins: [demonstrationSignIn, ...plantProvider(environment)],
   });
 }
@@ -130,12 +131,4 @@ async function admit(personId: string): Promise<void> {
   if (person === undefined || person.gone || (person.demonstration && !isDemonstrationOffered())) {
     throw new APIError('FORBIDDEN', { code: 'DEACTIVATED', message: 'This account is no longer in use.' });
   }
-}
-
-/** The library checks lengths; the list of common passwords is ours. */
-async function refuseCommonPassword(path: string, body: unknown): Promise<void> {
-  if (path !== '/change-password' && path !== '/reset-password') return;
-  const password = (body as { newPassword?: unknown } | undefined)?.newPassword;
-  const fault = typeof password === 'string' ? passwordFault(password, []) : null;
-  if (fault !== null) throw new APIError('BAD_REQUEST', { code: 'PASSWORD_FAULT', message: fault });
 }

@@ -10,11 +10,15 @@ export const LINK_DAYS = 3;
  */
 export async function writePasswordLink(client: ClientBase, personId: string): Promise<string> {
   const code = randomBytes(32).toString('base64url');
-  const identifier = createHash('sha256').update(`reset-password:${code}`).digest('base64url');
   await client.query('DELETE FROM verification WHERE value = $1', [personId]);
   await client.query(
     'INSERT INTO verification (id, identifier, value, expires_at) VALUES ($1, $2, $3, now() + make_interval(days => $4))',
-    [randomBytes(16).toString('hex'), identifier, personId, LINK_DAYS],
+    [randomBytes(16).toString('hex'), linkIdentifier(code), personId, LINK_DAYS],
   );
   return code;
+}
+
+/** What the accounts library knows a code by. */
+export function linkIdentifier(code: string): string {
+  return createHash('sha256').update(`reset-password:${code}`).digest('base64url');
 }

@@ -67,10 +67,11 @@ describe('a link by which someone chooses a password', () => {
     expect((await signIn(email)).status).toBe(200);
   });
 
-  test('takes no password that is common or short', async () => {
+  test('takes no password that is common, short, or the own address', async () => {
     const { email, code } = await newcomer('bram');
     expect((await choose(code, 'Password1234!')).status).toBe(400);
     expect((await choose(code, 'short')).status).toBe(400);
+    expect((await choose(code, email)).status).toBe(400);
     expect((await choose(code)).status).toBe(200);
     expect((await signIn(email)).status).toBe(200);
   });

@@ -193,6 +193,12 @@ describe('changing a password', () => {
     expect(await answer.json()).toMatchObject({ message: expect.stringMatching(/tried first/) });
   });
 
+  test('to the own address or name is refused in words', async () => {
+    const answer = await change(PERSON.email);
+    expect(answer.status).toBe(400);
+    expect(await answer.json()).toMatchObject({ message: expect.stringMatching(/your own name or address/) });
+  });
+
   test('needs the one before', async () => {
     expect((await change('five tin whistles', 'not this one')).status).toBe(400);
   });
