@@ -170,6 +170,19 @@ describe('signing in', () => {
     expect(answer.status).toBe(403);
   });
 
+  test('is refused with a body that is too large, or of unknown length, before it is read', async () => {
+    const head = { host: HOST, origin: `http://${HOST}`, 'content-type': 'application/json' };
+    for (const length of [{ 'content-length': '16385' }, {}]) {
+      const request = new Request(`http://${HOST}/api/auth/sign-in/email`, {
+        method: 'POST',
+        headers: { ...head, ...length },
+        body: JSON.stringify(PERSON),
+      });
+      const answer = await answerAuth(request);
+      expect([answer.status, request.bodyUsed]).toEqual([422, false]);
+    }
+  });
+
   test('by endpoints that are not in use finds nothing there', async () => {
     for (const path of [
       '/sign-up/email',
