@@ -1,3 +1,4 @@
+import { ensureDemonstrationPeople } from '@/lib/access/demonstration';
 import { demonstrationActor, programActor } from '@/lib/access/local-actor';
 import type { Actor } from '@/lib/access/actor';
 import { getPool } from '@/lib/database/client';
@@ -34,6 +35,7 @@ export async function demoDue(now = new Date()): Promise<Date | null> {
  */
 export async function seedDemo(say: (text: string) => void, endAt = new Date()): Promise<number> {
   const actor = programActor();
+  await ensureDemonstrationPeople();
   const mark = await markBegun(endAt);
   const idOf = await createDemoStreams(actor, PLANT.streams);
   await recordLog(actor, idOf, endAt);
@@ -61,7 +63,7 @@ export async function seedDemo(say: (text: string) => void, endAt = new Date()):
     await recordMeasurements(actor, batch, ofDay);
     await lineDay(actor, evening, onsets);
     if (day === BASELINE_DAY) {
-      const owner = demonstrationActor('process owner');
+      const owner = demonstrationActor('process-owner');
       for (const { slug } of PLANT.streams) await settleBaseline(owner, slug, start, evening);
     }
     done += ofDay.length;

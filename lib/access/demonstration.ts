@@ -17,11 +17,15 @@ export function demonstrationId(role: Role): string {
   return `demonstration-${role}`;
 }
 
+export function demonstrationName(role: Role): string {
+  return `${ROLE_WORDS[role]} (demonstration)`;
+}
+
 /** Puts in the people of the demonstration line, one for each role and for all streams, where they are missing. */
 export async function ensureDemonstrationPeople(): Promise<void> {
   const people = ROLES.map((role) => ({
     id: demonstrationId(role),
-    name: `${ROLE_WORDS[role]} (demonstration)`,
+    name: demonstrationName(role),
     // RFC 2606 §2: a name under .invalid belongs to nobody.
     email: `${role}@demonstration.invalid`,
     role,

@@ -1,5 +1,7 @@
 import { userInfo } from 'node:os';
 import { provenActor, type Actor } from './actor';
+import { demonstrationId, demonstrationName } from './demonstration';
+import type { Role } from './permission';
 
 /** Whoever runs the command line on this machine: the operating system's user. */
 export function commandActor(): Actor {
@@ -16,7 +18,12 @@ export function programActor(): Actor {
   return provenActor({ kind: 'program', id: null, name: 'Evenohm', grants: [] });
 }
 
-/** Someone in a role on the demonstration line: nobody in particular. */
-export function demonstrationActor(role: 'shift lead' | 'process owner'): Actor {
-  return provenActor({ kind: 'program', id: null, name: `${role} (demonstration)`, grants: [] });
+/** Who shows a role on the demonstration line, so that what was done there long ago was done by whoever looks round. */
+export function demonstrationActor(role: Role): Actor {
+  return provenActor({
+    kind: 'person',
+    id: demonstrationId(role),
+    name: demonstrationName(role),
+    grants: [{ role, streamIds: null }],
+  });
 }

@@ -1,4 +1,5 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { demonstrationId } from '@/lib/access/demonstration';
 import { getPool } from '@/lib/database/client';
 import { lineScore, type LineScore } from '@/seed/line-score';
 import { seedDemo } from '@/seed/seed-demo';
@@ -49,5 +50,12 @@ describe('the demonstration line', () => {
     // One false signal in 92 points on the level chart alone, with known σ (Champ and Woodall 1987); the other charts and
     // limits from 25 subgroups add to that. Far fewer than one in 30 is what a quiet stream must show.
     expect(signals).toBeLessThan(subgroups / 30);
+  });
+
+  it('has limits that wait, drawn up by whoever looks round as process owner: four eyes see who that was', async () => {
+    const { rows } = await getPool().query<{ author_id: string | null }>(
+      `SELECT DISTINCT author_id FROM limit_revision WHERE state = 'draft'`,
+    );
+    expect(rows).toEqual([{ author_id: demonstrationId('process-owner') }]);
   });
 });
