@@ -18,7 +18,9 @@ export async function routeActor(request: Request, permission: Permission): Prom
   if (actor.kind !== 'token' && !READS.includes(request.method) && !isSameOrigin(request.headers)) {
     return problemResponse(new AppError('forbidden', 'Changes are taken from pages of this server only.'));
   }
-  return may(actor, permission) ? actor : problemResponse(new AppError('forbidden', refusalOf(permission)));
+  return may(actor, permission)
+    ? actor
+    : problemResponse(new AppError('forbidden', refusalOf(permission, actor.kind)));
 }
 
 /** RFC 9110 §11.6.1 asks for a challenge beside 401. */

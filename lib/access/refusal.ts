@@ -1,4 +1,4 @@
-import { may, type Actor } from './actor';
+import { may, type Actor, type Identity } from './actor';
 import { PERMISSIONS, type Permission } from './permission';
 
 /**
@@ -6,9 +6,10 @@ import { PERMISSIONS, type Permission } from './permission';
  *
  * @example refusalOf('approve-limits') // 'Your roles do not allow this: approve limits.'
  */
-export function refusalOf(permission: Permission): string {
+export function refusalOf(permission: Permission, kind: Identity['kind'] = 'person'): string {
   const { words } = PERMISSIONS[permission];
-  return `Your roles do not allow this: ${words.charAt(0).toLowerCase()}${words.slice(1)}.`;
+  const who = kind === 'token' ? 'This token does' : 'Your roles do';
+  return `${who} not allow this: ${words.charAt(0).toLowerCase()}${words.slice(1)}.`;
 }
 
 /**
@@ -20,5 +21,5 @@ export function refuse(
   permission: Permission,
   streamId?: string,
 ): { ok: false; reason: string } | null {
-  return may(actor, permission, streamId) ? null : { ok: false, reason: refusalOf(permission) };
+  return may(actor, permission, streamId) ? null : { ok: false, reason: refusalOf(permission, actor.kind) };
 }

@@ -35,7 +35,7 @@ export async function recordMeasurements(
   measurements: readonly Measurement[],
 ): Promise<Outcome[]> {
   if (!measurements.every(({ streamId }) => may(actor, 'record-maps', streamId))) {
-    throw new AppError('forbidden', refusalOf('record-maps'));
+    throw new AppError('forbidden', refusalOf('record-maps', actor.kind));
   }
   const pool = getPool();
   const only = measurements.length === 1 ? measurements[0] : undefined;

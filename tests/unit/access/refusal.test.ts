@@ -20,3 +20,17 @@ test('a process owner of one stream is refused on another', () => {
   });
   expect(refuse(owner, 'create-stream')).not.toBeNull();
 });
+
+test('a token, which has no roles, reads what it does not allow', () => {
+  const token = provenActor({
+    kind: 'token',
+    id: '1',
+    name: 'Gauge 9',
+    grants: [],
+    token: { scope: 'intake', streamIds: null },
+  });
+  expect(refuse(token, 'see-line')).toEqual({
+    ok: false,
+    reason: 'This token does not allow this: see boards, charts, wafers and cases.',
+  });
+});
