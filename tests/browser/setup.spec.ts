@@ -41,7 +41,7 @@ test.describe('setup', () => {
     await openPage(page, '/setup/streams/new');
     const form = page.getByRole('form', { name: 'New stream' });
     const note = page.getByRole('region', { name: 'Expected value' });
-    await expect(note).toContainText('Type a density');
+    await expect(note).toContainText('Type what is known of the dopant');
     await form.getByRole('combobox', { name: 'Dopant', exact: true }).selectOption('phosphorus');
     await form.getByLabel('Dopant density').fill('1e15');
     await expect(note).toContainText('4.48 ± 0.12 Ω·cm');

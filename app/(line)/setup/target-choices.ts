@@ -48,7 +48,10 @@ export function targetChoices(
     (profile) => profile === profileInForce && !own.includes(profile),
   );
   const profiles = [...own, ...kept];
-  const profile = chosen(profiles, words['profile'] ?? profileInForce);
+  const asked = words['profile'] ?? profileInForce;
+  const profile = chosen(profiles, asked);
+  // What was known of another kind's profile is not what is known of this one.
+  const known = asked === undefined || asked === profile ? words : {};
   const given = GIVEN_OF[profile];
   const lengths: readonly LengthGiven[] =
     profile === 'gaussian' || profile === 'erfc' ? ['length', 'junction'] : ['length'];
@@ -56,9 +59,9 @@ export function targetChoices(
     profiles,
     profile,
     given,
-    givenNow: chosen(given, words['given']),
+    givenNow: chosen(given, known['given']),
     lengths,
-    lengthNow: chosen(lengths, words['lengthGiven']),
+    lengthNow: chosen(lengths, known['lengthGiven']),
   };
 }
 

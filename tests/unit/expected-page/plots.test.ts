@@ -5,7 +5,7 @@ import { conversionPlot } from '@/app/(line)/expected/conversion-plot';
 import { layerPlot } from '@/app/(line)/expected/layer-plot';
 import { modelRows } from '@/app/(line)/expected/model-rows';
 import type { Target } from '@/lib/physics/target';
-import { BORON, DRIVEN, GAUSSIAN } from '../physics/targets';
+import { BORON, DRIVEN, EPI, GAUSSIAN } from '../physics/targets';
 
 const plain = (text: string) => text.replaceAll('\u00a0', ' ');
 
@@ -29,6 +29,17 @@ describe('the drawing of a layer', () => {
     expect(places?.map(({ label }) => label)).toEqual(['junction at 1.517 µm']);
     expect(levels?.[0]).toEqual({ y: 1e15, label: 'phosphorus underneath' });
     expect(y.domain).toEqual([1e14, 1e20]);
+  });
+
+  it('that was grown shows how far it conducts: 10 µm of 1e15 on 1e19 lose 1.04 µm (depletion at zero bias)', () => {
+    const { places, curves } = layerPlot(EPI, 1e15, {});
+    expect(places?.map(({ label }) => label)).toEqual([
+      'grown to 10.00 µm',
+      expect.stringMatching(/^conducts to 8\.96/),
+    ]);
+    expect(curves.map(({ name }) => name)).toEqual(['phosphorus', 'boron of the substrate']);
+    const own: Target = { ...EPI, backgroundDopant: 'arsenic', method: 'other' };
+    expect(layerPlot(own, 1e15, {}).places).toHaveLength(1);
   });
 });
 

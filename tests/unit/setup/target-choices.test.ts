@@ -14,9 +14,11 @@ describe('targetChoices', () => {
   });
 
   it('leaves the words of a kind that was chosen before', () => {
-    const words = { profile: 'uniform', given: 'resistivity', lengthGiven: 'junction' };
-    const { profile, givenNow, lengthNow } = targetChoices('implant', words, undefined);
-    expect([profile, givenNow, lengthNow]).toEqual(['implant', 'dose', 'length']);
+    for (const given of ['resistivity', 'density']) {
+      const words = { profile: 'uniform', given, lengthGiven: 'junction' };
+      const { profile, givenNow, lengthNow } = targetChoices('implant', words, undefined);
+      expect([profile, givenNow, lengthNow]).toEqual(['implant', 'dose', 'length']);
+    }
   });
 
   it('keeps the profile in force where its kind does not offer it', () => {
