@@ -38,7 +38,7 @@ export async function startWebServer(options: WebServerOptions): Promise<WebServ
   const server = createServer((request, response) => {
     running.add(response);
     response.once('close', () => running.delete(response));
-    limitBodyTime(request);
+    limitBodyTime(request, response);
     if (!prepare(request, response, options)) return;
     const isAsset = request.url?.startsWith('/_next/') === true;
     if (options.isAway() && !isAsset) answerUnavailable(request, response, AWAY);

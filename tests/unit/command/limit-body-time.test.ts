@@ -9,9 +9,10 @@ let server: Server;
 
 beforeAll(async () => {
   server = createServer((request, response) => {
-    limitBodyTime(request, FORM_MS);
+    limitBodyTime(request, response, { formMs: FORM_MS, answeredMs: FORM_MS });
     request.on('error', () => undefined);
-    request.resume().once('end', () => setTimeout(() => response.end('taken'), 2 * FORM_MS));
+    if (request.url === '/api/intake') response.writeHead(401).end('refused');
+    else request.resume().once('end', () => setTimeout(() => response.end('taken'), 2 * FORM_MS));
   });
   await new Promise<void>((resolve) => server.listen(0, '127.0.0.1', resolve));
 });
@@ -43,6 +44,12 @@ describe('a body that is sent slowly', () => {
 
   test('is waited for where files are sent', async () => {
     expect((await send('/api/maps?sound', 3 * FORM_MS)).text).toContain('taken');
+  });
+
+  test('is not waited for where its file was refused meanwhile', async () => {
+    const { text, cut } = await send('/api/intake', 3 * FORM_MS);
+    expect(text).toContain('refused');
+    expect(cut).toBe(true);
   });
 
   test('has no time limit on its answer once it has come', async () => {
