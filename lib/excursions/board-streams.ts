@@ -54,10 +54,13 @@ CROSS JOIN LATERAL (
   FROM wafer_measurement w
   WHERE w.stream_id = s.id AND w.subgroup_id = ANY(strip.gap_ids) AND ${TO_MEASURE}) again
 LEFT JOIN LATERAL (
-  SELECT json_build_object('id', t.id::text, 'dopant', dopant, 'densityPerCm3', density_per_cm3,
+  SELECT jsonb_build_object('id', t.id::text, 'dopant', dopant, 'densityPerCm3', density_per_cm3,
     'tolerancePercent', tolerance_percent, 'alongCrystal', along_crystal, 'profile', profile, 'lengthUm', length_um,
     'backgroundDopant', background_dopant, 'backgroundDensityPerCm3', background_density_per_cm3,
-    'calibrationFactor', calibration_factor, 'calibrationPercent', calibration_percent) AS target
+    'calibrationFactor', calibration_factor, 'calibrationPercent', calibration_percent) ||
+    jsonb_strip_nulls(jsonb_build_object('counterDopant', counter_dopant, 'counterDensityPerCm3', counter_density_per_cm3,
+    'rangeUm', range_um, 'driveInC', drive_in_c, 'driveInMin', drive_in_min, 'pairs', profile_pairs,
+    'temperatureCoefficientPercentPerC', temperature_coefficient_percent_per_c, 'method', method)) AS target
   FROM target_revision t WHERE t.stream_id = s.id AND t.id = charted.target_id) target ON true
 LEFT JOIN (
   SELECT stream_id, count(*)::integer AS open_cases, (count(*) FILTER (WHERE state = 'open'))::integer AS unanswered_cases,

@@ -61,7 +61,8 @@ async function againstExpected(slug: string) {
     expected && formatWithUncertainty(expected.dopantPercent, expected.uncertaintyDopantPercent, '%');
   return {
     board: [expected && formatSignedPercent(expected.differencePercent), dopant],
-    page: [newest?.texts.difference ?? null, newest?.texts.dopant?.replace(/^\+/, '') ?? null],
+    // The stream's page adds how well the difference is known.
+    page: [newest?.texts.difference?.replace(/ ± [\d.]+/, '') ?? null, newest?.texts.dopant?.replace(/^\+/, '') ?? null],
   };
 }
 

@@ -1,9 +1,10 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { listBoardStreams } from '@/lib/excursions/data';
 import type { Target } from '@/lib/physics/target';
 import { findStreamSettings } from '@/lib/streams/data';
 import { reviseTarget } from '@/lib/streams/mutations';
 import { freshDatabase, type FreshDatabase } from '../support/fresh-database';
-import { actor, forgetPlan, newStream } from '../support/store-line';
+import { actor, forgetPlan, newStream, record, wafer } from '../support/store-line';
 import { BORON, DRIVEN, EPI, GAUSSIAN, PAIRS } from '../unit/physics/targets';
 
 let database: FreshDatabase;
@@ -35,6 +36,14 @@ describe('a target of any kind', () => {
       { ...BORON, temperatureCoefficientPercentPerC: -0.012 },
     ];
     expect(await broughtBack(uniform)).toStrictEqual(uniform);
+  });
+
+  it.each([DRIVEN, PAIRS, EPI])('is on the board what it is on its own page: $profile', async (target) => {
+    const { id, slug } = await newStream({ quantity: target.quantity });
+    await reviseTarget(actor, id, target, { effectiveFrom: new Date(0), reason: 'as given' });
+    await record([wafer(id, 0)]);
+    const board = (await listBoardStreams(actor)).find((stream) => stream.slug === slug);
+    expect(board?.target?.target).toStrictEqual(target);
   });
 
   it('is refused by the database itself where one of two that belong together is missing', async () => {
