@@ -4,7 +4,8 @@ import { modelValue } from '@/lib/physics/model-value';
 import type { Target } from '@/lib/physics/target';
 import { mapAt23C } from '@/lib/probe/map-at-23c';
 import { polarSites } from '@/lib/wafer/polar-sites';
-import { middle, type Figure } from './figure';
+import type { Figure } from './figure';
+import { microseconds } from './microseconds';
 
 const BORON: Target = {
   quantity: 'resistivity',
@@ -45,18 +46,6 @@ const layers: [string, Target][] = [
     },
   ],
 ];
-
-/** Processor time of one call in µs, the middle of nine runs of `count` calls after one to warm up. */
-function microseconds(count: number, call: (i: number) => unknown): number {
-  const run = (): number => {
-    const before = process.cpuUsage();
-    for (let i = 0; i < count; i++) call(i);
-    const { user, system } = process.cpuUsage(before);
-    return (user + system) / count;
-  };
-  run();
-  return middle(Array.from({ length: 9 }, run));
-}
 
 /** What one expected value, one layer and one map corrected for its sites cost, in processor time; no database. */
 export function physicsBench(): Figure[] {

@@ -1,4 +1,5 @@
 import { auditBench } from './audit-bench';
+import { controlBench } from './control-bench';
 import { figureLine, holds, type Figure } from './figure';
 import { intakeBench } from './intake-bench';
 import { oneWaferBench } from './one-wafer-bench';
@@ -12,10 +13,11 @@ const server = (): Promise<ScratchServer> => (scratch.server ??= scratchServer()
 
 /**
  * `npm run bench [part…]`: every figure is a ratio of two things measured in the same run, absolutes beside; of physics
- * alone processor time.
+ * and control processor time.
  */
 const parts: Record<string, () => Promise<Figure[]> | Figure[]> = {
   physics: physicsBench,
+  control: controlBench,
   wafer: async () => oneWaferBench(await server()),
   audit: async () => auditBench(await server()),
   intake: async () => intakeBench(await server()),
