@@ -20,8 +20,13 @@ export interface CurvePlotProps {
   x: PlotAxis;
   y: PlotAxis;
   curves: readonly PlotCurve[];
-  /** Points with their names: what is expected as a ring, what was measured filled. */
-  marks: readonly (PlotPoint & { label: string; kind: 'expected' | 'measured'; href?: string })[];
+  /** Points with their names: what is expected as a ring, what was measured filled, or as the letter of its kind. */
+  marks: readonly (PlotPoint & {
+    label: string;
+    kind: 'expected' | 'measured';
+    href?: string;
+    letter?: string;
+  })[];
   /** Places along the horizontal axis, each with its word. */
   places?: readonly { x: number; label: string }[];
   /** Levels across, such as the density underneath a layer. */
@@ -131,17 +136,23 @@ export function CurvePlot(props: CurvePlotProps) {
         {marks.filter(isInside).map((mark) => {
           const [left, top] = [across.place(mark.x), up.place(mark.y)];
           const isRight = left > width * 0.6;
-          const circle = (
-            <circle
-              className={styles['mark']}
-              data-kind={mark.kind}
-              cx={left}
-              cy={top}
-              r={mark.kind === 'measured' ? 3.5 : 6}
-            >
-              <title>{mark.label}</title>
-            </circle>
-          );
+          const circle =
+            mark.letter === undefined ? (
+              <circle
+                className={styles['mark']}
+                data-kind={mark.kind}
+                cx={left}
+                cy={top}
+                r={mark.kind === 'measured' ? 3.5 : 6}
+              >
+                <title>{mark.label}</title>
+              </circle>
+            ) : (
+              <text className={styles['letter']} x={left} y={top + 4} textAnchor="middle">
+                {mark.letter}
+                <title>{mark.label}</title>
+              </text>
+            );
           return (
             <g key={`${mark.kind} ${mark.label}`}>
               {mark.href === undefined ? circle : <a href={mark.href}>{circle}</a>}

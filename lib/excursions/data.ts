@@ -18,6 +18,7 @@ import { measureAgainList, type MeasureAgainWish } from './measure-again-list';
 import { type SpanWish, spanPoints, type StreamSpan } from './span-points';
 import { type SpanWafer, type SpanWaferToMeasure, spanWafers, wafersToMeasure } from './span-wafers';
 import { streamStanding, type StreamStanding } from './stream-standing';
+import { type ToolWafer, toolWafers } from './tool-wafers';
 import type { BoardStream, ExcursionCase, ExcursionList, MeasureAgainList } from './types';
 
 /** Where to begin: the line holds every point from this instant on (milliseconds), and enough before it to judge. */
@@ -192,4 +193,9 @@ function groups<Row extends { streamId: string }>(rows: readonly Row[]): Map<str
     else found.set(row.streamId, [row]);
   }
   return found;
+}
+
+/** The last wafers of several streams, for the one scale of their tool. */
+export async function listToolWafers(_actor: Actor, streamIds: readonly string[]): Promise<ToolWafer[]> {
+  return toolWafers(getPool(), streamIds);
 }

@@ -34,6 +34,14 @@ export function listSettingsInUse(_actor: Actor): Promise<StreamSettings[]> {
   return settingsWhere('s.retired_at IS NULL', []);
 }
 
+/** The settings of the streams in use of one tool and chamber, by name. */
+export function listToolSettings(
+  _actor: Actor,
+  { tool, chamber }: Pick<Stream, 'tool' | 'chamber'>,
+): Promise<StreamSettings[]> {
+  return settingsWhere('s.retired_at IS NULL AND s.tool = $1 AND s.chamber = $2', [tool, chamber]);
+}
+
 export async function listSitePlans(_actor: Actor): Promise<SitePlan[]> {
   return (await getPrisma().sitePlan.findMany({ orderBy: { name: 'asc' } })).map(sitePlanOf);
 }

@@ -8,16 +8,19 @@ import { Notice } from '@/app/_ui/notice';
 import { PageHead } from '@/app/_ui/page-head';
 import { signedIn } from '@/app/page-actor';
 import { readEnvironment } from '@/lib/env';
-import { findStreamSettings } from '@/lib/streams/data';
+import { listToolWafers } from '@/lib/excursions/data';
+import { findStreamSettings, listToolSettings } from '@/lib/streams/data';
 import { AlongCrystal } from './along-crystal';
 import { chartProps } from './chart-props';
 import { MeasureAgain } from './measure-again';
+import { OfTheTool } from './of-the-tool';
 import { pageWords, spanNotices } from './page-words';
 import { SpanFilter } from './span-filter';
 import { type SearchWords, spanWish } from './span-wish';
 import { StreamCases } from './stream-cases';
 import { StreamFacts } from './stream-facts';
 import { readStreamView } from './stream-view';
+import { toolScale } from './tool-scale';
 import { WaferTable } from './wafer-table';
 
 interface Props {
@@ -41,6 +44,10 @@ export default async function StreamPage(props: Props) {
   const timeZone = readEnvironment().siteTimeZone;
   const { wish, notices } = spanWish(await props.searchParams, timeZone);
   const view = await readStreamView(actor, settings, wish, { timeZone, now: new Date() });
+  const { stream } = settings;
+  const ofTool = stream.tool === '' ? [] : await listToolSettings(actor, stream);
+  const toolIds = ofTool.map((one) => one.stream.id);
+  const recipes = ofTool.length < 2 ? [] : toolScale(ofTool, await listToolWafers(actor, toolIds), stream.id);
   const charts = chartProps(view);
   const beside = (
     <>
@@ -68,6 +75,7 @@ export default async function StreamPage(props: Props) {
         </div>
       )}
       <AlongCrystal view={view} />
+      <OfTheTool stream={stream} recipes={recipes} />
       <WaferTable view={view} />
       <MeasureAgain view={view} />
     </>
