@@ -1,6 +1,10 @@
+import { existsSync } from 'node:fs';
+import path from 'node:path';
 import { parseArgs } from 'node:util';
 import { verifyAudit, type AuditVerdict, type BrokenPlace } from '@/lib/access/verify-audit';
 import { openDatabase } from '@/lib/database/connection';
+import { readEnvironment } from '@/lib/env';
+import { AppError } from '@/lib/errors';
 import { UsageError, type ExitStatus, type Verb, type VerbOutput } from '../verb';
 
 export const audit: Verb = {
@@ -20,6 +24,7 @@ the chain is broken, and where no head is there to hold its end against.`,
 async function verify(args: string[], output: VerbOutput): Promise<ExitStatus> {
   const { verify: asked, head = [], json } = parsed(args);
   if (asked !== true) throw new UsageError('say --verify');
+  refuseNoDatabase();
   const database = await openDatabase({ say: output.say });
   try {
     const verdict = await verifyAudit(head);
@@ -29,6 +34,16 @@ async function verify(args: string[], output: VerbOutput): Promise<ExitStatus> {
   } finally {
     await database.close();
   }
+}
+
+/** Of a folder that is named wrongly an empty database would be made, and its chain, of nothing, would hold. */
+function refuseNoDatabase(): void {
+  const { databaseUrl, dataFolder } = readEnvironment();
+  if (databaseUrl !== null || existsSync(path.join(dataFolder, 'postgres'))) return;
+  throw new AppError(
+    'not-found',
+    `There is no database in ${dataFolder}. EVENOHM_DATA names another folder, DATABASE_URL a database of your own.`,
+  );
 }
 
 function parsed(args: string[]) {

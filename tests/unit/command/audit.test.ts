@@ -1,6 +1,9 @@
-import { describe, expect, it } from 'vitest';
+import { existsSync, mkdtempSync, rmSync } from 'node:fs';
+import { tmpdir } from 'node:os';
+import path from 'node:path';
+import { describe, expect, it, vi } from 'vitest';
 import type { AuditVerdict } from '@/lib/access/verify-audit';
-import { verdictLines, verdictStatus } from '@/lib/command/verbs/audit';
+import { audit, verdictLines, verdictStatus } from '@/lib/command/verbs/audit';
 
 const sound: AuditVerdict = { entries: 20, heads: 1, strangers: [], broken: [] };
 const stranger = { ...sound, strangers: ['audit-head-1'] };
@@ -38,5 +41,21 @@ describe('what is said of an audit trail', () => {
       '  entries 7 to 8: missing',
       '  entry 9: linked to one that is missing: whether it is as written cannot be told',
     ]);
+  });
+});
+
+describe('verifying where there is no database', () => {
+  it('says so, and makes none', async () => {
+    const folder = mkdtempSync(path.join(tmpdir(), 'evenohm-no-database-'));
+    vi.stubEnv('DATABASE_URL', '');
+    vi.stubEnv('EVENOHM_DATA', path.join(folder, 'mistyped'));
+    try {
+      const output = { out: () => undefined, say: () => undefined };
+      await expect(audit.run(['--verify'], output)).rejects.toThrow(/There is no database in .*mistyped/);
+      expect(existsSync(path.join(folder, 'mistyped'))).toBe(false);
+    } finally {
+      vi.unstubAllEnvs();
+      rmSync(folder, { recursive: true });
+    }
   });
 });
