@@ -9,6 +9,11 @@ const timeZone = z.string().refine(isTimeZone, 'is no IANA time zone such as Eur
 const portWords = 'must be a port, a whole number from 0 to 65535';
 const port = z.coerce.number(portWords).int(portWords).min(0, portWords).max(65535, portWords);
 
+const webWords = 'must be an address that begins with https:// or http://';
+const webAddress = z.url({ protocol: /^https?$/, error: webWords });
+const onOrOff = z.enum(['on', 'off'], 'must be on or off');
+const secret = z.string().min(32, 'must have 32 characters or more');
+
 const databaseAddress = z.string().regex(/^postgres(ql)?:\/\//, 'must begin with postgresql://');
 
 const variables = z.object({
@@ -17,17 +22,17 @@ const variables = z.object({
   EVENOHM_DATA: z.preprocess(blankIsAbsent, z.string().default('.evenohm')),
   PORT: z.preprocess(blankIsAbsent, port.default(3000)),
   EVENOHM_HOST: z.preprocess(blankIsAbsent, z.string().default('127.0.0.1')),
-  EVENOHM_URL: z.preprocess(blankIsAbsent, z.url({ protocol: /^https?$/ }).optional()),
-  EVENOHM_SECRET: z.preprocess(blankIsAbsent, z.string().min(32).optional()),
+  EVENOHM_URL: z.preprocess(blankIsAbsent, webAddress.optional()),
+  EVENOHM_SECRET: z.preprocess(blankIsAbsent, secret.optional()),
   EVENOHM_TRUSTED_PROXY: z.preprocess(blankIsAbsent, z.string().optional()),
   EVENOHM_SITE_TIME_ZONE: z.preprocess(blankIsAbsent, timeZone.default('UTC')),
-  EVENOHM_DEMO: z.preprocess(blankIsAbsent, z.enum(['on', 'off']).optional()),
+  EVENOHM_DEMO: z.preprocess(blankIsAbsent, onOrOff.optional()),
   EVENOHM_TOKEN: z.preprocess(blankIsAbsent, z.string().optional()),
-  EVENOHM_OIDC_ISSUER: z.preprocess(blankIsAbsent, z.url({ protocol: /^https?$/ }).optional()),
+  EVENOHM_OIDC_ISSUER: z.preprocess(blankIsAbsent, webAddress.optional()),
   EVENOHM_OIDC_CLIENT_ID: z.preprocess(blankIsAbsent, z.string().optional()),
   EVENOHM_OIDC_CLIENT_SECRET: z.preprocess(blankIsAbsent, z.string().optional()),
   EVENOHM_OIDC_NAME: z.preprocess(blankIsAbsent, z.string().default('plant account')),
-  EVENOHM_OIDC_CREATE: z.preprocess(blankIsAbsent, z.enum(['on', 'off']).default('off')),
+  EVENOHM_OIDC_CREATE: z.preprocess(blankIsAbsent, onOrOff.default('off')),
 });
 
 /** The plant's own identity provider. */

@@ -28,6 +28,16 @@ describe('readEnvironment', () => {
     expect(readEnvironment({ DATABASE_URL: url, EVENOHM_DEMO: 'on' }).demo).toBe(true);
     expect(readEnvironment({ EVENOHM_DEMO: 'off' }).demo).toBe(false);
   });
+  it('says in plain words what a variable must be', () => {
+    const fault = (source: Record<string, string>) => () => readEnvironment(source);
+    expect(fault({ EVENOHM_SECRET: 'short' })).toThrow('EVENOHM_SECRET: must have 32 characters or more');
+    expect(fault({ EVENOHM_DEMO: 'maybe' })).toThrow('EVENOHM_DEMO: must be on or off');
+    for (const name of ['EVENOHM_URL', 'EVENOHM_OIDC_ISSUER']) {
+      for (const value of ['plant', 'ftp://plant.example']) {
+        expect(fault({ [name]: value })).toThrow(`${name}: must be an address that begins with https://`);
+      }
+    }
+  });
   it('takes an identity provider whole or not at all', () => {
     const given = {
       EVENOHM_OIDC_ISSUER: 'https://login.plant.example',
