@@ -11,7 +11,7 @@ export interface AbsorbingChain {
  * state j after state i; what a row lacks to 1 ends the chain. Run lengths of control charts are such chains: the
  * mean number of steps solves (I − Q)·n = 1 (D. Brook and D. A. Evans, Biometrika 59, 539 (1972)).
  *
- * I − Q is factored without exchanging rows, which is stable because its diagonal dominates. `standing` is found by
+ * I − Q is factored without exchanging rows, which is stable because its diagonal dominates; zeros cost nothing. `standing` is found by
  * inverse iteration on the same factors; it is the distribution "conditional on no signal so far".
  *
  * Throws `RangeError` when the chain never ends from some state, so that the mean is infinite.
@@ -20,16 +20,22 @@ export function absorbingChain(kept: Float64Array, size: number): AbsorbingChain
   const factors = new Float64Array(size * size);
   for (let i = 0; i < size * size; i++) factors[i] = -(kept[i] ?? 0);
   for (let i = 0; i < size; i++) factors[i * size + i] = 1 - (kept[i * size + i] ?? 0);
+  const columns = new Int32Array(size);
   for (let k = 0; k < size; k++) {
-    const pivotRow = factors.subarray(k * size, (k + 1) * size);
-    const pivot = pivotRow[k] ?? 0;
+    const pivotRow = k * size;
+    const pivot = factors[pivotRow + k] ?? 0;
     if (!(pivot > 1e-14)) throw new RangeError('the chain never ends: its mean length is infinite');
-    for (let i = k + 1; i < size; i++) {
-      const row = factors.subarray(i * size, (i + 1) * size);
-      if (row[k] === 0) continue;
-      const factor = (row[k] ?? 0) / pivot;
-      row[k] = factor;
-      for (let j = k + 1; j < size; j++) row[j] = (row[j] ?? 0) - factor * (pivotRow[j] ?? 0);
+    let count = 0;
+    for (let j = k + 1; j < size; j++) if (factors[pivotRow + j] !== 0) columns[count++] = j;
+    for (let row = (k + 1) * size; row < size * size; row += size) {
+      const below = factors[row + k] ?? 0;
+      if (below === 0) continue;
+      const factor = below / pivot;
+      factors[row + k] = factor;
+      for (let c = 0; c < count; c++) {
+        const j = columns[c] ?? 0;
+        factors[row + j] = (factors[row + j] ?? 0) - factor * (factors[pivotRow + j] ?? 0);
+      }
     }
   }
   return {

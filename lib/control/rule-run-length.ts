@@ -35,11 +35,12 @@ export function ruleRunLength(
 ): number {
   const automaton = 'next' in rules ? rules : ruleAutomaton(rules);
   const steps = chainOf(automaton, shift, spread).steps();
-  if (start === 'zero') return steps[0] ?? 0;
+  if (start === 'zero') return steps[automaton.states - 1] ?? 0;
   const standing = chainOf(automaton, 0, spread).standing();
   return standing.reduce((sum, share, state) => sum + share * (steps[state] ?? 0), 0);
 }
 
+/** The chain with its states from last to first: those seldom reached go first, which leaves it almost empty. */
 function chainOf({ lines, next, states }: RuleAutomaton, shift: number, spread: number): AbsorbingChain {
   if (!Number.isFinite(shift)) throw new RangeError(`no shift of ${shift} σ`);
   if (!(spread > 0 && Number.isFinite(spread))) throw new RangeError(`no spread of ${spread} σ`);
@@ -54,7 +55,9 @@ function chainOf({ lines, next, states }: RuleAutomaton, shift: number, spread: 
   for (let state = 0; state < states; state++) {
     for (let zone = 0; zone < zones; zone++) {
       const to = next[state * zones + zone] ?? -1;
-      if (to >= 0) kept[state * states + to] = (kept[state * states + to] ?? 0) + (chances[zone] ?? 0);
+      if (to < 0) continue;
+      const place = (states - 1 - state) * states + states - 1 - to;
+      kept[place] = (kept[place] ?? 0) + (chances[zone] ?? 0);
     }
   }
   return absorbingChain(kept, states);
