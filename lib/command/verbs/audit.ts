@@ -24,7 +24,7 @@ the chain is broken, and where no head is there to hold its end against.`,
 async function verify(args: string[], output: VerbOutput): Promise<ExitStatus> {
   const { verify: asked, head = [], json } = parsed(args);
   if (asked !== true) throw new UsageError('say --verify');
-  refuseNoDatabase();
+  refuseNothing();
   const database = await openDatabase({ say: output.say });
   try {
     const verdict = await verifyAudit(head);
@@ -36,14 +36,25 @@ async function verify(args: string[], output: VerbOutput): Promise<ExitStatus> {
   }
 }
 
-/** Of a folder that is named wrongly an empty database would be made, and its chain, of nothing, would hold. */
-function refuseNoDatabase(): void {
-  const { databaseUrl, dataFolder } = readEnvironment();
-  if (databaseUrl !== null || existsSync(path.join(dataFolder, 'postgres'))) return;
-  throw new AppError(
-    'not-found',
-    `There is no database in ${dataFolder}. EVENOHM_DATA names another folder, DATABASE_URL a database of your own.`,
-  );
+/**
+ * Of a folder that is named wrongly an empty database would be made, and its chain, of nothing, would hold. In the place
+ * of a secret that is lost another would be made, which no entry bears.
+ */
+function refuseNothing(): void {
+  const { databaseUrl, dataFolder, secret } = readEnvironment();
+  if (databaseUrl !== null) return;
+  if (!existsSync(path.join(dataFolder, 'postgres'))) {
+    throw new AppError(
+      'not-found',
+      `There is no database in ${dataFolder}. EVENOHM_DATA names another folder, DATABASE_URL a database of your own.`,
+    );
+  }
+  if (secret === null && !existsSync(path.join(dataFolder, 'secret'))) {
+    throw new AppError(
+      'not-found',
+      `There is no secret in ${dataFolder}: without the one that the entries were written with none can be verified. Put it back, or give it as EVENOHM_SECRET.`,
+    );
+  }
 }
 
 function parsed(args: string[]) {

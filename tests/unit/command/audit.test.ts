@@ -1,7 +1,7 @@
-import { existsSync, mkdtempSync, rmSync } from 'node:fs';
+import { existsSync, mkdirSync, mkdtempSync, readdirSync, rmSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import path from 'node:path';
-import { describe, expect, it, vi } from 'vitest';
+import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest';
 import type { AuditVerdict } from '@/lib/access/verify-audit';
 import { audit, verdictLines, verdictStatus } from '@/lib/command/verbs/audit';
 
@@ -44,18 +44,29 @@ describe('what is said of an audit trail', () => {
   });
 });
 
-describe('verifying where there is no database', () => {
-  it('says so, and makes none', async () => {
-    const folder = mkdtempSync(path.join(tmpdir(), 'evenohm-no-database-'));
+describe('verifying', () => {
+  const output = { out: () => undefined, say: () => undefined };
+  let folder = '';
+  beforeEach(() => {
+    folder = mkdtempSync(path.join(tmpdir(), 'evenohm-no-database-'));
     vi.stubEnv('DATABASE_URL', '');
+    vi.stubEnv('EVENOHM_SECRET', '');
+  });
+  afterEach(() => {
+    vi.unstubAllEnvs();
+    rmSync(folder, { recursive: true });
+  });
+
+  it('where there is no database says so, and makes none', async () => {
     vi.stubEnv('EVENOHM_DATA', path.join(folder, 'mistyped'));
-    try {
-      const output = { out: () => undefined, say: () => undefined };
-      await expect(audit.run(['--verify'], output)).rejects.toThrow(/There is no database in .*mistyped/);
-      expect(existsSync(path.join(folder, 'mistyped'))).toBe(false);
-    } finally {
-      vi.unstubAllEnvs();
-      rmSync(folder, { recursive: true });
-    }
+    await expect(audit.run(['--verify'], output)).rejects.toThrow(/There is no database in .*mistyped/);
+    expect(existsSync(path.join(folder, 'mistyped'))).toBe(false);
+  });
+
+  it('without the secret says so, and makes none', async () => {
+    mkdirSync(path.join(folder, 'postgres'));
+    vi.stubEnv('EVENOHM_DATA', folder);
+    await expect(audit.run(['--verify'], output)).rejects.toThrow(/There is no secret in /);
+    expect(readdirSync(folder)).toEqual(['postgres']);
   });
 });
