@@ -9,6 +9,7 @@ import { readEnvironment } from '@/lib/env';
 import { formatAge } from '@/lib/format';
 import { listBatches } from '@/lib/maps/data';
 import { MOST_FILE_BYTES } from '@/lib/maps/waiting-file';
+import { newestSentence } from './batches/[id]/batch-sentence';
 import { BatchTable } from './batch-table';
 import { FileForm } from './file-form';
 import { UploadForm } from './upload-form';
@@ -27,13 +28,7 @@ export default async function IntakePage(props: { searchParams: Promise<{ before
   return (
     <>
       <PageHead
-        answer={
-          newest === undefined
-            ? 'Send a wafer-map file'
-            : `The newest file brought ${newest.recorded} ${newest.recorded === 1 ? 'map' : 'maps'}${
-                newest.refused > 0 ? `, and ${newest.refused} refused` : ''
-              }`
-        }
+        answer={newest === undefined ? 'Send a wafer-map file' : newestSentence(newest)}
         sub={
           newest === undefined
             ? 'It is read and drawn first; you decide then whether it is recorded.'

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { batchSentence } from '@/app/(line)/intake/batches/[id]/batch-sentence';
+import { batchSentence, newestSentence } from '@/app/(line)/intake/batches/[id]/batch-sentence';
 import { checkSentence } from '@/app/(line)/intake/[token]/check-sentence';
 
 const check = (measurements: number, faulty: number, repeated: number, spoilt = false) => ({
@@ -52,5 +52,16 @@ describe('batchSentence', () => {
     expect(of(0, 2, 0)).toBe('2 wafer maps were on record before');
     expect(of(0, 0, 1)).toBe('1 wafer map was refused');
     expect(of(0, 0, 0)).toBe('Nothing was recorded');
+  });
+});
+
+describe('what the newest file brought', () => {
+  it('tells of maps that were on record before, and of those refused', () => {
+    expect(newestSentence({ recorded: 0, repeated: 1, refused: 0 })).toBe(
+      'The newest file: 1 wafer map was on record before',
+    );
+    expect(newestSentence({ recorded: 0, repeated: 0, refused: 0 })).toBe(
+      'The newest file: nothing was recorded',
+    );
   });
 });
