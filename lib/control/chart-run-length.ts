@@ -1,6 +1,7 @@
 import { cusumRunLength, type CusumDesign } from './cusum-run-length';
 import { ewmaRunLength, type EwmaDesign } from './ewma-run-length';
 import type { RuleName } from './rule';
+import { ruleAutomaton } from './rule-automaton';
 import { ruleRunLength, type RunLengthOptions } from './rule-run-length';
 
 /** A chart of levels as far as its run length goes. */
@@ -15,12 +16,19 @@ export type ChartDesign =
  * take.
  */
 export function chartRunLength(design: ChartDesign, options: RunLengthOptions = {}): number {
+  return runLengthsOf(design)(options);
+}
+
+/** `chartRunLength` of one chart for many shifts: what does not depend on them is made once. */
+export function runLengthsOf(design: ChartDesign): (options: RunLengthOptions) => number {
   switch (design.kind) {
-    case 'rules':
-      return ruleRunLength(design.rules, options);
+    case 'rules': {
+      const automaton = ruleAutomaton(design.rules);
+      return (options) => ruleRunLength(automaton, options);
+    }
     case 'ewma':
-      return ewmaRunLength(design, options);
+      return (options) => ewmaRunLength(design, options);
     case 'cusum':
-      return cusumRunLength(design, options);
+      return (options) => cusumRunLength(design, options);
   }
 }

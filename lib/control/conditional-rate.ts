@@ -1,11 +1,9 @@
 import { mean } from '@/lib/stats/mean';
 import { quantile } from '@/lib/stats/quantile';
 import type { NormalSource } from './chance-stream';
+import { runLengthsOf, type ChartDesign } from './chart-run-length';
 import { chebyshevSurface } from './chebyshev-surface';
 import { MEAN_RANGE_OF_TWO } from './moving-range-factors';
-import type { RuleName } from './rule';
-import { ruleAutomaton } from './rule-automaton';
-import { ruleRunLength } from './rule-run-length';
 
 /** Signals a point with limits that were estimated: the mean over baselines, and where the middle 80 % of them lie. */
 export interface ConditionalRate {
@@ -15,19 +13,19 @@ export interface ConditionalRate {
 }
 
 /**
- * Signals a point of the level chart alone when centre and σ come from a baseline of n points, σ from the mean moving
- * range: for each of many baselines the exact rate, one over the run length of `ruleRunLength`, given how far its
- * limits miss. C. P. Quesenberry, J. Quality Technology 25, 237 (1993), for why it matters. `shift`, in true σ, is
+ * Signals a point of a chart of levels alone when centre and σ come from a baseline of n points, σ from the mean moving
+ * range: for each of many baselines the exact rate, one over its average run length, given how far its limits
+ * miss. C. P. Quesenberry, J. Quality Technology 25, 237 (1993), for why it matters. `shift`, in true σ, is
  * that of the mean after the baseline.
  *
  * The exact rate is computed at a few dozen places and interpolated between them (Chebyshev), so that thousands of
  * baselines cost little. `source` is seeded.
  *
  * Throws `RangeError` for a baseline under 5 points, fewer than 20 baselines, a shift that is not finite, and for
- * what `ruleAutomaton` refuses.
+ * what `chartRunLength` refuses.
  */
 export function conditionalRate(
-  rules: readonly RuleName[],
+  design: ChartDesign,
   baseline: number,
   source: NormalSource,
   { shift = 0, baselines = 2000 }: { shift?: number; baselines?: number } = {},
@@ -37,15 +35,14 @@ export function conditionalRate(
   if (!Number.isInteger(baselines) || baselines < 20)
     throw new RangeError(`20 baselines or more, not ${baselines}`);
   if (!Number.isFinite(shift)) throw new RangeError(`no shift of ${shift} σ`);
-  const automaton = ruleAutomaton(rules);
+  const runLength = runLengthsOf(design);
   const misses = Array.from({ length: baselines }, () => missOf(baseline, source));
   const seen = misses.map(({ centre, sigma }) => ({
     offset: (shift - centre) / sigma,
     logSpread: -Math.log(sigma),
   }));
   const logRate = chebyshevSurface(
-    (offset, logSpread) =>
-      -Math.log(ruleRunLength(automaton, { shift: offset, spread: Math.exp(logSpread) })),
+    (offset, logSpread) => -Math.log(runLength({ shift: offset, spread: Math.exp(logSpread) })),
     rangeOf(seen.map(({ offset }) => offset)),
     rangeOf(seen.map(({ logSpread }) => logSpread)),
     [9, 7],

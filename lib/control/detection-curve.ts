@@ -1,6 +1,5 @@
-import { ruleAutomaton } from './rule-automaton';
-import { chartRunLength, type ChartDesign } from './chart-run-length';
-import { ruleRunLength, type StartState } from './rule-run-length';
+import { runLengthsOf, type ChartDesign } from './chart-run-length';
+import type { StartState } from './rule-run-length';
 
 /** How late a chart sees a shift of the mean of `shift` σ: `averageRunLength` points, in the mean. */
 export interface Detection {
@@ -21,11 +20,6 @@ export function detectionCurve(
   shifts: readonly number[],
   start: StartState = 'zero',
 ): Detection[] {
-  const automaton = design.kind === 'rules' ? ruleAutomaton(design.rules) : null;
-  return shifts.map((shift) => ({
-    shift,
-    averageRunLength: automaton
-      ? ruleRunLength(automaton, { shift, start })
-      : chartRunLength(design, { shift, start }),
-  }));
+  const runLength = runLengthsOf(design);
+  return shifts.map((shift) => ({ shift, averageRunLength: runLength({ shift, start }) }));
 }

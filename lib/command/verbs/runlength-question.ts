@@ -54,7 +54,7 @@ export function runLengthQuestion(args: string[]): RunLengthQuestion {
     return value;
   };
   const shift = numberFlag(flags, 'shift') ?? 0;
-  const question: RunLengthQuestion = {
+  return {
     design: designOf(flags, shift),
     shift,
     start: flags.steady === true ? 'steady' : 'zero',
@@ -63,10 +63,6 @@ export function runLengthQuestion(args: string[]): RunLengthQuestion {
     seed: flags.seed ?? 'run length',
     json: flags.json ?? false,
   };
-  if (question.baseline !== null && question.design.kind !== 'rules') {
-    throw new UsageError('--baseline goes with --rules');
-  }
-  return question;
 }
 
 function parsed(args: string[]) {

@@ -22,7 +22,7 @@ included, for independent normal values and limits that are known.
   --steady          the shift comes after the chart ran long without a signal; otherwise with the
                     chart just begun (zero state)
   --baseline N      also the signals a point with limits estimated from N points by their moving
-                    ranges: in the mean, and for the middle 80 % of baselines; rules only
+                    ranges: in the mean, and for the middle 80 % of baselines
   --runs N          runs of a simulation (20000)
   --seed TEXT       seed of simulations
   --json            one JSON object
@@ -78,8 +78,8 @@ function answered({ design, shift, start, baseline, runs, seed }: RunLengthQuest
   }
   const averageRunLength = chartRunLength(design, { shift, start });
   const answer: Answer = { averageRunLength, shift, start, method: 'markov-chain', design };
-  if (design.kind !== 'rules' || baseline === null) return answer;
-  const rate = conditionalRate(design.rules, baseline, seededRandom(seed), { shift });
+  if (baseline === null) return answer;
+  const rate = conditionalRate(design, baseline, seededRandom(seed), { shift });
   return { ...answer, estimated: { baseline, ...rate } };
 }
 

@@ -68,7 +68,7 @@ describe('evenohm runlength', () => {
     [['--in-control', '370']],
     [['--shift', 'far']],
     [['--rules', 'six-in-a-trend', '--steady']],
-    [['--cusum', '0.5,5', '--baseline', '25']],
+    [['--cusum', '0.5,5', '--baseline', '2']],
     [['--runs', '1']],
     [['--unheard-of']],
   ])('calls %j wrong usage', async (args) => {

@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { chanceLimits, chanceStream } from '@/lib/control/chance-stream';
+import { chartRunLength } from '@/lib/control/chart-run-length';
 import { chebyshevSurface } from '@/lib/control/chebyshev-surface';
 import { completionsAt, type ChartPoint } from '@/lib/control/completions-at';
 import { conditionalRate } from '@/lib/control/conditional-rate';
@@ -10,6 +11,9 @@ import { ruleRunLength } from '@/lib/control/rule-run-length';
 import { falseSignalsPerWeek, wideningFor } from '@/lib/control/widening-for';
 import { mean } from '@/lib/stats/mean';
 import { seededRandom } from '@/lib/stats/seeded-random';
+
+const FOUR = { kind: 'rules', rules: WESTERN_ELECTRIC } as const;
+const THREE_SIGMA = { kind: 'rules', rules: ['beyond-3-sigma'] } as const;
 
 const shape = { within: true, wafers: 3 };
 
@@ -70,13 +74,24 @@ describe('the rate of signals with limits from a baseline', () => {
       ).level;
       return 1 / ruleRunLength(WESTERN_ELECTRIC, { shift: -centre / sigma, spread: 1 / sigma });
     });
-    const { perPoint } = conditionalRate(WESTERN_ELECTRIC, 30, seededRandom('exact'), { baselines: 30 });
+    const { perPoint } = conditionalRate(FOUR, 30, seededRandom('exact'), { baselines: 30 });
     expect(perPoint / mean(exact)).toBeCloseTo(1, 2);
   });
 
+  it('of an EWMA and a CUSUM grows with estimated limits as that of rules does', () => {
+    for (const design of [
+      { kind: 'ewma', lambda: 0.2, width: 2.962 },
+      { kind: 'cusum', reference: 0.5, decision: 5 },
+    ] as const) {
+      const { perPoint, low, high } = conditionalRate(design, 50, seededRandom('memory'), { baselines: 200 });
+      expect(perPoint).toBeGreaterThan(1.5 / chartRunLength(design));
+      expect(low).toBeLessThan(1 / chartRunLength(design));
+      expect(high).toBeGreaterThan(perPoint);
+    }
+  });
+
   it('tends to that of known limits as the baseline grows, its range with it', () => {
-    const rate = (n: number) =>
-      conditionalRate(['beyond-3-sigma'], n, seededRandom('grows'), { baselines: 400 });
+    const rate = (n: number) => conditionalRate(THREE_SIGMA, n, seededRandom('grows'), { baselines: 400 });
     const [small, large] = [rate(25), rate(2500)];
     expect(1 / large.perPoint).toBeGreaterThan(340);
     expect(1 / large.perPoint).toBeLessThan(380);
@@ -85,14 +100,12 @@ describe('the rate of signals with limits from a baseline', () => {
   });
 
   it('sees a shift that its limits may hide', () => {
-    const seen = conditionalRate(['beyond-3-sigma'], 25, seededRandom('shift'), { shift: 2, baselines: 400 });
+    const seen = conditionalRate(THREE_SIGMA, 25, seededRandom('shift'), { shift: 2, baselines: 400 });
     // Known limits: 1 in 6.30 points at a shift of 2 σ (NIST/SEMATECH e-Handbook and textbooks, from memory).
     expect(seen.low).toBeLessThan(1 / 6.3);
     expect(seen.high).toBeGreaterThan(1 / 6.3);
-    expect(() => conditionalRate(WESTERN_ELECTRIC, 4, seededRandom('shift'))).toThrow(RangeError);
-    expect(() => conditionalRate(WESTERN_ELECTRIC, 25, seededRandom('shift'), { shift: NaN })).toThrow(
-      RangeError,
-    );
+    expect(() => conditionalRate(FOUR, 4, seededRandom('shift'))).toThrow(RangeError);
+    expect(() => conditionalRate(FOUR, 25, seededRandom('shift'), { shift: NaN })).toThrow(RangeError);
   });
 });
 

@@ -15,6 +15,8 @@ import { seededRandom } from '@/lib/stats/seeded-random';
 import { standardNormalCdf } from '@/lib/stats/standard-normal';
 import { unitLimits } from './chart-points';
 
+const FOUR = { kind: 'rules', rules: WESTERN_ELECTRIC } as const;
+
 const STREAMS = 10_000;
 
 /** Runs of charts with memory or rules on values with mean `shift` and σ 1, limits known. */
@@ -139,7 +141,7 @@ describe('points of chance lie beyond their limits as often as computed', () => 
     });
     const mean = rates.reduce((a, b) => a + b) / rates.length;
     const variance = rates.reduce((sum, rate) => sum + (rate - mean) ** 2, 0) / (rates.length - 1);
-    const { perPoint } = conditionalRate(WESTERN_ELECTRIC, 25, seededRandom('estimated'), {
+    const { perPoint } = conditionalRate(FOUR, 25, seededRandom('estimated'), {
       baselines: 4000,
     });
     // Both are samples of baselines: 300 here, 1500 there.
