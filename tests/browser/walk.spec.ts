@@ -30,6 +30,8 @@ let place: WalkPlace;
 test.describe.configure({ mode: 'serial', timeout: 120_000 });
 
 test.beforeAll(async () => {
+  // A second server, its database and its line: on a busy machine they take their time.
+  test.setTimeout(180_000);
   server = await startWalkServer();
   walkers = gather();
   const owner = walkers.find(({ name }) => name === 'process-owner');
