@@ -133,7 +133,7 @@ export function CurvePlot(props: CurvePlotProps) {
             )),
           )}
         </g>
-        {marks.filter(isInside).map((mark) => {
+        {marks.filter(isInside).map((mark, nth) => {
           const [left, top] = [across.place(mark.x), up.place(mark.y)];
           const isRight = left > width * 0.6;
           const circle =
@@ -154,7 +154,7 @@ export function CurvePlot(props: CurvePlotProps) {
               </text>
             );
           return (
-            <g key={`${mark.kind} ${mark.label}`}>
+            <g key={nth}>
               {mark.href === undefined ? circle : <a href={mark.href}>{circle}</a>}
               {mark.kind === 'expected' && (
                 <text

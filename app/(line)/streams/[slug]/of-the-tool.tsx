@@ -2,12 +2,19 @@ import Link from 'next/link';
 import { CurvePlot } from '@/app/_charts/curve-plot';
 import { DataTable } from '@/app/_ui/data-table';
 import { SectionHead } from '@/app/_ui/section-head';
+import type { Actor } from '@/lib/access/actor';
+import { listToolWafers } from '@/lib/excursions/data';
 import { formatCount, formatPercent, formatSignedPercent } from '@/lib/format';
+import { listToolSettings } from '@/lib/streams/data';
 import type { Stream } from '@/lib/streams/types';
-import { type ToolRecipe, toolPlot } from './tool-scale';
+import { toolPlot, toolScale } from './tool-scale';
 
 /** All recipes of the stream's tool on one scale; nothing where it runs this one alone. */
-export function OfTheTool({ stream, recipes }: { stream: Stream; recipes: readonly ToolRecipe[] }) {
+export async function OfTheTool({ actor, stream }: { actor: Actor; stream: Stream }) {
+  const settings = stream.tool === '' ? [] : await listToolSettings(actor, stream);
+  if (settings.length < 2) return null;
+  const ids = settings.map((one) => one.stream.id);
+  const recipes = toolScale(settings, await listToolWafers(actor, ids), stream.id);
   if (recipes.length < 2) return null;
   const word = stream.kind === 'implant' || stream.kind === 'diffusion' ? 'dose' : 'dopant';
   return (

@@ -8,8 +8,7 @@ import { Notice } from '@/app/_ui/notice';
 import { PageHead } from '@/app/_ui/page-head';
 import { signedIn } from '@/app/page-actor';
 import { readEnvironment } from '@/lib/env';
-import { listToolWafers } from '@/lib/excursions/data';
-import { findStreamSettings, listToolSettings } from '@/lib/streams/data';
+import { findStreamSettings } from '@/lib/streams/data';
 import { AlongCrystal } from './along-crystal';
 import { chartProps } from './chart-props';
 import { MeasureAgain } from './measure-again';
@@ -20,7 +19,6 @@ import { type SearchWords, spanWish } from './span-wish';
 import { StreamCases } from './stream-cases';
 import { StreamFacts } from './stream-facts';
 import { readStreamView } from './stream-view';
-import { toolScale } from './tool-scale';
 import { WaferTable } from './wafer-table';
 
 interface Props {
@@ -44,10 +42,6 @@ export default async function StreamPage(props: Props) {
   const timeZone = readEnvironment().siteTimeZone;
   const { wish, notices } = spanWish(await props.searchParams, timeZone);
   const view = await readStreamView(actor, settings, wish, { timeZone, now: new Date() });
-  const { stream } = settings;
-  const ofTool = stream.tool === '' ? [] : await listToolSettings(actor, stream);
-  const toolIds = ofTool.map((one) => one.stream.id);
-  const recipes = ofTool.length < 2 ? [] : toolScale(ofTool, await listToolWafers(actor, toolIds), stream.id);
   const charts = chartProps(view);
   const beside = (
     <>
@@ -75,7 +69,7 @@ export default async function StreamPage(props: Props) {
         </div>
       )}
       <AlongCrystal view={view} />
-      <OfTheTool stream={stream} recipes={recipes} />
+      <OfTheTool actor={actor} stream={settings.stream} />
       <WaferTable view={view} />
       <MeasureAgain view={view} />
     </>

@@ -35,7 +35,7 @@ export function pointTexts(args: {
     level: isRelative ? formatSignedPercent(shown.level, 2) : (inUnit(shown.level, 4) ?? undefinedMark),
     expected: expected === null ? null : expectedText(expected, unit, isRelative),
     difference: against && differenceText(against),
-    dopant: dopantText(against?.dopant ?? null),
+    dopant: against?.dopant ? signedText(against.dopant) : null,
     density: against?.dopant && isOnePlace(wafers) ? formatDensityPerCm3(against.dopant.densityPerCm3) : null,
     onBefore: onBeforeText({ against, wafers }, args.before, expected, stream.repeatabilityPercent),
     movingRange: isRelative
@@ -65,10 +65,9 @@ export interface PointAgainst {
 
 /** "−2.0 ± 1.7 %": the difference in the reading, with the standard uncertainty of what is expected. */
 function differenceText({ differencePercent, uncertaintyPercent }: LevelAgainstExpected): string {
-  const difference = formatSignedPercent(differencePercent).replace(/\s%$/, '');
   return uncertaintyPercent === null
     ? formatSignedPercent(differencePercent)
-    : `${difference} ± ${formatPercent(uncertaintyPercent, 1)}`;
+    : signedText({ percent: differencePercent, uncertaintyPercent });
 }
 
 /**
@@ -90,17 +89,22 @@ function onBeforeText(
       of.reduce((sum, wafer) => sum + wafer.sites - wafer.badSites, 0),
     );
   const ownPercent = repeatabilityPercent * Math.sqrt(1 / readings(wafers) + 1 / readings(before.wafers));
-  return dopantText({
+  return signedText({
     percent: dopantScalePercent(ratio, sensitivity),
     uncertaintyPercent: Math.abs(ownPercent / sensitivity),
   });
 }
 
-/** "+2.1 ± 1.7 %": the difference as percent dopant, with the standard uncertainty of what is expected. */
-function dopantText(dopant: { percent: number; uncertaintyPercent: number } | null): string | null {
-  if (dopant === null) return null;
-  const text = formatWithUncertainty(dopant.percent, dopant.uncertaintyPercent, '%');
-  return dopant.percent > 0 ? `+${text}` : text;
+/** "+2.1 ± 1.7 %": cut where the uncertainty stops meaning anything, its sign always said. */
+function signedText({
+  percent,
+  uncertaintyPercent,
+}: {
+  percent: number;
+  uncertaintyPercent: number;
+}): string {
+  const text = formatWithUncertainty(percent, uncertaintyPercent, '%');
+  return percent > 0 ? `+${text}` : text;
 }
 
 function expectedText({ value, uncertaintyPercent }: PointExpected, unit: ChartUnit, isRelative: boolean) {

@@ -80,6 +80,6 @@ export function toolPlot(recipes: readonly ToolRecipe[], dopantWord: string): Cu
         ...(letter === null ? {} : { letter }),
       })),
     ),
-    levels: [{ y: 0, label: 'as expected' }],
+    levels: [{ y: 0, label: '' }],
   };
 }
