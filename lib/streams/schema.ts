@@ -93,10 +93,15 @@ export const revisionMeta = (timeZone: string) =>
 /** What a revision of a target carries besides: whether the rules begin afresh where it takes force. */
 export const targetMeta = (timeZone: string) => revisionMeta(timeZone).extend({ restart: typedBox });
 
+/** Nothing takes an event back, so a year that was mistyped must not get in: what is recorded has been done. */
+const MINUTE_MS = 60_000;
+
 export const newStreamEvent = (timeZone: string) =>
   z.object({
     kind: typedChoice(['adjustment', 'maintenance'], 'Choose what was done.'),
-    at: typedTime(timeZone),
+    at: typedTime(timeZone).refine((at) => at.getTime() <= Date.now() + MINUTE_MS, {
+      error: 'This time lies ahead: record what was done once it is done.',
+    }),
     restart: typedBox,
     text: typedText({ most: 500, ask: 'Say what was done.' }),
   });

@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { faultsOf } from '@/app/_ui/form-state';
-import { newStream, typedSpecification } from '@/lib/streams/schema';
+import { newStream, newStreamEvent, typedSpecification } from '@/lib/streams/schema';
 import { slugOf } from '@/lib/streams/slug-of';
 
 const fields = (parsed: ReturnType<typeof typedSpecification.safeParse>) =>
@@ -59,5 +59,18 @@ describe('slugOf', () => {
   it('makes a name for addresses of a name for people', () => {
     expect(slugOf('N-epi 5.6 Ω·cm, Röhre 2')).toBe('n-epi-5-6-cm-ro-hre-2');
     expect(slugOf('  ')).toBe('');
+  });
+});
+
+describe('newStreamEvent', () => {
+  const event = (at: string) =>
+    newStreamEvent('UTC').safeParse({ kind: 'adjustment', at, text: 'Dose factor 0.985' });
+  const minutes = (count: number) => new Date(Date.now() + count * 60_000).toISOString().slice(0, 16);
+
+  it('takes what was done until now, and refuses a time that lies ahead: nothing takes an event back', () => {
+    expect(event('2026-01-06T03:30').success).toBe(true);
+    expect(event(minutes(0)).success).toBe(true);
+    expect(event(minutes(10)).error?.issues[0]?.message).toMatch(/^This time lies ahead/);
+    expect(event('').error?.issues[0]?.message).toBe('Give a day and a time.');
   });
 });
