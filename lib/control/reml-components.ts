@@ -1,6 +1,6 @@
 import { Matrix, solve } from 'ml-matrix';
 import type { NestedLevels } from './nested-levels';
-import { restrictedLikelihood } from './restricted-likelihood';
+import { restrictedLikelihood, type RestrictedLikelihood } from './restricted-likelihood';
 
 /** A variance below this part of all is taken as zero. */
 const NOTHING = 1e-9;
@@ -26,7 +26,7 @@ export function remlComponents(levels: NestedLevels): number[] | null {
   const unit = total / values.length;
   let variances = groups.map(() => unit / groups.length);
   for (let round = 0; round <= groups.length; round++) {
-    variances = climbed(levels, variances, 30);
+    variances = climbed(levels, variances, 10);
     variances = sharpened(levels, variances, unit).map((v) => (v < NOTHING * unit ? 0 : v));
     const { cost, pull } = restrictedLikelihood(levels, variances);
     const wanted = variances.map((v, k) => v === 0 && (pull[k] ?? 0) > (cost[k] ?? 0));
@@ -52,11 +52,10 @@ function sharpened(levels: NestedLevels, from: readonly number[], unit: number):
     const free = variances.flatMap((v, k) => (v > NOTHING * unit ? [k] : []));
     variances = variances.map((v, k) => (free.includes(k) ? v : 0));
     const here = restrictedLikelihood(levels, variances);
-    const slope = (list: readonly number[]): number[] => {
-      const { cost, pull } = restrictedLikelihood(levels, list);
-      return free.map((k) => (list[k] ?? 0) * ((cost[k] ?? 0) - (pull[k] ?? 0)));
-    };
-    const level = slope(variances);
+    const slopeOf = (list: readonly number[], { cost, pull }: RestrictedLikelihood): number[] =>
+      free.map((k) => (list[k] ?? 0) * ((cost[k] ?? 0) - (pull[k] ?? 0)));
+    const slope = (list: readonly number[]): number[] => slopeOf(list, restrictedLikelihood(levels, list));
+    const level = slopeOf(variances, here);
     const scale = free.map((k) => (variances[k] ?? 0) * (here.cost[k] ?? 1));
     if (level.every((g, i) => Math.abs(g) < 1e-13 * (scale[i] ?? 1))) break;
     const curved = free.map((k) => {
@@ -73,6 +72,7 @@ function sharpened(levels: NestedLevels, from: readonly number[], unit: number):
     const allowed = here.value + 1e-9 * Math.abs(here.value);
     while (reach > 1e-6 && restrictedLikelihood(levels, at(reach)).value > allowed) reach /= 2;
     variances = at(reach);
+    if (reach * Math.max(...direction.map(Math.abs)) < 1e-12) break;
   }
   return variances;
 }

@@ -5,6 +5,7 @@ import { intakeBench } from './intake-bench';
 import { oneWaferBench } from './one-wafer-bench';
 import { pageBench } from './page-bench';
 import { physicsBench } from './physics-bench';
+import { statisticsBench } from './statistics-bench';
 import { scratchServer, type ScratchServer } from './scratch-database';
 
 /** Starts the scratch server when a part first asks for it. */
@@ -17,6 +18,7 @@ const server = (): Promise<ScratchServer> => (scratch.server ??= scratchServer()
  */
 const parts: Record<string, () => Promise<Figure[]> | Figure[]> = {
   physics: physicsBench,
+  statistics: statisticsBench,
   control: controlBench,
   wafer: async () => oneWaferBench(await server()),
   audit: async () => auditBench(await server()),
