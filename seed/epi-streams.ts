@@ -2,7 +2,7 @@ import type { DemoStream, Making } from './demo-stream';
 import { polarPlan } from './site-plans';
 import { cause, NO_CAUSE, plainTarget, specificationAround } from './stream-parts';
 
-/** Layers end at the depletion edge of their junction, a few percent before the thickness that is measured. */
+/** Autodoping from the substrate moves the junction up: beyond what it depletes, layers end a few percent early. */
 const making: Making = {
   dopingPercent: cause(0.7, 0.2, { bowl: 1.2, rim: 0.8, tilt: 0.7, tiltDegrees: 20 }),
   lengthPercent: cause(0.35, 0.15, { bowl: -0.6, rim: 0.5 }),

@@ -11,7 +11,12 @@ const METHODS = [
     'Temperature coefficient, 18 to 28 °C',
     'ASTM F84 / SEMI MF84, after Bullis et al., Solid-State Electron. 11, 639 (1968)',
   ],
+  [
+    'Away from 18 to 28 °C, and two dopants in one silicon',
+    'Mobility of Arora et al., IEEE T-ED 29, 292 (1982), and Masetti et al., IEEE T-ED 30, 764 (1983); carriers by Misiakos and Tsamakis, J. Appl. Phys. 74, 3293 (1993)',
+  ],
   ['Along a crystal', 'Scheil’s law, with the segregation coefficients of the trade'],
+  ['Implanted and diffused layers', 'J. C. Irvin, Bell Syst. Tech. J. 41, 387 (1962), down to the junction'],
   ['Limits of the level', 'Moving range of the subgroups; NIST/SEMATECH e-Handbook, section 6.3.2.2'],
   ['Rules', 'Western Electric, Statistical Quality Control Handbook (1956)'],
   ['How often rules signal by chance', 'Champ and Woodall, Technometrics 29, 393 (1987)'],
@@ -25,7 +30,7 @@ export default async function MethodsPage() {
     <>
       <PageHead
         answer="The published methods behind the figures"
-        sub="Each figure’s definition stands beside it. The screening of readings and the joining of signals to cases are our own."
+        sub="Each figure’s definition stands beside it. What they expect of a target stands on the page Expected. The screening of readings and the joining of signals to cases are our own."
         back={{ href: '/', label: 'Board' }}
       />
       <dl style={{ margin: 0 }}>
