@@ -145,3 +145,19 @@ describe('the interval of a variance component', () => {
     expect(componentInterval({ value: 1, degreesOfFreedom: 4 }, below, 2)).toEqual({ low: 0, high: 0 });
   });
 });
+
+describe('intervals of variance components', () => {
+  it('hold the truth as often as they say, within 94 and 96 % and 3.5 standard errors of the simulation', () => {
+    const trials = 250;
+    const held = [0, 0, 0];
+    for (let i = 0; i < trials; i++) {
+      const { levels } = varianceComponents(line(`coverage ${i}`, 10, [3, 3, 3], [2, 1, 1]), NAMES);
+      levels.forEach(({ interval }, j) => {
+        const truth = j === 0 ? 4 : 1;
+        if (interval && interval.low <= truth && truth <= interval.high) held[j] = (held[j] ?? 0) + 1;
+      });
+    }
+    const slack = 0.01 + 3.5 * Math.sqrt((0.05 * 0.95) / trials);
+    for (const times of held) expect(Math.abs(times / trials - 0.95)).toBeLessThan(slack);
+  });
+});
