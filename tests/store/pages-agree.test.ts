@@ -62,7 +62,10 @@ async function againstExpected(slug: string) {
   return {
     board: [expected && formatSignedPercent(expected.differencePercent), dopant],
     // The stream's page adds how well the difference is known.
-    page: [newest?.texts.difference?.replace(/ ± [\d.]+/, '') ?? null, newest?.texts.dopant?.replace(/^\+/, '') ?? null],
+    page: [
+      newest?.texts.difference?.replace(/ ± [\d.]+/, '') ?? null,
+      newest?.texts.dopant?.replace(/^\+/, '') ?? null,
+    ],
   };
 }
 
