@@ -1,5 +1,6 @@
 import { auditBench } from './audit-bench';
 import { controlBench } from './control-bench';
+import { coverageBench } from './coverage-bench';
 import { figureLine, holds, type Figure } from './figure';
 import { intakeBench } from './intake-bench';
 import { oneWaferBench } from './one-wafer-bench';
@@ -19,6 +20,7 @@ const server = (): Promise<ScratchServer> => (scratch.server ??= scratchServer()
 const parts: Record<string, () => Promise<Figure[]> | Figure[]> = {
   physics: physicsBench,
   statistics: statisticsBench,
+  coverage: coverageBench,
   control: controlBench,
   wafer: async () => oneWaferBench(await server()),
   audit: async () => auditBench(await server()),
