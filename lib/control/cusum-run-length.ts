@@ -1,5 +1,5 @@
 import type { AbsorbingChain } from './absorbing-chain';
-import { cellChain } from './cell-chain';
+import { cellChain, partBelow } from './cell-chain';
 import { cusumSteadyRunLength } from './cusum-steady-run-length';
 import { extrapolated } from './extrapolated';
 import type { RunLengthOptions } from './rule-run-length';
@@ -53,7 +53,9 @@ function armChain(
   spread: number,
 ): AbsorbingChain {
   const step = (2 * decision) / (2 * size - 1);
-  return cellChain(size, (from, edge) =>
-    edge === 0 ? -Infinity : ((edge - 0.5 - from) * step + reference - shift) / spread,
+  // Only how far an edge lies from the cell matters.
+  const below = Float64Array.from({ length: 2 * size + 1 }, (_, i) =>
+    partBelow(((i - size - 0.5) * step + reference - shift) / spread),
   );
+  return cellChain(size, (from, edge) => (edge === 0 ? 0 : (below[edge - from + size] ?? 0)));
 }

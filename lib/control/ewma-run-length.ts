@@ -1,5 +1,5 @@
 import type { AbsorbingChain } from './absorbing-chain';
-import { cellChain } from './cell-chain';
+import { cellChain, partBelow } from './cell-chain';
 import { extrapolated } from './extrapolated';
 import type { RunLengthOptions } from './rule-run-length';
 
@@ -52,6 +52,6 @@ function chainOf({ lambda, width }: EwmaDesign, size: number, shift: number, spr
   const step = (2 * limit) / size;
   return cellChain(size, (from, edge) => {
     const before = -limit + (from + 0.5) * step;
-    return ((-limit + edge * step - (1 - lambda) * before) / lambda - shift) / spread;
+    return partBelow(((-limit + edge * step - (1 - lambda) * before) / lambda - shift) / spread);
   });
 }

@@ -70,7 +70,7 @@ describe('a chart walked point by point', () => {
       fc.property(levels, (values) => {
         expect(firstByWalk([name], values)).toBe(firstByJudging([name], values));
       }),
-      { numRuns: 40, seed: 6 },
+      { numRuns: 25, seed: 6 },
     );
   });
 
