@@ -1,5 +1,7 @@
 import { ruleSentence } from '@/lib/control/rule';
 import type { StudyChart, StudySignal } from '@/lib/control/study-chart';
+import { plainTable } from './plain-table';
+import { sixDigits } from './six-digits';
 
 /** A study as a table for people: the figures of each chart, and under it each signal in words. */
 export function studyTable(charts: readonly StudyChart[]): string {
@@ -9,16 +11,12 @@ export function studyTable(charts: readonly StudyChart[]): string {
     estimator,
   ]);
   const table = [['chart', 'lower', 'centre', 'upper', 'sigma', 'sigma from'], ...rows];
-  const widths = [0, 1, 2, 3, 4, 5].map((i) => Math.max(...table.map((row) => row[i]?.length ?? 0)));
-  const lines = table.map((row) =>
-    row.map((cell, i) => (i === 0 ? cell.padEnd(widths[i] ?? 0) : cell.padStart(widths[i] ?? 0))).join('  '),
-  );
   const signals = charts.flatMap((chart) =>
     chart.signals.map(
       (signal) => `point ${signal.point}, ${chart.name}: ${signalWords(chart, signal)} (${signal.rule})`,
     ),
   );
-  return [...lines, '', ...(signals.length > 0 ? signals : ['no signal'])].join('\n');
+  return [plainTable(table), '', ...(signals.length > 0 ? signals : ['no signal'])].join('\n');
 }
 
 function signalWords({ name }: StudyChart, { rule, side, participants }: StudySignal): string {
@@ -28,7 +26,7 @@ function signalWords({ name }: StudyChart, { rule, side, participants }: StudySi
 }
 
 function figure(value: number | readonly (number | null)[]): string {
-  if (typeof value === 'number') return Number(value.toPrecision(6)).toString();
+  if (typeof value === 'number') return sixDigits(value);
   const known = value.filter((entry) => entry !== null);
   if (known.length === 0) return '—';
   return `${figure(Math.min(...known))} … ${figure(Math.max(...known))}`;

@@ -10,6 +10,6 @@ export const verbLoaders: ReadonlyMap<string, () => Promise<Verb>> = new Map([
   ['expect', async () => (await import('./verbs/expect')).expect],
   ['study', async () => (await import('./verbs/study')).study],
   ['components', async () => (await import('./verbs/components')).components],
-  ['runlength', async () => (await import('./verbs/runlength')).runlength],
   ['capability', async () => (await import('./verbs/capability')).capability],
+  ['runlength', async () => (await import('./verbs/runlength')).runlength],
 ]);
