@@ -2,6 +2,7 @@
 
 import { useId } from 'react';
 import { curvePath, type PlotPoint } from './curve-path';
+import { CurveMarks, type PlotMark } from './curve-marks';
 import { plotAxis, type PlotAxis } from './plot-axis';
 import { useWidth } from './use-width';
 import styles from './curve-plot.module.css';
@@ -21,12 +22,7 @@ export interface CurvePlotProps {
   y: PlotAxis;
   curves: readonly PlotCurve[];
   /** Points with their names: what is expected as a ring, what was measured filled, or as the letter of its kind. */
-  marks: readonly (PlotPoint & {
-    label: string;
-    kind: 'expected' | 'measured';
-    href?: string;
-    letter?: string;
-  })[];
+  marks: readonly PlotMark[];
   /** Places along the horizontal axis, each with its word. */
   places?: readonly { x: number; label: string }[];
   /** Levels across, such as the density underneath a layer. */
@@ -133,42 +129,7 @@ export function CurvePlot(props: CurvePlotProps) {
             )),
           )}
         </g>
-        {marks.filter(isInside).map((mark, nth) => {
-          const [left, top] = [across.place(mark.x), up.place(mark.y)];
-          const isRight = left > width * 0.6;
-          const circle =
-            mark.letter === undefined ? (
-              <circle
-                className={styles['mark']}
-                data-kind={mark.kind}
-                cx={left}
-                cy={top}
-                r={mark.kind === 'measured' ? 3.5 : 6}
-              >
-                <title>{mark.label}</title>
-              </circle>
-            ) : (
-              <text className={styles['letter']} x={left} y={top + 4} textAnchor="middle">
-                {mark.letter}
-                <title>{mark.label}</title>
-              </text>
-            );
-          return (
-            <g key={nth}>
-              {mark.href === undefined ? circle : <a href={mark.href}>{circle}</a>}
-              {mark.kind === 'expected' && (
-                <text
-                  className={styles['name']}
-                  x={left + (isRight ? -10 : 10)}
-                  y={top - 8}
-                  textAnchor={isRight ? 'end' : 'start'}
-                >
-                  {mark.label}
-                </text>
-              )}
-            </g>
-          );
-        })}
+        <CurveMarks marks={marks.filter(isInside)} across={across.place} up={up.place} width={width} />
       </svg>
       {curves.length > 1 && (
         <ul className={`${styles['key']} small`}>

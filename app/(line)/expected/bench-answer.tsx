@@ -1,19 +1,15 @@
 import { CurvePlot } from '@/app/_charts/curve-plot';
-import { Figures } from '@/app/_ui/figures';
 import { SectionHead } from '@/app/_ui/section-head';
-import { formatDensityPerCm3, formatPercent, formatReading, formatSignedPercent } from '@/lib/format';
-import { againstExpected } from '@/lib/physics/against-expected';
 import { isCompensated } from '@/lib/physics/compensated-target';
 import { expectedOrNull } from '@/lib/physics/expected-or-null';
 import { standardResistivity } from '@/lib/physics/standard-resistivity';
 import type { Target } from '@/lib/physics/target';
 import { targetDensity } from '@/lib/physics/target-density';
-import { causeRows } from '../cause-rows';
-import { Causes } from '../causes';
 import { crystalPlot } from '../crystal-plot';
 import { AtTemperature } from './at-temperature';
 import { benchBudget } from './bench-budget';
 import type { BenchQuestion } from './bench-question';
+import { BenchReading } from './bench-reading';
 import { BudgetTable, DopantTable, ModelTable } from './bench-tables';
 import { conversionPlot } from './conversion-plot';
 import { layerPlot } from './layer-plot';
@@ -32,7 +28,7 @@ export function BenchAnswer(props: { target: Target; question: BenchQuestion; qu
   return (
     <>
       {question.measured !== null && expected !== null && (
-        <Reading target={target} question={question} measured={question.measured} />
+        <BenchReading target={target} question={question} measured={question.measured} />
       )}
       <SectionHead id="conversion">Doping and resistivity</SectionHead>
       <p className="quiet small">
@@ -111,44 +107,4 @@ function standardOrNull(target: Target, densityPerCm3: number): number | null {
     if (error instanceof RangeError) return null;
     throw error;
   }
-}
-
-/** A reading held against what is expected, and what would explain the difference. */
-function Reading(props: { target: Target; question: BenchQuestion; measured: number }) {
-  const { target, question, measured } = props;
-  const against = againstExpected(target, measured, question.wafer);
-  if (against === null) return null;
-  const { expected } = against;
-  return (
-    <>
-      <SectionHead id="reading">A reading of {formatReading(target.quantity, measured)}</SectionHead>
-      <div style={{ maxWidth: 560 }}>
-        <Figures
-          figures={[
-            {
-              name: 'difference',
-              value: `${formatSignedPercent(against.differencePercent)} ± ${formatPercent(against.differenceUncertaintyPercent, 1)}`,
-            },
-            { name: 'stands for', value: formatDensityPerCm3(against.densityPerCm3) },
-            {
-              name: 'against target',
-              value:
-                against.dopantPercent === null
-                  ? '—'
-                  : `${formatSignedPercent(against.dopantPercent)} dopant ± ${formatPercent(against.dopantUncertaintyPercent, 1)}`,
-            },
-          ]}
-        />
-      </div>
-      <SectionHead level={3}>What would explain it</SectionHead>
-      <Causes
-        rows={causeRows(
-          target,
-          question.wafer,
-          measured / expected.value,
-          against.differenceUncertaintyPercent,
-        )}
-      />
-    </>
-  );
 }

@@ -2,10 +2,10 @@ import { SelectField, TextField } from '@/app/_ui/field';
 import type { Target } from '@/lib/physics/target';
 import { METHODS } from '@/lib/streams/target-fields';
 import type { Stream } from '@/lib/streams/types';
+import { LENGTH_WORDS, METHOD_WORDS } from './given-field';
 import { Options } from './options';
 import type { TargetChoices } from './target-choices';
 import { TargetDopant, type TargetForm, TargetNumber } from './target-field';
-import { LENGTH_WORDS, METHOD_WORDS } from './words';
 
 /** What makes a layer a layer: its depth, what lies underneath, how it is measured. Nothing of a plain wafer. */
 export function LayerFields(

@@ -7,11 +7,12 @@ import type { Target } from '@/lib/physics/target';
 import { GIVEN_FIELD } from '@/lib/streams/target-of-fields';
 import type { Stream } from '@/lib/streams/types';
 import { FurtherFields } from './further-fields';
+import { GIVEN_WORDS, givenField } from './given-field';
 import { LayerFields } from './layer-fields';
 import { Options } from './options';
 import { targetChoices } from './target-choices';
 import { TargetDopant, type TargetForm, TargetNumber } from './target-field';
-import { GIVEN_WORDS, givenField, PROFILE_WORDS } from './words';
+import { PROFILE_WORDS } from './words';
 
 /**
  * What a step aims at, asked as people of its kind know it: doping or resistivity, a dose with range and straggle, a

@@ -20,7 +20,7 @@ export default async function PermissionsPage() {
             ? 'Five roles, and limits need four eyes'
             : 'Five roles; whoever draws limits up may approve them'
         }
-        sub="The table that every page, form and address of this server asks. It is part of the program: roles are given to people, permissions are not."
+        sub="The table that every page, form and address of this server asks. It is part of the program: roles are given to people, permissions are not. Weekly reports and notes, and gauges, have no pages yet: their lines say who will have them."
       />
       <PermissionTable />
       <SectionHead id="four-eyes">Four eyes over limits</SectionHead>
