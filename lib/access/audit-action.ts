@@ -4,6 +4,8 @@
  */
 export const AUDIT_ACTIONS = [
   'recorded maps',
+  'refused maps',
+  'received maps on record',
   'took out a reading',
   'put back a reading',
   'acknowledged a case',

@@ -183,7 +183,11 @@ async function fileBatch(actor: Actor, batch: Batch, result: IntakeResult): Prom
        RETURNING xmax = 0 AS appeared`,
       [batch.id, batch.source, batch.origin, batch.history, actor.name, result.repeated, result.refused],
     );
-    if (rows[0]?.appeared) tell(batchTelling(batch, null));
+    // A batch that appears only now has nothing recorded in it.
+    if (rows[0]?.appeared) {
+      const action = result.refused > 0 ? 'refused maps' : 'received maps on record';
+      tell({ ...batchTelling(batch, null), action });
+    }
     const parameters: unknown[] = [];
     const given = rowsAsQuery(REFUSAL_COLUMNS, listed, parameters);
     const columns = columnNames(REFUSAL_COLUMNS);

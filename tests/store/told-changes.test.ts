@@ -174,7 +174,9 @@ describe('the audit trail tells', () => {
     await take(fileText(slug, [wafer(id, 6)]));
     await take(fileText(slug, [wafer(id, 7), wafer(id, 8)]));
     await take(fileText(slug, [wafer(id, 8)]));
+    expect(await lastTold(1)).toMatchObject([{ action: 'received maps on record' }]);
     await take('stream,wafer\nnone,W1\n');
+    expect(await lastTold(1)).toMatchObject([{ action: 'refused maps', after: { source: 'monday.csv' } }]);
     expect(await untold()).toEqual([]);
     const { rows } = await getPool().query(`SELECT count(*)::integer AS n FROM intake_batch`);
     expect(rows[0].n).toBeGreaterThanOrEqual(8);
