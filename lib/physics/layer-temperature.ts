@@ -34,7 +34,7 @@ function meanOverConductance(layer: Layer, of: (total: number, resistivity: numb
  * By the published coefficients (ASTM F84 / SEMI MF84) where all depths lie within 0.001 to 500 Ω·cm, else by the Arora
  * model throughout. Throws RangeError where `sheetResistance` does.
  *
- * @example layerCoefficient(gaussian boron 1e19, L = 0.5 µm, in 1e15).percentPerC // 0.09
+ * @example layerCoefficient(gaussian boron 1e19, L = 0.5 µm, in 1e15).percentPerC // 0.063
  */
 export function layerCoefficient(layer: Layer): LayerCoefficient {
   const type = conductionType(layer.dopant);

@@ -5,7 +5,7 @@ import { refuse } from '@/lib/access/refusal';
 import { holdStream, judgeAgain } from '@/lib/excursions/mutations';
 import type { Target } from '@/lib/physics/target';
 import { newestProcessedAt } from './newest-processed-at';
-import { insertSpecification, insertTarget, targetFacts } from './revision-rows';
+import { insertSpecification, insertTarget, specificationFacts, targetFacts } from './revision-rows';
 import type { Result, Specification, StreamEvent } from './types';
 
 export { createSitePlan, createStream, type NewStream } from './create-stream';
@@ -78,7 +78,11 @@ export async function reviseSpecification(
       subject: { kind: 'specification-revision', id },
       streamId,
       ...(before === null ? {} : { before }),
-      after: { revision, ...specification, effectiveFrom: meta.effectiveFrom.toISOString() },
+      after: {
+        revision,
+        ...specificationFacts(specification),
+        effectiveFrom: meta.effectiveFrom.toISOString(),
+      },
       why: meta.reason,
     });
     return { ok: true, value: revision };

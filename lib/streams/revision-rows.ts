@@ -16,10 +16,40 @@ interface RevisionMeta {
   reason: string;
 }
 
-/** What the audit trail tells of a target. */
+/** What the audit trail tells of a target, and where it stands; of a profile of pairs, how many there are. */
+const TARGET_FACTS = {
+  dopant: 'dopant',
+  densityPerCm3: 'density_per_cm3',
+  tolerancePercent: 'tolerance_percent',
+  profile: 'profile',
+  lengthUm: 'length_um',
+  rangeUm: 'range_um',
+  driveInC: 'drive_in_c',
+  driveInMin: 'drive_in_min',
+  backgroundDopant: 'background_dopant',
+  backgroundDensityPerCm3: 'background_density_per_cm3',
+  counterDopant: 'counter_dopant',
+  counterDensityPerCm3: 'counter_density_per_cm3',
+  temperatureCoefficientPercentPerC: 'temperature_coefficient_percent_per_c',
+  method: 'method',
+  calibrationFactor: 'calibration_factor',
+  calibrationPercent: 'calibration_percent',
+} as const satisfies Partial<Record<keyof Target, string>>;
+
+/** What the audit trail tells of a target: what it says, without what it leaves open. */
 export function targetFacts(target: Target): AuditFacts {
-  const { dopant, densityPerCm3, tolerancePercent, calibrationFactor } = target;
-  return { dopant, densityPerCm3, tolerancePercent, calibrationFactor };
+  const names = Object.keys(TARGET_FACTS) as (keyof typeof TARGET_FACTS)[];
+  const facts = Object.fromEntries(names.map((name) => [name, target[name] ?? null]));
+  return withoutOpen({ ...facts, pairs: target.pairs?.length ?? null });
+}
+
+/** What the audit trail tells of a specification. */
+export function specificationFacts(specification: Specification): AuditFacts {
+  return withoutOpen({ ...specification });
+}
+
+function withoutOpen(facts: AuditFacts): AuditFacts {
+  return Object.fromEntries(Object.entries(facts).filter(([, value]) => value !== null));
 }
 
 /** Writes the next revision of a target. */
@@ -38,8 +68,8 @@ export async function insertTarget(
      VALUES ($1, ${nextRevision('target_revision')}, $2, $3, $4, $5, $6, $7, $8, $9, $10, $11, $12, $13, $14, $15,
        $16, $17, $18, $19, $20, $21, $22, $23)
      RETURNING id, revision, ${factsBefore('target_revision', [
-       "'dopant', p.dopant, 'densityPerCm3', p.density_per_cm3",
-       "'tolerancePercent', p.tolerance_percent, 'calibrationFactor', p.calibration_factor",
+       ...Object.entries(TARGET_FACTS).map(([name, column]) => `'${name}', p.${column}`),
+       "'pairs', jsonb_array_length(p.profile_pairs)",
      ])}`,
     [
       ...[streamId, meta.effectiveFrom, target.dopant, target.densityPerCm3, target.tolerancePercent],
@@ -94,6 +124,6 @@ function nextRevision(table: string): string {
 
 /** Within RETURNING a query does not yet see the row that is written: the newest is the one before it. */
 function factsBefore(table: string, facts: readonly string[]): string {
-  return `(SELECT json_build_object('revision', p.revision, ${facts.join(', ')}) FROM ${table} p
+  return `(SELECT json_strip_nulls(json_build_object('revision', p.revision, ${facts.join(', ')})) FROM ${table} p
     WHERE p.stream_id = $1 ORDER BY p.revision DESC LIMIT 1) AS before`;
 }

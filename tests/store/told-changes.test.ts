@@ -108,6 +108,30 @@ describe('the audit trail tells', () => {
     ]);
   });
 
+  test('of all that a target says, and of nothing that it leaves open', async () => {
+    const { id } = await newStream();
+    const implant = {
+      quantity: 'sheet_resistance',
+      profile: 'implant',
+      rangeUm: 0.3,
+      backgroundDopant: 'phosphorus',
+    } as const;
+    const target = {
+      ...TARGET,
+      ...implant,
+      lengthUm: 0.07,
+      backgroundDensityPerCm3: 1e15,
+      densityPerCm3: 1e18,
+    };
+    await reviseTarget(actor, id, target, { effectiveFrom: hour(0), reason: 'monitors' });
+    await reviseTarget(actor, id, { ...target, rangeUm: 0.4 }, { effectiveFrom: hour(1), reason: 'deeper' });
+    const [told] = await lastTold(1);
+    expect(told.before).toMatchObject({ profile: 'implant', rangeUm: 0.3, lengthUm: 0.07 });
+    expect(told.after).toMatchObject({ profile: 'implant', rangeUm: 0.4, backgroundDopant: 'phosphorus' });
+    expect(told.before).not.toHaveProperty('tolerancePercent');
+    expect(told.after).not.toHaveProperty('tolerancePercent');
+  });
+
   test('of limits', async () => {
     const { id } = await newStream();
     await recordInTurn([1, 2, 3].map((i) => wafer(id, i)));
