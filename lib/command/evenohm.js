@@ -3,6 +3,9 @@ import { fileURLToPath } from 'node:url';
 import { register } from 'tsx/esm/api';
 import { generatePrismaClient } from '../database/generate.js';
 
+/** Whoever reads may go away (`npm start | tee log`): a server then goes on, and does not tell of each write that failed. */
+for (const stream of [process.stdout, process.stderr]) stream.on('error', () => undefined);
+
 register({ tsconfig: fileURLToPath(new URL('../../tsconfig.json', import.meta.url)) });
 generatePrismaClient();
 
