@@ -35,7 +35,6 @@ const PLACES = {
     '/setup/plans/new',
     '/setup/streams/new',
     '/account',
-    '/first-administrator',
   ],
   'the setup of a stream': [
     '/setup/streams/boron-implant-1',
