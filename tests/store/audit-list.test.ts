@@ -17,10 +17,13 @@ const most = { skip: 0, most: 100 };
 
 let database: FreshDatabase;
 let first: Date;
+let slug: string;
+let otherSlug: string;
 beforeAll(async () => {
   database = await freshDatabase();
-  const { id } = await newStream();
+  const { id, slug: own } = await newStream();
   const other = await newStream();
+  [slug, otherSlug] = [own, other.slug];
   const told: [Actor, Telling][] = [
     [owner, { action: 'revised a target', subject: { kind: 'target-revision', id: '1' }, streamId: id }],
     [owner, { action: 'approved limits', subject: { kind: 'limit-revision', id: '1' }, streamId: other.id }],
@@ -51,7 +54,7 @@ describe('the list of the audit trail', () => {
     expect(await actions({ who: 'otto' })).toHaveLength(3);
     expect(await actions({ who: '100%' })).toEqual(['changed a setting']);
     expect(await actions({ who: '_tto' })).toEqual([]);
-    expect(await actions({ stream: 'stream-2', action: 'approved limits' })).toHaveLength(1);
+    expect(await actions({ stream: otherSlug, action: 'approved limits' })).toHaveLength(1);
     expect(await actions({ stream: 'no-such' })).toEqual([]);
     expect(await actions({ from: first, who: 'otto' })).toHaveLength(3);
     expect(await actions({ to: first, who: 'otto' })).toEqual([]);
@@ -61,8 +64,8 @@ describe('the list of the audit trail', () => {
     const [entry] = await listAuditEntries(manager, { ...all, action: 'retired a stream' }, most);
     expect(entry).toMatchObject({
       actorName: 'Otto',
-      subjectName: 'stream-1',
-      stream: { slug: 'stream-1', name: 'stream-1' },
+      subjectName: slug,
+      stream: { slug, name: slug },
       why: 'the tool is sold',
     });
   });

@@ -17,7 +17,6 @@ import { freshDatabase, type FreshDatabase } from '../support/fresh-database';
 import {
   actor,
   casesOf,
-  forgetPlan,
   hour,
   newBatch,
   newStream,
@@ -47,7 +46,6 @@ let draftId = '';
 
 beforeAll(async () => {
   database = await freshDatabase();
-  forgetPlan();
   [theirs, own] = [await newStream(), await newStream()];
   await settleLimits(theirs.id);
   await recordInTurn([0, 1, 2, 3].map((i) => wafer(theirs.id, i)).concat(wafer(theirs.id, 4, 12)));

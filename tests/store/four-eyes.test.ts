@@ -7,7 +7,7 @@ import { getPool } from '@/lib/database/client';
 import { listLimitRevisions } from '@/lib/limits/data';
 import { approveLimits, draftLimits } from '@/lib/limits/mutations';
 import { freshDatabase, type FreshDatabase } from '../support/fresh-database';
-import { actor, forgetPlan, hour, newStream, record, wafer } from '../support/store-line';
+import { actor, hour, newStream, record, wafer } from '../support/store-line';
 
 let database: FreshDatabase;
 let stream: { id: string };
@@ -29,7 +29,6 @@ let administrator: Actor;
 
 beforeAll(async () => {
   database = await freshDatabase();
-  forgetPlan();
   stream = await newStream();
   [first, second] = [await person('one', 'process-owner'), await person('two', 'process-owner')];
   administrator = await person('three', 'administrator');

@@ -5,14 +5,13 @@ import { createSitePlan } from '@/lib/streams/mutations';
 import { polarSites } from '@/lib/wafer/polar-sites';
 import { freshDatabase, type FreshDatabase } from '../support/fresh-database';
 import { take } from '../support/store-file';
-import { actor, fileText, forgetPlan, hour, newStream, rowCounts, wafer } from '../support/store-line';
+import { actor, fileText, hour, newStream, rowCounts, wafer } from '../support/store-line';
 
 let database: FreshDatabase;
 let stream: { id: string; slug: string };
 
 beforeAll(async () => {
   database = await freshDatabase();
-  forgetPlan();
   stream = await newStream();
 });
 

@@ -2,16 +2,7 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { getPool } from '@/lib/database/client';
 import { checkFile } from '@/lib/maps/file-check';
 import { freshDatabase, type FreshDatabase } from '../support/fresh-database';
-import {
-  actor,
-  casesOf,
-  fileText,
-  forgetPlan,
-  newStream,
-  rowCounts,
-  settleLimits,
-  wafer,
-} from '../support/store-line';
+import { actor, casesOf, fileText, newStream, rowCounts, settleLimits, wafer } from '../support/store-line';
 import { batchOf, source, take } from '../support/store-file';
 
 let database: FreshDatabase;
@@ -19,7 +10,6 @@ let stream: { id: string; slug: string };
 
 beforeAll(async () => {
   database = await freshDatabase();
-  forgetPlan();
   stream = await newStream();
   await settleLimits(stream.id);
 });

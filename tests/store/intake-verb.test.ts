@@ -5,7 +5,7 @@ import { afterAll, afterEach, beforeAll, describe, expect, it, vi } from 'vitest
 import { intake } from '@/lib/command/verbs/intake';
 import { openClients } from '@/lib/database/client';
 import { freshDatabase, type FreshDatabase } from '../support/fresh-database';
-import { fileText, forgetPlan, newStream, settleLimits, wafer } from '../support/store-line';
+import { fileText, newStream, settleLimits, wafer } from '../support/store-line';
 
 let database: FreshDatabase;
 let folder = '';
@@ -13,7 +13,6 @@ let stream: { id: string; slug: string };
 
 beforeAll(async () => {
   database = await freshDatabase();
-  forgetPlan();
   stream = await newStream();
   await settleLimits(stream.id);
   folder = await mkdtemp(join(tmpdir(), 'intake-store-'));

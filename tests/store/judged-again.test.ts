@@ -7,7 +7,6 @@ import { freshDatabase, type FreshDatabase } from '../support/fresh-database';
 import {
   actor,
   casesOf,
-  forgetPlan,
   hour,
   judgementOf,
   newStream,
@@ -23,7 +22,6 @@ let database: FreshDatabase;
 
 beforeAll(async () => {
   database = await freshDatabase();
-  forgetPlan();
 });
 
 afterAll(() => database.drop());

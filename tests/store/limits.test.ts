@@ -5,7 +5,6 @@ import { approveLimits, changeScreening, discardLimits, draftLimits } from '@/li
 import { freshDatabase, type FreshDatabase } from '../support/fresh-database';
 import {
   actor,
-  forgetPlan,
   hour,
   judgementOf,
   newStream,
@@ -21,7 +20,6 @@ let database: FreshDatabase;
 
 beforeAll(async () => {
   database = await freshDatabase();
-  forgetPlan();
 });
 
 afterAll(() => database.drop());

@@ -6,7 +6,6 @@ import type { Measurement } from '@/lib/maps/types';
 import { freshDatabase, type FreshDatabase } from '../support/fresh-database';
 import {
   actor,
-  forgetPlan,
   hour,
   judgementOf,
   newStream,
@@ -21,7 +20,6 @@ let database: FreshDatabase;
 
 beforeAll(async () => {
   database = await freshDatabase();
-  forgetPlan();
 });
 
 afterAll(() => database.drop());

@@ -6,7 +6,7 @@ import { findTokenActor } from '@/lib/access/token-actor';
 import { makeToken, revokeToken } from '@/lib/access/tokens';
 import { getPool } from '@/lib/database/client';
 import { freshDatabase, type FreshDatabase } from '../support/fresh-database';
-import { forgetPlan, newStream } from '../support/store-line';
+import { newStream } from '../support/store-line';
 
 let database: FreshDatabase;
 let stream: { id: string; slug: string };
@@ -20,7 +20,6 @@ const isActing = (actor: Actor | null) => actor !== null;
 
 beforeAll(async () => {
   database = await freshDatabase();
-  forgetPlan();
   [stream, other] = [await newStream(), await newStream()];
   administrator = asPerson('none', all('administrator'));
   const added = await addPerson(administrator, {

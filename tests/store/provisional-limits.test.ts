@@ -6,7 +6,6 @@ import { approveLimits, changeScreening, draftLimits } from '@/lib/limits/mutati
 import { freshDatabase, type FreshDatabase } from '../support/fresh-database';
 import {
   actor,
-  forgetPlan,
   hour,
   judgementOf,
   newStream,
@@ -20,7 +19,6 @@ let database: FreshDatabase;
 
 beforeAll(async () => {
   database = await freshDatabase();
-  forgetPlan();
 });
 
 afterAll(() => database.drop());

@@ -4,7 +4,6 @@ import type { Measurement } from '@/lib/maps/types';
 import { freshDatabase, type FreshDatabase } from '../support/fresh-database';
 import {
   casesOf,
-  forgetPlan,
   judgementOf,
   newStream,
   quietLevel,
@@ -21,7 +20,6 @@ let database: FreshDatabase;
 
 beforeAll(async () => {
   database = await freshDatabase();
-  forgetPlan();
 });
 
 afterAll(() => database.drop());

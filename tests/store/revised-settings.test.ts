@@ -8,7 +8,6 @@ import { createSitePlan, reviseSpecification, reviseTarget } from '@/lib/streams
 import { freshDatabase, type FreshDatabase } from '../support/fresh-database';
 import {
   actor,
-  forgetPlan,
   hour,
   judgementOf,
   newStream,
@@ -23,7 +22,6 @@ let database: FreshDatabase;
 
 beforeAll(async () => {
   database = await freshDatabase();
-  forgetPlan();
 });
 
 afterAll(() => database.drop());

@@ -13,7 +13,7 @@ import { intake } from '@/lib/command/verbs/intake';
 import { getPool } from '@/lib/database/client';
 import { takeSentFile } from '@/lib/maps/take-sent-file';
 import { freshDatabase, type FreshDatabase } from '../support/fresh-database';
-import { fileText, forgetPlan, newStream, wafer } from '../support/store-line';
+import { fileText, newStream, wafer } from '../support/store-line';
 
 const ADDRESS = 'http://127.0.0.1:3999/api/maps';
 
@@ -33,7 +33,6 @@ beforeAll(async () => {
   database = await freshDatabase();
   data = await mkdtemp(join(tmpdir(), 'sent-maps-'));
   vi.stubEnv('EVENOHM_DATA', data);
-  forgetPlan();
   [own, other] = [await newStream(), await newStream()];
   tokens.all = await token('intake');
   tokens.own = await token('intake', [own.id]);

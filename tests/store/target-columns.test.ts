@@ -4,14 +4,13 @@ import type { Target } from '@/lib/physics/target';
 import { findStreamSettings } from '@/lib/streams/data';
 import { reviseTarget } from '@/lib/streams/mutations';
 import { freshDatabase, type FreshDatabase } from '../support/fresh-database';
-import { actor, forgetPlan, newStream, record, wafer } from '../support/store-line';
+import { actor, newStream, record, wafer } from '../support/store-line';
 import { BORON, DRIVEN, EPI, GAUSSIAN, PAIRS } from '../unit/physics/targets';
 
 let database: FreshDatabase;
 
 beforeAll(async () => {
   database = await freshDatabase();
-  forgetPlan();
 });
 
 afterAll(() => database.drop());

@@ -3,14 +3,13 @@ import { listToolWafers } from '@/lib/excursions/data';
 import { listToolSettings } from '@/lib/streams/data';
 import { retireStream, reviseTarget } from '@/lib/streams/mutations';
 import { freshDatabase, type FreshDatabase } from '../support/fresh-database';
-import { actor, forgetPlan, hour, newStream, record, wafer } from '../support/store-line';
+import { actor, hour, newStream, record, wafer } from '../support/store-line';
 import { BORON } from '../unit/physics/targets';
 
 let database: FreshDatabase;
 
 beforeAll(async () => {
   database = await freshDatabase();
-  forgetPlan();
 });
 
 afterAll(() => database.drop());

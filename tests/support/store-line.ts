@@ -1,3 +1,4 @@
+import type { Pool } from 'pg';
 import { commandActor } from '@/lib/access/local-actor';
 import { getPool } from '@/lib/database/client';
 import { takeIds } from '@/lib/database/take-ids';
@@ -18,12 +19,8 @@ export const START = Date.UTC(2021, 3, 1);
 /** The instant at which wafer `i` of a stream was processed: one an hour. */
 export const hour = (i: number) => new Date(START + i * HOUR_MS);
 
-let planId: Promise<string> | null = null;
-
-/** Forgets the site plan of a database that was dropped. */
-export function forgetPlan(): void {
-  planId = null;
-}
+/** The one site plan of each database. */
+const planIds = new WeakMap<Pool, Promise<string>>();
 
 async function sitePlan(): Promise<string> {
   const plan = {
@@ -45,7 +42,8 @@ export async function newStream(
   fields: Partial<NewStream> = {},
   specification: Partial<Specification> | null = null,
 ): Promise<{ id: string; slug: string }> {
-  planId ??= sitePlan();
+  const planId = planIds.get(getPool()) ?? sitePlan();
+  planIds.set(getPool(), planId);
   const slug = `stream-${(streams += 1)}`;
   const created = await createStream(
     actor,
