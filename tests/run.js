@@ -1,5 +1,5 @@
 /**
- * `npm test`: everything, in two lanes (one builds and goes to the browser with it, one runs the other tests and reads).
+ * `npm test`: everything, in two lanes (one reads and builds, one runs tests), then the browser on the build.
  * The last line counts all: one for each of format, lint, build and types, and one for each test.
  */
 import { spawn } from 'node:child_process';
@@ -25,8 +25,8 @@ rmSync(results, { recursive: true, force: true });
 mkdirSync(results, { recursive: true });
 generatePrismaClient();
 
-const build = check('build', 'node', ['lib/command/evenohm.js', 'build']);
-await Promise.all([build.then(browser), vitest().then(checks)]);
+await Promise.all([checks(), vitest()]);
+await browser();
 
 const skipped = total.skipped > 0 ? `, ${total.skipped} skipped` : '';
 console.log(`${total.passed} passed, ${total.failed} failed${skipped}`);
@@ -36,7 +36,7 @@ process.exitCode = total.failed > 0 || total.passed === 0 ? 1 : 0;
 async function checks() {
   await check('format', 'prettier', ['--check', '.', '--log-level', 'warn']);
   await check('lint', 'eslint', ['--config', 'tests/eslint.config.mjs', '--max-warnings', '0', '.']);
-  await build;
+  await check('build', 'node', ['lib/command/evenohm.js', 'build']);
   rmSync('.next/dev/types', { recursive: true, force: true });
   await check('types', 'tsc', ['--noEmit', '-p', 'tsconfig.json']);
 }
