@@ -16,7 +16,7 @@ export default defineConfig({
     /** Room for a machine that does much else: a hung test still ends. */
     testTimeout: 30_000,
     projects: [
-      // Modules are read once a worker, which halves the time: nothing of one file is left for the next.
+      // What these test keeps nothing between files: modules are read once a worker, which halves the time.
       { extends: true, test: { name: 'unit', include: ['tests/unit/**/*.test.{ts,tsx}'], isolate: false } },
       {
         extends: true,
@@ -27,7 +27,6 @@ export default defineConfig({
         test: {
           name: 'store',
           include: ['tests/store/**/*.test.ts'],
-          isolate: false,
           globalSetup: ['tests/support/store-server.ts'],
           hookTimeout: 60_000,
         },
