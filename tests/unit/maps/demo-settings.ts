@@ -2,6 +2,7 @@ import type { RawMap } from '@/lib/maps/raw-maps';
 import type { SitePlan, Specification, Stream, StreamSettings } from '@/lib/streams/types';
 import type { Target } from '@/lib/physics/target';
 import { polarSites } from '@/lib/wafer/polar-sites';
+import { uniformBoron as target } from '../../support/uniform-boron';
 
 export const plan: SitePlan = {
   id: '1',
@@ -10,20 +11,6 @@ export const plan: SitePlan = {
   edgeExclusionMm: 0,
   orientation: 'notch',
   sites: polarSites(1, 90),
-};
-
-const target: Target = {
-  quantity: 'resistivity',
-  dopant: 'boron',
-  densityPerCm3: 1e15,
-  tolerancePercent: null,
-  alongCrystal: false,
-  profile: 'uniform',
-  lengthUm: null,
-  backgroundDopant: null,
-  backgroundDensityPerCm3: null,
-  calibrationFactor: null,
-  calibrationPercent: null,
 };
 
 /** The settings of an invented stream of boron wafers, some of them otherwise. */

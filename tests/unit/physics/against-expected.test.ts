@@ -3,21 +3,7 @@ import { describe, expect, it } from 'vitest';
 import { againstExpected } from '@/lib/physics/against-expected';
 import { expectedValue } from '@/lib/physics/expected-value';
 import { standardResistivity } from '@/lib/physics/standard-resistivity';
-import type { Target } from '@/lib/physics/target';
-
-const boron: Target = {
-  quantity: 'resistivity',
-  dopant: 'boron',
-  densityPerCm3: 1e15,
-  tolerancePercent: null,
-  alongCrystal: false,
-  profile: 'uniform',
-  lengthUm: null,
-  backgroundDopant: null,
-  backgroundDensityPerCm3: null,
-  calibrationFactor: null,
-  calibrationPercent: null,
-};
+import { uniformBoron as boron } from '../../support/uniform-boron';
 
 describe('a measured wafer against what physics expects', () => {
   it('reads a wafer doped 2 % more as +2 % dopant, whatever that does to the reading', () => {

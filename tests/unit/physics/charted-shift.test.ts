@@ -2,20 +2,7 @@ import { describe, expect, it } from 'vitest';
 import { chartedShift } from '@/lib/physics/charted-shift';
 import { expectedValue } from '@/lib/physics/expected-value';
 import type { Target } from '@/lib/physics/target';
-
-const boron: Target = {
-  quantity: 'resistivity',
-  dopant: 'boron',
-  densityPerCm3: 1e15,
-  tolerancePercent: null,
-  alongCrystal: false,
-  profile: 'uniform',
-  lengthUm: null,
-  backgroundDopant: null,
-  backgroundDensityPerCm3: null,
-  calibrationFactor: null,
-  calibrationPercent: null,
-};
+import { uniformBoron as boron } from '../../support/uniform-boron';
 
 describe('the shift of 100·ln(measured/expected) by a revised target', () => {
   it('is minus 100·ln of the factor by which a calibration raises the expected value', () => {

@@ -2,21 +2,7 @@ import { describe, expect, it } from 'vitest';
 import { densitySensitivity } from '@/lib/physics/density-sensitivity';
 import { dopantPercent } from '@/lib/physics/dopant-percent';
 import { modelValue } from '@/lib/physics/model-value';
-import type { Target } from '@/lib/physics/target';
-
-const target: Target = {
-  quantity: 'resistivity',
-  dopant: 'boron',
-  densityPerCm3: 1e15,
-  tolerancePercent: null,
-  alongCrystal: false,
-  profile: 'uniform',
-  lengthUm: null,
-  backgroundDopant: null,
-  backgroundDensityPerCm3: null,
-  calibrationFactor: null,
-  calibrationPercent: null,
-};
+import { uniformBoron as target } from '../../support/uniform-boron';
 
 describe('a difference of readings as percent dopant', () => {
   it('is nothing where there is none, and more dopant where the reading is lower', () => {

@@ -9,20 +9,8 @@ import { standardDensity } from '@/lib/physics/standard-density';
 import { standardResistivity } from '@/lib/physics/standard-resistivity';
 import type { Target } from '@/lib/physics/target';
 import { targetDensity } from '@/lib/physics/target-density';
+import { uniformBoron as boron } from '../../support/uniform-boron';
 
-const boron: Target = {
-  quantity: 'resistivity',
-  dopant: 'boron',
-  densityPerCm3: 1e15,
-  tolerancePercent: null,
-  alongCrystal: false,
-  profile: 'uniform',
-  lengthUm: null,
-  backgroundDopant: null,
-  backgroundDensityPerCm3: null,
-  calibrationFactor: null,
-  calibrationPercent: null,
-};
 const diffused: Target = {
   ...boron,
   quantity: 'sheet_resistance',

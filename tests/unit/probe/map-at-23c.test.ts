@@ -6,6 +6,7 @@ import { mapAt23C } from '@/lib/probe/map-at-23c';
 import { siteFactors, type ProbeGeometry } from '@/lib/probe/site-factors';
 import { spacingFactor } from '@/lib/probe/spacing-factor';
 import { thicknessFactor } from '@/lib/probe/thickness-factor';
+import { uniformBoron as boron } from '../../support/uniform-boron';
 
 const probe: ProbeGeometry = {
   spacingMm: 1,
@@ -14,20 +15,6 @@ const probe: ProbeGeometry = {
   diameterMm: 200,
   thicknessUm: null,
 };
-const boron: Target = {
-  quantity: 'resistivity',
-  dopant: 'boron',
-  densityPerCm3: 1e15,
-  tolerancePercent: null,
-  alongCrystal: false,
-  profile: 'uniform',
-  lengthUm: null,
-  backgroundDopant: null,
-  backgroundDensityPerCm3: null,
-  calibrationFactor: null,
-  calibrationPercent: null,
-};
-
 describe('the factors of the sites of a wafer', () => {
   it('fall towards the edge across the radius, and say nothing where a pin stands off the disc', () => {
     const sites = [0, 50, 90, 97, 99, 99.9].map((xMm) => ({ xMm, yMm: 0 }));
